@@ -1,0 +1,118 @@
+package beam
+
+import (
+	"soffit.example/beam/statics"
+	"soffit.example/units"
+)
+
+// Brief is what an engineer knows before a beam is designed. Either Spans,
+// Supports and Loads describe a member to be analysed, or Demands carry
+// factored forces from the caller's own analysis.
+//
+// The zero value of an optional field asks for the code's own value, which is
+// then listed among the result's assumptions.
+type Brief struct {
+	Reference     string // the caller's mark for the beam, echoed in the result
+	Section       Section
+	Concrete      Concrete
+	Reinforcement Reinforcement
+	Exposure      Exposure
+	Cover         units.Length // clear, to the outermost steel; zero: by the code's table
+
+	Spans        []units.Length // between support centres, left to right
+	Supports     []Support      // one more than Spans
+	Loads        []Load
+	NoSelfWeight bool // true: the caller's dead load already holds the beam's own weight
+
+	Demands []Demand
+
+	Braced         units.Length // greatest spacing of lateral bracing of the compression face; zero: taken as braced
+	Serviceability Serviceability
+	Preferences    Preferences
+	Readings       Readings
+}
+
+// Section is the beam's concrete outline.
+type Section struct {
+	Shape Shape
+	Width units.Length
+	Depth units.Length // overall
+}
+
+// Concrete describes the concrete as specified.
+type Concrete struct {
+	Strength  units.Stress  // specified compressive strength
+	Density   units.Density // zero: the code's usual value for the Kind
+	Kind      ConcreteKind  // zero: normalweight
+	Aggregate units.Length  // nominal maximum size; zero: assumed and listed
+}
+
+// Reinforcement names where bars come from and how strong they are.
+type Reinforcement struct {
+	Catalog      string       // an id of package bars
+	Yield        units.Stress // longitudinal bars
+	StirrupYield units.Stress // zero: as Yield
+	Coating      Coating
+}
+
+// Support is one support of the beam.
+type Support struct {
+	Kind  statics.SupportKind
+	Width units.Length // along the span; zero: a point support
+	Hung  bool         // the reaction pulls on the end region: the beam hangs here, or frames into a girder
+}
+
+// Load is one load of one case. Which fields count depends on Shape.
+type Load struct {
+	Case         LoadCase
+	Shape        LoadShape
+	Span         int // 1-based; 0: every span
+	From, To     units.Length
+	At           units.Length
+	Intensity    units.LineLoad // uniform, or at From
+	IntensityEnd units.LineLoad // at To; used when Varies
+	Varies       bool           // IntensityEnd is given
+	Force        units.Force
+	Moment       units.Moment // a couple, clockwise positive; a torque about the beam's axis
+	Hung         bool         // applied at or below the soffit
+	Sustained    float64      // share of the load that stays, 0 to 1
+}
+
+// Demand is one set of factored forces from the caller's own analysis.
+type Demand struct {
+	Name   string
+	Moment units.Moment
+	Shear  units.Force
+	Torque units.Moment
+	Axial  units.Force // compression positive
+}
+
+// Serviceability says what the deflection must protect.
+type Serviceability struct {
+	Attached Attachment
+	Months   int // age at which long-term deflection is wanted; zero: 60
+}
+
+// Preferences steer the search; none of them relaxes a check.
+type Preferences struct {
+	Bars      []string       // longitudinal sizes allowed; none: all the code allows in the catalog
+	Stirrups  []string       // stirrup sizes allowed; none: the catalog's usual ones
+	MaxLayers int            // per face; zero: 2
+	MaxLegs   int            // stirrup legs; zero: 4
+	MaxZones  int            // stirrup zones in a span, 1 or 3; zero: 3
+	Mixed     bool           // allow two neighbouring sizes on one face
+	Depths    []units.Length // overall depths to try besides Section.Depth
+	Prefer    Preference
+	SpacingBy units.Length // stirrup spacings are multiples of this; zero: 1/2 in or 10 mm by system
+	KeepBest  int          // alternatives kept; zero: 4
+}
+
+// Readings pick between interpretations where a standard leaves a choice.
+// The zero value of each is the default reading.
+type Readings struct {
+	IgnoreDisplaced bool        // do not deduct the concrete that compression bars displace
+	RoundedYield    bool        // use the standard's rounded yield strain where it permits one
+	ShearRow        ShearRow    // which of two permitted expressions for concrete shear
+	ShearMethod     ShearMethod // simplified or detailed
+	TuckedCorner    bool        // corner bars pushed into the stirrup's corner
+}

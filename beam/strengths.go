@@ -1,0 +1,108 @@
+package beam
+
+import "soffit.example/units"
+
+// SectionQuery asks for the strengths of a bare section.
+type SectionQuery struct {
+	Section  Section
+	Concrete Concrete
+	Bending  Sense
+	Layers   []SteelLayer
+	Stirrups *StirrupSteel // nil: none
+	Readings Readings
+	Demand   Demand // zero: nothing asked, verdicts are not applicable
+}
+
+// SteelLayer is longitudinal steel at one depth from the top face, whichever
+// the sense of bending.
+type SteelLayer struct {
+	Area  units.Area
+	Depth units.Length
+	Yield units.Stress
+}
+
+// StirrupSteel is transverse steel at a section.
+type StirrupSteel struct {
+	Area     units.Area // all legs crossed by one shear crack at one stirrup
+	Spacing  units.Length
+	Yield    units.Stress
+	Cover    units.Length
+	Diameter units.Length
+	Across   units.Length // greatest leg-to-leg distance across the web; zero: not known
+}
+
+// Strengths are a section's strengths under one code.
+type Strengths struct {
+	Flexure  FlexureStrength
+	Shear    ShearStrength
+	Torsion  TorsionStrength
+	Checks   []Check
+	Refusals []Refusal // not empty: the rest is not given
+	Notes    []string
+}
+
+// FlexureStrength is the strength in bending of one sense, with every value
+// on the way.
+type FlexureStrength struct {
+	Sense          Sense
+	NeutralAxis    units.Length // from the extreme compression fibre
+	BlockDepth     units.Length
+	BlockFactor    float64      // block depth over neutral-axis depth
+	EffectiveDepth units.Length // to the centroid of the tension steel
+	ExtremeDepth   units.Length // to the extreme tension layer
+	ExtremeStrain  float64
+	YieldStrain    float64
+	Class          string // "tension-controlled", "transition", "compression-controlled"
+	Phi            float64
+	Nominal        units.Moment
+	Design         units.Moment
+	MinimumSteel   units.Area
+	TensionSteel   units.Area
+	LeastStrain    float64
+	Layers         []LayerState
+	Equilibria     int // more than one: the smallest neutral-axis depth was taken
+	CrossCheck     CrossCheck
+}
+
+// LayerState is the state of one layer at nominal strength, tension positive.
+type LayerState struct {
+	Strain float64
+	Stress units.Stress
+	Force  units.Force
+}
+
+// CrossCheck is the same strength found by a second, independent route.
+type CrossCheck struct {
+	Method     string
+	Nominal    units.Moment
+	Difference float64 // relative
+}
+
+// ShearStrength is one-way shear strength with every value on the way.
+type ShearStrength struct {
+	Concrete         units.Force
+	ConcreteRow      string
+	SizeEffect       float64
+	SteelRatio       float64
+	Steel            units.Force
+	Nominal          units.Force
+	Phi              float64
+	Design           units.Force
+	SectionLimit     units.Force // largest factored shear the section may carry
+	MinimumPerLength units.AreaPerLength
+	MinimumRequired  bool // at the shear asked for
+	GreatestSpacing  units.Length
+	GreatestAcross   units.Length // zero: the edition has no such rule
+	Notes            []string
+}
+
+// TorsionStrength holds what is known of torsion before stirrups are
+// designed for it.
+type TorsionStrength struct {
+	Area           units.Area   // enclosed by the outside perimeter of the concrete
+	Perimeter      units.Length // that perimeter
+	Threshold      units.Moment // nominal
+	Cracking       units.Moment // nominal
+	Phi            float64
+	MayBeNeglected bool
+}

@@ -1,0 +1,139 @@
+package beam
+
+import (
+	"soffit.example/bars"
+	"soffit.example/beam/mechanics"
+	"soffit.example/units"
+)
+
+// Problem is a brief after the code has filled its gaps: sizes looked up,
+// loads combined and analysed. It is fixed before the first layout is tried.
+type Problem struct {
+	Brief   Brief // resolved copy: no field is left to the code any more
+	Code    Code
+	System  units.System // of the code's edition, for buildable steps
+	Catalog bars.Catalog
+	Forces  Forces
+	Kept    []Combination
+	Dropped []DroppedCombination
+
+	SelfWeight units.LineLoad // of the brief's section; zero if the brief excludes it
+}
+
+// Trial is one complete arrangement put to the code: the problem and its
+// bars, lying where they would lie.
+type Trial struct {
+	*Problem
+	Stirrup bars.Size    // zero value: none
+	Cover   units.Length // clear, to the stirrups, or to the bars if there are none
+	Bottom  FaceSteel
+	Top     FaceSteel
+	Side    SideSteel // zero: no side-face bars
+	Zones   []Zone
+	ZoneBar []bars.Size // the stirrup size of each zone, in step with Zones
+
+	// Record asks Judge for the working of each check.
+	Record bool
+
+	// Ultimate is scratch space for the code's flexure kernel, so that a
+	// search allocates once.
+	Ultimate mechanics.Ultimate
+	layers   []mechanics.Layer
+}
+
+// FaceSteel is the steel of one face, by coordinates.
+type FaceSteel struct {
+	Face   Face
+	Rows   []RowSteel    // by layer, nearest the face first; mixed sizes are rows of one layer
+	Placed []bars.Placed // every bar, x from the left face, y from this face
+	Fit    bars.Fit      // clear gaps and spacings of those coordinates
+	Area   units.Area    // catalogue areas, added as decimals
+	// Centroid and Nearest are distances from this face to the centroid of
+	// all bars and to the centre of the layer nearest the face.
+	Centroid, Nearest units.Length
+	Largest, Smallest bars.Size
+	Count             int
+	// InCompression says that the bars are relied on as compression steel
+	// under the moment that presses on this face.
+	InCompression bool
+}
+
+// SideSteel is distributed steel along both side faces: Each bars a side at
+// Spacing, the first one spacing from the bars nearest TensionFace.
+type SideSteel struct {
+	Size        bars.Size
+	Each        int
+	Spacing     units.Length
+	TensionFace Face
+}
+
+// RowSteel is one group of like bars with its depth resolved.
+type RowSteel struct {
+	Size   bars.Size
+	Count  int
+	Layer  int
+	Height units.Length // of the bars' centres from their face
+	Area   units.Area
+}
+
+// Steel is the steel of a face.
+func (t *Trial) Steel(f Face) *FaceSteel {
+	if f == Top {
+		return &t.Top
+	}
+	return &t.Bottom
+}
+
+// EffectiveDepth is the depth of the centroid of all bars on the tension
+// face of a sense of bending, from the opposite face; zero without bars.
+func (t *Trial) EffectiveDepth(s Sense) units.Length {
+	f := t.Steel(s.TensionFace())
+	if f.Count == 0 {
+		return units.Length{}
+	}
+	return t.Brief.Section.Depth.Sub(f.Centroid)
+}
+
+// ExtremeDepth is the depth of the bars nearest the tension face.
+func (t *Trial) ExtremeDepth(s Sense) units.Length {
+	f := t.Steel(s.TensionFace())
+	if f.Count == 0 {
+		return units.Length{}
+	}
+	return t.Brief.Section.Depth.Sub(f.Nearest)
+}
+
+// Layers gives the trial's longitudinal steel to the flexure kernel: the
+// tension face of sense s, and the other face if it is relied on in
+// compression. The slice is reused by the next call.
+func (t *Trial) Layers(s Sense, modulus units.Stress, yieldStrain float64) []mechanics.Layer {
+	steel := mechanics.Steel{Modulus: modulus, Yield: t.Brief.Reinforcement.Yield, YieldStrain: yieldStrain}
+	t.layers = t.layers[:0]
+	for _, face := range [2]Face{s.TensionFace(), s.TensionFace().Opposite()} {
+		f := t.Steel(face)
+		if face != s.TensionFace() && !f.InCompression {
+			continue
+		}
+		for _, r := range f.Rows {
+			depth := r.Height
+			if face == Bottom {
+				depth = t.Brief.Section.Depth.Sub(r.Height)
+			}
+			t.layers = append(t.layers, mechanics.Layer{Depth: depth, Area: r.Area, Steel: steel})
+		}
+	}
+	return t.layers
+}
+
+// Faces are the positions of the support faces of a span, from the centre of
+// its left support; at a free end, the end itself.
+func (p *Problem) Faces(span int) (left, right units.Length) {
+	l := p.Brief.Spans[span-1]
+	return p.Brief.Supports[span-1].Width.Scale(0.5), l.Sub(p.Brief.Supports[span].Width.Scale(0.5))
+}
+
+// ClearSpan is the distance between the support faces of a span.
+func (p *Problem) ClearSpan(span int) units.Length {
+	left, right := p.Faces(span)
+	return right.Sub(left)
+}
