@@ -1,0 +1,233 @@
+package aci318
+
+import (
+	"math"
+
+	"soffit.example/beam"
+	"soffit.example/units"
+)
+
+// materialRules are the values of chapters 19, 20 and 22.2 in the units of an
+// edition.
+type materialRules struct {
+	density units.DensityUnit // lb/ft3 or kg/m3
+
+	leastStrength float64 // of f'c, 19.2.1.1
+	rootCap       float64 // on √f'c in 22.5.3.1, 22.7.2.1 and 25.4.1.4
+
+	// β1 of Table 22.2.2.4.3: 0.85 up to blockFull, less by 0.05 for each
+	// blockStep above it, and 0.65 from blockLeast on. In SI the line does not
+	// meet 0.65 there: it is a branch, not a clamp.
+	blockFull, blockLeast, blockStep float64
+
+	concreteByDensity        float64 // 33 or 0.043 of 19.2.2.1(a)
+	concreteByStrength       float64 // 57,000 or 4700 of 19.2.2.1(b)
+	lightest, heaviest       float64 // densities of 19.2.2.1(a)
+	lightLimit, normalLeast  float64 // densities that bound lightweight and normalweight concrete
+	rupture                  float64 // 7.5 or 0.62 of 19.2.3.1
+	usualDensity             float64 // of normalweight concrete with its bars; common practice
+	usualAggregate           float64 // nominal maximum size; common practice
+	lightweightByComposition bool    // λ from the concrete's composition, 19.2.4.2 of 318-14
+	lambdaLow, lambdaHigh    float64 // densities between which λ is lambdaSlope times density, 19.2.4.1 of 318-19
+	lambdaSlope              float64
+
+	steelModulus     float64 // 20.2.2.2
+	grade60          float64 // the yield strength for which roundedYield may be used, 21.2.2.1
+	leastYield       float64 // lowest grade of Table 20.2.1.3
+	mostYield        float64 // for bars in flexure, Table 20.2.2.4
+	mostShearYield   float64 // for stirrups, Table 20.2.2.4
+	mostTorsionYield float64 // for either direction, Table 20.2.2.4
+
+	// Clauses that the editions number differently.
+	lambdaClause, yieldClause string
+}
+
+const (
+	crushing       = 0.003 // strain of the extreme concrete fibre, 22.2.2.1
+	blockIntensity = 0.85  // of f'c, 22.2.2.4.1
+	blockMost      = 0.85  // β1, Table 22.2.2.4.3
+	blockLess      = 0.05
+	blockLeast     = 0.65
+	roundedYield   = 0.002 // 21.2.2.1, for Grade 60
+
+	lambdaSand = 0.85 // Table 19.2.4.2 of 318-14
+	lambdaAll  = 0.75
+)
+
+var materials14US = materialRules{
+	density: units.PoundPerCubicFoot, leastStrength: 2500, rootCap: 100,
+	blockFull: 4000, blockLeast: 8000, blockStep: 1000,
+	concreteByDensity: 33, concreteByStrength: 57000, lightest: 90, heaviest: 160, lightLimit: 115, normalLeast: 135,
+	rupture: 7.5, usualDensity: 150, usualAggregate: 0.75,
+	lightweightByComposition: true,
+	steelModulus:             29e6, grade60: 60000, leastYield: 40000, mostYield: 80000, mostShearYield: 60000, mostTorsionYield: 60000,
+	lambdaClause: "19.2.4.2", yieldClause: "Table 20.2.2.4a",
+}
+
+var materials14SI = materialRules{
+	density: units.KilogramPerCubicMetre, leastStrength: 17, rootCap: 8.3,
+	blockFull: 28, blockLeast: 55, blockStep: 7,
+	concreteByDensity: 0.043, concreteByStrength: 4700, lightest: 1440, heaviest: 2560, lightLimit: 1840, normalLeast: 2160,
+	rupture: 0.62, usualDensity: 2450, usualAggregate: 20,
+	lightweightByComposition: true,
+	steelModulus:             200000, grade60: 420, leastYield: 280, mostYield: 550, mostShearYield: 420, mostTorsionYield: 420,
+	lambdaClause: "19.2.4.2", yieldClause: "Table 20.2.2.4a",
+}
+
+var materials19US = materialRules{
+	density: units.PoundPerCubicFoot, leastStrength: 2500, rootCap: 100,
+	blockFull: 4000, blockLeast: 8000, blockStep: 1000,
+	concreteByDensity: 33, concreteByStrength: 57000, lightest: 90, heaviest: 160, lightLimit: 135, normalLeast: 135,
+	rupture: 7.5, usualDensity: 150, usualAggregate: 0.75,
+	lambdaLow: 100, lambdaHigh: 135, lambdaSlope: 0.0075,
+	steelModulus: 29e6, grade60: 60000, leastYield: 40000, mostYield: 100000, mostShearYield: 60000, mostTorsionYield: 60000,
+	lambdaClause: "19.2.4.1", yieldClause: "Table 20.2.2.4(a)",
+}
+
+var materials19SI = materialRules{
+	density: units.KilogramPerCubicMetre, leastStrength: 17, rootCap: 8.3,
+	blockFull: 28, blockLeast: 55, blockStep: 7,
+	concreteByDensity: 0.043, concreteByStrength: 4700, lightest: 1440, heaviest: 2560, lightLimit: 2160, normalLeast: 2160,
+	rupture: 0.62, usualDensity: 2450, usualAggregate: 20,
+	lambdaLow: 1600, lambdaHigh: 2160, lambdaSlope: 0.00047,
+	steelModulus: 200000, grade60: 420, leastYield: 280, mostYield: 690, mostShearYield: 420, mostTorsionYield: 420,
+	lambdaClause: "19.2.4.1", yieldClause: "Table 20.2.2.4(a)",
+}
+
+// blockFactor is β1, the depth of the stress block over that of the neutral
+// axis (Table 22.2.2.4.3).
+func (e *edition) blockFactor(strength units.Stress) float64 {
+	m, fc := &e.materials, e.stressIn(strength)
+	switch {
+	case units.AtMost(fc, m.blockFull):
+		return blockMost
+	case units.AtMost(m.blockLeast, fc):
+		return blockLeast
+	}
+	return blockMost - blockLess*(fc-m.blockFull)/m.blockStep
+}
+
+// lambda is the factor for lightweight concrete (19.2.4): 1 for normalweight;
+// else by composition in 318-14, by equilibrium density in 318-19.
+func (e *edition) lambda(c *beam.Concrete) float64 {
+	m := &e.materials
+	switch {
+	case c.Kind != beam.SandLightweight && c.Kind != beam.AllLightweight:
+		return 1
+	case m.lightweightByComposition && c.Kind == beam.SandLightweight:
+		return lambdaSand
+	case m.lightweightByComposition:
+		return lambdaAll
+	}
+	wc := c.Density.In(m.density)
+	switch {
+	case units.AtMost(wc, m.lambdaLow):
+		return lambdaAll
+	case units.AtMost(wc, m.lambdaHigh):
+		return min(m.lambdaSlope*wc, 1)
+	}
+	return 1
+}
+
+// elasticModulus is Ec of 19.2.2.1 and the expression used: (b) for
+// normalweight concrete, (a) for lightweight.
+func (e *edition) elasticModulus(c *beam.Concrete) (modulus units.Stress, expression string) {
+	m, root := &e.materials, e.sqrtStrength(c.Strength)
+	if c.Kind == beam.SandLightweight || c.Kind == beam.AllLightweight {
+		wc := c.Density.In(m.density)
+		return e.stressOf(m.concreteByDensity * wc * math.Sqrt(wc) * root), "19.2.2.1.a"
+	}
+	return e.stressOf(m.concreteByStrength * root), "19.2.2.1.b"
+}
+
+// ruptureModulus is fr of 19.2.3.1.
+func (e *edition) ruptureModulus(c *beam.Concrete) units.Stress {
+	return e.stressOf(e.materials.rupture * e.lambda(c) * e.sqrtStrength(c.Strength))
+}
+
+// steelModulus is Es of 20.2.2.2.
+func (e *edition) steelModulus() units.Stress { return e.stressOf(e.materials.steelModulus) }
+
+// isGrade60 reports whether bars are Grade 60 (420), for which 21.2.2.1 permits
+// a yield strain of 0.002.
+func (e *edition) isGrade60(yield units.Stress) bool {
+	fy := e.stressIn(yield)
+	return units.AtMost(fy, e.materials.grade60) && units.AtMost(e.materials.grade60, fy)
+}
+
+// yieldStrain is εty of 21.2.2.1, by which strains are classed. It never enters
+// the stresses, which follow 20.2.2.1.
+func (e *edition) yieldStrain(yield units.Stress, rounded bool) float64 {
+	if rounded && e.isGrade60(yield) {
+		return roundedYield
+	}
+	return e.stressIn(yield) / e.materials.steelModulus
+}
+
+// shearYield is fyt as it may be used in calculating shear strength (Table
+// 20.2.2.4), and whether the cap acted.
+func (e *edition) shearYield(yield units.Stress) (used units.Stress, capped bool) {
+	if units.AtMost(e.stressIn(yield), e.materials.mostShearYield) {
+		return yield, false
+	}
+	return e.stressOf(e.materials.mostShearYield), true
+}
+
+// materialRefusals names the material limits that a design outside the tables
+// of chapters 19 and 20 breaks. No strength may be given then.
+func (e *edition) materialRefusals(c *beam.Concrete, yield units.Stress) []beam.Refusal {
+	m := &e.materials
+	var out []beam.Refusal
+	refuse := func(rule, clause, detail string) {
+		out = append(out, beam.Refusal{Rule: rule, Clause: clause, Detail: detail})
+	}
+	if !units.AtMost(m.leastStrength, e.stressIn(c.Strength)) {
+		refuse("scope.concrete-strength", "19.2.1.1", "specified strength "+e.stress.Format(c.Strength)+
+			" is below the least for structural concrete, "+e.stress.Format(e.stressOf(m.leastStrength)))
+	}
+	fy := e.stressIn(yield)
+	if !units.AtMost(m.leastYield, fy) {
+		refuse("scope.steel-grade", "Table 20.2.1.3", "yield strength "+e.stress.Format(yield)+
+			" is below the lowest grade of the standard's tables, "+e.stress.Format(e.stressOf(m.leastYield)))
+	}
+	if !units.AtMost(fy, m.mostYield) {
+		refuse("scope.steel-grade", m.yieldClause, "yield strength "+e.stress.Format(yield)+
+			" is above the greatest that may be used for bars in flexure, "+e.stress.Format(e.stressOf(m.mostYield)))
+	}
+	return out
+}
+
+// Materials is what an edition makes of a concrete and its steel.
+type Materials struct {
+	BlockFactor      float64 // β1, Table 22.2.2.4.3
+	Lambda           float64 // for lightweight concrete, 19.2.4
+	ElasticModulus   units.Stress
+	ModulusClause    string       // the expression of 19.2.2.1 that gave it
+	RuptureModulus   units.Stress // 19.2.3.1
+	SteelModulus     units.Stress // 20.2.2.2
+	YieldStrain      float64      // of the longitudinal bars, 21.2.2.1
+	ShearYield       units.Stress // of stirrups as used in shear, Table 20.2.2.4
+	ShearYieldCapped bool         // the stirrups are stronger than may be used
+	Refusals         []beam.Refusal
+}
+
+// Materials gives the properties of a concrete and its steel. The density of
+// lightweight concrete must be given; that of normalweight is not used.
+func (c Code) Materials(concrete beam.Concrete, steel beam.Reinforcement, r beam.Readings) Materials {
+	e := c.e
+	m := Materials{
+		BlockFactor:    e.blockFactor(concrete.Strength),
+		Lambda:         e.lambda(&concrete),
+		RuptureModulus: e.ruptureModulus(&concrete),
+		SteelModulus:   e.steelModulus(),
+		YieldStrain:    e.yieldStrain(steel.Yield, r.RoundedYield),
+		Refusals:       e.materialRefusals(&concrete, steel.Yield),
+	}
+	m.ElasticModulus, m.ModulusClause = e.elasticModulus(&concrete)
+	stirrups := steel.StirrupYield
+	if stirrups.IsZero() {
+		stirrups = steel.Yield
+	}
+	m.ShearYield, m.ShearYieldCapped = e.shearYield(stirrups)
+	return m
+}
