@@ -1,0 +1,144 @@
+package bars
+
+import (
+	"math"
+
+	"soffit.example/units"
+)
+
+// sameDistance is the share of the form's width by which two positions may
+// differ and still be one; it is the tolerance of every limit.
+const sameDistance = 1e-9
+
+// measure reads the gaps, spacings and cover of a laid row off its
+// coordinates. The row's bars are those of a fit from index first on, and
+// the layer below directly precedes them; it is empty for the first layer.
+func measure(f *form, row, below []Placed, first int) LayerFit {
+	on := LayerFit{
+		First: first, Count: len(row),
+		Symmetric:     symmetric(row, f.width),
+		Aligned:       len(below) > 0 && aligned(row, below, f.width),
+		MoreThanBelow: len(below) > 0 && len(row) > len(below),
+	}
+	var area, moment float64
+	cover := math.Inf(1)
+	for i := range row {
+		b := &row[i]
+		x, y, r := b.metres()
+		a := b.Size.Area.In(units.SquareMetre)
+		area += a
+		moment += a * y
+		cover = min(cover, y-r)
+		for j := range below {
+			u, v, s := below[j].metres()
+			clear := math.Hypot(x-u, y-v) - r - s
+			g := newGap(clear, f.vertical.between(r, s), first-len(below)+j, first+i)
+			if g.tighter(on.Below) {
+				on.Below = g
+			}
+		}
+		if i == 0 {
+			continue
+		}
+		u, v, s := row[i-1].metres()
+		centres := math.Hypot(x-u, y-v)
+		on.Spacing = on.Spacing.Max(units.Metre.Of(centres))
+		if x < u {
+			// The form is so narrow that the bars changed places: count the
+			// distance as negative, so that it grows with the width throughout.
+			centres = -centres
+		}
+		g := newGap(centres-r-s, f.clear.between(r, s), first+i-1, first+i)
+		if g.tighter(on.Beside) {
+			on.Beside = g
+		}
+		if i == 1 || g.Clear.Less(on.LeastClear) {
+			on.LeastClear = g.Clear
+		}
+	}
+	on.Centroid = units.Metre.Of(moment / area)
+	on.Cover = units.Metre.Of(cover)
+	return on
+}
+
+func newGap(clear, required float64, a, b int) Gap {
+	return Gap{Clear: units.Metre.Of(clear), Required: units.Metre.Of(required), A: a, B: b}
+}
+
+// symmetric reports whether a row mirrors itself about the middle of the
+// width, in position and in diameter.
+func symmetric(row []Placed, width float64) bool {
+	for i, j := 0, len(row)-1; i <= j; i, j = i+1, j-1 {
+		xi, _, ri := row[i].metres()
+		xj, _, rj := row[j].metres()
+		if ri != rj || math.Abs(xi+xj-width) > sameDistance*width {
+			return false
+		}
+	}
+	return true
+}
+
+// aligned reports whether each bar of a row has one directly below it.
+func aligned(row, below []Placed, width float64) bool {
+	for i := range row {
+		x, found := row[i].X.In(units.Metre), false
+		for j := range below {
+			if math.Abs(x-below[j].X.In(units.Metre)) <= sameDistance*width {
+				found = true
+				break
+			}
+		}
+		if !found {
+			return false
+		}
+	}
+	return true
+}
+
+// margin is how far a bar's centre must keep from the inner faces of the side
+// legs, wherever it lies: those resting on the horizontal leg also clear its
+// bends.
+func (f *form) margin(p *Placed) float64 {
+	if p.Layer == 1 {
+		return f.edge(p)
+	}
+	return p.radius()
+}
+
+// holds reports whether every bar of a laid row lies inside the stirrup.
+func (f *form) holds(row []Placed) bool {
+	for i := range row {
+		x, y, r := row[i].metres()
+		keep := f.side + f.margin(&row[i])
+		if !units.AtMost(keep, x) || !units.AtMost(keep, f.width-x) || !units.AtMost(y+r, f.depth) {
+			return false
+		}
+	}
+	return true
+}
+
+// leastWidth is the width of the form at which a laid row just keeps its
+// clear distances and its margins. Every position is linear in the width, so
+// each condition gives its own least width directly.
+func (f *form) leastWidth(row []Placed) float64 {
+	least := 0.0
+	for i := range row {
+		b := &row[i]
+		x, y, r := b.metres()
+		keep := f.side + f.margin(b)
+		if b.across > 0 {
+			least = max(least, f.width+(keep-x)/b.across)
+		}
+		if b.across < 1 {
+			least = max(least, f.width+(keep-(f.width-x))/(1-b.across))
+		}
+		if i == 0 {
+			continue
+		}
+		a := &row[i-1]
+		u, v, s := a.metres()
+		need := f.pitch(s, r, y-v)
+		least = max(least, f.width+(need-(x-u))/(b.across-a.across))
+	}
+	return least
+}
