@@ -1,0 +1,37 @@
+// Package mechanics holds the mechanics of a reinforced-concrete cross-section
+// in bending, and nothing of any design code: no limit, no factor, no rule.
+//
+// A [Section] is a stack of rectangles of concrete and layers of steel. How
+// concrete answers strain is a [Law], passed in as a value: a rectangular
+// block, a parabola and rectangle, a bilinear line, a polyline or any curve.
+// Plane sections remain plane; steel is elastic and perfectly plastic; bond is
+// perfect.
+//
+//   - [Section.Ultimate] and [Solver.Ultimate] find the equilibrium at which
+//     the compression face reaches the law's ultimate strain.
+//   - [Section.Fibres] finds the same equilibrium by another route, fibre
+//     integration, and shares no function with the first.
+//   - [Section.Gross], [Section.Uncracked] and [Section.Cracked] are the elastic
+//     properties used in service.
+//   - [RequiredTension] and [Solver.RequiredArea] turn the question round.
+//
+// # Signs and datums
+//
+// A section is described from its top face down, for either sense of bending.
+// Results are measured from the compression face, which is the top face in
+// [Sagging] and the bottom face in [Hogging]. Strains, stresses and forces are
+// positive in compression; the one exception is [Ultimate.ExtremeStrain], which
+// is positive in tension and says so.
+//
+// # Exactness
+//
+// Every law is kept as pieces of polynomials, so between the curvatures at which
+// a bar yields, or a bar or an edge of the concrete passes from one piece to the
+// next, the balance of forces is itself a polynomial of low degree. Its roots
+// are isolated by counting sign changes, never by sampling, hence none is missed,
+// and are refined to the last bits of float64. A curve that is no polynomial is
+// fitted when the law is made, within 1e-9 of its greatest stress.
+//
+// Values are SI float64 inside; a solution that fits a closed form agrees with
+// it within 1e-12.
+package mechanics
