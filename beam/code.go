@@ -30,9 +30,9 @@ type Code interface {
 	// is zero) that satisfies the code for both sizes.
 	Cover(p *Problem, stirrup, bar bars.Size) units.Length
 
-	// Gaps are the least clear distances between bars in a layer and between
-	// layers, for the largest bar of a face.
-	Gaps(p *Problem, largest bars.Size) (horizontal, vertical units.Length)
+	// Gaps are the least clear distances between bars of a layer and between
+	// layers.
+	Gaps(p *Problem) bars.Clearances
 
 	// Allows reports whether the code lets a size be used so; the search
 	// skips those it does not.
@@ -45,7 +45,8 @@ type Code interface {
 	LeastTension(p *Problem, s Sense, depth units.Length) (area units.Area, ok bool)
 
 	// Judge appends to dst the checks of one group of limit states on a
-	// trial. It must not keep the trial. With t.Record it also writes the
+	// trial. A check that rests on the bars of one face carries that Face:
+	// in bending the tension face. It must not keep the trial. With t.Record it also writes the
 	// working into each check; verdicts are the same either way.
 	Judge(dst []Check, g Group, t *Trial) []Check
 

@@ -8,8 +8,8 @@ func (s Shape) MarshalText() ([]byte, error) { return []byte(s.String()), nil }
 
 // UnmarshalText accepts exactly the words that String gives.
 func (s *Shape) UnmarshalText(text []byte) error {
-	v, err := shapeWords.parse(string(text))
-	*s = Shape(v)
+	n, err := shapeWords.parse(string(text))
+	*s = Shape(n)
 	return err
 }
 
@@ -21,8 +21,8 @@ func (e Exposure) MarshalText() ([]byte, error) { return []byte(e.String()), nil
 
 // UnmarshalText accepts exactly the words that String gives.
 func (e *Exposure) UnmarshalText(text []byte) error {
-	v, err := exposureWords.parse(string(text))
-	*e = Exposure(v)
+	n, err := exposureWords.parse(string(text))
+	*e = Exposure(n)
 	return err
 }
 
@@ -34,8 +34,8 @@ func (c ConcreteKind) MarshalText() ([]byte, error) { return []byte(c.String()),
 
 // UnmarshalText accepts exactly the words that String gives.
 func (c *ConcreteKind) UnmarshalText(text []byte) error {
-	v, err := kindWords.parse(string(text))
-	*c = ConcreteKind(v)
+	n, err := kindWords.parse(string(text))
+	*c = ConcreteKind(n)
 	return err
 }
 
@@ -47,8 +47,8 @@ func (c Coating) MarshalText() ([]byte, error) { return []byte(c.String()), nil 
 
 // UnmarshalText accepts exactly the words that String gives.
 func (c *Coating) UnmarshalText(text []byte) error {
-	v, err := coatingWords.parse(string(text))
-	*c = Coating(v)
+	n, err := coatingWords.parse(string(text))
+	*c = Coating(n)
 	return err
 }
 
@@ -60,8 +60,8 @@ func (l LoadCase) MarshalText() ([]byte, error) { return []byte(l.String()), nil
 
 // UnmarshalText accepts exactly the words that String gives.
 func (l *LoadCase) UnmarshalText(text []byte) error {
-	v, err := caseWords.parse(string(text))
-	*l = LoadCase(v)
+	n, err := caseWords.parse(string(text))
+	*l = LoadCase(n)
 	return err
 }
 
@@ -73,8 +73,8 @@ func (l LoadShape) MarshalText() ([]byte, error) { return []byte(l.String()), ni
 
 // UnmarshalText accepts exactly the words that String gives.
 func (l *LoadShape) UnmarshalText(text []byte) error {
-	v, err := loadShapeWords.parse(string(text))
-	*l = LoadShape(v)
+	n, err := loadShapeWords.parse(string(text))
+	*l = LoadShape(n)
 	return err
 }
 
@@ -86,8 +86,8 @@ func (a Attachment) MarshalText() ([]byte, error) { return []byte(a.String()), n
 
 // UnmarshalText accepts exactly the words that String gives.
 func (a *Attachment) UnmarshalText(text []byte) error {
-	v, err := attachmentWords.parse(string(text))
-	*a = Attachment(v)
+	n, err := attachmentWords.parse(string(text))
+	*a = Attachment(n)
 	return err
 }
 
@@ -99,8 +99,8 @@ func (p Preference) MarshalText() ([]byte, error) { return []byte(p.String()), n
 
 // UnmarshalText accepts exactly the words that String gives.
 func (p *Preference) UnmarshalText(text []byte) error {
-	v, err := preferenceWords.parse(string(text))
-	*p = Preference(v)
+	n, err := preferenceWords.parse(string(text))
+	*p = Preference(n)
 	return err
 }
 
@@ -112,8 +112,8 @@ func (s ShearRow) MarshalText() ([]byte, error) { return []byte(s.String()), nil
 
 // UnmarshalText accepts exactly the words that String gives.
 func (s *ShearRow) UnmarshalText(text []byte) error {
-	v, err := shearRowWords.parse(string(text))
-	*s = ShearRow(v)
+	n, err := shearRowWords.parse(string(text))
+	*s = ShearRow(n)
 	return err
 }
 
@@ -125,8 +125,8 @@ func (s ShearMethod) MarshalText() ([]byte, error) { return []byte(s.String()), 
 
 // UnmarshalText accepts exactly the words that String gives.
 func (s *ShearMethod) UnmarshalText(text []byte) error {
-	v, err := shearMethodWords.parse(string(text))
-	*s = ShearMethod(v)
+	n, err := shearMethodWords.parse(string(text))
+	*s = ShearMethod(n)
 	return err
 }
 
@@ -138,8 +138,8 @@ func (s Sense) MarshalText() ([]byte, error) { return []byte(s.String()), nil }
 
 // UnmarshalText accepts exactly the words that String gives.
 func (s *Sense) UnmarshalText(text []byte) error {
-	v, err := senseWords.parse(string(text))
-	*s = Sense(v)
+	n, err := senseWords.parse(string(text))
+	*s = Sense(n)
 	return err
 }
 
@@ -151,8 +151,8 @@ func (f Face) MarshalText() ([]byte, error) { return []byte(f.String()), nil }
 
 // UnmarshalText accepts exactly the words that String gives.
 func (f *Face) UnmarshalText(text []byte) error {
-	v, err := faceWords.parse(string(text))
-	*f = Face(v)
+	n, err := faceWords.parse(string(text))
+	*f = Face(n)
 	return err
 }
 
@@ -164,8 +164,8 @@ func (v Verdict) MarshalText() ([]byte, error) { return []byte(v.String()), nil 
 
 // UnmarshalText accepts exactly the words that String gives.
 func (v *Verdict) UnmarshalText(text []byte) error {
-	v, err := verdictWords.parse(string(text))
-	*v = Verdict(v)
+	n, err := verdictWords.parse(string(text))
+	*v = Verdict(n)
 	return err
 }
 
@@ -177,7 +177,7 @@ func (o Outcome) MarshalText() ([]byte, error) { return []byte(o.String()), nil 
 
 // UnmarshalText accepts exactly the words that String gives.
 func (o *Outcome) UnmarshalText(text []byte) error {
-	v, err := outcomeWords.parse(string(text))
-	*o = Outcome(v)
+	n, err := outcomeWords.parse(string(text))
+	*o = Outcome(n)
 	return err
 }

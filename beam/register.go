@@ -1,5 +1,7 @@
 package beam
 
+import "slices"
+
 // Assumption is something taken for granted on the way to a result, and what
 // the finished design found.
 type Assumption struct {
@@ -43,3 +45,5 @@ func (r *Register) Settle(id, found string, holds bool) {
 
 // All lists the assumptions in the order they were made.
 func (r *Register) All() []Assumption { return r.list }
+
+func (r *Register) clone() Register { return Register{list: slices.Clone(r.list)} }

@@ -35,19 +35,20 @@ type Trial struct {
 	// Record asks Judge for the working of each check.
 	Record bool
 
-	// Ultimate is scratch space for the code's flexure kernel, so that a
-	// search allocates once.
+	// Solver, Ultimate and Parts are working space for the code's flexure
+	// kernel, so that a search allocates once.
+	Solver   mechanics.Solver
 	Ultimate mechanics.Ultimate
+	Parts    []mechanics.Part
 	layers   []mechanics.Layer
 }
 
 // FaceSteel is the steel of one face, by coordinates.
 type FaceSteel struct {
-	Face   Face
-	Rows   []RowSteel    // by layer, nearest the face first; mixed sizes are rows of one layer
-	Placed []bars.Placed // every bar, x from the left face, y from this face
-	Fit    bars.Fit      // clear gaps and spacings of those coordinates
-	Area   units.Area    // catalogue areas, added as decimals
+	Face Face
+	Rows []RowSteel // by layer, nearest the face first; mixed sizes are rows of one layer
+	Fit  bars.Fit   // every bar by coordinates, with the gaps and spacings they leave
+	Area units.Area // catalogue areas, added as decimals
 	// Centroid and Nearest are distances from this face to the centroid of
 	// all bars and to the centre of the layer nearest the face.
 	Centroid, Nearest units.Length
@@ -106,20 +107,19 @@ func (t *Trial) ExtremeDepth(s Sense) units.Length {
 // Layers gives the trial's longitudinal steel to the flexure kernel: the
 // tension face of sense s, and the other face if it is relied on in
 // compression. The slice is reused by the next call.
-func (t *Trial) Layers(s Sense, modulus units.Stress, yieldStrain float64) []mechanics.Layer {
-	steel := mechanics.Steel{Modulus: modulus, Yield: t.Brief.Reinforcement.Yield, YieldStrain: yieldStrain}
+func (t *Trial) Layers(s Sense, steel mechanics.Steel) []mechanics.Layer {
 	t.layers = t.layers[:0]
 	for _, face := range [2]Face{s.TensionFace(), s.TensionFace().Opposite()} {
 		f := t.Steel(face)
 		if face != s.TensionFace() && !f.InCompression {
 			continue
 		}
-		for _, r := range f.Rows {
-			depth := r.Height
+		for i := range f.Rows {
+			depth := f.Rows[i].Height
 			if face == Bottom {
-				depth = t.Brief.Section.Depth.Sub(r.Height)
+				depth = t.Brief.Section.Depth.Sub(depth)
 			}
-			t.layers = append(t.layers, mechanics.Layer{Depth: depth, Area: r.Area, Steel: steel})
+			t.layers = append(t.layers, mechanics.Layer{Depth: depth, Area: f.Rows[i].Area, Steel: steel})
 		}
 	}
 	return t.layers

@@ -1,0 +1,56 @@
+package beam
+
+import (
+	"fmt"
+	"strings"
+
+	"soffit.example/units"
+)
+
+// Describe says an arrangement in words: "5 #6, one layer".
+func (a Arrangement) Describe(sys units.System) string {
+	var b strings.Builder
+	if a.Bar != "" {
+		fmt.Fprintf(&b, "%s stirrups, %d legs, at %s", a.Bar, a.Legs, sys.Format(a.Spacing.Amount()))
+		if a.Zones > 1 {
+			fmt.Fprintf(&b, ", %d zones", a.Zones)
+		}
+		return b.String()
+	}
+	layers := 0
+	for _, l := range a.Layers {
+		if l.Count[0] == 0 {
+			break
+		}
+		if layers > 0 {
+			b.WriteString(" under ")
+		}
+		fmt.Fprintf(&b, "%d %s", l.Count[0], l.Size[0])
+		if l.Count[1] > 0 {
+			fmt.Fprintf(&b, " + %d %s", l.Count[1], l.Size[1])
+		}
+		layers++
+	}
+	if layers == 1 {
+		b.WriteString(", one layer")
+	}
+	fmt.Fprintf(&b, ", %s, in %s stirrups", a.Face, a.With)
+	return b.String()
+}
+
+// Describe says a check in one line: what it is, both sides, and the clause.
+func (c *Check) Describe(sys units.System) string {
+	switch c.Outcome {
+	case NotApplicable, NotJudged:
+		return fmt.Sprintf("%s: %s (%s): %s", c.ID, c.Outcome, c.Clause, c.Reason)
+	}
+	relation := "<="
+	if c.Outcome == Fail {
+		relation = ">"
+	}
+	s := fmt.Sprintf("%s: %s %s %s (%s)", c.ID, sys.Format(c.Demand), relation, sys.Format(c.Capacity), c.Clause)
+	if c.Reason != "" {
+		s += ": " + c.Reason
+	}
+	return s
+}

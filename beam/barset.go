@@ -1,0 +1,165 @@
+package beam
+
+import (
+	"cmp"
+	"slices"
+
+	"soffit.example/bars"
+	"soffit.example/units"
+)
+
+// barSet is a choice of longitudinal bars for one face: up to MaxLayers
+// layers of one size, or of two with the larger at the corners.
+type barSet struct {
+	layers [MaxLayers][2]bars.Group
+	used   int // layers
+	count  int
+	area   units.Area
+	mass   float64 // kg/m
+	sizes  int     // different sizes, 1 or 2
+
+	judged, passes bool
+}
+
+// add puts a group into a layer.
+func (b *barSet) add(layer int, size bars.Size, count int) {
+	if count == 0 {
+		return
+	}
+	slot := 0
+	if b.layers[layer][0].Count > 0 {
+		slot = 1
+	}
+	b.layers[layer][slot] = bars.Group{Size: size, Count: count}
+	b.used = max(b.used, layer+1)
+	b.count += count
+	b.area = b.area.Add(size.Area.Scale(float64(count)))
+	b.mass += size.MassPerLength.In(units.KilogramPerMetre) * float64(count)
+}
+
+// largest is the largest bar of the set.
+func (b *barSet) largest() bars.Size {
+	s := b.layers[0][0].Size
+	for i := range b.layers[:b.used] {
+		for _, g := range b.layers[i] {
+			if g.Count > 0 && s.Diameter.Less(g.Size.Diameter) {
+				s = g.Size
+			}
+		}
+	}
+	return s
+}
+
+// names lists the set's layers for the reject log.
+func (b *barSet) names() (out [MaxLayers]LayerBars) {
+	for i := range b.layers[:b.used] {
+		for j, g := range b.layers[i] {
+			out[i].Size[j], out[i].Count[j] = g.Size.Name, g.Count
+		}
+	}
+	return out
+}
+
+// appendLayers gives the set to package bars.
+func (b *barSet) appendLayers(dst []bars.Layer) []bars.Layer {
+	for i := range b.layers[:b.used] {
+		n := 1
+		if b.layers[i][1].Count > 0 {
+			n = 2
+		}
+		dst = append(dst, b.layers[i][:n:n])
+	}
+	return dst
+}
+
+// uniformSets appends every set of one size with at least fewest bars that
+// fits into layers of most bars: a layer is filled before the next is begun,
+// as far as upper bars can lie above lower ones symmetrically.
+func uniformSets(dst []barSet, size bars.Size, fewest, most, layers int) []barSet {
+	for n := max(fewest, 2); n <= most*layers; n++ {
+		split, ok := splitLayers(n, most, layers)
+		if !ok {
+			continue
+		}
+		b := barSet{sizes: 1}
+		for i, k := range split {
+			b.add(i, size, k)
+		}
+		dst = append(dst, b)
+	}
+	return dst
+}
+
+// splitLayers shares n bars among layers, the lowest fullest. An odd upper
+// layer needs a middle bar below it.
+func splitLayers(n, most, layers int) (split [MaxLayers]int, ok bool) {
+	below := most
+	for i := range layers {
+		k := min(n, below)
+		if rest := n - k; rest > 0 {
+			// The layers above can be odd only over an odd layer.
+			if k%2 == 0 && oddAbove(rest, k, layers-i-1) {
+				k--
+			}
+		}
+		if i > 0 && k%2 == 1 && split[i-1]%2 == 0 {
+			return split, false
+		}
+		split[i] = k
+		n -= k
+		below = k
+		if n == 0 {
+			return split, true
+		}
+		if k < 1 {
+			return split, false
+		}
+	}
+	return split, false
+}
+
+// oddAbove reports whether rest bars over a layer of k need an odd layer
+// somewhere: they do if rest is odd.
+func oddAbove(rest, k, layers int) bool { return layers > 0 && k > 0 && rest%2 == 1 }
+
+// mixedSets appends sets of two neighbouring sizes: an even number of the
+// larger one outermost in the first layer with the smaller between, or the
+// larger one below and the smaller above.
+func mixedSets(dst []barSet, larger, smaller bars.Size, least units.Area, most, layers int) []barSet {
+	enough := func(a, b int) bool {
+		return !larger.Area.Scale(float64(a)).Add(smaller.Area.Scale(float64(b + 1))).Less(least)
+	}
+	for a := 2; a < most; a += 2 {
+		for b := 1; a+b <= most; b++ {
+			if !enough(a, b) {
+				continue
+			}
+			s := barSet{sizes: 2}
+			s.add(0, larger, a)
+			s.add(0, smaller, b)
+			dst = append(dst, s)
+		}
+	}
+	if layers < 2 {
+		return dst
+	}
+	for a := 2; a <= most; a++ {
+		for b := 2 - a%2; b <= a; b++ {
+			if a%2 == 0 && b%2 == 1 || !enough(a, b) {
+				continue
+			}
+			s := barSet{sizes: 2}
+			s.add(0, larger, a)
+			s.add(1, smaller, b)
+			dst = append(dst, s)
+		}
+	}
+	return dst
+}
+
+// sortSets puts light sets first, and among equals the one with fewer bars.
+func sortSets(sets []barSet) {
+	slices.SortStableFunc(sets, func(a, b barSet) int {
+		return cmp.Or(cmp.Compare(a.mass, b.mass), cmp.Compare(a.count, b.count), cmp.Compare(a.used, b.used))
+	})
+}

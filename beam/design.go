@@ -1,0 +1,271 @@
+package beam
+
+import (
+	"context"
+	"fmt"
+	"slices"
+
+	"soffit.example/units"
+)
+
+// Design finds bars and stirrups for a brief under a code.
+//
+// It resolves and analyses the brief, refuses what the code's scope rules
+// exclude, searches the layouts that the brief's preferences allow, and
+// returns the best of those that pass every check, with alternatives, with
+// every arrangement that was rejected and why, and with every assumption
+// settled against the finished design. Where nothing passes the verdict is
+// Unsatisfied, the layout is the one that came closest, and Cures lists
+// changes of the brief that were designed in turn and found to pass.
+//
+// The error is an *InputError that lists every fault of the brief, or the
+// context's. A beam that fails or lies out of scope is no error.
+func Design(ctx context.Context, code Code, brief Brief) (*Result, error) {
+	r, err := design(ctx, code, brief)
+	if err != nil || r.Verdict != Unsatisfied || brief.Preferences.NoCures {
+		return r, err
+	}
+	r.Cures, err = cures(ctx, code, brief, r)
+	if err != nil {
+		return nil, err
+	}
+	return r, nil
+}
+
+// CheckLayout judges a layout under a brief and a code with the same checks
+// that Design uses. Errors are those of Design; faults of the layout have
+// paths under /layout.
+func CheckLayout(ctx context.Context, code Code, brief Brief, layout Layout) (*Result, error) {
+	if err := ctx.Err(); err != nil {
+		return nil, err
+	}
+	p, err := prepare(code, brief)
+	if err != nil {
+		return nil, err
+	}
+	if len(p.refusals) > 0 {
+		return p.outOfScope(), nil
+	}
+	r, faults := p.finish(layout)
+	if len(faults) > 0 {
+		return nil, &InputError{Faults: faults}
+	}
+	return r, nil
+}
+
+// design is Design without the cures.
+func design(ctx context.Context, code Code, brief Brief) (*Result, error) {
+	first, err := prepare(code, brief)
+	if err != nil {
+		return nil, err
+	}
+	best, err := searchDepths(ctx, first)
+	if err != nil {
+		return nil, err
+	}
+	if best == nil {
+		return first.outOfScope(), nil
+	}
+	return best.result()
+}
+
+// searchDepths searches the brief's section and then the other depths that
+// its preferences allow. It returns nil if a scope rule refuses every depth.
+func searchDepths(ctx context.Context, first *prepared) (*search, error) {
+	depths := []units.Length{first.Brief.Section.Depth}
+	for _, d := range first.Brief.Preferences.Depths {
+		if !slices.Contains(depths, d) {
+			depths = append(depths, d)
+		}
+	}
+	if first.Brief.Preferences.Prefer == Shallowest {
+		slices.SortFunc(depths, units.Length.Compare)
+	}
+	var best *search
+	for _, d := range depths {
+		if err := ctx.Err(); err != nil {
+			return nil, err
+		}
+		p := first
+		if d != first.Brief.Section.Depth {
+			var err error
+			if p, err = first.atDepth(d); err != nil {
+				return nil, err
+			}
+		}
+		if len(p.refusals) > 0 {
+			continue
+		}
+		s := newSearch(p, 1+p.Brief.Preferences.KeepBest)
+		s.run()
+		if best == nil || s.better(best) {
+			s.rejects.absorb(best)
+			best = s
+		} else {
+			best.rejects.absorb(s)
+		}
+		if p.Brief.Preferences.Prefer == Shallowest && len(best.kept) > 0 {
+			break
+		}
+	}
+	return best, nil
+}
+
+// absorb takes over what another search rejected.
+func (l *rejectLog) absorb(s *search) {
+	if s != nil {
+		l.list = append(l.list, s.rejects.list...)
+	}
+}
+
+// better reports whether the first layout of s ranks before that of t.
+func (s *search) better(t *search) bool {
+	switch {
+	case len(s.kept) == 0:
+		return false
+	case len(t.kept) == 0:
+		return true
+	}
+	return slices.Compare(s.kept[0].key[:], t.kept[0].key[:]) < 0
+}
+
+// result finishes the best layout of the search, or the closest one where
+// nothing passed.
+func (s *search) result() (*Result, error) {
+	chosen := s.closest()
+	if len(s.kept) > 0 {
+		chosen = &s.kept[0]
+	}
+	var layout Layout
+	if chosen != nil {
+		layout = s.layoutOf(chosen)
+		s.addSideBars(&layout)
+	}
+	r, faults := s.p.finish(layout)
+	if len(faults) > 0 {
+		return nil, fmt.Errorf("beam: the search proposed a layout that is not one: %v", &InputError{Faults: faults})
+	}
+	r.Rejected = s.rejects.list
+	if len(s.kept) == 0 {
+		r.Verdict = Unsatisfied
+		return r, nil
+	}
+	for i := 1; i < len(s.kept); i++ {
+		r.Alternatives = append(r.Alternatives, s.alternative(&s.kept[i]))
+	}
+	return r, nil
+}
+
+// closest is the arrangement that came nearest to passing; nil if there was
+// nothing to try at all.
+func (s *search) closest() *found {
+	if s.near[0].ok {
+		return &s.near[0].pair
+	}
+	if len(s.main) == 0 || len(s.ties) == 0 {
+		return nil
+	}
+	f := &found{stirrup: s.ties[0]}
+	for _, face := range [2]Face{Bottom, Top} {
+		set := &s.near[face].set
+		if !s.near[face].ok {
+			set = s.fullest(face)
+		}
+		if face == Bottom {
+			f.bottom = *set
+		} else {
+			f.top = *set
+		}
+	}
+	least, _ := s.steps()
+	s.t.enclose(f.stirrup, larger(f.bottom.largest(), f.top.largest()))
+	s.setUniform(f.stirrup, 2, least)
+	f.zones = slices.Clone(s.zones)
+	return f
+}
+
+// fullest is the set with the most steel that the layers of a face hold, for
+// a face where the code saw no set worth trying; two bars where none fit.
+func (s *search) fullest(face Face) *barSet {
+	var best *barSet
+	for _, size := range s.main {
+		most, _, _ := s.bounds(tensionSense(face), s.ties[0], size)
+		n := 2
+		if s.bent(tensionSense(face)) {
+			n = max(most, 2)
+		}
+		for _, b := range uniformSets(nil, size, n, n, 1) {
+			if best == nil || best.area.Less(b.area) && n > 2 {
+				best = &b
+			}
+		}
+	}
+	return best
+}
+
+// sideBarsMost is the most side-face bars a side that the search adds.
+const sideBarsMost = 20
+
+// addSideBars adds the fewest bars along the side faces that the code's
+// checks ask for; none where no number changes anything.
+func (s *search) addSideBars(l *Layout) {
+	fails := func() (n int) {
+		t, faults := trialOf(s.p.Problem, l)
+		if len(faults) > 0 {
+			return 1 << 30
+		}
+		s.checks = s.p.Code.Judge(s.checks[:0], Whole, t)
+		for i := range s.checks {
+			if s.checks[i].Outcome == Fail {
+				n++
+			}
+		}
+		return n
+	}
+	bare := fails()
+	if bare == 0 {
+		return
+	}
+	size := s.main[0].Name
+	half := s.p.Brief.Section.Depth.Scale(0.5)
+	l.Longitudinal = append(l.Longitudinal, Row{})
+	side := &l.Longitudinal[len(l.Longitudinal)-1]
+	for n := 1; n <= sideBarsMost; n++ {
+		*side = Row{
+			Mark: "F1", Bar: size, Count: n, Face: Side, Spacing: half.Scale(1 / float64(n+1)),
+			To: l.Longitudinal[0].To, Start: "straight", End: "straight",
+		}
+		if fails() < bare {
+			return
+		}
+	}
+	l.Longitudinal = l.Longitudinal[:len(l.Longitudinal)-1]
+}
+
+// alternative says how a kept layout differs from the first.
+func (s *search) alternative(f *found) Alternative {
+	sys := s.p.System
+	first := &s.kept[0]
+	a := Alternative{Layout: s.layoutOf(f), SteelMass: units.Kilogram.Of(f.mass), Depth: s.p.Brief.Section.Depth}
+	more := units.Kilogram.Of(f.mass - first.mass)
+	switch {
+	case s.prefer == FewestBars && f.key[0] > first.key[0]:
+		a.WhyNotFirst = fmt.Sprintf("%g bars more", f.key[0]-first.key[0])
+	case s.prefer == OneSize && f.key[0] > first.key[0]:
+		a.WhyNotFirst = fmt.Sprintf("%g sizes instead of %g", f.key[0], first.key[0])
+	case s.prefer == FewestMarks && f.key[0] > first.key[0]:
+		a.WhyNotFirst = fmt.Sprintf("%g marks more", f.key[0]-first.key[0])
+	default:
+		a.WhyNotFirst = fmt.Sprintf("%s more steel (%.1f %%)", sys.Format(more.Amount()), 100*(f.mass-first.mass)/first.mass)
+	}
+	if t, faults := trialOf(s.p.Problem, &a.Layout); len(faults) == 0 {
+		s.checks = s.checks[:0]
+		for _, g := range Groups() {
+			s.checks = s.p.Code.Judge(s.checks, g, t)
+		}
+		if g := Governing(s.checks); g != nil {
+			a.Governing, a.Utilization = g.ID, g.Utilization
+		}
+	}
+	return a
+}

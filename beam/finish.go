@@ -1,0 +1,143 @@
+package beam
+
+import (
+	"fmt"
+	"slices"
+
+	"soffit.example/units"
+)
+
+// outOfScope is the result of a problem that a scope rule refuses.
+func (p *prepared) outOfScope() *Result {
+	r := p.blank()
+	r.Verdict = OutOfScope
+	r.Refusals = p.refusals
+	r.Assumptions = p.register.All()
+	r.Cautions = p.cautions(r)
+	return r
+}
+
+func (p *prepared) blank() *Result {
+	return &Result{
+		Engine: Engine{Name: "soffit", Version: Version}, Code: p.Code.Edition().ID, Reference: p.Brief.Reference,
+		System: p.System, Problem: p.Problem, Section: p.Brief.Section, Kept: p.Kept, Dropped: p.Dropped,
+	}
+}
+
+// finish judges a layout in full: every group of checks with its working,
+// the assumptions against what was found, schedule and quantities. Design
+// and CheckLayout both end here.
+func (p *prepared) finish(layout Layout) (*Result, []Fault) {
+	t, faults := trialOf(p.Problem, &layout)
+	if len(faults) > 0 {
+		return nil, faults
+	}
+	t.Record = true
+	r := p.blank()
+	r.Layout = layout
+	r.Layout.Transverse = slices.Clone(t.Zones)
+	r.Checks = t.buildable(nil)
+	for _, g := range Groups() {
+		r.Checks = p.Code.Judge(r.Checks, g, t)
+	}
+	register := p.register.clone()
+	p.settle(t, &register)
+	p.Code.Settle(t, r.Checks, &register)
+	r.Assumptions = register.All()
+
+	r.Verdict = Satisfied
+	if Failing(r.Checks) || !judgedStrength(r.Checks) {
+		r.Verdict = Unsatisfied
+	}
+	for _, a := range r.Assumptions {
+		if a.Decisive && !a.Holds && !a.Open {
+			r.Verdict = Unsatisfied
+			r.Binding = append(r.Binding, a.ID)
+		}
+	}
+	for i := range r.Checks {
+		if c := &r.Checks[i]; c.Outcome == Fail && !slices.Contains(r.Binding, c.ID) {
+			r.Binding = append(r.Binding, c.ID)
+		}
+	}
+	r.Governing = Governing(r.Checks)
+	r.Bars = t.positions(&layout)
+	r.takeOff(t)
+	r.Cautions = p.cautions(r)
+	return r, nil
+}
+
+// judgedStrength reports whether anything was judged at all: a result in
+// which nothing was is never satisfied.
+func judgedStrength(checks []Check) bool { return Governing(checks) != nil }
+
+// settle holds the assumptions that need no code against the finished trial.
+func (p *prepared) settle(t *Trial, register *Register) {
+	if p.SelfWeight.IsZero() {
+		return
+	}
+	s := t.Brief.Section
+	found := t.Brief.Concrete.Density.Weight().MulArea(s.Width.MulLength(s.Depth))
+	register.Settle("self-weight.section",
+		fmt.Sprintf("%s from the final section of %s by %s", p.System.Format(found.Amount()), p.System.Format(s.Width.Amount()), p.System.Format(s.Depth.Amount())),
+		found.AtMost(p.SelfWeight) && p.SelfWeight.AtMost(found))
+}
+
+// positions lists every longitudinal bar of the top and bottom by
+// coordinates from the left and bottom faces, and the side bars.
+func (t *Trial) positions(l *Layout) []BarAt {
+	mark := func(face Face, layer int, bar string) string {
+		for i := range l.Longitudinal {
+			if r := &l.Longitudinal[i]; r.Face == face && (r.Layer == layer || face == Side) && r.Bar == bar {
+				return r.Mark
+			}
+		}
+		return ""
+	}
+	var out []BarAt
+	depth, width := t.Brief.Section.Depth, t.Brief.Section.Width
+	for _, face := range [2]Face{Bottom, Top} {
+		for _, b := range t.Steel(face).Fit.Bars {
+			y := b.Y
+			if face == Top {
+				y = depth.Sub(b.Y)
+			}
+			out = append(out, BarAt{Mark: mark(face, b.Layer, b.Size.Name), Bar: b.Size.Name, Diameter: b.Size.Diameter, X: b.X, Y: y, Face: face, Layer: b.Layer})
+		}
+	}
+	if s := &t.Side; s.Each > 0 {
+		x := t.Cover.Add(t.Stirrup.Diameter).Add(s.Size.Diameter.Scale(0.5))
+		for i := 1; i <= s.Each; i++ {
+			y := t.Bottom.Nearest.Add(s.Spacing.Scale(float64(i)))
+			if s.TensionFace == Top {
+				y = depth.Sub(t.Top.Nearest.Add(s.Spacing.Scale(float64(i))))
+			}
+			for _, at := range [2]units.Length{x, width.Sub(x)} {
+				out = append(out, BarAt{Mark: mark(Side, 0, s.Size.Name), Bar: s.Size.Name, Diameter: s.Size.Diameter, X: at, Y: y, Face: Side})
+			}
+		}
+	}
+	return out
+}
+
+// cautions are what a reader must know before using the result.
+func (p *prepared) cautions(r *Result) []string {
+	c := slices.Clone(p.Code.Cautions())
+	if p.refusals != nil {
+		return c
+	}
+	for i := range r.Checks {
+		if k := &r.Checks[i]; k.Outcome == NotJudged {
+			c = append(c, fmt.Sprintf("Not judged: %s (%s): %s", k.ID, k.Clause, k.Reason))
+		}
+	}
+	for _, a := range r.Assumptions {
+		switch {
+		case a.Open:
+			c = append(c, "Assumed, for the engineer to confirm: "+a.Assumed)
+		case !a.Holds && a.Decisive:
+			c = append(c, "Assumed and refuted: "+a.Assumed+"; found: "+a.Found)
+		}
+	}
+	return c
+}

@@ -1,0 +1,181 @@
+package beam
+
+import (
+	"fmt"
+	"slices"
+
+	"soffit.example/bars"
+	"soffit.example/beam/statics"
+	"soffit.example/units"
+)
+
+// prepared is a problem on its way: resolved and analysed, with what was
+// assumed so far and what puts it out of scope.
+type prepared struct {
+	*Problem
+	register Register
+	refusals []Refusal
+}
+
+// prepare resolves a brief under a code and analyses it. The error is an
+// *InputError holding every fault found.
+func prepare(code Code, given Brief) (*prepared, error) {
+	b := given.clone()
+	f := faults{system: code.Edition().System}
+	catalog, err := bars.Lookup(b.Reinforcement.Catalog)
+	if err != nil {
+		f.add("/reinforcement/catalog", "an id of the bar catalogs", "%v", err)
+	}
+	b.check(&f, catalog)
+	p := &prepared{Problem: &Problem{Code: code, System: f.system, Catalog: catalog}}
+	if len(f.list) == 0 {
+		f.list = append(f.list, code.Resolve(&b, &p.register)...)
+	}
+	if err := f.err(); err != nil {
+		return nil, err
+	}
+	b.Preferences.resolve(p.Problem)
+	p.Brief = b
+	if err := p.analyse(); err != nil {
+		return nil, err
+	}
+	p.refusals = code.Scope(p.Problem)
+	return p, nil
+}
+
+// clone copies a brief so that resolving it leaves the caller's alone.
+func (b Brief) clone() Brief {
+	b.Spans = slices.Clone(b.Spans)
+	b.Supports = slices.Clone(b.Supports)
+	b.Loads = slices.Clone(b.Loads)
+	b.Demands = slices.Clone(b.Demands)
+	b.Preferences.Bars = slices.Clone(b.Preferences.Bars)
+	b.Preferences.Stirrups = slices.Clone(b.Preferences.Stirrups)
+	b.Preferences.Depths = slices.Clone(b.Preferences.Depths)
+	return b
+}
+
+// resolve fills the preferences that the caller left open. They are choices
+// of the trade, not of a code.
+func (p *Preferences) resolve(pr *Problem) {
+	if len(p.Bars) == 0 {
+		for _, s := range pr.Catalog.Sizes() {
+			if pr.Code.Allows(bars.Main, s) {
+				p.Bars = append(p.Bars, s.Name)
+			}
+		}
+	}
+	if len(p.Stirrups) == 0 {
+		for _, s := range pr.Catalog.Sizes() {
+			if _, err := s.Bend(bars.Stirrup); err == nil && pr.Code.Allows(bars.Stirrup, s) && len(p.Stirrups) < usualStirrups {
+				p.Stirrups = append(p.Stirrups, s.Name)
+			}
+		}
+	}
+	setIfZero(&p.MaxLayers, 2)
+	setIfZero(&p.MaxLegs, 4)
+	setIfZero(&p.MaxZones, 3)
+	setIfZero(&p.KeepBest, 4)
+	p.KeepBest = max(p.KeepBest, 0)
+	if p.Prefer == 0 {
+		p.Prefer = LeastSteel
+	}
+	if p.SpacingBy.IsZero() {
+		p.SpacingBy = units.Inch.Of(0.5)
+		if pr.System == units.SI {
+			p.SpacingBy = units.Millimetre.Of(10)
+		}
+	}
+}
+
+// usualStirrups is how many of the smallest sizes stirrups are chosen from
+// unless the brief names them (common practice, no source).
+const usualStirrups = 3
+
+func setIfZero(v *int, def int) {
+	if *v == 0 {
+		*v = def
+	}
+}
+
+// atDepth is the same problem with another overall depth: analysed again,
+// because the beam's own weight follows the depth.
+func (p *prepared) atDepth(d units.Length) (*prepared, error) {
+	q := *p.Problem
+	q.Brief.Section.Depth = d
+	n := &prepared{Problem: &q, register: p.register.clone()}
+	if err := n.analyse(); err != nil {
+		return nil, err
+	}
+	n.refusals = q.Code.Scope(n.Problem)
+	return n, nil
+}
+
+// analyse finds the factored forces of the resolved brief.
+func (p *prepared) analyse() error {
+	b := &p.Brief
+	if len(b.Demands) > 0 {
+		p.Forces = demandForces(b.Demands)
+		return nil
+	}
+	p.SelfWeight = units.LineLoad{}
+	if !b.NoSelfWeight {
+		p.SelfWeight = b.Concrete.Density.Weight().MulArea(b.Section.Width.MulLength(b.Section.Depth))
+		p.register.Assume(Assumption{
+			ID: "self-weight.section",
+			Assumed: fmt.Sprintf("%s of self-weight, from a section of %s by %s",
+				p.System.Format(p.SelfWeight.Amount()), p.System.Format(b.Section.Width.Amount()), p.System.Format(b.Section.Depth.Amount())),
+			UsedIn: []string{"flexure", "shear"},
+		})
+	}
+	p.Kept, p.Dropped = p.Code.Combinations(b)
+	forces, err := memberForces(b, p.SelfWeight, p.Kept)
+	if err != nil {
+		return &InputError{Faults: []Fault{analysisFault(err)}}
+	}
+	p.Forces = forces
+	return nil
+}
+
+// memberBeam is the beam as the analysis sees it.
+func memberBeam(b *Brief) statics.Beam {
+	m := statics.Beam{Spans: make([]statics.Span, len(b.Spans)), Supports: make([]statics.Support, len(b.Supports))}
+	for i, l := range b.Spans {
+		m.Spans[i] = statics.Span{Length: l}
+	}
+	for i, s := range b.Supports {
+		m.Supports[i] = statics.Support{Kind: s.Kind}
+	}
+	return m
+}
+
+// memberLoads are the loads that bend the beam, its own weight among them.
+// Torques do not.
+func memberLoads(b *Brief, selfWeight units.LineLoad) []statics.Load {
+	loads := make([]statics.Load, 0, len(b.Loads)+1)
+	if !selfWeight.IsZero() {
+		loads = append(loads, statics.Load{ID: "self-weight", Case: Dead.String(), Shape: statics.Uniform{Intensity: selfWeight}})
+	}
+	for i := range b.Loads {
+		l := &b.Loads[i]
+		s := statics.Load{Case: l.Case.String(), Span: l.Span}
+		switch l.Shape {
+		case Uniform:
+			s.Shape = statics.Uniform{Intensity: l.Intensity}
+		case Partial:
+			end := l.Intensity
+			if l.Varies {
+				end = l.IntensityEnd
+			}
+			s.Shape = statics.Partial{From: l.From, To: l.To, Intensity: l.Intensity, IntensityEnd: end}
+		case PointLoad:
+			s.Shape = statics.Point{Force: l.Force, At: l.At}
+		case Couple:
+			s.Shape = statics.Couple{Moment: l.Moment, At: l.At}
+		default:
+			continue
+		}
+		loads = append(loads, s)
+	}
+	return loads
+}

@@ -1,0 +1,58 @@
+package beam
+
+import (
+	"github.com/shopspring/decimal"
+
+	"soffit.example/units"
+)
+
+// takeOff counts the bars of a finished trial: masses by decimals from the
+// catalogue's printed mass per length, so that the schedule's lines add up
+// to the last digit.
+func (r *Result) takeOff(t *Trial) {
+	length := units.Length{}
+	for _, s := range t.Brief.Spans {
+		length = length.Add(s)
+	}
+	q := &r.Quantities
+	q.PerLength = length.IsZero()
+	if q.PerLength {
+		length = units.Metre.Of(1)
+	}
+	massUnit, lengthUnit, printed := units.Kilogram, units.Metre, "kg"
+	if r.System == units.US {
+		massUnit, lengthUnit, printed = units.PoundMass, units.Foot, "lb"
+	}
+	line := func(mark, bar, shape string, count int, cut units.Length) units.Mass {
+		size, err := t.Catalog.Size(bar)
+		if err != nil {
+			return units.Mass{}
+		}
+		perLength := size.PrintedMass().Value
+		if per := size.PrintedMass().Unit; per != printed+"/"+lengthUnit.String() {
+			perLength = decimal.NewFromFloat(size.MassPerLength.MulLength(lengthUnit.Of(1)).In(massUnit)).Round(6)
+		}
+		mass := decimal.NewFromInt(int64(count)).Mul(decimal.NewFromFloat(cut.In(lengthUnit)).Round(6)).Mul(perLength).Round(3)
+		r.Schedule = append(r.Schedule, ScheduleLine{Mark: mark, Bar: bar, Count: count, Shape: shape, Length: cut, Mass: mass, MassUnit: printed})
+		return massUnit.Of(mass.InexactFloat64())
+	}
+	for _, row := range r.Layout.Longitudinal {
+		count := row.Count
+		if row.Face == Side {
+			count *= 2
+		}
+		q.SteelMass = q.SteelMass.Add(line(row.Mark, row.Bar, "straight", count, length))
+	}
+	for i, z := range t.Zones {
+		count := z.Count
+		if q.PerLength {
+			count = stirrupCount(Zone{To: length, Spacing: z.Spacing})
+		}
+		m := line(z.Mark, z.Bar, "closed stirrup, 135-degree hooks", count, t.stirrupLength(t.ZoneBar[i], z.Legs))
+		q.StirrupMass, q.SteelMass = q.StirrupMass.Add(m), q.SteelMass.Add(m)
+	}
+	s := t.Brief.Section
+	q.Concrete = s.Width.MulLength(s.Depth).MulLength(length)
+	q.Form = s.Width.Add(s.Depth.Scale(2)).MulLength(length)
+	q.SteelPerConcrete = q.SteelMass.DivVolume(q.Concrete)
+}

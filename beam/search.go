@@ -1,0 +1,419 @@
+package beam
+
+import (
+	"math"
+	"slices"
+
+	"soffit.example/bars"
+	"soffit.example/units"
+)
+
+// search looks for the best layouts of one problem. Its space is declared:
+//
+//   - longitudinal sets of one size (two neighbouring ones if asked), layers
+//     filled from the face, on each face;
+//   - stirrups of each allowed size and 2 to MaxLegs legs, at multiples of
+//     the spacing step, in one zone from face to face or in three;
+//   - compression steel only for a face that no tension steel alone can
+//     satisfy.
+//
+// Within that space it is exhaustive: what it skips could not be ranked among
+// the layouts kept, or is below the code's own bound on tension steel.
+type search struct {
+	p      *prepared
+	prefer Preference
+	keep   int // layouts to keep, best first
+
+	main, ties []bars.Size
+
+	t       Trial
+	checks  []Check // scratch
+	failed  []Check // scratch
+	layers  []bars.Layer
+	zones   []Zone // scratch of the zone search
+	member  bool   // spans are given, so zones have extents
+	from    units.Length
+	to      units.Length
+	kept    []found
+	rejects rejectLog
+	near    [3]near // by face, and at 0 for whole pairs
+}
+
+// found is a layout that passes.
+type found struct {
+	key         [3]float64
+	bottom, top barSet
+	inCompress  Face // zero: none
+	stirrup     bars.Size
+	zones       []Zone
+	mass        float64 // kg, of bars and stirrups; per metre with demands
+	stirrupMass float64
+}
+
+// near remembers what came closest, so that a beam that cannot be satisfied
+// still gets a layout to look at: for a face the set alone, for a pair all
+// of it.
+type near struct {
+	ok    bool
+	worst float64 // utilization
+	set   barSet
+	pair  found
+}
+
+// newSearch readies a search that keeps so many layouts.
+func newSearch(p *prepared, keep int) *search {
+	b := &p.Brief
+	s := &search{p: p, prefer: b.Preferences.Prefer, keep: keep, member: len(b.Spans) > 0}
+	s.t.Problem = p.Problem
+	for _, n := range b.Preferences.Bars {
+		if size, err := p.Catalog.Size(n); err == nil && p.Code.Allows(bars.Main, size) {
+			s.main = append(s.main, size)
+		}
+	}
+	for _, n := range b.Preferences.Stirrups {
+		if size, err := p.Catalog.Size(n); err == nil && p.Code.Allows(bars.Stirrup, size) {
+			s.ties = append(s.ties, size)
+		}
+	}
+	byArea := func(a, b bars.Size) int { return a.Area.Compare(b.Area) }
+	slices.SortFunc(s.main, byArea)
+	slices.SortFunc(s.ties, byArea)
+	if s.member {
+		s.from, s.to = p.Faces(1)
+	}
+	return s
+}
+
+// run searches every stirrup size, singly reinforced first.
+func (s *search) run() {
+	for _, tie := range s.ties {
+		bottoms, tops := s.sets(Bottom, tie), s.sets(Top, tie)
+		s.pairs(tie, bottoms, tops)
+	}
+	if len(s.kept) > 0 {
+		return
+	}
+	for _, tie := range s.ties {
+		s.compressed(tie, Bottom)
+		s.compressed(tie, Top)
+	}
+}
+
+// bent reports whether any combination bends the beam in a sense.
+func (s *search) bent(sense Sense) bool {
+	f := &s.p.Forces
+	for _, d := range f.Demands() {
+		if sense == Positive && d.Moment.Amount().SI() > 0 || sense == Negative && d.Moment.Amount().SI() < 0 {
+			return true
+		}
+	}
+	for span := 1; span <= f.Spans(); span++ {
+		from, to := s.p.Faces(span)
+		if _, ok := f.Moment(sense, span, from, to); ok {
+			return true
+		}
+	}
+	return false
+}
+
+// tensionSense is the sense of bending that puts a face in tension.
+func tensionSense(f Face) Sense {
+	if f == Top {
+		return Negative
+	}
+	return Positive
+}
+
+// sets lists the sets of bars worth trying at a face inside a stirrup size,
+// lightest first. A face that is never in tension gets two bars to hold the
+// stirrups.
+func (s *search) sets(face Face, tie bars.Size) []barSet {
+	sense := tensionSense(face)
+	bent := s.bent(sense)
+	var sets []barSet
+	for i, size := range s.main {
+		if !bent {
+			sets = uniformSets(sets, size, 2, 2, 1)
+			continue
+		}
+		most, least, ok := s.bounds(sense, tie, size)
+		if !ok || most < 2 {
+			continue
+		}
+		fewest := int(math.Ceil(least.Ratio(size.Area)-1e-9)) - 1 // one too few is tried, for the record
+		sets = uniformSets(sets, size, fewest, most, s.p.Brief.Preferences.MaxLayers)
+		if s.p.Brief.Preferences.Mixed && i > 0 && s.main[i].Order == s.main[i-1].Order+1 {
+			sets = mixedSets(sets, size, s.main[i-1], least, most, s.p.Brief.Preferences.MaxLayers)
+		}
+	}
+	sortSets(sets)
+	return sets
+}
+
+// bounds are the most bars of a size in a layer, and the least tension steel
+// that the code could accept at the depth of a single layer of them.
+func (s *search) bounds(sense Sense, tie, size bars.Size) (most int, least units.Area, ok bool) {
+	s.t.enclose(tie, size)
+	cage := s.t.cage()
+	most, err := cage.MostInLayer(size, s.p.Code.Gaps(s.p.Problem).InLayer)
+	if err != nil {
+		return 0, least, false
+	}
+	depth := s.p.Brief.Section.Depth.Sub(s.t.Cover).Sub(tie.Diameter).Sub(size.Diameter.Scale(0.5))
+	least, ok = s.p.Code.LeastTension(s.p.Problem, sense, depth)
+	return most, least, ok
+}
+
+// judge puts the current trial to groups of checks and keeps those that fail
+// in s.failed; with a face given, only that face's and those of no face.
+func (s *search) judge(face Face, groups ...Group) (ok bool) {
+	s.checks, s.failed = s.checks[:0], s.failed[:0]
+	for _, g := range groups {
+		s.checks = s.p.Code.Judge(s.checks, g, &s.t)
+	}
+	for i := range s.checks {
+		c := &s.checks[i]
+		if c.Outcome == Fail && (face == 0 || c.Face == 0 || c.Face == face) {
+			s.failed = append(s.failed, *c)
+		}
+	}
+	return len(s.failed) == 0
+}
+
+// put lays a set at a face of the trial.
+func (s *search) put(face Face, b *barSet, inCompression bool) bool {
+	s.layers = s.layers[:0]
+	if b != nil {
+		s.layers = b.appendLayers(s.layers)
+	}
+	return s.t.lay(face, s.layers, inCompression) == nil
+}
+
+// accepts judges a set on its own face, once.
+func (s *search) accepts(face Face, tie bars.Size, b *barSet) bool {
+	if b.judged {
+		return b.passes
+	}
+	b.judged = true
+	s.t.enclose(tie, b.largest())
+	s.t.Zones, s.t.ZoneBar = nil, nil
+	if !s.put(face, b, false) || !s.put(face.Opposite(), nil, false) {
+		return false
+	}
+	b.passes = s.judge(face, Fitting, Bending)
+	if worst := s.worst(); !s.near[face].ok || worst < s.near[face].worst {
+		s.near[face] = near{ok: true, worst: worst, set: *b}
+	}
+	if !b.passes {
+		s.reject(Arrangement{Face: face, Depth: s.p.Brief.Section.Depth, Layers: b.names(), With: tie.Name})
+	}
+	return b.passes
+}
+
+// worst is the largest utilization among the failed checks of the last
+// judgement; zero if none failed.
+func (s *search) worst() float64 {
+	w := 0.0
+	for i := range s.failed {
+		w = max(w, s.failed[i].Utilization)
+	}
+	return w
+}
+
+// pairs joins bottom and top sets and finds stirrups for each pair that could
+// still be kept.
+func (s *search) pairs(tie bars.Size, bottoms, tops []barSet) {
+	for i := range bottoms {
+		b := &bottoms[i]
+		for j := range tops {
+			t := &tops[j]
+			if !s.promising(b, t) {
+				continue
+			}
+			if !s.accepts(Top, tie, t) {
+				continue
+			}
+			if !s.accepts(Bottom, tie, b) {
+				break
+			}
+			s.shear(tie, b, t, 0)
+		}
+	}
+}
+
+// compressed looks for tension sets at a face that pass once bars on the
+// other face are relied on in compression.
+func (s *search) compressed(tie bars.Size, face Face) {
+	sense := tensionSense(face)
+	if !s.bent(sense) {
+		return
+	}
+	var sets, others []barSet
+	layers := s.p.Brief.Preferences.MaxLayers
+	for _, size := range s.main {
+		most, _, _ := s.bounds(sense, tie, size)
+		sets = uniformSets(sets, size, 2, most, layers)
+		others = uniformSets(others, size, 2, most, 1)
+	}
+	sortSets(sets)
+	sortSets(others)
+	if len(others) == 0 {
+		return
+	}
+	heaviest := &others[len(others)-1]
+	for i := range sets {
+		b := &sets[i]
+		if !s.promising(b, &others[0]) || !s.relied(tie, face, b, heaviest) {
+			continue
+		}
+		for j := range others {
+			o := &others[j]
+			if !s.promising(b, o) {
+				continue
+			}
+			if s.relied(tie, face, b, o) {
+				bottom, top := b, o
+				if face == Top {
+					bottom, top = o, b
+				}
+				s.shear(tie, bottom, top, face.Opposite())
+			}
+		}
+	}
+}
+
+// relied judges a tension set with compression steel opposite.
+func (s *search) relied(tie bars.Size, face Face, b, other *barSet) bool {
+	s.t.enclose(tie, larger(b.largest(), other.largest()))
+	s.t.Zones, s.t.ZoneBar = nil, nil
+	return s.put(face, b, false) && s.put(face.Opposite(), other, true) && s.judge(0, Fitting, Bending)
+}
+
+func larger(a, b bars.Size) bars.Size {
+	if a.Diameter.Less(b.Diameter) {
+		return b
+	}
+	return a
+}
+
+// shear completes a pair with stirrups and keeps what passes. The pair is
+// judged again as a whole: bars of one face may ask for cover that moves the
+// other's.
+func (s *search) shear(tie bars.Size, bottom, top *barSet, inCompression Face) {
+	s.t.enclose(tie, larger(bottom.largest(), top.largest()))
+	s.t.Zones, s.t.ZoneBar = nil, nil
+	if !s.put(Bottom, bottom, inCompression == Bottom) || !s.put(Top, top, inCompression == Top) {
+		return
+	}
+	if !s.judge(0, Fitting, Bending) {
+		return
+	}
+	long := s.longitudinal(bottom, top)
+	s.eachStirrup(tie, func(zones []Zone, stirrups float64) {
+		f := found{
+			bottom: *bottom, top: *top, inCompress: inCompression, stirrup: tie,
+			mass: long + stirrups, stirrupMass: stirrups,
+		}
+		f.key = s.key(bottom, top, f.mass, len(zones))
+		if s.ranks(f.key) {
+			f.zones = slices.Clone(zones)
+			s.keepBest(f)
+		}
+	})
+}
+
+// longitudinal is the mass of the bars of a pair, in kg.
+func (s *search) longitudinal(bottom, top *barSet) float64 {
+	return (bottom.mass + top.mass) * s.length()
+}
+
+// length of the bars in m: the whole beam, or one metre with demands.
+func (s *search) length() float64 {
+	if !s.member {
+		return 1
+	}
+	sum := 0.0
+	for _, l := range s.p.Brief.Spans {
+		sum += l.In(units.Metre)
+	}
+	return sum
+}
+
+// key ranks a layout under the chosen preference; less is better, and every
+// entry grows with the stirrups, so that the key of a pair without stirrups
+// bounds it from below.
+func (s *search) key(bottom, top *barSet, mass float64, zones int) [3]float64 {
+	switch s.prefer {
+	case FewestBars:
+		return [3]float64{float64(bottom.count + top.count), mass}
+	case OneSize:
+		return [3]float64{float64(differentSizes(bottom, top)), mass}
+	case FewestMarks:
+		return [3]float64{float64(bottom.used*bottom.sizes + top.used*top.sizes + zones), mass}
+	case Shallowest:
+		return [3]float64{s.p.Brief.Section.Depth.In(units.Metre), mass}
+	}
+	return [3]float64{mass}
+}
+
+func differentSizes(sets ...*barSet) int {
+	var names []string
+	for _, b := range sets {
+		for _, l := range b.layers[:b.used] {
+			for _, g := range l {
+				if g.Count > 0 && !slices.Contains(names, g.Size.Name) {
+					names = append(names, g.Size.Name)
+				}
+			}
+		}
+	}
+	return len(names)
+}
+
+// promising reports whether a pair could still be kept if its stirrups
+// weighed nothing.
+func (s *search) promising(bottom, top *barSet) bool {
+	return s.ranks(s.key(bottom, top, s.longitudinal(bottom, top), 1))
+}
+
+func (s *search) ranks(key [3]float64) bool {
+	return len(s.kept) < s.keep || slices.Compare(key[:], s.kept[len(s.kept)-1].key[:]) < 0
+}
+
+// keepBest inserts a layout by rank. Of layouts with the same longitudinal
+// bars only the best is kept, so that alternatives differ in more than a
+// stirrup.
+func (s *search) keepBest(f found) {
+	same := slices.IndexFunc(s.kept, func(k found) bool {
+		return k.bottom.layers == f.bottom.layers && k.top.layers == f.top.layers && k.inCompress == f.inCompress
+	})
+	if same >= 0 {
+		if slices.Compare(f.key[:], s.kept[same].key[:]) >= 0 {
+			return
+		}
+		s.kept = slices.Delete(s.kept, same, same+1)
+	}
+	at, _ := slices.BinarySearchFunc(s.kept, f, func(a, b found) int { return slices.Compare(a.key[:], b.key[:]) })
+	s.kept = slices.Insert(s.kept, at, f)
+	if len(s.kept) > s.keep {
+		s.kept = s.kept[:s.keep]
+	}
+}
+
+// rejectLog keeps every arrangement that failed with all the checks it
+// failed, in few allocations.
+type rejectLog struct {
+	list []Rejected
+	slab []Check
+}
+
+// reject logs an arrangement with the checks of the last judgement.
+func (s *search) reject(a Arrangement) {
+	l := &s.rejects
+	if cap(l.slab)-len(l.slab) < len(s.failed) {
+		l.slab = make([]Check, 0, max(64, len(s.failed)))
+	}
+	start := len(l.slab)
+	l.slab = append(l.slab, s.failed...)
+	l.list = append(l.list, Rejected{Arrangement: a, Failed: l.slab[start:len(l.slab):len(l.slab)]})
+}

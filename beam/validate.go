@@ -1,0 +1,301 @@
+package beam
+
+import (
+	"errors"
+	"fmt"
+	"math"
+	"strings"
+
+	"soffit.example/bars"
+	"soffit.example/beam/statics"
+	"soffit.example/units"
+)
+
+// Physical bounds of a brief. They belong to no design code: they are wide
+// enough for any beam that is built and narrow enough that a slipped unit is
+// caught.
+var (
+	leastSide       = units.Millimetre.Of(50)
+	greatestSide    = units.Metre.Of(10)
+	leastStrength   = units.Megapascal.Of(1)
+	mostStrength    = units.Megapascal.Of(250)
+	leastYield      = units.Megapascal.Of(100)
+	mostYield       = units.Megapascal.Of(1500)
+	leastDensity    = units.KilogramPerCubicMetre.Of(500)
+	mostDensity     = units.KilogramPerCubicMetre.Of(5000)
+	mostAggregate   = units.Millimetre.Of(200)
+	mostCover       = units.Millimetre.Of(300)
+	leastSpan       = units.Metre.Of(0.1)
+	mostSpan        = units.Metre.Of(200)
+	mostIntensity   = units.KilonewtonPerMetre.Of(1e5)
+	mostForce       = units.Kilonewton.Of(1e6)
+	mostMoment      = units.KilonewtonMetre.Of(1e7)
+	mostLoads       = 1000
+	mostDemands     = 1000
+	mostMonths      = 1200
+	mostDepths      = 50
+	mostAlternative = 50
+)
+
+// faults collects everything wrong with an input, in the units of system.
+type faults struct {
+	system units.System
+	list   []Fault
+}
+
+func (f *faults) add(path, allowed, format string, args ...any) {
+	f.list = append(f.list, Fault{Path: path, Detail: fmt.Sprintf(format, args...), Allowed: allowed})
+}
+
+// within reports a quantity outside [least, most], or not finite.
+func (f *faults) within(path, what string, v, least, most units.Amount) bool {
+	x := v.SI()
+	if x >= least.SI() && x <= most.SI() {
+		return true
+	}
+	said := f.system.Format(v)
+	if math.IsNaN(x) || math.IsInf(x, 0) {
+		said = "not a finite number"
+	}
+	f.add(path, f.system.Format(least)+" to "+f.system.Format(most), "%s is %s", what, said)
+	return false
+}
+
+// positive is within (0, most].
+func (f *faults) positive(path, what string, v, most units.Amount) bool {
+	if x := v.SI(); x > 0 && x <= most.SI() {
+		return true
+	}
+	f.add(path, "above zero, to "+f.system.Format(most), "%s is %s", what, f.system.Format(v))
+	return false
+}
+
+func (f *faults) count(path, what string, v, least, most int) {
+	if v < least || v > most {
+		f.add(path, fmt.Sprintf("%d to %d", least, most), "%s is %d", what, v)
+	}
+}
+
+// word reports an enumeration that is neither stated nor known.
+func (f *faults) word(path, what string, given string, zero bool, w words) {
+	if given == "" && !zero {
+		f.add(path, strings.Join(w, ", "), "%s is not one that is known", what)
+	}
+}
+
+func (f *faults) err() error {
+	if len(f.list) == 0 {
+		return nil
+	}
+	return &InputError{Faults: f.list}
+}
+
+// check reports every fault of a brief that no code is needed to see.
+func (b *Brief) check(f *faults, catalog bars.Catalog) {
+	if b.Section.Shape != Rectangular {
+		f.add("/section/shape", "rectangular", "shape %q is not one that this version designs", b.Section.Shape.String())
+	}
+	f.within("/section/width", "width", b.Section.Width.Amount(), leastSide.Amount(), greatestSide.Amount())
+	f.within("/section/depth", "depth", b.Section.Depth.Amount(), leastSide.Amount(), greatestSide.Amount())
+	f.within("/concrete/strength", "concrete strength", b.Concrete.Strength.Amount(), leastStrength.Amount(), mostStrength.Amount())
+	if !b.Concrete.Density.IsZero() {
+		f.within("/concrete/density", "concrete density", b.Concrete.Density.Amount(), leastDensity.Amount(), mostDensity.Amount())
+	}
+	f.word("/concrete/kind", "concrete kind", b.Concrete.Kind.String(), b.Concrete.Kind == 0, kindWords)
+	if !b.Concrete.Aggregate.IsZero() {
+		f.positive("/concrete/aggregate", "aggregate size", b.Concrete.Aggregate.Amount(), mostAggregate.Amount())
+	}
+	f.within("/reinforcement/yield", "yield strength", b.Reinforcement.Yield.Amount(), leastYield.Amount(), mostYield.Amount())
+	if !b.Reinforcement.StirrupYield.IsZero() {
+		f.within("/reinforcement/stirrup_yield", "stirrup yield strength", b.Reinforcement.StirrupYield.Amount(), leastYield.Amount(), mostYield.Amount())
+	}
+	f.word("/reinforcement/coating", "coating", b.Reinforcement.Coating.String(), b.Reinforcement.Coating == 0, coatingWords)
+	f.word("/exposure", "exposure", b.Exposure.String(), b.Exposure == 0, exposureWords)
+	if !b.Cover.IsZero() && f.positive("/cover", "cover", b.Cover.Amount(), mostCover.Amount()) &&
+		!b.Cover.Scale(2).Less(b.Section.Width.Min(b.Section.Depth)) {
+		f.add("/cover", "less than half the smaller side of the section", "cover is %s", f.system.Format(b.Cover.Amount()))
+	}
+	if !b.Braced.IsZero() {
+		f.positive("/braced", "bracing spacing", b.Braced.Amount(), mostSpan.Amount())
+	}
+	f.word("/serviceability/attached", "attached construction", b.Serviceability.Attached.String(), b.Serviceability.Attached == 0, attachmentWords)
+	f.count("/serviceability/months", "months", b.Serviceability.Months, 0, mostMonths)
+
+	b.checkActions(f)
+	b.Preferences.check(f, catalog)
+	f.word("/shear_row", "shear row", b.Readings.ShearRow.String(), b.Readings.ShearRow == 0, shearRowWords)
+	f.word("/shear_method", "shear method", b.Readings.ShearMethod.String(), b.Readings.ShearMethod == 0, shearMethodWords)
+}
+
+// checkActions sees to what acts on the beam: a member with loads, or demands.
+func (b *Brief) checkActions(f *faults) {
+	member := len(b.Spans) > 0 || len(b.Supports) > 0 || len(b.Loads) > 0
+	switch {
+	case member && len(b.Demands) > 0:
+		f.add("/demands", "", "a brief carries either spans, supports and loads, or demands, not both")
+		return
+	case len(b.Demands) > 0:
+		b.checkDemands(f)
+		return
+	case len(b.Spans) == 0:
+		f.add("/spans", "one span", "spans are missing, and no demands are given in their place")
+		return
+	case len(b.Spans) > 1:
+		f.add("/spans", "one span", "%d spans given; this version designs a single span", len(b.Spans))
+		return
+	}
+	sound := f.within("/spans/0", "span", b.Spans[0].Amount(), leastSpan.Amount(), mostSpan.Amount())
+	if len(b.Supports) != 2 {
+		f.add("/supports", "2", "%d supports given for one span", len(b.Supports))
+		return
+	}
+	for i, s := range b.Supports {
+		path := fmt.Sprintf("/supports/%d", i)
+		if s.Kind < statics.Pinned || s.Kind > statics.Free {
+			f.add(path+"/kind", "pinned, roller, fixed, free", "support kind is not one that is known")
+		}
+		if sound {
+			f.within(path+"/width", "support width", s.Width.Amount(), units.Length{}.Amount(), b.Spans[0].Scale(0.5).Amount())
+		}
+		if s.Kind == statics.Free && !s.Width.IsZero() {
+			f.add(path+"/width", "0", "a free end has no width, and %s is given", f.system.Format(s.Width.Amount()))
+		}
+	}
+	if len(b.Loads) == 0 && b.NoSelfWeight {
+		f.add("/loads", "", "there is no load: none is given and self-weight is excluded")
+	}
+	if len(b.Loads) > mostLoads {
+		f.add("/loads", fmt.Sprintf("at most %d", mostLoads), "%d loads given", len(b.Loads))
+		return
+	}
+	if sound {
+		for i := range b.Loads {
+			b.Loads[i].check(f, fmt.Sprintf("/loads/%d", i), b.Spans[0])
+		}
+	}
+}
+
+func (l *Load) check(f *faults, path string, span units.Length) {
+	if l.Case.String() == "" {
+		f.add(path+"/case", strings.Join(caseWords, ", "), "load case is missing or not known")
+	}
+	if l.Span < 0 || l.Span > 1 {
+		f.add(path+"/span", "1, or absent for every span", "span is %d", l.Span)
+	}
+	if !(l.Sustained >= 0 && l.Sustained <= 1) {
+		f.add(path+"/sustained", "0 to 1", "sustained share is %g", l.Sustained)
+	}
+	along := func(field string, at units.Length) {
+		f.within(path+"/"+field, field, at.Amount(), units.Length{}.Amount(), span.Amount())
+	}
+	intensity := func(field string, w units.LineLoad) {
+		f.within(path+"/"+field, "intensity", w.Amount(), mostIntensity.Neg().Amount(), mostIntensity.Amount())
+	}
+	moment := func(what string) {
+		f.within(path+"/moment", what, l.Moment.Amount(), mostMoment.Neg().Amount(), mostMoment.Amount())
+	}
+	switch l.Shape {
+	case Uniform:
+		intensity("intensity", l.Intensity)
+	case Partial:
+		intensity("intensity", l.Intensity)
+		if l.Varies {
+			intensity("intensity_end", l.IntensityEnd)
+		}
+		along("from", l.From)
+		along("to", l.To)
+		if !l.From.Less(l.To) {
+			f.add(path+"/to", "beyond from", "the load runs from %s to %s", f.system.Format(l.From.Amount()), f.system.Format(l.To.Amount()))
+		}
+	case PointLoad:
+		f.within(path+"/force", "force", l.Force.Amount(), mostForce.Neg().Amount(), mostForce.Amount())
+		along("at", l.At)
+	case Couple:
+		moment("couple")
+		along("at", l.At)
+	case Torque:
+		moment("torque")
+		along("at", l.At)
+	case UniformTorque:
+		moment("torque over the span")
+	default:
+		f.add(path+"/shape", strings.Join(loadShapeWords, ", "), "load shape is missing or not known")
+	}
+}
+
+func (b *Brief) checkDemands(f *faults) {
+	if len(b.Demands) > mostDemands {
+		f.add("/demands", fmt.Sprintf("at most %d", mostDemands), "%d demands given", len(b.Demands))
+		return
+	}
+	names := make(map[string]int, len(b.Demands))
+	for i, d := range b.Demands {
+		path := fmt.Sprintf("/demands/%d", i)
+		if j, twice := names[d.Name]; twice {
+			f.add(path+"/name", "a name of its own", "name %q is that of demand %d too", d.Name, j)
+		}
+		names[d.Name] = i
+		f.within(path+"/moment", "moment", d.Moment.Amount(), mostMoment.Neg().Amount(), mostMoment.Amount())
+		f.within(path+"/shear", "shear", d.Shear.Amount(), mostForce.Neg().Amount(), mostForce.Amount())
+		f.within(path+"/torque", "torque", d.Torque.Amount(), mostMoment.Neg().Amount(), mostMoment.Amount())
+		f.within(path+"/axial", "axial force", d.Axial.Amount(), mostForce.Neg().Amount(), mostForce.Amount())
+	}
+}
+
+func (p *Preferences) check(f *faults, catalog bars.Catalog) {
+	sizes := func(path string, names []string) {
+		seen := make(map[string]bool, len(names))
+		for i, n := range names {
+			at := fmt.Sprintf("%s/%d", path, i)
+			if _, err := catalog.Size(n); err != nil {
+				f.add(at, strings.Join(sizeNames(catalog), ", "), "%v", err)
+			}
+			if seen[n] {
+				f.add(at, "each size once", "%q is listed twice", n)
+			}
+			seen[n] = true
+		}
+	}
+	if catalog.ID() != "" {
+		sizes("/preferences/bars", p.Bars)
+		sizes("/preferences/stirrups", p.Stirrups)
+	}
+	f.count("/preferences/max_layers", "most layers", p.MaxLayers, 0, MaxLayers)
+	if p.MaxLegs != 0 {
+		f.count("/preferences/max_legs", "most stirrup legs", p.MaxLegs, 2, 12)
+	}
+	if p.MaxZones != 0 && p.MaxZones != 1 && p.MaxZones != 3 {
+		f.add("/preferences/max_zones", "1, 3", "most stirrup zones is %d", p.MaxZones)
+	}
+	if len(p.Depths) > mostDepths {
+		f.add("/preferences/depths", fmt.Sprintf("at most %d", mostDepths), "%d depths given", len(p.Depths))
+	}
+	for i, d := range p.Depths {
+		f.within(fmt.Sprintf("/preferences/depths/%d", i), "depth", d.Amount(), leastSide.Amount(), greatestSide.Amount())
+	}
+	f.word("/preferences/prefer", "preference", p.Prefer.String(), p.Prefer == 0, preferenceWords)
+	if !p.SpacingBy.IsZero() {
+		f.within("/preferences/spacing_step", "spacing step", p.SpacingBy.Amount(), units.Millimetre.Of(1).Amount(), units.Millimetre.Of(300).Amount())
+	}
+	f.count("/preferences/alternatives", "alternatives", p.KeepBest, -1, mostAlternative)
+}
+
+// analysisFault turns a refusal of the analysis, which the checks above
+// should have foreseen, into a fault of the brief. A mechanism is the one
+// they leave to it.
+func analysisFault(err error) Fault {
+	var m *statics.MechanismError
+	if errors.As(err, &m) {
+		return Fault{Path: "/supports", Detail: "the beam is not held: " + m.Motion, Allowed: "two supports that hold, or one fixed end"}
+	}
+	return Fault{Path: "/loads", Detail: err.Error()}
+}
+
+// sizeNames lists the sizes of a catalog.
+func sizeNames(c bars.Catalog) []string {
+	var out []string
+	for _, s := range c.Sizes() {
+		out = append(out, s.Name)
+	}
+	return out
+}
