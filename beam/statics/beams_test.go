@@ -16,6 +16,8 @@ func kN(v float64) units.Force      { return units.Kilonewton.Of(v) }
 func kNm(v float64) units.Moment    { return units.KilonewtonMetre.Of(v) }
 func perM(v float64) units.LineLoad { return units.KilonewtonPerMetre.Of(v) }
 
+const perMetre = units.KilonewtonPerMetre
+
 func inM(l units.Length) float64   { return l.In(units.Metre) }
 func inKN(f units.Force) float64   { return f.In(units.Kilonewton) }
 func inKNm(v units.Moment) float64 { return v.In(units.KilonewtonMetre) }

@@ -15,6 +15,9 @@ type RangeError struct {
 }
 
 func (e *RangeError) Error() string {
+	if e.Least == e.Most {
+		return fmt.Sprintf("%s is %v: allowed is %v", e.Field, e.Value, e.Least)
+	}
 	if e.LeastOpen {
 		return fmt.Sprintf("%s is %v: allowed is more than %v and at most %v", e.Field, e.Value, e.Least, e.Most)
 	}

@@ -88,14 +88,14 @@ func (l *Line) scan(a, b float64, k *peaks) {
 		if i < last && to == l.x[i+1] {
 			end.side, _ = sides(end, l.inPiece(i+1, to))
 		}
-		if from == to {
-			k.offer(start)
-			if to == l.x[i+1] {
-				k.offer(end)
-			}
+		if to == l.x[i+1] && from == to {
+			k.offer(end)
 			continue
 		}
 		k.offer(start)
+		if from == to {
+			continue
+		}
 		p := &l.pieces[i]
 		turns, n := p.turns()
 		for _, t := range turns[:n] {

@@ -20,8 +20,8 @@ type Load struct {
 
 // A Shape says how a load acts along a span. It holds a [Uniform], [Partial],
 // [Point] or [Couple], by value. Positions run from the left end of the span
-// and lie on it, its ends included. What acts at a support goes into the
-// reaction there.
+// and lie on it, its ends included. What acts at a support, or within 1e-9 of
+// the span from it, goes into the reaction there.
 type Shape interface{ shape() }
 
 func (Uniform) shape() {}
@@ -99,11 +99,19 @@ func actionOf(shape Shape, length float64) (a action, faults []*RangeError, know
 	return a, faults, true
 }
 
-// place returns a position in m, and appends a fault if it is off the span.
+// place returns where on the span a load acts, in m, and appends a fault if it
+// is off the span. A place that misses an end of the span by no more than
+// rounding is moved there: a load meant for a support must not stand beside it
+// and show in the shear.
 func place(faults []*RangeError, field string, at units.Length, length float64) (float64, []*RangeError) {
 	x, ok := onSpan(at.In(units.Metre), length)
-	if !ok {
+	switch {
+	case !ok:
 		faults = append(faults, outside(field, units.DimLength, x, 0, length))
+	case units.AtMost(length, length-x):
+		x = 0
+	case units.AtMost(length, x):
+		x = length
 	}
 	return x, faults
 }
@@ -116,8 +124,8 @@ func magnitude(faults []*RangeError, field string, dim units.Dimension, v float6
 	return append(faults, outside(field, dim, v, -maxMagnitude, maxMagnitude))
 }
 
-// onSpan reports whether x lies on a span, and if so returns it moved onto the
-// span where rounding had put it just outside.
+// onSpan reports whether x lies on a span, and returns it moved to the end of
+// the span if rounding had put it just beyond.
 func onSpan(x, length float64) (float64, bool) {
 	if length <= 0 || !(units.AtMost(x, length) && units.AtMost(length-x, length)) {
 		return x, false

@@ -145,6 +145,9 @@ func (r *Response) addScaled(i int, q *Response, j int, f float64) {
 // checkCombinations returns every fault of the combinations; index holds where
 // each id comes first.
 func (r *Response) checkCombinations(combinations []Combination, index map[string]int) []error {
+	if len(r.ids) == 0 {
+		return []error{&FieldError{Field: "response", Allowed: "one that Analyze or Combine returned"}}
+	}
 	if len(combinations) == 0 {
 		return []error{outside("combinations", units.None, 0, 1, MaxPieces)}
 	}
