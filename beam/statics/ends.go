@@ -21,7 +21,7 @@ type endSums struct {
 // P at a = x and b = l-x (AISC Steel Construction Manual, Table 3-23, cases 8
 // and 17):
 //
-//	rA = P b/l    rB = P a/l    mA = -P a b2/l2    mB = -P a2 b/l2
+//	rA = P b/l    rB = P a/l    mA = -P a b²/l²    mB = -P a² b/l²
 //
 // and their derivatives with respect to a for a couple.
 func (s *endSums) point(x, force, couple float64) {

@@ -48,22 +48,22 @@ type peaks struct {
 
 // offer takes a state where it exceeds what is held by more than rounding, so
 // that of equals the first stays.
-func (k *peaks) offer(s state) {
+func (k *peaks) offer(s *state) {
 	if k.mMost.line == nil {
-		*k = peaks{s, s, s, s}
+		*k = peaks{*s, *s, *s, *s}
 		return
 	}
 	if s.m-k.mMost.m > max(s.line.mNoise, k.mMost.line.mNoise) {
-		k.mMost = s
+		k.mMost = *s
 	}
 	if k.mLeast.m-s.m > max(s.line.mNoise, k.mLeast.line.mNoise) {
-		k.mLeast = s
+		k.mLeast = *s
 	}
 	if s.v-k.vMost.v > max(s.line.vNoise, k.vMost.line.vNoise) {
-		k.vMost = s
+		k.vMost = *s
 	}
 	if k.vLeast.v-s.v > max(s.line.vNoise, k.vLeast.line.vNoise) {
-		k.vLeast = s
+		k.vLeast = *s
 	}
 }
 
@@ -83,16 +83,16 @@ func (l *Line) scan(a, b float64, k *peaks) {
 		from, to := max(a, l.x[i]), min(b, l.x[i+1])
 		start, end := l.inPiece(i, from), l.inPiece(i, to)
 		if i > 0 && from == l.x[i] {
-			_, start.side = sides(l.inPiece(i-1, from), start)
+			_, start.side = l.pieces[i-1].sides(&l.pieces[i])
 		}
 		if i < last && to == l.x[i+1] {
-			end.side, _ = sides(end, l.inPiece(i+1, to))
+			end.side, _ = l.pieces[i].sides(&l.pieces[i+1])
 		}
 		if to == l.x[i+1] && from == to {
-			k.offer(end)
+			k.offer(&end)
 			continue
 		}
-		k.offer(start)
+		k.offer(&start)
 		if from == to {
 			continue
 		}
@@ -100,17 +100,17 @@ func (l *Line) scan(a, b float64, k *peaks) {
 		turns, n := p.turns()
 		for _, t := range turns[:n] {
 			if x := l.x[i] + t; from < x && x < to {
-				k.offer(state{x: x, v: p.shear(t), m: p.moment(t), line: l})
+				k.offer(&state{x: x, v: p.shear(t), m: p.moment(t), line: l})
 			}
 		}
-		k.offer(end)
+		k.offer(&end)
 	}
 }
 
 // turns returns, in ascending order, the at most three places t where the
 // derivative of the piece's shear or moment vanishes. They may lie outside it.
 func (p *piece) turns() (t [3]float64, n int) {
-	// V = 0 is (s/2) t2 + w t - v = 0, solved without cancellation.
+	// V = 0 is (s/2) t² + w t - v = 0, solved without cancellation.
 	a, b, c := p.s/2, p.w, -p.v
 	if a == 0 {
 		if b != 0 {

@@ -44,8 +44,8 @@ type Forces struct {
 // values just inside its ends. With t from From, h = To - From, and
 // s = (IntensityEnd - Intensity)/h,
 //
-//	V(t) = Shear - Intensity t - s t2/2
-//	M(t) = Moment + Shear t - Intensity t2/2 - s t3/6
+//	V(t) = Shear - Intensity t - s t²/2
+//	M(t) = Moment + Shear t - Intensity t²/2 - s t³/6
 type Piece struct {
 	From, To                units.Length
 	Intensity, IntensityEnd units.LineLoad
@@ -128,11 +128,12 @@ func (l *Line) At(place units.Length) (left, right Forces, err error) {
 	}
 	i := l.pieceAt(x)
 	a := l.inPiece(i, x)
-	b := a
-	if x == l.x[i+1] && i+1 < len(l.pieces) {
-		b = l.inPiece(i+1, x)
+	if x < l.x[i+1] || i+1 == len(l.pieces) {
+		left = a.forces()
+		return left, left, nil
 	}
-	a.side, b.side = sides(a, b)
+	b := l.inPiece(i+1, x)
+	a.side, b.side = l.pieces[i].sides(&l.pieces[i+1])
 	return a.forces(), b.forces(), nil
 }
 
@@ -162,9 +163,10 @@ func (l *Line) inPiece(i int, x float64) state {
 	return state{x: x, v: p.shear(t), m: p.moment(t), line: l}
 }
 
-// sides tells which sides two states at the same place stand on.
-func sides(left, right state) (Side, Side) {
-	if left.v == right.v && left.m == right.m {
+// sides tells on which sides of the breakpoint between it and the next piece
+// the end of a piece and the start of the next stand.
+func (p *piece) sides(next *piece) (end, start Side) {
+	if p.vEnd == next.v && p.mEnd == next.m {
 		return Both, Both
 	}
 	return Left, Right
@@ -172,7 +174,7 @@ func sides(left, right state) (Side, Side) {
 
 // forces returns the state in its quantities. What rounding alone could have
 // left is given as zero.
-func (s state) forces() Forces {
+func (s *state) forces() Forces {
 	return Forces{
 		ID: s.line.id, At: units.Metre.Of(s.x), Side: s.side,
 		Shear:  units.Newton.Of(flush(s.v, s.line.vNoise)),

@@ -382,3 +382,35 @@ func TestOrder(t *testing.T) {
 		require.InDelta(t, inKN(a.reactions[0].Force), inKN(b.reactions[0].Force), tol)
 	})
 }
+
+// TestMostLoads gathers the rounding of as many loads as are taken: it stays
+// within what the package counts as equal.
+func TestMostLoads(t *testing.T) {
+	for _, ends := range stable {
+		s := sample{left: ends[0], right: ends[1], length: 30}
+		for i := range statics.MaxLoads {
+			// A golden-ratio sequence spreads the loads without order.
+			_, x := math.Modf(float64(i) * math.Phi)
+			x *= s.length
+			switch i % 3 {
+			case 0:
+				s.loads = append(s.loads, sampleLoad{from: x, to: x, force: 10 * math.Sin(float64(i))})
+			case 1:
+				s.loads = append(s.loads, sampleLoad{from: x, to: x, couple: 10 * math.Cos(float64(i))})
+			default:
+				s.loads = append(s.loads, sampleLoad{from: x, to: min(x+0.5, s.length), w: 5, wEnd: 7 * math.Sin(float64(i))})
+			}
+		}
+		r := solve(t, s.beam(), s.statics())
+		var last statics.Piece
+		for p := range r.line.Pieces() {
+			last = p
+		}
+		h := inM(last.To) - inM(last.From)
+		w, wEnd := last.Intensity.In(perMetre), last.IntensityEnd.In(perMetre)
+		tol := 1e-13 * s.size()
+		require.InDelta(t, inKN(last.ShearEnd), inKN(last.Shear)-(w+wEnd)/2*h, tol)
+		require.InDelta(t, inKNm(last.MomentEnd),
+			inKNm(last.Moment)+inKN(last.Shear)*h-(2*w+wEnd)/6*h*h, tol*s.length)
+	}
+}
