@@ -31,7 +31,8 @@
 // Extremes lie at the roots of the derivative or at a jump. All arithmetic is
 // float64; what differs by less than 1e-13 of the load (times the span length
 // for moments) counts as equal where a first, a leftmost or a change of sign is
-// to be told, because rounding alone reaches that far.
+// to be told, and a force below it reads as zero, because rounding alone
+// reaches that far.
 //
 // # Source
 //

@@ -10,7 +10,8 @@ import (
 // MaxLoads is the most loads that one analysis takes.
 const MaxLoads = 10_000
 
-// A Load acts on one span of a beam or on each of them.
+// A Load acts on one span of a beam or on each of them. Its size is at most
+// 1e12 N/m, N or N-m, in either sense.
 type Load struct {
 	ID    string // the caller's name for it, free and optional
 	Case  string // the case it belongs to, such as "dead"; required
