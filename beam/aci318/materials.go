@@ -176,25 +176,55 @@ func (e *edition) shearYield(yield units.Stress) (used units.Stress, capped bool
 // materialRefusals names the material limits that a design outside the tables
 // of chapters 19 and 20 breaks. No strength may be given then.
 func (e *edition) materialRefusals(c *beam.Concrete, yield units.Stress) []beam.Refusal {
-	m := &e.materials
 	var out []beam.Refusal
-	refuse := func(rule, clause, detail string) {
-		out = append(out, beam.Refusal{Rule: rule, Clause: clause, Detail: detail})
+	if least := e.stressOf(e.materials.leastStrength); !least.AtMost(c.Strength) {
+		out = append(out, beam.Refusal{
+			Rule: "scope.concrete-strength", Clause: "19.2.1.1",
+			Detail: "specified strength " + e.stress.Format(c.Strength) + " is below the least for structural concrete, " + e.stress.Format(least),
+		})
 	}
-	if !units.AtMost(m.leastStrength, e.stressIn(c.Strength)) {
-		refuse("scope.concrete-strength", "19.2.1.1", "specified strength "+e.stress.Format(c.Strength)+
-			" is below the least for structural concrete, "+e.stress.Format(e.stressOf(m.leastStrength)))
+	return append(out, e.steelRefusals(yield)...)
+}
+
+// steelRefusals names the limits of yield strength that bars in flexure break.
+func (e *edition) steelRefusals(yield units.Stress) []beam.Refusal {
+	m := &e.materials
+	least, most := e.stressOf(m.leastYield), e.stressOf(m.mostYield)
+	r := beam.Refusal{Rule: "scope.steel-grade"}
+	switch {
+	case !least.AtMost(yield):
+		r.Clause = "Table 20.2.1.3"
+		r.Detail = "yield strength " + e.stress.Format(yield) + " is below the lowest grade of the standard's tables, " + e.stress.Format(least)
+	case !yield.AtMost(most):
+		r.Clause = m.yieldClause
+		r.Detail = "yield strength " + e.stress.Format(yield) + " is above the greatest that bars in flexure may count with, " + e.stress.Format(most)
+	default:
+		return nil
 	}
-	fy := e.stressIn(yield)
-	if !units.AtMost(m.leastYield, fy) {
-		refuse("scope.steel-grade", "Table 20.2.1.3", "yield strength "+e.stress.Format(yield)+
-			" is below the lowest grade of the standard's tables, "+e.stress.Format(e.stressOf(m.leastYield)))
+	return []beam.Refusal{r}
+}
+
+// densityFault is a density that is not that of the kind of concrete, or that
+// is missing where lightweight concrete needs it.
+func (e *edition) densityFault(c *beam.Concrete) (fault beam.Fault, wrong bool) {
+	m := &e.materials
+	light := c.Kind == beam.SandLightweight || c.Kind == beam.AllLightweight
+	least, most := m.density.Of(m.normalLeast), m.density.Of(m.heaviest)
+	if light {
+		least, most = m.density.Of(m.lightest), m.density.Of(m.lightLimit)
 	}
-	if !units.AtMost(fy, m.mostYield) {
-		refuse("scope.steel-grade", m.yieldClause, "yield strength "+e.stress.Format(yield)+
-			" is above the greatest that may be used for bars in flexure, "+e.stress.Format(e.stressOf(m.mostYield)))
+	fault = beam.Fault{Path: "/concrete/density", Allowed: m.density.Format(least) + " to " + m.density.Format(most)}
+	switch {
+	case c.Density.IsZero() && light:
+		fault.Detail = "the density of lightweight concrete is missing: self-weight, λ and least depth depend on it"
+	case c.Density.IsZero():
+		return fault, false
+	case !(least.AtMost(c.Density) && c.Density.AtMost(most)):
+		fault.Detail = "density " + m.density.Format(c.Density) + " is not that of " + c.Kind.String() + " concrete"
+	default:
+		return fault, false
 	}
-	return out
+	return fault, true
 }
 
 // Materials is what an edition makes of a concrete and its steel.

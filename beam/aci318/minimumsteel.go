@@ -55,11 +55,8 @@ func (m *minimumSteel) steps(e *edition, w *working) {
 		w.given(fy, "yield strength as it may be used for least steel", "9.6.1.2", e.asStress(m.fy))
 		w.note("the bars' own yield strength is above this cap")
 	}
-	rootForm, floorForm := "3 √f'c / "+fy+" b d", "200 / "+fy+" b d"
-	if e.system == units.SI {
-		rootForm, floorForm = "0.25 √f'c / "+fy+" b d", "1.4 / "+fy+" b d"
-	}
-	w.find("As,a", "least steel by concrete strength", "9.6.1.2(a)", rootForm, e.asArea(m.byRoot))
-	w.find("As,b", "least steel", "9.6.1.2(b)", floorForm, e.asArea(m.byFloor))
+	r := &e.minimum
+	w.find("As,a", "least steel by concrete strength", "9.6.1.2(a)", "("+number(r.root)+" √f'c / "+fy+") b d", e.asArea(m.byRoot))
+	w.find("As,b", "least steel whatever the concrete", "9.6.1.2(b)", "("+number(r.floor)+" / "+fy+") b d", e.asArea(m.byFloor))
 	w.find("As,min", "least steel", "9.6.1.2", "max(As,a, As,b)", e.asArea(m.area))
 }

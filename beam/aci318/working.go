@@ -56,7 +56,9 @@ func asPlain(v float64) measured { return measured{units.Plain(v), ""} }
 // working collects the steps of one check. Its expressions use only
 // + - * / ^ √ min max, brackets, numbers, a space for a product, and the
 // symbols of earlier steps, so that a reader or a program can put the earlier
-// values in and arrive at the same result.
+// values in and arrive at the same result. Products and quotients are taken
+// from left to right; a comma between arguments is followed by a space, one
+// within a symbol is not.
 type working struct{ steps []beam.Step }
 
 // given adds an input.

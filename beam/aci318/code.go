@@ -1,0 +1,47 @@
+package aci318
+
+import (
+	"soffit.example/beam"
+	"soffit.example/units"
+)
+
+// Combinations lists the combinations of 5.3.1 for the loaded cases, and every
+// other one with the reason it was dropped.
+func (c Code) Combinations(b *beam.Brief) ([]beam.Combination, []beam.DroppedCombination) {
+	return c.e.combinations(b)
+}
+
+// Scope names the rules that put a problem outside the sectional method of
+// chapters 9 and 22.
+func (c Code) Scope(p *beam.Problem) []beam.Refusal { return c.e.scopeOf(p) }
+
+// LeastTension is a lower bound of the tension steel of a sense: for strength
+// by 22.2 with φ of a tension-controlled section, and for least steel by
+// 9.6.1.
+func (c Code) LeastTension(p *beam.Problem, s beam.Sense, depth units.Length) (units.Area, bool) {
+	return c.e.leastTension(p, s, depth)
+}
+
+// Judge appends the checks of a group.
+func (c Code) Judge(dst []beam.Check, g beam.Group, t *beam.Trial) []beam.Check {
+	switch g {
+	case beam.Fitting:
+		return c.e.judgeFitting(dst, t)
+	case beam.Bending:
+		return c.e.judgeBending(dst, t)
+	case beam.Shearing:
+		return c.e.judgeShearing(dst, t)
+	case beam.Whole:
+		return c.e.judgeWhole(dst, t)
+	}
+	return dst
+}
+
+// Cautions are what a reader must know of any result under this code.
+func (c Code) Cautions() []string {
+	return []string{
+		"This is a calculation aid. It defers to the locally adopted building code, with its amendments, and to the licensed engineer who seals the work.",
+		"Judged by " + c.e.title + "; a jurisdiction may have adopted another edition.",
+		"Seismic detailing, fire resistance, durability beyond the table of cover, prestress, openings and the design of supports and formwork are not part of this result.",
+	}
+}

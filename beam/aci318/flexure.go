@@ -1,0 +1,196 @@
+package aci318
+
+import (
+	"errors"
+	"fmt"
+
+	"soffit.example/beam"
+	"soffit.example/beam/mechanics"
+	"soffit.example/units"
+)
+
+// flexure is the strength in bending of one section in one sense (22.2, 22.3),
+// with what Table 21.2.2 and 9.3.3.1 make of its strain. Stresses, forces and
+// strains of the layers stay in the kernel's result.
+type flexure struct {
+	blockFactor float64 // β1
+	yieldStrain float64 // εty as strains are classed by
+	strain      float64 // εt, tension positive
+	leastStrain float64 // 9.3.3.1
+	phi         float64
+	class       string
+	nominal     units.Moment // Mn
+	design      units.Moment // φMn
+}
+
+// block is the rectangular stress block of 22.2.2.4 as a stress law.
+func (e *edition) block(strength units.Stress) (mechanics.Law, error) {
+	return mechanics.RectangularBlock(strength.Scale(blockIntensity), e.blockFactor(strength), crushing)
+}
+
+// reblock returns the law of a concrete, which is the kept one if that fits.
+func (e *edition) reblock(kept mechanics.Law, strength units.Stress) (mechanics.Law, error) {
+	if kept.Ultimate() == crushing {
+		mean, depth := kept.Resultant()
+		factor := e.blockFactor(strength)
+		if depth == factor/2 && mean == strength.Scale(blockIntensity).Scale(factor) {
+			return kept, nil
+		}
+	}
+	return e.block(strength)
+}
+
+// barSteel is the elastic and perfectly plastic steel of 20.2.2.1.
+func (e *edition) barSteel(yield units.Stress) mechanics.Steel {
+	return mechanics.Steel{Modulus: e.steelModulus(), Yield: yield}
+}
+
+func bendingOf(s beam.Sense, r *beam.Readings) mechanics.Bending {
+	var b mechanics.Bending
+	if s == beam.Negative {
+		b.Sense = mechanics.Hogging
+	}
+	if r.IgnoreDisplaced {
+		b.Displaced = mechanics.Ignore
+	}
+	return b
+}
+
+// classify draws the strength from an equilibrium. yield is that of the
+// extreme layer.
+func (e *edition) classify(u *mechanics.Ultimate, strength, yield units.Stress, r *beam.Readings) flexure {
+	f := flexure{
+		blockFactor: e.blockFactor(strength),
+		yieldStrain: e.yieldStrain(yield, r.RoundedYield),
+		strain:      u.ExtremeStrain,
+		nominal:     u.Nominal,
+	}
+	f.leastStrain = e.reduction.leastStrain(f.yieldStrain)
+	f.phi, f.class = e.reduction.flexure(f.strain, f.yieldStrain)
+	f.design = f.nominal.Scale(f.phi)
+	return f
+}
+
+// trialSection is the section of a trial bent in a sense, for the kernel.
+func (e *edition) trialSection(t *beam.Trial, s beam.Sense) mechanics.Section {
+	b := &t.Brief
+	t.Parts = append(t.Parts[:0], mechanics.Part{Bottom: b.Section.Depth, Width: b.Section.Width})
+	return mechanics.Section{Parts: t.Parts, Layers: t.Layers(s, e.barSteel(b.Reinforcement.Yield))}
+}
+
+// trialFlexure is the strength of a trial in one sense. The equilibrium stays
+// in t.Ultimate. ok is false where the section has no equilibrium: there is
+// no steel to pull.
+func (e *edition) trialFlexure(t *beam.Trial, s beam.Sense) (f flexure, ok bool) {
+	b := &t.Brief
+	if t.Steel(s.TensionFace()).Count == 0 {
+		return flexure{}, false
+	}
+	law, err := e.reblock(t.Law, b.Concrete.Strength)
+	if err != nil {
+		return flexure{}, false
+	}
+	t.Law = law
+	if err := t.Solver.Ultimate(&t.Ultimate, e.trialSection(t, s), law, bendingOf(s, &b.Readings)); err != nil {
+		return flexure{}, false
+	}
+	return e.classify(&t.Ultimate, b.Concrete.Strength, b.Reinforcement.Yield, &b.Readings), true
+}
+
+// crossCheckTolerance is the relative difference that two routes to the same
+// strength may show: both are exact but for rounding and the width of a fibre.
+const crossCheckTolerance = 1e-6
+
+const crossCheckMethod = "fibre integration of strain compatibility"
+
+// crossCheck finds the same strength by fibres.
+func crossCheck(section mechanics.Section, law mechanics.Law, bending mechanics.Bending, nominal units.Moment) (beam.CrossCheck, error) {
+	u, err := section.Fibres(law, bending)
+	if err != nil {
+		return beam.CrossCheck{}, err
+	}
+	c := beam.CrossCheck{Method: crossCheckMethod, Nominal: u.Nominal}
+	if !nominal.IsZero() {
+		c.Difference = u.Nominal.Sub(nominal).Abs().Ratio(nominal.Abs())
+	}
+	return c, nil
+}
+
+// flexureStrength is the full account of a section's strength in bending.
+// Layers are measured from the top face, whichever the sense.
+func (e *edition) flexureStrength(section mechanics.Section, strength units.Stress, s beam.Sense, r *beam.Readings) (beam.FlexureStrength, error) {
+	law, err := e.block(strength)
+	if err != nil {
+		return beam.FlexureStrength{}, err
+	}
+	bending := bendingOf(s, r)
+	u, err := section.Ultimate(law, bending)
+	if err != nil {
+		return beam.FlexureStrength{}, err
+	}
+	f := e.classify(&u, strength, extremeYield(section, s), r)
+	depth := u.EffectiveDepth
+	out := beam.FlexureStrength{
+		Sense: s, NeutralAxis: u.NeutralAxis, BlockDepth: u.NeutralAxis.Scale(f.blockFactor), BlockFactor: f.blockFactor,
+		EffectiveDepth: depth, ExtremeDepth: u.ExtremeDepth, ExtremeStrain: f.strain, YieldStrain: f.yieldStrain,
+		Class: f.class, Phi: f.phi, Nominal: f.nominal, Design: f.design,
+		TensionSteel: u.TensionArea, LeastStrain: f.leastStrain, Equilibria: u.Equilibria,
+		Layers: make([]beam.LayerState, len(u.Layers)),
+	}
+	for i, l := range u.Layers {
+		out.Layers[i] = beam.LayerState{Strain: -l.Strain, Stress: l.Stress.Neg(), Force: l.Force.Neg()}
+	}
+	m := e.minimumSteel(strength, extremeYield(section, s), webWidth(section), depth)
+	out.MinimumSteel = e.areaOf(m.area)
+	if out.CrossCheck, err = crossCheck(section, law, bending, u.Nominal); err != nil {
+		return beam.FlexureStrength{}, fmt.Errorf("second route to the strength in bending: %w", err)
+	}
+	if out.CrossCheck.Difference > crossCheckTolerance {
+		return beam.FlexureStrength{}, &DisagreementError{Nominal: u.Nominal, Other: out.CrossCheck.Nominal}
+	}
+	return out, nil
+}
+
+// DisagreementError says that two independent routes to one strength differ by
+// more than rounding. It is a fault of this program, not of the input, and no
+// strength may be given.
+type DisagreementError struct {
+	Nominal, Other units.Moment
+}
+
+func (e *DisagreementError) Error() string {
+	return fmt.Sprintf("aci318: block equilibrium gives a nominal moment of %s, fibre integration %s", e.Nominal, e.Other)
+}
+
+// extremeYield is the yield strength of the layer farthest from the
+// compression face.
+func extremeYield(section mechanics.Section, s beam.Sense) units.Stress {
+	var fy units.Stress
+	var farthest units.Length
+	for i, l := range section.Layers {
+		d := l.Depth
+		if s == beam.Negative {
+			d = section.Depth().Sub(d)
+		}
+		if i == 0 || farthest.Less(d) {
+			fy, farthest = l.Steel.Yield, d
+		}
+	}
+	return fy
+}
+
+// webWidth is the least width of the section, by which least steel is measured.
+func webWidth(section mechanics.Section) units.Length {
+	bw := section.Parts[0].Width
+	for _, p := range section.Parts[1:] {
+		bw = bw.Min(p.Width)
+	}
+	return bw
+}
+
+// noEquilibrium reports whether an error says that nothing balances the
+// section.
+func noEquilibrium(err error) bool {
+	var none *mechanics.NoEquilibriumError
+	return errors.As(err, &none)
+}

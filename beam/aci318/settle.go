@@ -1,0 +1,74 @@
+package aci318
+
+import (
+	"fmt"
+	"strings"
+
+	"soffit.example/bars"
+	"soffit.example/beam"
+)
+
+// Settle holds what the expressions assumed against the finished beam.
+func (c Code) Settle(t *beam.Trial, checks []beam.Check, note *beam.Register) {
+	c.e.settleTensionControl(t, note)
+	c.e.settleLeastStirrups(t, note)
+}
+
+// settleTensionControl gives the class of each sense that is bent. φ follows
+// the class that was found, so that a transition is no fault in itself.
+func (e *edition) settleTensionControl(t *beam.Trial, note *beam.Register) {
+	var found []string
+	holds := true
+	for s := beam.Positive; s <= beam.Negative; s++ {
+		if _, bent := greatestAction(t.Problem, s); !bent {
+			continue
+		}
+		f, ok := e.trialFlexure(t, s)
+		if !ok {
+			continue
+		}
+		need := e.reduction.tensionStrain(f.yieldStrain)
+		found = append(found, fmt.Sprintf("%s bending: strain %.5f against %.5f, %s, φ = %.3f", s, f.strain, need, f.class, f.phi))
+		holds = holds && f.class == tensionControlled
+	}
+	if len(found) == 0 {
+		note.Settle(assumeTensionControl, "nothing is bent", true)
+		return
+	}
+	note.Settle(assumeTensionControl, strings.Join(found, "; "), holds)
+}
+
+// settleLeastStirrups compares the stirrups of every zone with the least that
+// lets rows (a) and (b) be used. Where they fall short row (c) was used, so
+// that the shear checks stand either way.
+func (e *edition) settleLeastStirrups(t *beam.Trial, note *beam.Register) {
+	if len(t.Zones) == 0 {
+		note.Settle(assumeLeastStirrups, "there are no stirrups: Vc is by row (c)", false)
+		return
+	}
+	holds, worst := true, 0.0
+	for i := range t.Zones {
+		z := &t.Zones[i]
+		s := shearSection{
+			strength: t.Brief.Concrete.Strength, lambda: e.lambda(&t.Brief.Concrete),
+			width: t.Brief.Section.Width, gross: t.Brief.Section.Depth, depth: t.EffectiveDepth(beam.Positive),
+			stirrups: stirrupSteel{
+				area:    bars.TotalArea(bars.Group{Size: t.ZoneBar[i], Count: z.Legs}),
+				spacing: z.Spacing, yield: t.Brief.Reinforcement.StirrupYield,
+			},
+		}
+		if d := t.EffectiveDepth(beam.Negative); s.depth.IsZero() {
+			s.depth = d
+		}
+		w := e.newWebSteel(&s)
+		holds = holds && w.enough
+		if share := ratio(w.least, w.provided); share > worst {
+			worst = share
+		}
+	}
+	found := fmt.Sprintf("every zone has at least the least stirrups, of which %.2f of those provided are needed where they are fewest", worst)
+	if !holds {
+		found = "a zone has fewer or wider stirrups: Vc there is by row (c)"
+	}
+	note.Settle(assumeLeastStirrups, found, holds)
+}

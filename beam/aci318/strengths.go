@@ -1,0 +1,294 @@
+package aci318
+
+import (
+	"fmt"
+	"math"
+
+	"soffit.example/beam"
+	"soffit.example/beam/mechanics"
+	"soffit.example/units"
+)
+
+// Strengths gives the strengths of a bare section: flexure by 22.2 and 22.3,
+// one-way shear by 22.5, threshold and cracking torsion by 22.7. With a demand
+// it judges them too. The error is a *[beam.InputError] for values that make
+// no sense, or says that the section has no strength in bending; what the
+// method does not cover is a refusal in the result.
+func (c Code) Strengths(q beam.SectionQuery) (beam.Strengths, error) {
+	e := c.e
+	var out beam.Strengths
+	if q.Bending == 0 {
+		q.Bending = beam.Positive
+		out.Notes = append(out.Notes, "the sense of bending is not stated: taken as positive, tension at the bottom")
+	}
+	if q.Concrete.Kind == 0 {
+		q.Concrete.Kind = beam.Normalweight
+	}
+	if faults := e.queryFaults(&q); len(faults) > 0 {
+		return beam.Strengths{}, &beam.InputError{Faults: faults}
+	}
+	if out.Refusals = e.queryRefusals(&q); len(out.Refusals) > 0 {
+		return out, nil
+	}
+	section := e.querySection(&q)
+	var err error
+	out.Flexure, err = e.flexureStrength(section, q.Concrete.Strength, q.Bending, &q.Readings)
+	if err != nil {
+		if noEquilibrium(err) {
+			return beam.Strengths{}, &beam.InputError{Faults: []beam.Fault{{
+				Path: "/layers", Detail: "no layer pulls in " + q.Bending.String() + " bending: " + err.Error(), Allowed: "at least one layer on the tension side",
+			}}}
+		}
+		return beam.Strengths{}, err
+	}
+	if out.Flexure.Equilibria > 1 {
+		out.Notes = append(out.Notes, "with the displaced concrete deducted more than one depth of the neutral axis balances; the least was taken")
+	}
+	web := e.queryWeb(&q, &out.Flexure)
+	shear := web.at(e, shearForces{shear: q.Demand.Shear, moment: q.Demand.Moment, axial: q.Demand.Axial})
+	out.Shear = e.shearStrength(&web, &shear)
+	torsion := e.torsionStrength(q.Section, &q.Concrete, q.Demand.Axial)
+	out.Torsion = e.torsionAnswer(&torsion, q.Demand.Torque)
+	out.Checks = e.queryChecks(&q, &out, &web, &shear, &torsion)
+	return out, nil
+}
+
+// queryFaults names every value of a query that makes no sense.
+func (e *edition) queryFaults(q *beam.SectionQuery) []beam.Fault {
+	f := queryFaults{e: e}
+	if q.Section.Shape != 0 && q.Section.Shape != beam.Rectangular {
+		f.add("/section/shape", "shape is not one whose strengths this version gives", "rectangular")
+	}
+	f.within("/section/width", "width", q.Section.Width.Amount(), leastSide.Amount(), mostSide.Amount())
+	sound := f.within("/section/depth", "depth", q.Section.Depth.Amount(), leastSide.Amount(), mostSide.Amount())
+	f.within("/concrete/strength", "concrete strength", q.Concrete.Strength.Amount(), leastStress.Amount(), mostConcrete.Amount())
+	if fault, wrong := e.densityFault(&q.Concrete); wrong {
+		f.list = append(f.list, fault)
+	}
+	if q.Bending > beam.Negative {
+		f.add("/bending", "sense of bending is not known", "positive, negative")
+	}
+	if n := len(q.Layers); n == 0 || n > mostLayers {
+		f.add("/layers", fmt.Sprintf("%d layers given", n), fmt.Sprintf("1 to %d", mostLayers))
+	}
+	for i, l := range q.Layers {
+		path := fmt.Sprintf("/layers/%d", i)
+		f.within(path+"/area", "area", l.Area.Amount(), leastBars.Amount(), mostBars.Amount())
+		if sound {
+			f.within(path+"/depth", "depth", l.Depth.Amount(), units.Length{}.Amount(), q.Section.Depth.Amount())
+		}
+		f.within(path+"/yield", "yield strength", l.Yield.Amount(), leastStress.Amount(), mostSteel.Amount())
+	}
+	if s := q.Stirrups; s != nil {
+		f.within("/stirrups/area", "area", s.Area.Amount(), leastBars.Amount(), mostBars.Amount())
+		f.within("/stirrups/spacing", "spacing", s.Spacing.Amount(), leastLength.Amount(), mostSide.Amount())
+		f.within("/stirrups/yield", "yield strength", s.Yield.Amount(), leastStress.Amount(), mostSteel.Amount())
+		f.within("/stirrups/cover", "cover", s.Cover.Amount(), units.Length{}.Amount(), mostSide.Amount())
+		f.within("/stirrups/diameter", "diameter", s.Diameter.Amount(), units.Length{}.Amount(), mostSide.Amount())
+		f.within("/stirrups/across", "distance between legs", s.Across.Amount(), units.Length{}.Amount(), mostSide.Amount())
+	}
+	d := &q.Demand
+	f.within("/demand/moment", "moment", d.Moment.Amount(), mostMoment.Neg().Amount(), mostMoment.Amount())
+	f.within("/demand/shear", "shear", d.Shear.Amount(), mostForce.Neg().Amount(), mostForce.Amount())
+	f.within("/demand/torque", "torque", d.Torque.Amount(), mostMoment.Neg().Amount(), mostMoment.Amount())
+	f.within("/demand/axial", "axial force", d.Axial.Amount(), mostForce.Neg().Amount(), mostForce.Amount())
+	if m := d.Moment.Compare(units.Moment{}); m > 0 && q.Bending == beam.Negative || m < 0 && q.Bending == beam.Positive {
+		f.add("/demand/moment", "moment "+e.system.Format(d.Moment.Amount())+" does not bend the section in the sense asked for, "+q.Bending.String(),
+			"sagging moments are positive, hogging moments negative")
+	}
+	return f.list
+}
+
+// Bounds of a query. They belong to no design code: they are wide enough for
+// any beam that is built and narrow enough that a slipped unit is caught.
+var (
+	leastSide    = units.Millimetre.Of(50)
+	mostSide     = units.Metre.Of(10)
+	leastLength  = units.Millimetre.Of(1)
+	leastStress  = units.Megapascal.Of(1)
+	mostConcrete = units.Megapascal.Of(250)
+	mostSteel    = units.Megapascal.Of(1500)
+	leastBars    = units.SquareMillimetre.Of(1)
+	mostBars     = units.SquareMetre.Of(1)
+	mostForce    = units.Kilonewton.Of(1e6)
+	mostMoment   = units.KilonewtonMetre.Of(1e7)
+)
+
+const mostLayers = 100
+
+type queryFaults struct {
+	e    *edition
+	list []beam.Fault
+}
+
+func (f *queryFaults) add(path, detail, allowed string) {
+	f.list = append(f.list, beam.Fault{Path: path, Detail: detail, Allowed: allowed})
+}
+
+func (f *queryFaults) within(path, what string, v, least, most units.Amount) bool {
+	if v.IsFinite() && least.AtMost(v) && v.AtMost(most) {
+		return true
+	}
+	said := "not a finite number"
+	if v.IsFinite() {
+		said = f.e.system.Format(v)
+	}
+	f.add(path, what+" is "+said, f.e.system.Format(least)+" to "+f.e.system.Format(most))
+	return false
+}
+
+// queryRefusals names what puts a section outside the method.
+func (e *edition) queryRefusals(q *beam.SectionQuery) []beam.Refusal {
+	out := e.materialRefusals(&q.Concrete, q.Layers[0].Yield)
+	for i := range q.Layers[1:] {
+		if fy := q.Layers[i+1].Yield; fy != q.Layers[i].Yield {
+			out = append(out, e.steelRefusals(fy)...)
+		}
+	}
+	if r, refused := e.axialRefusal(q.Section, q.Concrete.Strength, q.Demand.Axial); refused {
+		out = append(out, r)
+	}
+	return out
+}
+
+// querySection is the section of a query, for the kernel.
+func (e *edition) querySection(q *beam.SectionQuery) mechanics.Section {
+	s := mechanics.Section{Parts: mechanics.Rectangle(q.Section.Width, q.Section.Depth), Layers: make([]mechanics.Layer, len(q.Layers))}
+	for i, l := range q.Layers {
+		s.Layers[i] = mechanics.Layer{Depth: l.Depth, Area: l.Area, Steel: e.barSteel(l.Yield)}
+	}
+	return s
+}
+
+// queryWeb prepares the section for shear: ρw counts the layers in flexural
+// tension, and d is the depth of their centroid.
+func (e *edition) queryWeb(q *beam.SectionQuery, f *beam.FlexureStrength) webSteel {
+	s := shearSection{
+		strength: q.Concrete.Strength, lambda: e.lambda(&q.Concrete),
+		width: q.Section.Width, gross: q.Section.Depth,
+		depth: f.EffectiveDepth, area: f.TensionSteel,
+		row: q.Readings.ShearRow, method: q.Readings.ShearMethod,
+	}
+	if t := q.Stirrups; t != nil {
+		s.stirrups = stirrupSteel{area: t.Area, spacing: t.Spacing, yield: t.Yield}
+	}
+	return e.newWebSteel(&s)
+}
+
+func (e *edition) shearStrength(web *webSteel, s *sectionShear) beam.ShearStrength {
+	v := beam.ShearStrength{
+		Concrete: e.forceOf(s.concrete.strength), ConcreteRow: s.concrete.row.String(),
+		SizeEffect: 1, SteelRatio: web.bare.ratio,
+		Steel: e.forceOf(web.steel), Nominal: e.forceOf(s.nominal), Phi: web.phi, Design: e.forceOf(s.design),
+		SectionLimit: e.forceOf(s.limit), MinimumPerLength: e.steelOf(web.least), MinimumRequired: s.required,
+		GreatestSpacing: e.lengthOf(s.along), GreatestAcross: e.lengthOf(s.across),
+	}
+	if s.concrete.row == rowC {
+		v.SizeEffect = web.bare.size
+	}
+	say := func(when bool, note string) {
+		if when {
+			v.Notes = append(v.Notes, note)
+		}
+	}
+	say(web.fytCapped, "the stirrups count with "+e.stress.Format(e.stressOf(e.materials.mostShearYield))+" of their yield strength ("+e.materials.yieldClause+")")
+	say(s.concrete.rootCapped, "√f'c is capped for Vc, as there are not the least stirrups (22.5.3.1)")
+	say(s.concrete.axialCapped, "the axial term is capped at 0.05 f'c (22.5.5.1.2)")
+	say(web.av > 0 && !web.enough, "the stirrups are fewer or wider than least reinforcement, so that Vc is that of a beam without them")
+	return v
+}
+
+func (e *edition) torsionAnswer(t *torsionStrength, torque units.Moment) beam.TorsionStrength {
+	return beam.TorsionStrength{
+		Area: e.areaOf(t.area), Perimeter: e.lengthOf(t.perimeter),
+		Threshold: e.momentOf(t.threshold), Cracking: e.momentOf(t.cracking), Phi: t.phi,
+		MayBeNeglected: t.neglects(e, torque),
+	}
+}
+
+// queryChecks judges a demand; none where nothing is asked.
+func (e *edition) queryChecks(q *beam.SectionQuery, out *beam.Strengths, web *webSteel, s *sectionShear, t *torsionStrength) []beam.Check {
+	d := &q.Demand
+	if *d == (beam.Demand{Name: d.Name}) {
+		return nil
+	}
+	var checks []beam.Check
+	compare := func(id, clause, reason string, demand, capacity units.Amount) {
+		c := beam.Check{ID: id, Clause: clause, Reason: reason, Combination: d.Name}
+		c.Compare(demand, capacity)
+		checks = append(checks, c)
+	}
+	if !d.Moment.IsZero() {
+		id, f := bendingIDs[q.Bending], &out.Flexure
+		compare(id.strength, "9.5.1.1", "", d.Moment.Abs().Amount(), f.Design.Amount())
+		compare(id.strain, "9.3.3.1", "", units.Plain(f.LeastStrain), units.Plain(f.ExtremeStrain))
+		clause, need, reason := e.queryMinimum(q, f)
+		compare(id.minimum, clause, reason, need.Amount(), f.TensionSteel.Amount())
+	}
+	if !d.Shear.IsZero() {
+		compare("shear.strength", "22.5.1.1", "", d.Shear.Abs().Amount(), out.Shear.Design.Amount())
+		compare("shear.section-limit", "22.5.1.2", "", d.Shear.Abs().Amount(), out.Shear.SectionLimit.Amount())
+		checks = append(checks, e.queryStirrups(q, web, s)...)
+	}
+	if !d.Torque.IsZero() {
+		c := beam.Check{ID: "torsion.threshold", Clause: "9.5.4.1", Combination: d.Name}
+		if t.neglects(e, d.Torque) {
+			c.Compare(d.Torque.Abs().Amount(), e.momentOf(t.phi*t.threshold).Amount())
+		} else {
+			c.Outcome, c.Reason = beam.NotJudged, "the torque is not below the threshold, and this version does not design for torsion"
+		}
+		checks = append(checks, c)
+	}
+	return checks
+}
+
+// queryMinimum is the least steel of 9.6.1 at the demand.
+func (e *edition) queryMinimum(q *beam.SectionQuery, f *beam.FlexureStrength) (clause string, need units.Area, reason string) {
+	if f.MinimumSteel.AtMost(f.TensionSteel) {
+		return "9.6.1.2", f.MinimumSteel, ""
+	}
+	yield := q.Layers[0].Yield
+	for _, l := range q.Layers {
+		yield = yield.Min(l.Yield)
+	}
+	r := e.rectangle(q.Concrete.Strength, yield, q.Section.Width, f.EffectiveDepth, f.ExtremeDepth, q.Readings.RoundedYield)
+	req := r.tension(math.Abs(e.momentIn(q.Demand.Moment)))
+	if waived := e.areaOf(e.minimum.waiver * req.area); req.ok && waived.Less(f.MinimumSteel) {
+		return "9.6.1.3", waived, waiverReason
+	}
+	return "9.6.1.2", f.MinimumSteel, ""
+}
+
+// queryStirrups judges least stirrups and their spacings.
+func (e *edition) queryStirrups(q *beam.SectionQuery, web *webSteel, s *sectionShear) []beam.Check {
+	least := beam.Check{ID: "shear.minimum-stirrups", Clause: "9.6.3.1", Combination: q.Demand.Name}
+	if q.Stirrups == nil {
+		least.Reason = "no stirrups: the shear may not call for them"
+		least.Compare(e.forceOf(s.shear).Amount(), e.forceOf(s.trigger).Amount())
+		return []beam.Check{least}
+	}
+	along := beam.Check{ID: "shear.spacing-along", Clause: "Table 9.7.6.2.2", Combination: q.Demand.Name}
+	across := beam.Check{ID: "shear.spacing-across", Clause: "Table 9.7.6.2.2", Combination: q.Demand.Name}
+	if !s.required {
+		for _, c := range []*beam.Check{&least, &along, &across} {
+			c.Outcome, c.Reason = beam.NotApplicable, "the shear does not call for stirrups"
+		}
+	} else {
+		if units.AtMost(s.shear, s.trigger) {
+			least.Outcome, least.Reason = beam.NotApplicable, "9.6.3.1 does not call for stirrups; strength does"
+		} else {
+			least.Clause = e.stirrups.leastClause
+			least.Compare(e.steelOf(web.least).Amount(), e.steelOf(web.provided).Amount())
+		}
+		along.Compare(q.Stirrups.Spacing.Amount(), e.lengthOf(s.along).Amount())
+		if q.Stirrups.Across.IsZero() {
+			across.Outcome, across.Reason = beam.NotJudged, "the distance between legs across the web is not given"
+		} else {
+			across.Compare(q.Stirrups.Across.Amount(), e.lengthOf(s.across).Amount())
+		}
+	}
+	if e.stirrups.across {
+		return []beam.Check{least, along, across}
+	}
+	return []beam.Check{least, along}
+}
