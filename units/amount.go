@@ -1,7 +1,5 @@
 package units
 
-import "fmt"
-
 // An Amount is a quantity whose dimension is known only when the program
 // runs, or a plain number. It carries values of any kind through results and
 // views; formulas use the typed quantities. Amounts can be compared with ==.
@@ -13,6 +11,9 @@ type Amount struct {
 
 // Plain returns a plain number, such as a ratio or a strain.
 func Plain(v float64) Amount { return Amount{None, v} }
+
+// Amount returns a, as the method of the typed quantities does.
+func (a Amount) Amount() Amount { return a }
 
 // Dimension returns the dimension of a, [None] for a plain number.
 func (a Amount) Dimension() Dimension { return a.dim }
@@ -55,6 +56,9 @@ func (a Amount) Compare(b Amount) (int, bool) {
 	}
 	return compare(a.si, b.si), true
 }
+
+// Scale returns a times the plain number k.
+func (a Amount) Scale(k float64) Amount { return Amount{a.dim, a.si * k} }
 
 // Ratio returns a / b, and false if their dimensions differ.
 func (a Amount) Ratio(b Amount) (float64, bool) {
@@ -110,6 +114,3 @@ func assign(to *float64) func(float64, error) error {
 		return err
 	}
 }
-
-// notFinite is the error of writing what JSON and the parser have no form for.
-func notFinite(v float64) error { return fmt.Errorf("units: %v cannot be written as a quantity", v) }

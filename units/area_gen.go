@@ -4,11 +4,11 @@ package units
 
 import "math"
 
-// An Area is an area, of concrete or of bars, kept in m2 as a float64.
+// Area is an area, of concrete or of bars, kept in m2 as a float64.
 // The zero value is zero.
 type Area struct{ m2 float64 }
 
-// An AreaUnit is a unit of area.
+// AreaUnit is a unit of area.
 type AreaUnit uint8
 
 // The units of area, the SI unit first.

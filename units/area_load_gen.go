@@ -4,11 +4,11 @@ package units
 
 import "math"
 
-// An AreaLoad is a load per area of floor or roof, kept in Pa as a float64.
+// AreaLoad is a load per area of floor or roof, kept in Pa as a float64.
 // The zero value is zero.
 type AreaLoad struct{ paLoad float64 }
 
-// An AreaLoadUnit is a unit of area load.
+// AreaLoadUnit is a unit of area load.
 type AreaLoadUnit uint8
 
 // The units of area load, the SI unit first.

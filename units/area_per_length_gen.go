@@ -4,11 +4,11 @@ package units
 
 import "math"
 
-// An AreaPerLength is an area of steel per length of member, such as that of stirrups over their spacing, kept in m2/m as a float64.
+// AreaPerLength is an area of steel per length of member, such as that of stirrups over their spacing, kept in m2/m as a float64.
 // The zero value is zero.
 type AreaPerLength struct{ m2PerM float64 }
 
-// An AreaPerLengthUnit is a unit of area per length.
+// AreaPerLengthUnit is a unit of area per length.
 type AreaPerLengthUnit uint8
 
 // The units of area per length, the SI unit first.

@@ -4,7 +4,7 @@ package units
 
 // Exact definitions that the unit factors are written with.
 const (
-	inch       = 0.0254            // m; international yard of 1959, a thirty-sixth
+	inch       = 0.0254            // m; a thirty-sixth of the international yard of 1959
 	foot       = 12 * inch         // m
 	yard       = 3 * foot          // m
 	pound      = 0.45359237        // kg; international pound of 1959
@@ -41,6 +41,7 @@ var catalog = [...]dimension{
 	None: {name: "plain number", examples: [2]string{"0.9", "1.25"}},
 	DimLength: {
 		name: "length", examples: [2]string{"14 in", "350 mm"},
+		exponents: [3]int8{0, 1, 0},
 		preferred: [2]uint8{SI: uint8(Millimetre), US: uint8(Inch)},
 		units: []unit{
 			{name: "Metre", symbol: "m", factor: 1, exact: "1", ucum: "m"},
@@ -52,6 +53,7 @@ var catalog = [...]dimension{
 	},
 	DimArea: {
 		name: "area", examples: [2]string{"3.16 in2", "2040 mm2"},
+		exponents: [3]int8{0, 2, 0},
 		preferred: [2]uint8{SI: uint8(SquareMillimetre), US: uint8(SquareInch)},
 		units: []unit{
 			{name: "SquareMetre", symbol: "m2", factor: 1, exact: "1", ucum: "m2"},
@@ -63,6 +65,7 @@ var catalog = [...]dimension{
 	},
 	DimSecondMoment: {
 		name: "second moment of area", examples: [2]string{"23400 in4", "9.75e9 mm4"},
+		exponents: [3]int8{0, 4, 0},
 		preferred: [2]uint8{SI: uint8(Millimetre4), US: uint8(Inch4)},
 		units: []unit{
 			{name: "Metre4", symbol: "m4", factor: 1, exact: "1", ucum: "m4"},
@@ -74,6 +77,7 @@ var catalog = [...]dimension{
 	},
 	DimSectionModulus: {
 		name: "section modulus", examples: [2]string{"1800 in3", "29.5e6 mm3"},
+		exponents: [3]int8{0, 3, 0},
 		preferred: [2]uint8{SI: uint8(SectionMillimetre3), US: uint8(SectionInch3)},
 		units: []unit{
 			{name: "SectionMetre3", symbol: "m3", factor: 1, exact: "1", ucum: "m3"},
@@ -84,6 +88,7 @@ var catalog = [...]dimension{
 	},
 	DimVolume: {
 		name: "volume", examples: [2]string{"78 ft3", "2.2 m3"},
+		exponents: [3]int8{0, 3, 0},
 		preferred: [2]uint8{SI: uint8(CubicMetre), US: uint8(CubicFoot)},
 		units: []unit{
 			{name: "CubicMetre", symbol: "m3", factor: 1, exact: "1", ucum: "m3"},
@@ -96,6 +101,7 @@ var catalog = [...]dimension{
 	},
 	DimForce: {
 		name: "force", examples: [2]string{"45 kip", "200 kN"},
+		exponents: [3]int8{1, 1, -2},
 		preferred: [2]uint8{SI: uint8(Kilonewton), US: uint8(Kip)},
 		units: []unit{
 			{name: "Newton", symbol: "N", factor: 1, exact: "1", ucum: "N"},
@@ -107,6 +113,7 @@ var catalog = [...]dimension{
 	},
 	DimLineLoad: {
 		name: "line load", examples: [2]string{"1.4 kip/ft", "20 kN/m"},
+		exponents: [3]int8{1, 0, -2},
 		preferred: [2]uint8{SI: uint8(KilonewtonPerMetre), US: uint8(KipPerFoot)},
 		units: []unit{
 			{name: "NewtonPerMetre", symbol: "N/m", factor: 1, exact: "1", ucum: "N/m"},
@@ -117,6 +124,7 @@ var catalog = [...]dimension{
 	},
 	DimAreaLoad: {
 		name: "area load", examples: [2]string{"80 psf", "4 kPa"},
+		exponents: [3]int8{1, -1, -2},
 		preferred: [2]uint8{SI: uint8(KilonewtonPerSquareMetre), US: uint8(PoundPerSquareFoot)},
 		units: []unit{
 			{name: "NewtonPerSquareMetre", symbol: "Pa", aliases: []string{"N/m2"}, factor: 1, exact: "1", ucum: "Pa"},
@@ -127,6 +135,7 @@ var catalog = [...]dimension{
 	},
 	DimMoment: {
 		name: "moment", examples: [2]string{"250 kip-ft", "340 kN-m"},
+		exponents: [3]int8{1, 2, -2},
 		preferred: [2]uint8{SI: uint8(KilonewtonMetre), US: uint8(KipFoot)},
 		units: []unit{
 			{name: "NewtonMetre", symbol: "N-m", factor: 1, exact: "1", ucum: "N.m"},
@@ -140,6 +149,7 @@ var catalog = [...]dimension{
 	},
 	DimStress: {
 		name: "stress", examples: [2]string{"4.5 ksi", "30 MPa"},
+		exponents: [3]int8{1, -1, -2},
 		preferred: [2]uint8{SI: uint8(Megapascal), US: uint8(KSI)},
 		units: []unit{
 			{name: "Pascal", symbol: "Pa", factor: 1, exact: "1", ucum: "Pa"},
@@ -152,6 +162,7 @@ var catalog = [...]dimension{
 	},
 	DimDensity: {
 		name: "density", examples: [2]string{"150 lb/ft3", "2400 kg/m3"},
+		exponents: [3]int8{1, -3, 0},
 		preferred: [2]uint8{SI: uint8(KilogramPerCubicMetre), US: uint8(PoundPerCubicFoot)},
 		units: []unit{
 			{name: "KilogramPerCubicMetre", symbol: "kg/m3", factor: 1, exact: "1", ucum: "kg/m3"},
@@ -160,6 +171,7 @@ var catalog = [...]dimension{
 	},
 	DimUnitWeight: {
 		name: "unit weight", examples: [2]string{"150 lb/ft3", "24 kN/m3"},
+		exponents: [3]int8{1, -2, -2},
 		preferred: [2]uint8{SI: uint8(KilonewtonPerCubicMetre), US: uint8(PoundForcePerCubicFoot)},
 		units: []unit{
 			{name: "NewtonPerCubicMetre", symbol: "N/m3", factor: 1, exact: "1", ucum: "N/m3"},
@@ -169,6 +181,7 @@ var catalog = [...]dimension{
 	},
 	DimMass: {
 		name: "mass", examples: [2]string{"640 lb", "290 kg"},
+		exponents: [3]int8{1, 0, 0},
 		preferred: [2]uint8{SI: uint8(Kilogram), US: uint8(PoundMass)},
 		units: []unit{
 			{name: "Kilogram", symbol: "kg", factor: 1, exact: "1", ucum: "kg"},
@@ -179,6 +192,7 @@ var catalog = [...]dimension{
 	},
 	DimMassPerLength: {
 		name: "mass per length", examples: [2]string{"2.67 lb/ft", "3.97 kg/m"},
+		exponents: [3]int8{1, -1, 0},
 		preferred: [2]uint8{SI: uint8(KilogramPerMetre), US: uint8(PoundMassPerFoot)},
 		units: []unit{
 			{name: "KilogramPerMetre", symbol: "kg/m", factor: 1, exact: "1", ucum: "kg/m"},
@@ -187,6 +201,7 @@ var catalog = [...]dimension{
 	},
 	DimAreaPerLength: {
 		name: "area per length", examples: [2]string{"0.02 in2/in", "0.5 mm2/mm"},
+		exponents: [3]int8{0, 1, 0},
 		preferred: [2]uint8{SI: uint8(SquareMillimetrePerMillimetre), US: uint8(SquareInchPerInch)},
 		units: []unit{
 			{name: "SquareMetrePerMetre", symbol: "m2/m", factor: 1, exact: "1", ucum: "m2/m"},
@@ -198,6 +213,7 @@ var catalog = [...]dimension{
 	},
 	DimCurvature: {
 		name: "curvature", examples: [2]string{"0.0004 1/in", "0.016 1/m"},
+		exponents: [3]int8{0, -1, 0},
 		preferred: [2]uint8{SI: uint8(PerMetre), US: uint8(PerInch)},
 		units: []unit{
 			{name: "PerMetre", symbol: "1/m", factor: 1, exact: "1", ucum: "m-1"},
@@ -208,6 +224,7 @@ var catalog = [...]dimension{
 	},
 	DimRigidity: {
 		name: "flexural rigidity", examples: [2]string{"42e6 kip-in2", "120000 kN-m2"},
+		exponents: [3]int8{1, 3, -2},
 		preferred: [2]uint8{SI: uint8(KilonewtonSquareMetre), US: uint8(KipSquareInch)},
 		units: []unit{
 			{name: "NewtonSquareMetre", symbol: "N-m2", factor: 1, exact: "1", ucum: "N.m2"},

@@ -4,11 +4,11 @@ package units
 
 import "math"
 
-// A Curvature is a curvature: a strain or an angle per length, kept in 1/m as a float64.
+// Curvature is a curvature: a strain or an angle per length, kept in 1/m as a float64.
 // The zero value is zero.
 type Curvature struct{ perM float64 }
 
-// A CurvatureUnit is a unit of curvature.
+// CurvatureUnit is a unit of curvature.
 type CurvatureUnit uint8
 
 // The units of curvature, the SI unit first.

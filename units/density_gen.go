@@ -4,11 +4,11 @@ package units
 
 import "math"
 
-// A Density is a mass per volume, kept in kg/m3 as a float64.
+// Density is a mass per volume, kept in kg/m3 as a float64.
 // The zero value is zero.
 type Density struct{ kgPerM3 float64 }
 
-// A DensityUnit is a unit of density.
+// DensityUnit is a unit of density.
 type DensityUnit uint8
 
 // The units of density, the SI unit first.

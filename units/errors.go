@@ -26,16 +26,14 @@ func refuse(d Dimension, text, format string, args ...any) *ParseError {
 		Text:      text,
 		Dimension: d,
 		Reason:    fmt.Sprintf(format, args...),
-		Accepted:  d.symbols(),
+		Accepted:  d.Units(),
 	}
 }
 
 // example quotes how the quantities of d are written.
 func example(d Dimension) string {
-	if int(d) >= len(catalog) {
-		return "nothing, being of an unknown dimension"
-	}
-	return fmt.Sprintf("%q or %q", catalog[d].examples[0], catalog[d].examples[1])
+	e := d.Examples()
+	return fmt.Sprintf("%q or %q", e[0], e[1])
 }
 
 func needsUnit(d Dimension, text string) *ParseError {
@@ -50,7 +48,7 @@ func wrongUnit(d Dimension, text, symbol string) *ParseError {
 	if d == None {
 		return refuse(d, text, "is a plain number and takes no unit; %q is not read", symbol)
 	}
-	accepted := d.symbols()
+	accepted := d.Units()
 	list := orList(accepted)
 	var others []string
 	for other := range catalog {

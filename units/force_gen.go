@@ -4,11 +4,11 @@ package units
 
 import "math"
 
-// A Force is a force: a point load, a shear, an axial force or a weight, kept in N as a float64.
+// Force is a force: a point load, a shear, an axial force or a weight, kept in N as a float64.
 // The zero value is zero.
 type Force struct{ n float64 }
 
-// A ForceUnit is a unit of force.
+// ForceUnit is a unit of force.
 type ForceUnit uint8
 
 // The units of force, the SI unit first.

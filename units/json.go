@@ -8,9 +8,12 @@ import (
 	"io"
 )
 
+// jsonSpace is what JSON takes for white space.
+const jsonSpace = " \t\r\n"
+
 func marshalText(d Dimension, v float64) ([]byte, error) {
 	if !inRange(v) {
-		return nil, notFinite(v)
+		return nil, notReadable(v)
 	}
 	b := appendNumber(nil, v, lossless)
 	b = append(b, ' ')
@@ -19,13 +22,18 @@ func marshalText(d Dimension, v float64) ([]byte, error) {
 
 func marshalJSON(d Dimension, v float64) ([]byte, error) {
 	if !inRange(v) {
-		return nil, notFinite(v)
+		return nil, notReadable(v)
 	}
 	number := appendNumber(nil, v, lossless)
 	if d == None {
 		return number, nil
 	}
 	return appendObject(nil, number, symbolOf(d, 0)), nil
+}
+
+// notReadable is the error of recording what could not be read back.
+func notReadable(v float64) error {
+	return fmt.Errorf("units: cannot record %v: not of a magnitude from %g to %g", v, leastMagnitude, mostMagnitude)
 }
 
 func appendObject(dst, number []byte, symbol string) []byte {
@@ -47,7 +55,7 @@ func appendString(dst []byte, s string) []byte {
 
 // unmarshalJSON reads an object or a string as a quantity of dimension d.
 func unmarshalJSON(d Dimension, data []byte) (float64, error) {
-	data = bytes.TrimSpace(data)
+	data = bytes.Trim(data, jsonSpace)
 	if len(data) == 0 {
 		return 0, refuse(d, "", "is empty; write e.g. %s", example(d))
 	}

@@ -4,11 +4,11 @@ package units
 
 import "math"
 
-// A Length is a length, a position or a displacement, kept in m as a float64.
+// Length is a length, a position or a displacement, kept in m as a float64.
 // The zero value is zero.
 type Length struct{ m float64 }
 
-// A LengthUnit is a unit of length.
+// LengthUnit is a unit of length.
 type LengthUnit uint8
 
 // The units of length, the SI unit first.

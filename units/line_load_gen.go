@@ -4,11 +4,11 @@ package units
 
 import "math"
 
-// A LineLoad is a force per length, such as a load along a span, kept in N/m as a float64.
+// LineLoad is a force per length, such as a load along a span, kept in N/m as a float64.
 // The zero value is zero.
 type LineLoad struct{ nPerM float64 }
 
-// A LineLoadUnit is a unit of line load.
+// LineLoadUnit is a unit of line load.
 type LineLoadUnit uint8
 
 // The units of line load, the SI unit first.

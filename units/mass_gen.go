@@ -4,11 +4,11 @@ package units
 
 import "math"
 
-// A Mass is a mass, kept in kg as a float64.
+// Mass is a mass, kept in kg as a float64.
 // The zero value is zero.
 type Mass struct{ kg float64 }
 
-// A MassUnit is a unit of mass.
+// MassUnit is a unit of mass.
 type MassUnit uint8
 
 // The units of mass, the SI unit first.

@@ -4,11 +4,11 @@ package units
 
 import "math"
 
-// A MassPerLength is a mass per length, such as that of a bar, kept in kg/m as a float64.
+// MassPerLength is a mass per length, such as that of a bar, kept in kg/m as a float64.
 // The zero value is zero.
 type MassPerLength struct{ kgPerM float64 }
 
-// A MassPerLengthUnit is a unit of mass per length.
+// MassPerLengthUnit is a unit of mass per length.
 type MassPerLengthUnit uint8
 
 // The units of mass per length, the SI unit first.

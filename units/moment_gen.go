@@ -4,11 +4,11 @@ package units
 
 import "math"
 
-// A Moment is a bending moment, a couple or a torque, kept in N-m as a float64.
+// Moment is a bending moment, a couple or a torque, kept in N-m as a float64.
 // The zero value is zero.
 type Moment struct{ nm float64 }
 
-// A MomentUnit is a unit of moment.
+// MomentUnit is a unit of moment.
 type MomentUnit uint8
 
 // The units of moment, the SI unit first.

@@ -4,6 +4,7 @@ import (
 	"math"
 	"strconv"
 	"strings"
+	"unicode/utf8"
 
 	"github.com/shopspring/decimal"
 )
@@ -26,8 +27,9 @@ func parse(d Dimension, text string) (float64, error) {
 	if len(text) > maxText {
 		return 0, refuse(d, text, "is %d bytes long; at most %d are read, e.g. %s", len(text), maxText, example(d))
 	}
-	for _, r := range text {
-		if r < ' ' || r > '~' {
+	for i := range len(text) {
+		if c := text[i]; c < ' ' || c > '~' {
+			r, _ := utf8.DecodeRuneInString(text[i:])
 			return 0, refuse(d, text, "has the character %+q; write it in plain ASCII, e.g. %s", r, example(d))
 		}
 	}
@@ -53,7 +55,8 @@ func parse(d Dimension, text string) (float64, error) {
 		return scaled(d, text, n.value(), u.factor)
 	}
 	if inches, ok := strings.CutPrefix(symbol, Foot.String()); ok && d == DimLength {
-		if inches = strings.TrimLeft(inches, " "); inches != "" && strings.IndexByte("0123456789.+-", inches[0]) >= 0 {
+		inches = strings.TrimLeft(inches, " ")
+		if strings.IndexAny(inches, "0123456789") >= 0 && strings.IndexByte("0123456789.+-", inches[0]) >= 0 {
 			return feetAndInches(text, n, inches)
 		}
 	}
@@ -226,6 +229,9 @@ func fraction(n number, integer, num, den, rest string) (number, string, string)
 	n.integer, n.num, n.den = atoi(integer), atoi(num), atoi(den)
 	if n.den == 0 {
 		return n, rest, "has a fraction over zero"
+	}
+	if rest != "" && rest[0] == '.' {
+		return n, rest, "has a fraction of numbers that are not whole"
 	}
 	return n, rest, ""
 }

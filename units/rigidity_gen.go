@@ -4,11 +4,11 @@ package units
 
 import "math"
 
-// A Rigidity is a flexural rigidity: modulus of elasticity times second moment of area, kept in N-m2 as a float64.
+// Rigidity is a flexural rigidity: modulus of elasticity times second moment of area, kept in N-m2 as a float64.
 // The zero value is zero.
 type Rigidity struct{ nm2 float64 }
 
-// A RigidityUnit is a unit of flexural rigidity.
+// RigidityUnit is a unit of flexural rigidity.
 type RigidityUnit uint8
 
 // The units of flexural rigidity, the SI unit first.

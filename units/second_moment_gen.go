@@ -4,11 +4,11 @@ package units
 
 import "math"
 
-// A SecondMoment is a second moment of area, kept in m4 as a float64.
+// SecondMoment is a second moment of area, kept in m4 as a float64.
 // The zero value is zero.
 type SecondMoment struct{ m4 float64 }
 
-// A SecondMomentUnit is a unit of second moment of area.
+// SecondMomentUnit is a unit of second moment of area.
 type SecondMomentUnit uint8
 
 // The units of second moment of area, the SI unit first.

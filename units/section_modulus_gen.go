@@ -4,11 +4,11 @@ package units
 
 import "math"
 
-// A SectionModulus is a section modulus or a first moment of area, kept in m3 as a float64.
+// SectionModulus is a section modulus or a first moment of area, kept in m3 as a float64.
 // The zero value is zero.
 type SectionModulus struct{ m3Section float64 }
 
-// A SectionModulusUnit is a unit of section modulus.
+// SectionModulusUnit is a unit of section modulus.
 type SectionModulusUnit uint8
 
 // The units of section modulus, the SI unit first.

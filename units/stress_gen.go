@@ -4,11 +4,11 @@ package units
 
 import "math"
 
-// A Stress is a stress, a strength or a modulus of elasticity, kept in Pa as a float64.
+// Stress is a stress, a strength or a modulus of elasticity, kept in Pa as a float64.
 // The zero value is zero.
 type Stress struct{ pa float64 }
 
-// A StressUnit is a unit of stress.
+// StressUnit is a unit of stress.
 type StressUnit uint8
 
 // The units of stress, the SI unit first.

@@ -143,7 +143,7 @@ func (m Measure) MarshalJSON() ([]byte, error) {
 // UnmarshalJSON reads what MarshalJSON writes. It takes any unit; amounts are
 // read by [AmountOf].
 func (m *Measure) UnmarshalJSON(data []byte) error {
-	data = bytes.TrimSpace(data)
+	data = bytes.Trim(data, jsonSpace)
 	if isJSONNumber(string(data)) {
 		*m = Measure{Number: json.Number(data)}
 		return nil
@@ -195,7 +195,7 @@ func (s Series) MarshalJSON() ([]byte, error) {
 	b = append(b, `"values":[`...)
 	for i, v := range s.Values {
 		if !isFinite(v) {
-			return nil, fmt.Errorf("units: value %d of a series: %w", i, notFinite(v))
+			return nil, fmt.Errorf("units: value %d of a series is %v", i, v)
 		}
 		if i > 0 {
 			b = append(b, ',')

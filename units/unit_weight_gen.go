@@ -4,11 +4,11 @@ package units
 
 import "math"
 
-// A UnitWeight is a weight (a force) per volume, kept in N/m3 as a float64.
+// UnitWeight is a weight (a force) per volume, kept in N/m3 as a float64.
 // The zero value is zero.
 type UnitWeight struct{ nPerM3 float64 }
 
-// A UnitWeightUnit is a unit of unit weight.
+// UnitWeightUnit is a unit of unit weight.
 type UnitWeightUnit uint8
 
 // The units of unit weight, the SI unit first.

@@ -33,10 +33,43 @@ func (d Dimension) String() string {
 	return catalog[d].name
 }
 
+// Units returns the symbols of the units of d, the SI unit first and without
+// aliases. Plain numbers have none.
+func (d Dimension) Units() []string {
+	if int(d) >= len(catalog) {
+		return nil
+	}
+	var out []string
+	for _, u := range catalog[d].units {
+		out = append(out, u.symbol)
+	}
+	return out
+}
+
+// Examples returns how an amount of d is written: a text in US and one in SI
+// units.
+func (d Dimension) Examples() [2]string {
+	if int(d) >= len(catalog) {
+		return [2]string{}
+	}
+	return catalog[d].examples
+}
+
+// Exponents returns the powers of mass, length and time that make up d, such
+// as 1, 1, -2 for a force.
+func (d Dimension) Exponents() (mass, length, time int) {
+	if int(d) >= len(catalog) {
+		return 0, 0, 0
+	}
+	e := catalog[d].exponents
+	return int(e[0]), int(e[1]), int(e[2])
+}
+
 // dimension is what the catalog holds of one dimension.
 type dimension struct {
 	name      string
 	examples  [2]string
+	exponents [3]int8  // of mass, length and time
 	preferred [2]uint8 // indices of the units printed in each system
 	units     []unit   // by unit constant; the SI unit first
 }
@@ -65,18 +98,6 @@ func (d Dimension) find(symbol string) (*unit, bool) {
 		}
 	}
 	return nil, false
-}
-
-// symbols returns the symbols of d, without aliases.
-func (d Dimension) symbols() []string {
-	if int(d) >= len(catalog) {
-		return nil
-	}
-	var out []string
-	for _, u := range catalog[d].units {
-		out = append(out, u.symbol)
-	}
-	return out
 }
 
 // symbolOf returns the symbol of the i-th unit of d.

@@ -4,11 +4,11 @@ package units
 
 import "math"
 
-// A Volume is a volume of material, kept in m3 as a float64.
+// Volume is a volume of material, kept in m3 as a float64.
 // The zero value is zero.
 type Volume struct{ m3 float64 }
 
-// A VolumeUnit is a unit of volume.
+// VolumeUnit is a unit of volume.
 type VolumeUnit uint8
 
 // The units of volume, the SI unit first.

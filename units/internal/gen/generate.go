@@ -3,13 +3,8 @@ package main
 import (
 	"bytes"
 	"embed"
-	"errors"
 	"fmt"
-	"go/constant"
 	"go/format"
-	"go/token"
-	"go/types"
-	"math/big"
 	"slices"
 	"strings"
 	"text/template"
@@ -24,46 +19,41 @@ var templateFiles embed.FS
 // The views are what the templates see: the table with everything derived
 // from it spelled out.
 type (
-	baseView struct{ Name, Value, Source string }
-	unitView struct {
-		unit
-		Name, Symbol, Expr, Text, UCUM string
-		Aliases                        []string
+	tableView struct {
+		Header     string
+		Bases      []base
+		Quantities []quantityView
+		Products   []productCase
 	}
-	methodView   struct{ Name, Doc, Params, Result, Body string }
 	quantityView struct {
 		quantity
-		Header, Name, Field, Label, Doc, Dim, SI, SISymbol, Sample string
-		Article, LowArticle, UnitArticle                           string
-		SIUnit, USUnit                                             string
-		Examples                                                   [2]string
-		Units                                                      []unitView
-		Methods                                                    []methodView
+		Header  string
+		Units   []unitView
+		Methods []method
 	}
+	unitView struct {
+		unit
+		Factor string // exact, as text
+	}
+	// A method of a quantity q.
+	method struct{ Name, Doc, Params, Result, Body string }
+	// A productCase is a test of one method that a product makes.
+	productCase struct{ Name, Got, Want string }
 )
 
-// generate returns the generated files by name.
-func generate() (map[string][]byte, error) {
-	if err := validate(); err != nil {
+// generate returns the files that t makes by name.
+func generate(t table) (map[string][]byte, error) {
+	if err := t.validate(); err != nil {
 		return nil, err
 	}
 	templates, err := template.ParseFS(templateFiles, "*.tmpl")
 	if err != nil {
 		return nil, err
 	}
-	views, err := view()
+	view, err := t.view()
 	if err != nil {
 		return nil, err
 	}
-	all := struct {
-		Header     string
-		Bases      []baseView
-		Quantities []quantityView
-	}{Header: header, Quantities: views}
-	for _, b := range bases {
-		all.Bases = append(all.Bases, baseView{b.name, b.value, b.source})
-	}
-
 	files := map[string][]byte{}
 	render := func(name, tmpl string, data any) error {
 		var out bytes.Buffer
@@ -77,239 +67,193 @@ func generate() (map[string][]byte, error) {
 		files[name] = src
 		return nil
 	}
-	for _, q := range views {
+	for _, q := range view.Quantities {
 		if err := render(snake(q.Name)+"_gen.go", "quantity.go.tmpl", q); err != nil {
 			return nil, err
 		}
 	}
-	return files, errors.Join(
-		render("catalog_gen.go", "catalog.go.tmpl", all),
-	)
-}
-
-func view() ([]quantityView, error) {
-	factorText, err := evaluator()
-	if err != nil {
+	if err := render("catalog_gen.go", "catalog.go.tmpl", view); err != nil {
 		return nil, err
 	}
-	var views []quantityView
-	for _, q := range quantities {
-		v := quantityView{
-			quantity: q, Header: header,
-			Name: q.name, Field: q.field, Label: q.label, Doc: q.doc, Dim: "Dim" + q.name,
-			SI: q.units[0].symbol, SISymbol: q.units[0].symbol, Sample: q.examples[1],
-			Article: article(q.name), LowArticle: strings.ToLower(article(q.name)), UnitArticle: article(q.name),
-			Examples: q.examples, Methods: methods(q.name),
-		}
-		for _, u := range q.units {
-			text, err := factorText(u)
+	if err := render("quantities_gen_test.go", "quantities_test.go.tmpl", view); err != nil {
+		return nil, err
+	}
+	return files, nil
+}
+
+func (t table) view() (tableView, error) {
+	view := tableView{Header: header, Bases: t.Bases, Products: t.productCases()}
+	factor, err := t.factors()
+	if err != nil {
+		return view, err
+	}
+	for _, q := range t.Quantities {
+		v := quantityView{quantity: q, Header: header, Methods: t.methods(q.Name)}
+		for _, u := range q.Units {
+			text, err := factor(u)
 			if err != nil {
-				return nil, fmt.Errorf("%s: %w", u.name, err)
+				return view, fmt.Errorf("%s: %w", u.Name, err)
 			}
-			v.Units = append(v.Units, unitView{
-				unit: u, Name: u.name, Symbol: u.symbol, Expr: expression(u), Text: text, UCUM: u.ucum, Aliases: u.aliases,
-			})
-			if u.symbol == q.si {
-				v.SIUnit = u.name
-			}
-			if u.symbol == q.us {
-				v.USUnit = u.name
-			}
+			v.Units = append(v.Units, unitView{u, text})
 		}
-		views = append(views, v)
+		view.Quantities = append(view.Quantities, v)
 	}
-	return views, nil
+	return view, nil
 }
 
-// expression is the factor of u as a Go constant expression.
-func expression(u unit) string {
-	switch {
-	case u.den == "":
-		return u.num
-	case strings.Contains(u.den, " "):
-		return u.num + " / (" + u.den + ")"
-	}
-	return u.num + " / " + u.den
-}
-
-// evaluator returns a function that writes the factor of a unit exactly: as a
-// decimal, or where it has none as the quotient of two.
-func evaluator() (func(unit) (string, error), error) {
-	pkg := types.NewPackage("factors", "factors")
-	fset := token.NewFileSet()
-	eval := func(expr string) (constant.Value, error) {
-		tv, err := types.Eval(fset, pkg, token.NoPos, expr)
-		if err != nil {
-			return nil, err
-		}
-		return constant.ToFloat(tv.Value), nil
-	}
-	for _, b := range bases {
-		v, err := eval(b.value)
-		if err != nil {
-			return nil, fmt.Errorf("%s: %w", b.name, err)
-		}
-		pkg.Scope().Insert(types.NewConst(token.NoPos, pkg, b.name, types.Typ[types.UntypedFloat], v))
-	}
-	return func(u unit) (string, error) {
-		whole, err := eval(expression(u))
-		if err != nil {
-			return "", err
-		}
-		if text, ok := decimalText(whole); ok {
-			return text, nil
-		}
-		num, err := eval(u.num)
-		if err != nil {
-			return "", err
-		}
-		den, err := eval(u.den)
-		if err != nil {
-			return "", err
-		}
-		n, ok1 := decimalText(num)
-		d, ok2 := decimalText(den)
-		if !ok1 || !ok2 {
-			return "", fmt.Errorf("%s is not a quotient of decimals", expression(u))
-		}
-		return n + "/" + d, nil
-	}, nil
-}
-
-// decimalText writes v as a decimal, if it has a finite one.
-func decimalText(v constant.Value) (string, bool) {
-	r, ok := new(big.Rat).SetString(v.ExactString())
-	if !ok {
-		return "", false
-	}
-	digits, exact := r.FloatPrec()
-	if !exact {
-		return "", false
-	}
-	return r.FloatString(digits), true
-}
-
-// methods returns the products of which the named quantity is the receiver,
-// sorted by name.
-func methods(name string) []methodView {
-	var out []methodView
-	add := func(method, operand, result, op string) {
-		m := methodView{Name: method, Params: "x " + operand, Result: result, Doc: "q " + op + " x"}
-		expr := "q." + fieldOf(name) + " " + op + " x." + fieldOf(operand)
-		m.Body = expr
+// methods returns the methods that products and inverses give the named
+// quantity, sorted by name.
+func (t table) methods(name string) []method {
+	var out []method
+	add := func(called, operand, result, op string) {
+		m := method{Name: called, Params: "x " + operand, Result: result, Doc: "q " + op + " x"}
+		m.Body = "q." + t.field(name) + " " + op + " x." + t.field(operand)
 		if result == "" {
-			m.Result, m.Doc = "float64", m.Doc+" as a plain number"
+			m.Result = "float64"
+			m.Doc += " as a plain number"
 		} else {
-			m.Body = result + "{" + expr + "}"
+			m.Body = result + "{" + m.Body + "}"
 		}
 		out = append(out, m)
 	}
-	for _, p := range products {
-		if p.a == name {
-			add("Mul"+p.b, p.b, p.c, "*")
+	for _, p := range t.Products {
+		if p.A == name {
+			add("Mul"+p.B, p.B, p.C, "*")
 		}
-		if p.b == name && p.a != p.b {
-			add("Mul"+p.a, p.a, p.c, "*")
+		if p.B == name && p.A != p.B {
+			add("Mul"+p.A, p.A, p.C, "*")
 		}
-		if p.c == name {
-			div := p.divB
-			if div == "" {
-				div = "Div" + p.b
-			}
-			if div != "-" {
-				add(div, p.b, p.a, "/")
-			}
-			if p.a != p.b {
-				add("Div"+p.a, p.a, p.b, "/")
-			}
+		if p.C != name {
+			continue
 		}
-	}
-	for _, pair := range inverses {
-		for i, from := range pair {
-			if from == name {
-				to := pair[1-i]
-				out = append(out, methodView{Name: "Inverse", Result: to, Doc: "1 / q",
-					Body: to + "{1 / q." + fieldOf(name) + "}"})
-			}
+		switch p.DivB {
+		case "":
+			add("Div"+p.B, p.B, p.A, "/")
+		case "-":
+		default:
+			add(p.DivB, p.B, p.A, "/")
+		}
+		if p.A != p.B {
+			add("Div"+p.A, p.A, p.B, "/")
 		}
 	}
-	slices.SortFunc(out, func(a, b methodView) int { return strings.Compare(a.Name, b.Name) })
+	for _, inv := range t.Inverses {
+		to := ""
+		switch name {
+		case inv.A:
+			to = inv.B
+		case inv.B:
+			to = inv.A
+		default:
+			continue
+		}
+		out = append(out, method{Name: "Inverse", Doc: "1 / q", Result: to, Body: to + "{1 / q." + t.field(name) + "}"})
+	}
+	slices.SortFunc(out, func(a, b method) int { return strings.Compare(a.Name, b.Name) })
 	return out
 }
 
-// validate refuses a table that is inconsistent in itself.
-func validate() error {
-	var errs []error
-	fail := func(format string, args ...any) { errs = append(errs, fmt.Errorf(format, args...)) }
-	byName := map[string]quantity{}
-	names := map[string]bool{}
-	fields := map[string]bool{}
-	for _, q := range quantities {
-		byName[q.name] = q
-		if fields[q.field] {
-			fail("%s: field %s is taken; a conversion between the two types would compile", q.name, q.field)
+// productCases returns a test of each method that products and inverses make.
+// It goes by the table, not by what methods makes of it.
+func (t table) productCases() []productCase {
+	var out []productCase
+	call := func(receiver string, x int, method, operand string, y int, result string, z int) {
+		c := productCase{
+			Name: receiver + "." + method,
+			Got:  fmt.Sprintf("%s(%d).%s(%s(%d))", variable(receiver), x, method, variable(operand), y),
 		}
-		fields[q.field] = true
-		if q.units[0].num != "1" || q.units[0].den != "" {
-			fail("%s: the first unit must be the SI unit", q.name)
+		if result == "" {
+			c.Got, c.Want = "units.Plain("+c.Got+")", fmt.Sprintf("units.Plain(%d)", z)
+		} else {
+			c.Got, c.Want = c.Got+".Amount()", fmt.Sprintf("%s(%d).Amount()", variable(result), z)
 		}
-		symbols := map[string]bool{}
-		for _, u := range q.units {
-			if names[u.name] {
-				fail("%s: unit name %s is taken", q.name, u.name)
-			}
-			names[u.name] = true
-			for _, s := range append([]string{u.symbol}, u.aliases...) {
-				if symbols[s] {
-					fail("%s: symbol %s is taken", q.name, s)
-				}
-				symbols[s] = true
-			}
-		}
-		if !symbols[q.si] || !symbols[q.us] {
-			fail("%s: the printed units %s and %s must be among its units", q.name, q.si, q.us)
-		}
+		out = append(out, c)
 	}
-	for _, p := range products {
-		a, okA := byName[p.a]
-		b, okB := byName[p.b]
-		c, okC := byName[p.c]
-		if !okA || !okB || !okC && p.c != "" {
-			fail("%s x %s = %s: unknown quantity", p.a, p.b, p.c)
+	for _, p := range t.Products {
+		call(p.A, 6, "Mul"+p.B, p.B, 7, p.C, 42)
+		if p.A != p.B {
+			call(p.B, 7, "Mul"+p.A, p.A, 6, p.C, 42)
+		}
+		if p.C == "" {
 			continue
 		}
-		for i := range a.dim {
-			if a.dim[i]+b.dim[i] != c.dim[i] {
-				fail("%s x %s = %s: dimensions do not agree", p.a, p.b, p.c)
-				break
-			}
+		switch p.DivB {
+		case "":
+			call(p.C, 42, "Div"+p.B, p.B, 7, p.A, 6)
+		case "-":
+		default:
+			call(p.C, 42, p.DivB, p.B, 7, p.A, 6)
+		}
+		if p.A != p.B {
+			call(p.C, 42, "Div"+p.A, p.A, 6, p.B, 7)
 		}
 	}
-	for _, q := range quantities {
-		seen := map[string]bool{}
-		for _, m := range methods(q.name) {
-			if seen[m.Name] {
-				fail("%s.%s is made twice", q.name, m.Name)
-			}
-			seen[m.Name] = true
+	for _, inv := range t.Inverses {
+		for _, pair := range [][2]string{{inv.A, inv.B}, {inv.B, inv.A}} {
+			out = append(out, productCase{
+				Name: pair[0] + ".Inverse",
+				Got:  variable(pair[0]) + "(4).Inverse().Amount()",
+				Want: variable(pair[1]) + "(0.25).Amount()",
+			})
 		}
 	}
-	return errors.Join(errs...)
+	return out
 }
 
-func fieldOf(name string) string {
-	i := slices.IndexFunc(quantities, func(q quantity) bool { return q.name == name })
-	if i < 0 {
+// field returns the name of the field of the named quantity.
+func (t table) field(name string) string {
+	for _, q := range t.Quantities {
+		if q.Name == name {
+			return q.Field
+		}
+	}
+	return ""
+}
+
+// Dimension is the Go name of q's dimension.
+func (q quantity) Dimension() string { return "Dim" + q.Name }
+
+// SIUnit is the symbol of the unit that q is kept in.
+func (q quantity) SIUnit() string { return q.Units[0].Symbol }
+
+// Variable is a name for a variable of type q.
+func (q quantity) Variable() string { return variable(q.Name) }
+
+// A returns the name of q with its article.
+func (q quantity) A() string {
+	if strings.ContainsRune("AEIOaeio", rune(q.Name[0])) {
+		return "an " + q.Name
+	}
+	return "a " + q.Name
+}
+
+// Preferred is the Go name of the unit with the given symbol.
+func (q quantity) Preferred(symbol string) string {
+	for _, u := range q.Units {
+		if u.Symbol == symbol {
+			return u.Name
+		}
+	}
+	return ""
+}
+
+// Expr is the factor of u as a Go constant expression.
+func (u unit) Expr() string {
+	switch {
+	case u.Den == "":
+		return u.Num
+	case strings.Contains(u.Den, " "):
+		return u.Num + " / (" + u.Den + ")"
+	}
+	return u.Num + " / " + u.Den
+}
+
+// variable turns LineLoad into lineLoad.
+func variable(name string) string {
+	if name == "" {
 		return ""
 	}
-	return quantities[i].field
-}
-
-func article(name string) string {
-	if strings.ContainsRune("AEIO", rune(name[0])) {
-		return "An"
-	}
-	return "A"
+	return strings.ToLower(name[:1]) + name[1:]
 }
 
 // snake turns LineLoad into line_load.

@@ -28,7 +28,7 @@ func main() {
 // run brings the generated files in dir up to date, or with check reports
 // those that are not.
 func run(dir string, check bool) error {
-	files, err := generate()
+	files, err := generate(catalog)
 	if err != nil {
 		return err
 	}
