@@ -56,7 +56,7 @@ func parse(d Dimension, text string) (float64, error) {
 	}
 	if inches, ok := strings.CutPrefix(symbol, Foot.String()); ok && d == DimLength {
 		inches = strings.TrimLeft(inches, " ")
-		if strings.IndexAny(inches, "0123456789") >= 0 && strings.IndexByte("0123456789.+-", inches[0]) >= 0 {
+		if strings.ContainsAny(inches, "0123456789") && strings.IndexByte("0123456789.+-", inches[0]) >= 0 {
 			return feetAndInches(text, n, inches)
 		}
 	}
@@ -80,10 +80,13 @@ func feetAndInches(text string, feet number, inches string) (float64, error) {
 	}
 	whole := 12 * feet.integer
 	var total float64
-	if n.den > 0 {
+	switch {
+	case n.den > 0:
 		n.integer += whole
 		total = n.value()
-	} else {
+	case n.whole():
+		total = float64(whole + n.integer)
+	default:
 		part, err := decimal.NewFromString(n.text)
 		if err != nil {
 			return 0, refuse(DimLength, text, `has inches that are not a number; write e.g. "26 ft 6 in"`)
