@@ -1,0 +1,64 @@
+package aci318
+
+import "soffit.example/beam"
+
+// judgeWhole appends the limits of the member as such, and names what belongs
+// to the job and is not judged.
+func (e *edition) judgeWhole(dst []beam.Check, t *beam.Trial) []beam.Check {
+	dst = e.appendDepth(dst, t)
+	dst = e.appendSideFace(dst, t)
+	dst = e.appendBracing(dst, t)
+	if hangs(&t.Brief) {
+		dst = append(dst, notJudgedHanger)
+	}
+	return append(dst, notJudged[:]...)
+}
+
+// bracedWidths is the greatest spacing of lateral bracing over the least width
+// of the compression face (9.2.3.1).
+const bracedWidths = 50
+
+func (e *edition) appendBracing(dst []beam.Check, t *beam.Trial) []beam.Check {
+	b := &t.Brief
+	if b.Braced.IsZero() {
+		return append(dst, beam.NotJudgedCheck("bracing.spacing", "9.2.3.1",
+			"the spacing of lateral bracing of the compression face is not given; the beam is taken as braced"))
+	}
+	c := beam.Check{ID: "bracing.spacing", Clause: "9.2.3.1"}
+	c.Compare(b.Braced.Amount(), b.Section.Width.Scale(bracedWidths).Amount())
+	return append(dst, c)
+}
+
+// hangs reports a load or a support that pulls on the lower part of the beam.
+func hangs(b *beam.Brief) bool {
+	for i := range b.Supports {
+		if b.Supports[i].Hung {
+			return true
+		}
+	}
+	for i := range b.Loads {
+		if b.Loads[i].Hung {
+			return true
+		}
+	}
+	return false
+}
+
+var notJudgedHanger = beam.NotJudgedCheck("shear.hanger-steel", "R9.4.3.2",
+	"a load or a support hangs on the beam: the steel that lifts it to the top of the beam is not designed by this version")
+
+// notJudged are limit states of the standard that this version leaves open.
+var notJudged = [...]beam.Check{
+	beam.NotJudgedCheck("development.anchorage", "9.7.1, 25.4",
+		"bars run the full length of the beam; whether they are developed at the supports and past critical sections is not judged by this version"),
+	beam.NotJudgedCheck("cutoff.extension", "9.7.3",
+		"no bar is cut off inside the beam; extensions into the supports (9.7.3.8) are not judged by this version"),
+	beam.NotJudgedCheck("integrity.continuity", "9.7.7",
+		"whether the beam is one of a perimeter, and how its bars go on into its neighbours, is not part of the input"),
+	beam.NotJudgedCheck("seismic.detailing", "Chapter 18",
+		"the seismic-force-resisting system and the design category are not part of the input"),
+	beam.NotJudgedCheck("durability.exposure", "19.3",
+		"the exposure categories F, S, W and C are not part of the input; only cover is judged"),
+	beam.NotJudgedCheck("fire.cover", "4.11",
+		"the fire rating is not part of the input; it may call for more cover"),
+}

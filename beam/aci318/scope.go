@@ -1,0 +1,194 @@
+package aci318
+
+import (
+	"fmt"
+	"math"
+	"slices"
+
+	"soffit.example/bars"
+	"soffit.example/beam"
+	"soffit.example/beam/statics"
+	"soffit.example/units"
+)
+
+// scopeRules are the limits beyond which the sectional method does not apply.
+type scopeRules struct {
+	deepSpan float64 // of h: clear span of a deep beam, 9.9.1.1(a)
+	deepLoad float64 // of h: from the face of a support to a concentrated load, 9.9.1.1(b)
+	axial    float64 // of f'c Ag: from which axial compression counts, 9.3.3.1 and 9.5.2.2
+}
+
+var (
+	scopeUS = scopeRules{deepSpan: 4, deepLoad: 2, axial: 0.10}
+	scopeSI = scopeRules{deepSpan: 4, deepLoad: 2, axial: 0.10}
+)
+
+// scopeWords is what every edition refuses, or leaves out, in words.
+var scopeWords = []string{
+	"deep beams: clear spans of at most 4h, cantilevers of at most 2h (9.9)",
+	"concentrated loads within 2h of the face of a support that they press towards (9.9)",
+	"axial compression of at least 0.10 f'c Ag, and axial tension (22.4)",
+	"torsion not below its threshold (22.7)",
+	"concrete below the least strength of 19.2.1.1, and densities outside 19.2.2.1",
+	"bars that are not of ASTM sizes (20.2.1.3), or stronger than Table 20.2.2.4 allows",
+	"flanged and hollow sections, openings, prestress, shotcrete and steel fibres",
+	"seismic detailing (chapter 18), and strut-and-tie design (chapter 23)",
+}
+
+// scopeOf names every rule that puts a problem outside the method.
+func (e *edition) scopeOf(p *beam.Problem) []beam.Refusal {
+	b := &p.Brief
+	out := e.materialRefusals(&b.Concrete, b.Reinforcement.Yield)
+	out = append(out, barRefusals(p)...)
+	for span := 1; span <= p.Forces.Spans(); span++ {
+		out = append(out, e.deepRefusals(p, span)...)
+	}
+	for _, d := range p.Forces.Demands() {
+		out = append(out, e.axialRefusals(b.Section, &b.Concrete, d.Axial, d.Combination)...)
+	}
+	return append(out, e.torsionRefusals(p)...)
+}
+
+// barRefusals names a catalog or sizes that the standard does not know.
+func barRefusals(p *beam.Problem) []beam.Refusal {
+	b := &p.Brief
+	if known := []string{"astm-inch", "astm-metric"}; !slices.Contains(known, b.Reinforcement.Catalog) {
+		return []beam.Refusal{{
+			Rule: "scope.bar-catalog", Clause: "20.2.1.3",
+			Detail: fmt.Sprintf("bars of catalog %s are not bars of the ASTM standards that 20.2.1.3 names; those of %s and %s are", b.Reinforcement.Catalog, known[0], known[1]),
+		}}
+	}
+	var out []beam.Refusal
+	for _, use := range []struct {
+		what  string
+		as    bars.Use
+		names []string
+		rule  string
+	}{
+		{"longitudinal bars", bars.Main, b.Preferences.Bars, "sizes No. 3 to No. 18 may be"},
+		{"stirrups", bars.Stirrup, b.Preferences.Stirrups, "Table 25.3.2 has bends for No. 3 to No. 8"},
+	} {
+		allowed := len(use.names) == 0
+		for _, name := range use.names {
+			s, err := p.Catalog.Size(name)
+			allowed = allowed || err == nil && p.Code.Allows(use.as, s)
+		}
+		if !allowed {
+			out = append(out, beam.Refusal{
+				Rule: "scope.bar-size", Clause: "25.3",
+				Detail: fmt.Sprintf("none of the sizes %v may be used for %s: %s", use.names, use.what, use.rule),
+			})
+		}
+	}
+	return out
+}
+
+// deepRefusals names what makes a span, or a part of it, a deep beam. The
+// limit of 9.9.1.1 is put for spans between supports; half of it is taken for
+// the projection of a cantilever, which is half of such a span.
+func (e *edition) deepRefusals(p *beam.Problem, span int) []beam.Refusal {
+	b, r := &p.Brief, &e.scope
+	var out []beam.Refusal
+	h, clear := b.Section.Depth, p.ClearSpan(span)
+	limit, what := r.deepSpan, "clear span"
+	if b.Supports[span-1].Kind == statics.Free || b.Supports[span].Kind == statics.Free {
+		limit, what = r.deepSpan/2, "projection"
+	}
+	if clear.AtMost(h.Scale(limit)) {
+		out = append(out, beam.Refusal{
+			Rule: "scope.deep-beam", Clause: "9.9.1.1(a)",
+			Detail: fmt.Sprintf("%s %s of span %d is at most %g h = %s: a deep beam, to be designed by 9.9 or chapter 23",
+				what, e.length.Format(clear), span, limit, e.length.Format(h.Scale(limit))),
+		})
+	}
+	left, right := p.Faces(span)
+	for i := range b.Loads {
+		l := &b.Loads[i]
+		if l.Shape != beam.PointLoad || l.Force.IsZero() || l.Hung || l.Span != 0 && l.Span != span {
+			continue
+		}
+		for end, from := range [2]units.Length{l.At.Sub(left), right.Sub(l.At)} {
+			s := &b.Supports[span-1+end]
+			if s.Kind == statics.Free || s.Hung || from.AtMost(units.Length{}) || !from.AtMost(h.Scale(r.deepLoad)) {
+				continue
+			}
+			out = append(out, beam.Refusal{
+				Rule: "scope.load-within-2h", Clause: "9.9.1.1(b)",
+				Detail: fmt.Sprintf("load %d acts %s from the face of support %d, which is within %g h = %s: that region is a deep beam, to be designed by 9.9 or chapter 23",
+					i+1, e.length.Format(from), span+end, r.deepLoad, e.length.Format(h.Scale(r.deepLoad))),
+			})
+		}
+	}
+	return out
+}
+
+// axialRefusals names an axial force that pure bending does not cover: 9.5.2.1
+// lets compression below 0.10 f'c Ag be left out of flexure, and says nothing
+// of tension, which it would not be safe to leave out.
+func (e *edition) axialRefusals(s beam.Section, c *beam.Concrete, axial units.Force, name string) []beam.Refusal {
+	limit := c.Strength.MulArea(s.Width.MulLength(s.Depth)).Scale(e.scope.axial)
+	switch {
+	case axial.Less(units.Force{}):
+		return []beam.Refusal{{
+			Rule: "scope.axial", Clause: "9.5.2.1",
+			Detail: "axial tension of " + e.force.Format(axial.Neg()) + named(name) + ": flexure is judged as pure bending, which tension weakens; 22.4 applies",
+		}}
+	case !axial.IsZero() && limit.AtMost(axial):
+		return []beam.Refusal{{
+			Rule: "scope.axial", Clause: "9.5.2.2",
+			Detail: "axial compression of " + e.force.Format(axial) + named(name) + " is not below 0.10 f'c Ag = " + e.force.Format(limit) + ": 22.4 applies",
+		}}
+	}
+	return nil
+}
+
+// named puts the name of a demand or combination after a value.
+func named(name string) string {
+	if name == "" {
+		return ""
+	}
+	return " (" + name + ")"
+}
+
+// torsionRefusals names a torque that may not be neglected (9.5.4.1).
+func (e *edition) torsionRefusals(p *beam.Problem) []beam.Refusal {
+	a, t, ok := e.worstTorque(p)
+	if !ok || t.neglects(e, a.Torque) {
+		return nil
+	}
+	return []beam.Refusal{e.torsionRefusal(&t, a.Torque, a.Combination)}
+}
+
+// torsionRefusal names a torque against the threshold that it reaches.
+func (e *edition) torsionRefusal(t *torsionStrength, torque units.Moment, name string) beam.Refusal {
+	return beam.Refusal{
+		Rule: "scope.torsion", Clause: "9.5.4.1",
+		Detail: "torque of " + e.moment.Format(torque.Abs()) + named(name) + " is not below φTth = " +
+			e.moment.Format(e.momentOf(t.phi*t.threshold)) + ": the beam must be designed for torsion by 22.7",
+	}
+}
+
+// worstTorque is the action whose torque comes nearest its threshold; ok is
+// false where no torque acts.
+func (e *edition) worstTorque(p *beam.Problem) (worst beam.Action, strength torsionStrength, ok bool) {
+	most := 0.0
+	take := func(a beam.Action) {
+		if a.Torque.IsZero() {
+			return
+		}
+		t := e.torsionStrength(p.Brief.Section, &p.Brief.Concrete, a.Axial)
+		if u := ratio(math.Abs(e.momentIn(a.Torque)), t.phi*t.threshold); !ok || u > most {
+			worst, strength, most, ok = a, t, u, true
+		}
+	}
+	for span := 1; span <= p.Forces.Spans(); span++ {
+		from, to := p.Faces(span)
+		if a, acts := p.Forces.Torque(span, from, to); acts {
+			take(a)
+		}
+	}
+	for _, d := range p.Forces.Demands() {
+		take(d)
+	}
+	return worst, strength, ok
+}

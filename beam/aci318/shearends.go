@@ -1,0 +1,152 @@
+package aci318
+
+import (
+	"soffit.example/beam"
+	"soffit.example/beam/statics"
+	"soffit.example/units"
+)
+
+// shearEnd is one end of a span: from where its sections are designed for the
+// shear acting on them. Where 9.4.3.2 permits it, sections between the face of
+// the support and d from it take the shear at d.
+type shearEnd struct {
+	face     units.Length
+	critical units.Length // d from the face, or the face itself
+	note     string       // what was decided
+	left     bool
+}
+
+// What is said of the critical section.
+const (
+	noteAtDepth     = "sections nearer the face of the support take the shear at d from it (9.4.3.2)"
+	noteFreeEnd     = "a free end: every section takes its own shear"
+	noteHungSupport = "shear at the face, not at d: the reaction does not compress the end of the beam (9.4.3.2(a))"
+	noteHungLoad    = "shear at the face, not at d: a load hangs below the top of the beam (9.4.3.2(b))"
+	noteLoadInDepth = "shear at the face, not at d: a concentrated load acts between the two (9.4.3.2(c))"
+	noteNoSteel     = "shear at the face: there is no steel in tension to measure d to"
+	notePulled      = "shear at the face, not at d: under this combination the reaction pulls (9.4.3.2(a))"
+	noteNoStirrups  = "judged without stirrups: there are none"
+	noteGap         = "judged without stirrups: no zone of the layout reaches this length"
+	noteNotRequired = "stirrups are not required here: Vu is below the shear that calls for them, and below φVc"
+	noteHook        = "a standard hook round a bar develops stirrups of this size and strength"
+)
+
+// shearEnds decides both ends of a span.
+func shearEnds(t *beam.Trial, span int) (ends [2]shearEnd) {
+	left, right := t.Faces(span)
+	ends[0] = shearEnd{face: left, critical: left, left: true}
+	ends[1] = shearEnd{face: right, critical: right}
+	for i := range ends {
+		ends[i].decide(t, span, &t.Brief.Supports[span-1+i])
+	}
+	return ends
+}
+
+// decide finds the critical section of an end from the beam itself; whether
+// the reaction pushes is seen to combination by combination.
+func (s *shearEnd) decide(t *beam.Trial, span int, support *beam.Support) {
+	switch {
+	case support.Kind == statics.Free:
+		s.note = noteFreeEnd
+		return
+	case support.Hung:
+		s.note = noteHungSupport
+		return
+	case hungLoads(&t.Brief, span):
+		s.note = noteHungLoad
+		return
+	}
+	d := s.depth(t, span)
+	if d.IsZero() {
+		s.note = noteNoSteel
+		return
+	}
+	critical := s.inward(d)
+	if concentrated(&t.Brief, span, s.face, critical) {
+		s.note = noteLoadInDepth
+		return
+	}
+	s.critical, s.note = critical, noteAtDepth
+}
+
+// inward is the place at a distance from the face into the span.
+func (s *shearEnd) inward(by units.Length) units.Length {
+	if s.left {
+		return s.face.Add(by)
+	}
+	return s.face.Sub(by)
+}
+
+// depth is the least d of the senses that bend the end region, which gives the
+// critical section nearest the face.
+func (s *shearEnd) depth(t *beam.Trial, span int) units.Length {
+	from, to := s.face, s.inward(t.Brief.Section.Depth)
+	if !s.left {
+		from, to = to, from
+	}
+	to = to.Min(t.Brief.Spans[span-1])
+	from = from.Max(units.Length{})
+	var least units.Length
+	for _, sense := range [2]beam.Sense{beam.Positive, beam.Negative} {
+		if _, bends := t.Forces.Moment(sense, span, from, to); !bends {
+			continue
+		}
+		d := t.EffectiveDepth(sense)
+		if d.IsZero() {
+			return units.Length{}
+		}
+		if least.IsZero() || d.Less(least) {
+			least = d
+		}
+	}
+	return least
+}
+
+// start is the end's critical section under combination i, and what was
+// decided.
+func (s *shearEnd) start(f *beam.Forces, i, span int) (units.Length, string) {
+	if s.critical == s.face {
+		return s.face, s.note
+	}
+	shear := f.Action(i, span, s.face, s.left).Shear
+	if !s.left {
+		shear = shear.Neg()
+	}
+	if shear.Less(units.Force{}) {
+		return s.face, notePulled
+	}
+	return s.critical, s.note
+}
+
+// hungLoads reports a load applied at or below the soffit of a span.
+func hungLoads(b *beam.Brief, span int) bool {
+	for i := range b.Loads {
+		if l := &b.Loads[i]; l.Hung && (l.Span == 0 || l.Span == span) {
+			return true
+		}
+	}
+	return false
+}
+
+// concentrated reports a point load or a couple on the span between two
+// places, the second of them included.
+func concentrated(b *beam.Brief, span int, face, critical units.Length) bool {
+	reach := critical.Sub(face).Abs()
+	for i := range b.Loads {
+		l := &b.Loads[i]
+		if l.Span != 0 && l.Span != span {
+			continue
+		}
+		if l.Shape != beam.PointLoad && l.Shape != beam.Couple || l.Force.IsZero() && l.Moment.IsZero() {
+			continue
+		}
+		from := l.At.Sub(face)
+		if critical.Less(face) {
+			from = from.Neg()
+		}
+		if !from.AtMost(units.Length{}) && from.AtMost(reach) {
+			return true
+		}
+	}
+	return false
+}

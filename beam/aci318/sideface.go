@@ -1,0 +1,83 @@
+package aci318
+
+import (
+	"soffit.example/beam"
+	"soffit.example/units"
+)
+
+// appendSideFace appends the checks on bars along the side faces (9.7.2.3). In
+// a beam deeper than the limit they lie on both sides over half the depth from
+// a face in tension, no further apart than 24.3.2 allows with the cover to the
+// side face. The bars nearest that face are the first of the row, and the last
+// may leave no more than a spacing to mid-depth.
+func (e *edition) appendSideFace(dst []beam.Check, t *beam.Trial) []beam.Check {
+	const clause = "9.7.2.3"
+	depth := t.Brief.Section.Depth
+	if units.AtMost(e.lengthIn(depth), e.crack.deep) {
+		c := beam.NotApplicableCheck("side-face.spacing", clause, "the beam is no deeper than the limit beyond which side faces need bars")
+		return append(dst, c)
+	}
+	cc := barCover(t)
+	yield := t.Brief.Reinforcement.Yield
+	most := e.crackSpacing(e.crackStress(yield), cc)
+	for _, sense := range [2]beam.Sense{beam.Positive, beam.Negative} {
+		face := sense.TensionFace()
+		steel := t.Steel(face)
+		if !bendsAnywhere(t, sense) || steel.Count == 0 {
+			continue
+		}
+		c := beam.Check{ID: "side-face.spacing", Clause: clause, Face: face}
+		c.Compare(sideGap(t, face, steel.Nearest).Amount(), most.Amount())
+		if t.Side.Each == 0 && c.Outcome == beam.Fail {
+			c.Reason = "there are no bars along the side faces"
+		}
+		if t.Record {
+			var out working
+			e.crackSteps(&out, yield, cc)
+			out.given("s", "greatest distance left between bars along the side, over half the depth", clause,
+				e.asLength(e.lengthIn(sideGap(t, face, steel.Nearest))))
+			c.Steps = out.steps
+		}
+		dst = append(dst, c)
+	}
+	return dst
+}
+
+// bendsAnywhere reports whether any action bends the beam in a sense.
+func bendsAnywhere(t *beam.Trial, s beam.Sense) bool {
+	for span := 1; span <= t.Forces.Spans(); span++ {
+		if _, ok := t.Forces.Moment(s, span, units.Length{}, t.Brief.Spans[span-1]); ok {
+			return true
+		}
+	}
+	for i := range t.Forces.Demands() {
+		if m := t.Forces.Demands()[i].Moment.In(units.NewtonMetre); s == beam.Positive && m > 0 || s == beam.Negative && m < 0 {
+			return true
+		}
+	}
+	return false
+}
+
+// sideGap is the greatest distance along the side between bars, from the
+// layer nearest a face to mid-depth. Side bars are counted from the bars
+// nearest their own tension face, whichever face is asked for.
+func sideGap(t *beam.Trial, face beam.Face, first units.Length) units.Length {
+	depth := t.Brief.Section.Depth
+	half := depth.Scale(0.5)
+	s := &t.Side
+	origin := t.Steel(s.TensionFace).Nearest
+	var worst units.Length
+	before := first
+	for i := 1; i <= s.Each && before.Less(half); i++ {
+		at := origin.Add(s.Spacing.Scale(float64(i)))
+		if face != s.TensionFace {
+			at = depth.Sub(origin.Add(s.Spacing.Scale(float64(s.Each + 1 - i))))
+		}
+		worst = worst.Max(at.Sub(before))
+		before = at
+	}
+	if before.Less(half) {
+		worst = worst.Max(half.Sub(before))
+	}
+	return worst
+}
