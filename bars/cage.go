@@ -77,7 +77,7 @@ func (c *Cage) Outside() (width, depth units.Length) {
 // form is a cage in metres.
 type form struct {
 	width    float64
-	depth    float64 // of the space inside the stirrup; +Inf if unchecked
+	top      float64 // from the face to the inner face of the opposite leg; +Inf if unchecked
 	side     float64 // from the side face to the inner face of the side leg
 	base     float64 // from the face to the inner face of the horizontal leg
 	radius   float64 // inside, of the bends; 0 without a stirrup
@@ -97,7 +97,7 @@ func (g gap) between(a, b float64) float64 {
 func (c *Cage) form(need Clearances) (form, error) {
 	f := form{
 		width:    c.Width.In(units.Metre),
-		depth:    math.Inf(1),
+		top:      math.Inf(1),
 		side:     c.SideCover.In(units.Metre),
 		base:     c.FaceCover.In(units.Metre),
 		tucked:   c.Corner == Tucked,
@@ -133,7 +133,7 @@ func (c *Cage) form(need Clearances) (form, error) {
 		if !(depth > 0 && depth <= maxWidth) {
 			return f, outside("depth", c.Depth, "more than 0 m, at most 100 m; or zero for unchecked")
 		}
-		f.depth = depth - f.base // the opposite leg's inner face
+		f.top = depth - f.base
 	}
 	return f, nil
 }
@@ -183,6 +183,18 @@ func (f *form) tuck(r float64) float64 {
 		return r
 	}
 	return f.radius - (f.radius-r)/math.Sqrt2
+}
+
+// wall is the distance of a bar of radius r from the inner face of the side
+// leg when it touches the leg or, below the tangent point, the bend; y is the
+// height of its centre over the horizontal leg's inner face.
+func (f *form) wall(r, y float64) float64 {
+	if r >= f.radius || y >= f.radius {
+		return r
+	}
+	rise := (f.radius - r) * (f.radius - r)
+	rise -= (f.radius - y) * (f.radius - y)
+	return f.radius - math.Sqrt(max(0, rise))
 }
 
 // corner is where a corner bar of radius r lies, from the inner faces of the

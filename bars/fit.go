@@ -50,10 +50,10 @@ type LayerFit struct {
 	First, Count int          // its bars are Fit.Bars[First : First+Count], left to right
 	Centroid     units.Length // from the face, weighted by area
 	Cover        units.Length // least clear distance from the face to a bar
-	// Beside is the pair of neighbours with least to spare, and Below the
-	// pair with the layer below; of uniform bars they are the closest pairs.
+	// Beside is the pair of the layer's bars with least to spare, and Below
+	// the pair with the layer below; of uniform bars they are the closest.
 	Beside, Below Gap
-	LeastClear    units.Length // closest neighbours in the layer; zero with one bar
+	LeastClear    units.Length // between bars of the layer; zero with one bar
 	// Spacing is the largest distance between the centres of neighbours, as
 	// crack control asks for; zero with one bar.
 	Spacing   units.Length
@@ -105,9 +105,9 @@ func (f *Fit) Lay(c *Cage, layers []Layer, need Clearances) error {
 	if err := checkLayers(layers); err != nil {
 		return err
 	}
-	f.width, f.inside = shape.width, true
-	level := shape.base // of the bottoms of the layer's bars
-	least := 2 * (shape.side + shape.radius)
+	level := shape.base                      // of the bottoms of the layer's bars
+	least := 2 * (shape.side + shape.radius) // the stirrup itself
+	f.width, f.inside = shape.width, units.AtMost(least, shape.width)
 	for i := range layers {
 		first, start := len(f.Bars), 0 // start of the layer below
 		if i > 0 {

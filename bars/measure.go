@@ -22,6 +22,7 @@ func measure(f *form, row, below []Placed, first int) LayerFit {
 	}
 	var area, moment float64
 	cover := math.Inf(1)
+	near := reach(row)
 	for i := range row {
 		b := &row[i]
 		x, y, r := b.metres()
@@ -31,29 +32,31 @@ func measure(f *form, row, below []Placed, first int) LayerFit {
 		cover = min(cover, y-r)
 		for j := range below {
 			u, v, s := below[j].metres()
-			clear := math.Hypot(x-u, y-v) - r - s
-			g := newGap(clear, f.vertical.between(r, s), first-len(below)+j, first+i)
+			g := newGap(math.Hypot(x-u, y-v), r, s, f.vertical)
+			g.A, g.B = first-len(below)+j, first+i
 			if g.tighter(on.Below) {
 				on.Below = g
 			}
 		}
-		if i == 0 {
-			continue
-		}
-		u, v, s := row[i-1].metres()
-		centres := math.Hypot(x-u, y-v)
-		on.Spacing = on.Spacing.Max(units.Metre.Of(centres))
-		if x < u {
-			// The form is so narrow that the bars changed places: count the
-			// distance as negative, so that it grows with the width throughout.
-			centres = -centres
-		}
-		g := newGap(centres-r-s, f.clear.between(r, s), first+i-1, first+i)
-		if g.tighter(on.Beside) {
-			on.Beside = g
-		}
-		if i == 1 || g.Clear.Less(on.LeastClear) {
-			on.LeastClear = g.Clear
+		for j := i - 1; j >= max(0, i-near); j-- {
+			u, v, s := row[j].metres()
+			centres := math.Hypot(x-u, y-v)
+			if j == i-1 {
+				on.Spacing = on.Spacing.Max(units.Metre.Of(centres))
+			}
+			if x < u {
+				// The form is so narrow that the bars changed places: count the
+				// distance as negative, so that it grows with the width throughout.
+				centres = -centres
+			}
+			g := newGap(centres, r, s, f.clear)
+			g.A, g.B = first+j, first+i
+			if g.tighter(on.Beside) {
+				on.Beside = g
+			}
+			if i == 1 || g.Clear.Less(on.LeastClear) {
+				on.LeastClear = g.Clear
+			}
 		}
 	}
 	on.Centroid = units.Metre.Of(moment / area)
@@ -61,8 +64,25 @@ func measure(f *form, row, below []Placed, first int) LayerFit {
 	return on
 }
 
-func newGap(clear, required float64, a, b int) Gap {
-	return Gap{Clear: units.Metre.Of(clear), Required: units.Metre.Of(required), A: a, B: b}
+// reach is how many bars further left can be the closest to a bar: only its
+// neighbour in a row of one diameter; in others all, as two large bars can
+// meet over small ones between them.
+func reach(row []Placed) int {
+	for i := range row {
+		if row[i].Size.Diameter != row[0].Size.Diameter {
+			return len(row)
+		}
+	}
+	return 1
+}
+
+// newGap is the gap between bars of radii r and s with centres so far apart.
+func newGap(centres, r, s float64, need gap) Gap {
+	clear := centres - (r + s)
+	if math.Abs(clear) <= sameDistance*(r+s) {
+		clear = 0 // they touch; a limit of zero has no slack for rounding
+	}
+	return Gap{Clear: units.Metre.Of(clear), Required: units.Metre.Of(need.between(r, s))}
 }
 
 // symmetric reports whether a row mirrors itself about the middle of the
@@ -96,13 +116,13 @@ func aligned(row, below []Placed, width float64) bool {
 }
 
 // margin is how far a bar's centre must keep from the inner faces of the side
-// legs, wherever it lies: those resting on the horizontal leg also clear its
-// bends.
+// legs where it lies.
 func (f *form) margin(p *Placed) float64 {
 	if p.Layer == 1 {
 		return f.edge(p)
 	}
-	return p.radius()
+	_, y, r := p.metres()
+	return f.wall(r, min(y-f.base, f.top-y))
 }
 
 // holds reports whether every bar of a laid row lies inside the stirrup.
@@ -110,7 +130,7 @@ func (f *form) holds(row []Placed) bool {
 	for i := range row {
 		x, y, r := row[i].metres()
 		keep := f.side + f.margin(&row[i])
-		if !units.AtMost(keep, x) || !units.AtMost(keep, f.width-x) || !units.AtMost(y+r, f.depth) {
+		if !units.AtMost(keep, x) || !units.AtMost(keep, f.width-x) || !units.AtMost(y+r, f.top) {
 			return false
 		}
 	}
@@ -121,7 +141,7 @@ func (f *form) holds(row []Placed) bool {
 // clear distances and its margins. Every position is linear in the width, so
 // each condition gives its own least width directly.
 func (f *form) leastWidth(row []Placed) float64 {
-	least := 0.0
+	least, near := 0.0, reach(row)
 	for i := range row {
 		b := &row[i]
 		x, y, r := b.metres()
@@ -132,13 +152,12 @@ func (f *form) leastWidth(row []Placed) float64 {
 		if b.across < 1 {
 			least = max(least, f.width+(keep-(f.width-x))/(1-b.across))
 		}
-		if i == 0 {
-			continue
+		for j := i - 1; j >= max(0, i-near); j-- {
+			a := &row[j]
+			u, v, s := a.metres()
+			need := f.pitch(s, r, y-v)
+			least = max(least, f.width+(need-(x-u))/(b.across-a.across))
 		}
-		a := &row[i-1]
-		u, v, s := a.metres()
-		need := f.pitch(s, r, y-v)
-		least = max(least, f.width+(need-(x-u))/(b.across-a.across))
 	}
 	return least
 }

@@ -1,8 +1,6 @@
 package bars
 
-import (
-	"soffit.example/units"
-)
+import "soffit.example/units"
 
 // metres is the position of a bar's centre and its radius.
 func (p *Placed) metres() (x, y, r float64) {
@@ -96,8 +94,8 @@ func (f *form) step(a, b *Placed) float64 {
 
 // stack lays a row of no more bars than below directly above those: above the
 // outermost pairs, and an odd bar above the middle (of an even layer below,
-// the bar left of it). A bar too wide for its place beside the stirrup's leg
-// moves inwards.
+// the bar left of it). A bar too wide for its place in the corner moves
+// inwards.
 func (f *form) stack(row, below []Placed, level float64) {
 	m, n := len(row), len(below)
 	for i := range row {
@@ -108,14 +106,12 @@ func (f *form) stack(row, below []Placed, level float64) {
 		case i >= m/2:
 			j = n - m + i
 		}
-		r := row[i].radius()
-		x := below[j].X.In(units.Metre)
-		if below[j].across == 0 {
-			x = max(x, f.side+r)
+		row[i].put(below[j].X.In(units.Metre), level+row[i].radius(), below[j].across)
+		switch keep := units.Metre.Of(f.side + f.margin(&row[i])); row[i].across {
+		case 0:
+			row[i].X = row[i].X.Max(keep)
+		case 1:
+			row[i].X = row[i].X.Min(units.Metre.Of(f.width).Sub(keep))
 		}
-		if below[j].across == 1 {
-			x = min(x, f.width-f.side-r)
-		}
-		row[i].put(x, level+r, below[j].across)
 	}
 }
