@@ -145,8 +145,14 @@ func (e *edition) queryRefusals(q *beam.SectionQuery) []beam.Refusal {
 			out = append(out, e.steelRefusals(fy)...)
 		}
 	}
-	if r, refused := e.axialRefusal(q.Section, q.Concrete.Strength, q.Demand.Axial); refused {
-		out = append(out, r)
+	out = append(out, e.axialRefusals(q.Section, &q.Concrete, q.Demand.Axial, q.Demand.Name)...)
+	t := e.torsionStrength(q.Section, &q.Concrete, q.Demand.Axial)
+	if !q.Demand.Torque.IsZero() && !t.neglects(e, q.Demand.Torque) {
+		out = append(out, beam.Refusal{
+			Rule: "scope.torsion", Clause: "9.5.4.1",
+			Detail: "torque of " + e.moment.Format(q.Demand.Torque.Abs()) + named(q.Demand.Name) + " is not below φTth = " +
+				e.moment.Format(e.momentOf(t.phi*t.threshold)) + ": the section must be designed for torsion by 22.7",
+		})
 	}
 	return out
 }
@@ -231,13 +237,7 @@ func (e *edition) queryChecks(q *beam.SectionQuery, out *beam.Strengths, web *we
 		checks = append(checks, e.queryStirrups(q, web, s)...)
 	}
 	if !d.Torque.IsZero() {
-		c := beam.Check{ID: "torsion.threshold", Clause: "9.5.4.1", Combination: d.Name}
-		if t.neglects(e, d.Torque) {
-			c.Compare(d.Torque.Abs().Amount(), e.momentOf(t.phi*t.threshold).Amount())
-		} else {
-			c.Outcome, c.Reason = beam.NotJudged, "the torque is not below the threshold, and this version does not design for torsion"
-		}
-		checks = append(checks, c)
+		compare("torsion.threshold", "9.5.4.1", "below its threshold the torque may be neglected", d.Torque.Abs().Amount(), e.momentOf(t.phi*t.threshold).Amount())
 	}
 	return checks
 }

@@ -20,7 +20,6 @@ func (e *edition) forceIn(q units.Force) float64         { return q.In(e.force) 
 func (e *edition) forceOf(v float64) units.Force         { return e.force.Of(v) }
 func (e *edition) momentIn(q units.Moment) float64       { return q.In(e.moment) }
 func (e *edition) momentOf(v float64) units.Moment       { return e.moment.Of(v) }
-func (e *edition) steelIn(q units.AreaPerLength) float64 { return q.In(e.steel) }
 func (e *edition) steelOf(v float64) units.AreaPerLength { return e.steel.Of(v) }
 
 // sqrtStrength is √f'c with f'c in the edition's unit of stress; by the
