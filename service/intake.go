@@ -1,0 +1,283 @@
+package service
+
+import (
+	"encoding"
+	"fmt"
+	"strings"
+
+	"soffit.example/beam"
+	"soffit.example/beam/statics"
+	"soffit.example/service/internal/strict"
+	"soffit.example/service/internal/wire"
+	"soffit.example/units"
+)
+
+// intake turns requests into what package beam takes, and notes what is
+// missing or contradicts itself. Ranges of quantities are package beam's.
+type intake struct {
+	faults *strict.Faults
+}
+
+func (in *intake) fault(path, allowed, format string, args ...any) {
+	in.faults.Add(strict.Fault{Path: path, Detail: strict.Subject(path) + " " + fmt.Sprintf(format, args...), Allowed: allowed})
+}
+
+// value is what an optional member says, or zero.
+func value[T any](given *T) T {
+	var v T
+	if given != nil {
+		v = *given
+	}
+	return v
+}
+
+type quantity interface {
+	Amount() units.Amount
+	fmt.Stringer
+}
+
+// above takes an optional quantity for which zero means that it is not given,
+// so that a zero that is given must not pass for one.
+func above[Q quantity](in *intake, path string, given *Q) Q {
+	v := value(given)
+	if given != nil && !(v.Amount().SI() > 0) {
+		in.fault(path, "above zero", "is %s; it must be above zero", v)
+	}
+	return v
+}
+
+// word reads an optional word of an enumeration. The ranges checked before
+// let no unknown word through, save with a fault of its own.
+func word[E any, P interface {
+	*E
+	encoding.TextUnmarshaler
+}](given *string) E {
+	var e E
+	if given == nil || P(&e).UnmarshalText([]byte(*given)) != nil {
+		var none E
+		return none
+	}
+	return e
+}
+
+// brief converts a brief that stands at a place of the request.
+func (in *intake) brief(w *wire.Brief, at string) beam.Brief {
+	b := beam.Brief{
+		Reference:     w.Reference,
+		Section:       in.section(&w.Section),
+		Concrete:      in.concrete(&w.Concrete, at+"/concrete"),
+		Reinforcement: in.reinforcement(&w.Reinforcement, at+"/reinforcement"),
+		Exposure:      word[beam.Exposure](w.Exposure),
+		Cover:         above(in, at+"/cover", w.Cover),
+		Spans:         w.Spans,
+		NoSelfWeight:  w.SelfWeight != nil && !*w.SelfWeight,
+		Braced:        above(in, at+"/braced", w.Braced),
+		Readings:      readings(w.DisplacedConcrete, w.Grade60Yield, w.ShearRow, w.ShearMethod, w.Corner),
+	}
+	for i := range w.Supports {
+		b.Supports = append(b.Supports, support(&w.Supports[i]))
+	}
+	for i := range w.Loads {
+		b.Loads = append(b.Loads, in.load(&w.Loads[i], fmt.Sprintf("%s/loads/%d", at, i)))
+	}
+	for i := range w.Demands {
+		b.Demands = append(b.Demands, in.demand(&w.Demands[i], i, fmt.Sprintf("%s/demands/%d", at, i)))
+	}
+	if v := w.Serviceability; v != nil {
+		b.Serviceability = beam.Serviceability{Attached: word[beam.Attachment](v.Attached), Months: value(v.Months)}
+	}
+	if v := w.Preferences; v != nil {
+		b.Preferences = in.preferences(v, at+"/preferences")
+	}
+	return b
+}
+
+func (in *intake) section(w *wire.Section) beam.Section {
+	return beam.Section{Shape: word[beam.Shape](&w.Shape), Width: w.Width, Depth: w.Depth}
+}
+
+func (in *intake) concrete(w *wire.Concrete, at string) beam.Concrete {
+	return beam.Concrete{
+		Strength:  w.Strength,
+		Density:   above(in, at+"/density", w.Density),
+		Kind:      word[beam.ConcreteKind](w.Kind),
+		Aggregate: above(in, at+"/aggregate", w.Aggregate),
+	}
+}
+
+func (in *intake) reinforcement(w *wire.Reinforcement, at string) beam.Reinforcement {
+	in.catalogID(w.Catalog, at+"/catalog")
+	return beam.Reinforcement{
+		Catalog:      w.Catalog,
+		Yield:        w.Yield,
+		StirrupYield: above(in, at+"/stirrup_yield", w.StirrupYield),
+		Coating:      word[beam.Coating](w.Coating),
+	}
+}
+
+// supportKinds are the words of the supports.
+func supportKinds() []statics.SupportKind {
+	return []statics.SupportKind{statics.Pinned, statics.Roller, statics.Fixed, statics.Free}
+}
+
+func support(w *wire.Support) beam.Support {
+	s := beam.Support{Width: value(w.Width), Hung: value(w.Hung)}
+	for _, k := range supportKinds() {
+		if k.String() == w.Kind {
+			s.Kind = k
+		}
+	}
+	return s
+}
+
+// loadMembers are the members that place and size a load.
+var loadMembers = [...]string{"from", "to", "at", "intensity", "intensity_end", "force", "moment"}
+
+// belongs says which of loadMembers a load of a shape needs, and which it may
+// have.
+func belongs(shape beam.LoadShape) (needs, may string) {
+	switch shape {
+	case beam.Uniform:
+		return "intensity", ""
+	case beam.Partial:
+		return "from to intensity", "intensity_end"
+	case beam.PointLoad:
+		return "at force", ""
+	case beam.Couple, beam.Torque:
+		return "at moment", ""
+	case beam.UniformTorque:
+		return "moment", ""
+	}
+	return "", strings.Join(loadMembers[:], " ") // the shape has a fault of its own
+}
+
+func (in *intake) load(w *wire.Load, at string) beam.Load {
+	l := beam.Load{
+		Case: word[beam.LoadCase](&w.Case), Shape: word[beam.LoadShape](&w.Shape), Span: value(w.Span),
+		From: value(w.From), To: value(w.To), At: value(w.At),
+		Intensity: value(w.Intensity), IntensityEnd: value(w.IntensityEnd), Varies: w.IntensityEnd != nil,
+		Force: value(w.Force), Moment: value(w.Moment), Hung: value(w.Hung),
+	}
+	switch {
+	case w.Sustained != nil:
+		l.Sustained = *w.Sustained
+	case l.Case == beam.Dead:
+		l.Sustained = 1
+	}
+	given := map[string]bool{
+		"from": w.From != nil, "to": w.To != nil, "at": w.At != nil, "intensity": w.Intensity != nil,
+		"intensity_end": w.IntensityEnd != nil, "force": w.Force != nil, "moment": w.Moment != nil,
+	}
+	needs, may := belongs(l.Shape)
+	for _, name := range loadMembers {
+		needed := hasWord(needs, name)
+		switch {
+		case needed && !given[name]:
+			in.fault(at+"/"+name, "", "is missing; a %s load needs it", w.Shape)
+		case given[name] && !needed && !hasWord(may, name):
+			in.fault(at+"/"+name, "", "does not belong to a %s load, which has %s", w.Shape, strings.Join(strings.Fields(needs+" "+may), ", "))
+		}
+	}
+	return l
+}
+
+func hasWord(list, name string) bool {
+	for w := range strings.FieldsSeq(list) {
+		if w == name {
+			return true
+		}
+	}
+	return false
+}
+
+func (in *intake) demand(w *wire.Demand, i int, at string) beam.Demand {
+	if w.Moment == nil && w.Shear == nil && w.Torque == nil && w.Axial == nil {
+		in.fault(at, "at least one of moment, shear, torque, axial", "has no force")
+	}
+	d := beam.Demand{Name: w.Name, Moment: value(w.Moment), Shear: value(w.Shear), Torque: value(w.Torque), Axial: value(w.Axial)}
+	if d.Name == "" {
+		d.Name = fmt.Sprintf("demand %d", i+1)
+	}
+	return d
+}
+
+func (in *intake) preferences(w *wire.Preferences, at string) beam.Preferences {
+	p := beam.Preferences{
+		Bars: w.Bars, Stirrups: w.Stirrups,
+		MaxLayers: value(w.MaxLayers), MaxLegs: value(w.MaxLegs), MaxZones: value(w.MaxZones),
+		Mixed: value(w.Mixed), Depths: w.Depths, Prefer: word[beam.Preference](w.Prefer),
+		SpacingBy: above(in, at+"/spacing_step", w.SpacingStep), KeepBest: value(w.Alternatives),
+	}
+	return p
+}
+
+func readings(displaced, yield, row, method, corner *string) beam.Readings {
+	return beam.Readings{
+		IgnoreDisplaced: value(displaced) == "ignore",
+		RoundedYield:    value(yield) == "rounded",
+		ShearRow:        word[beam.ShearRow](row),
+		ShearMethod:     word[beam.ShearMethod](method),
+		TuckedCorner:    value(corner) == "tucked",
+	}
+}
+
+// layout converts a layout; what is left out is taken from the brief.
+func (in *intake) layout(w *wire.Layout, b *beam.Brief, at string) beam.Layout {
+	var l beam.Layout
+	for i := range w.Longitudinal {
+		l.Longitudinal = append(l.Longitudinal, in.row(&w.Longitudinal[i], fmt.Sprintf("%s/longitudinal/%d", at, i)))
+	}
+	for i := range w.Transverse {
+		l.Transverse = append(l.Transverse, in.zone(&w.Transverse[i], b, fmt.Sprintf("%s/transverse/%d", at, i)))
+	}
+	return l
+}
+
+func (in *intake) row(w *wire.Row, at string) beam.Row {
+	r := beam.Row{
+		Mark: w.Mark, Bar: w.Bar, Count: w.Count, Face: word[beam.Face](&w.Face), Layer: value(w.Layer),
+		Spacing: value(w.Spacing), InCompression: value(w.InCompression),
+		From: value(w.From), To: value(w.To), Start: "straight", End: "straight",
+	}
+	side := r.Face == beam.Side
+	if w.Layer == nil && !side {
+		r.Layer = 1
+	}
+	switch {
+	case side && w.Layer != nil:
+		in.fault(at+"/layer", "", "does not belong to side bars")
+	case side && w.InCompression != nil:
+		in.fault(at+"/in_compression", "", "does not belong to side bars")
+	case side && w.Spacing == nil:
+		in.fault(at+"/spacing", "", "is missing; side bars need it")
+	case !side && w.Spacing != nil:
+		in.fault(at+"/spacing", "", "belongs to side bars alone")
+	}
+	if w.From != nil && w.To == nil {
+		in.fault(at+"/to", "", "is missing, and from is given")
+	}
+	return r
+}
+
+func (in *intake) zone(w *wire.Zone, b *beam.Brief, at string) beam.Zone {
+	z := beam.Zone{
+		Mark: w.Mark, Span: value(w.Span), Bar: w.Bar, Legs: w.Legs, Spacing: w.Spacing,
+		Count: value(w.Count), From: value(w.From), To: value(w.To), Form: "closed",
+	}
+	if w.Form != nil {
+		z.Form = *w.Form
+	}
+	if len(b.Spans) == 0 {
+		if w.From != nil || w.To != nil || w.Count != nil || w.Span != nil {
+			in.fault(at, "", "has a place along a span, and the brief has demands in place of spans")
+		}
+		return z
+	}
+	if w.Span == nil {
+		z.Span = 1
+	}
+	if w.To == nil && z.Span >= 1 && z.Span <= len(b.Spans) {
+		z.To = b.Spans[z.Span-1]
+	}
+	return z
+}

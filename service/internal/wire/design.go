@@ -1,0 +1,210 @@
+package wire
+
+import "soffit.example/units"
+
+// Design is the reply to a brief, and to a layout that was checked.
+type Design struct {
+	Engine    Engine        `json:"engine" doc:"What computed the reply."`
+	Code      string        `json:"code" doc:"Id of the design code."`
+	Reference string        `json:"reference,omitzero" doc:"The reference of the brief."`
+	ReportIn  units.System  `json:"report_in" doc:"Units of the reply."`
+	InputHash string        `json:"input_hash" doc:"SHA-256 of the request as read: the same for every way of writing the same request."`
+	Verdict   string        `json:"verdict" enum:"satisfied unsatisfied out-of-scope" doc:"satisfied: every judged limit state is met. unsatisfied: the input is sound, the beam is not. out-of-scope: a scope rule says that the method does not apply."`
+	Governing *Governing    `json:"governing,omitzero" doc:"The judged check with the largest utilization."`
+	Section   *SectionReply `json:"section,omitzero" doc:"The section as designed."`
+	Layout    LayoutReply   `json:"layout" doc:"The bars and stirrups."`
+	Bars      []BarAt       `json:"bars" doc:"Every longitudinal bar by coordinates."`
+	Checks    []Check       `json:"checks" doc:"Every limit state, judged or not."`
+	Flexure   []Flexure     `json:"flexure" doc:"Strength in bending of the layout, one for each sense that is bent."`
+	Refusals  []Refusal     `json:"refusals" doc:"Scope rules that put the problem outside the method."`
+
+	Assumptions  []Assumption  `json:"assumptions" doc:"What was taken for granted on the way, and what the finished design found."`
+	Combinations Combinations  `json:"combinations" doc:"Load combinations used and dropped."`
+	Alternatives []Alternative `json:"alternatives" doc:"Layouts that pass too."`
+	Rejected     []Rejected    `json:"rejected" doc:"Arrangements that were tried, with every check they failed."`
+	Binding      []string      `json:"binding" doc:"Where nothing fits: the limits that stand in the way."`
+	Cures        []Cure        `json:"cures" doc:"Where nothing fits: changes of the brief that were tried and found to do."`
+
+	Schedule   []ScheduleLine `json:"schedule" doc:"Bar schedule."`
+	Quantities *Quantities    `json:"quantities,omitzero" doc:"Quantities of the beam."`
+	Cautions   []string       `json:"cautions" doc:"What the reader must bear in mind."`
+}
+
+// Engine says what computed a reply.
+type Engine struct {
+	Name    string `json:"name" doc:"Name of the engine."`
+	Version string `json:"version" doc:"Version of the engine."`
+}
+
+// Governing names the check that governs.
+type Governing struct {
+	Check       string  `json:"check" doc:"Id of the check."`
+	Utilization float64 `json:"utilization" doc:"Demand over capacity."`
+}
+
+// SectionReply is a section in a reply.
+type SectionReply struct {
+	Shape string        `json:"shape" doc:"Shape of the outline."`
+	Width units.Measure `json:"width" doc:"Width."`
+	Depth units.Measure `json:"depth" doc:"Overall depth."`
+}
+
+// LayoutReply is a layout in a reply; it can be sent to /v1/checks as it is.
+type LayoutReply struct {
+	Longitudinal []RowReply  `json:"longitudinal" doc:"Groups of like bars."`
+	Transverse   []ZoneReply `json:"transverse" doc:"Runs of like stirrups."`
+}
+
+// RowReply is a [Row] in a reply.
+type RowReply struct {
+	Mark          string         `json:"mark,omitzero" doc:"Mark of the bars."`
+	Bar           string         `json:"bar" doc:"Size, as the catalog names it."`
+	Count         int            `json:"count" doc:"Number of bars; of side bars, on each side face."`
+	Face          string         `json:"face" enum:"bottom top side" doc:"Face at which the bars lie."`
+	Layer         int            `json:"layer,omitzero" doc:"Layer of the face, 1 nearest to it. Side bars have none."`
+	Spacing       *units.Measure `json:"spacing,omitzero" doc:"Vertical spacing of side bars."`
+	InCompression bool           `json:"in_compression,omitzero" doc:"true: the bars are relied on as compression steel."`
+	From          *units.Measure `json:"from,omitzero" doc:"Start along the beam. Absent with demands given directly."`
+	To            *units.Measure `json:"to,omitzero" doc:"End along the beam. Absent with demands given directly."`
+	Start         string         `json:"start,omitzero" doc:"How the left end stops."`
+	End           string         `json:"end,omitzero" doc:"How the right end stops."`
+}
+
+// ZoneReply is a [Zone] in a reply.
+type ZoneReply struct {
+	Mark    string         `json:"mark,omitzero" doc:"Mark of the stirrups."`
+	Span    int            `json:"span,omitzero" doc:"Number of the span. Absent with demands given directly."`
+	Bar     string         `json:"bar" doc:"Size, as the catalog names it."`
+	Legs    int            `json:"legs" doc:"Vertical legs."`
+	Spacing units.Measure  `json:"spacing" doc:"Spacing along the span."`
+	Count   int            `json:"count,omitzero" doc:"Number of stirrups. Absent with demands given directly."`
+	From    *units.Measure `json:"from,omitzero" doc:"Start of the zone, from the span's left end. Absent with demands given directly."`
+	To      *units.Measure `json:"to,omitzero" doc:"End of the zone, from the span's left end. Absent with demands given directly."`
+	Form    string         `json:"form,omitzero" doc:"Whether the stirrup is closed."`
+}
+
+// BarAt is a bar by coordinates: x from the left face, y from the bottom.
+type BarAt struct {
+	Mark     string        `json:"mark" doc:"Mark of the bar."`
+	Bar      string        `json:"bar" doc:"Size, as the catalog names it."`
+	Diameter units.Measure `json:"diameter" doc:"Nominal diameter."`
+	X        units.Measure `json:"x" doc:"From the left face to the centre."`
+	Y        units.Measure `json:"y" doc:"From the bottom face to the centre."`
+	Face     string        `json:"face" enum:"bottom top side" doc:"Face at which the bar lies."`
+	Layer    int           `json:"layer,omitzero" doc:"Layer of the face. Side bars have none."`
+}
+
+// Check is one limit state.
+type Check struct {
+	ID          string         `json:"id" doc:"Stable, dotted, the most general word first."`
+	Clause      string         `json:"clause" doc:"Clause of the design code."`
+	Span        int            `json:"span,omitzero" doc:"Number of the span. Absent: the whole beam, or a demand given directly."`
+	At          *units.Measure `json:"at,omitzero" doc:"Position from the span's left end."`
+	Face        string         `json:"face,omitzero" enum:"bottom top side" doc:"Face of the beam that the check is about."`
+	Combination string         `json:"combination,omitzero" doc:"Load combination, or name of the demand."`
+	Demand      *units.Measure `json:"demand,omitzero" doc:"What is asked. Of a least amount, the amount required."`
+	Capacity    *units.Measure `json:"capacity,omitzero" doc:"What is there. Of a least amount, the amount provided."`
+	Utilization *float64       `json:"utilization,omitzero" doc:"Demand over capacity. A limit met exactly passes."`
+	Verdict     string         `json:"verdict" enum:"pass fail not-applicable not-judged" doc:"not-judged: within the code, not within this version or this input; never counted as passed."`
+	Reason      string         `json:"reason,omitzero" doc:"Why not applicable or not judged, or what was decided on the way."`
+	Working     []Step         `json:"working,omitzero" doc:"The working, in order, where full detail was asked for."`
+}
+
+// Step is one line of the working.
+type Step struct {
+	Symbol       string        `json:"symbol" doc:"Symbol of the value."`
+	Meaning      string        `json:"meaning" doc:"What it is."`
+	Clause       string        `json:"clause,omitzero" doc:"Clause it follows."`
+	Expression   string        `json:"expression,omitzero" doc:"Expression in the symbols of earlier steps. Absent of an input."`
+	Substitution string        `json:"substitution,omitzero" doc:"The expression with the values of those steps."`
+	Value        units.Measure `json:"value" doc:"The value, in the unit its clause is written in."`
+	Note         string        `json:"note,omitzero" doc:"The branch taken, or the cap that acted."`
+}
+
+// Refusal is a scope rule that was met.
+type Refusal struct {
+	Rule   string `json:"rule" doc:"Stable, dotted."`
+	Clause string `json:"clause" doc:"Clause of the design code."`
+	Detail string `json:"detail" doc:"The values that met the rule, and the method that would apply."`
+}
+
+// Assumption is something taken for granted.
+type Assumption struct {
+	ID       string   `json:"id" doc:"Stable, dotted."`
+	Assumed  string   `json:"assumed" doc:"What was assumed, with its value."`
+	UsedIn   []string `json:"used_in" doc:"Ids of the checks that rest on it."`
+	Found    string   `json:"found,omitzero" doc:"What the finished design shows."`
+	Holds    bool     `json:"holds" doc:"Whether the finished design bears it out."`
+	Open     bool     `json:"open,omitzero" doc:"true: nothing in the input can confirm it; it stays the engineer's to confirm."`
+	Decisive bool     `json:"decisive,omitzero" doc:"true: the verdict cannot stand if it does not hold."`
+}
+
+// Combinations are the load combinations of a design.
+type Combinations struct {
+	Kept    []Combination        `json:"kept" doc:"Those analysed."`
+	Dropped []DroppedCombination `json:"dropped" doc:"Those not used, and why."`
+}
+
+// Combination is a load combination.
+type Combination struct {
+	ID      string   `json:"id" doc:"The combination in the code's words."`
+	Clause  string   `json:"clause" doc:"Clause of the design code."`
+	Factors []Factor `json:"factors" doc:"Load factors by case."`
+}
+
+// Factor multiplies the loads of one case.
+type Factor struct {
+	Case   string  `json:"case" doc:"Load case."`
+	Factor float64 `json:"factor" doc:"Load factor."`
+}
+
+// DroppedCombination is a combination that was not used.
+type DroppedCombination struct {
+	ID     string `json:"id" doc:"The combination in the code's words."`
+	Clause string `json:"clause" doc:"Clause of the design code."`
+	Reason string `json:"reason" doc:"Why it was not used."`
+}
+
+// Alternative is a layout that passes too.
+type Alternative struct {
+	Layout      LayoutReply   `json:"layout" doc:"The bars and stirrups."`
+	Depth       units.Measure `json:"depth" doc:"Overall depth of the section."`
+	SteelMass   units.Measure `json:"steel_mass" doc:"Mass of bars and stirrups."`
+	Governing   Governing     `json:"governing" doc:"The check with the largest utilization."`
+	WhyNotFirst string        `json:"why_not_first" doc:"What puts it behind."`
+}
+
+// Rejected is an arrangement that failed.
+type Rejected struct {
+	Arrangement string   `json:"arrangement" doc:"The arrangement in words."`
+	Failed      []string `json:"failed" doc:"Every check that it failed, with both sides and the clause."`
+}
+
+// Cure is a change of the brief that was itself designed and found to pass.
+type Cure struct {
+	Change      string        `json:"change" doc:"What to change."`
+	From        units.Measure `json:"from" doc:"Its value now."`
+	To          units.Measure `json:"to" doc:"A value that does."`
+	Governing   string        `json:"governing" doc:"The check that governs the beam so changed."`
+	Utilization float64       `json:"utilization" doc:"Its utilization."`
+}
+
+// ScheduleLine is one mark of the bar schedule.
+type ScheduleLine struct {
+	Mark   string         `json:"mark" doc:"Mark of the bars."`
+	Bar    string         `json:"bar" doc:"Size, as the catalog names it."`
+	Count  int            `json:"count" doc:"Number of bars."`
+	Shape  string         `json:"shape" doc:"Shape of the bar."`
+	Length *units.Measure `json:"length,omitzero" doc:"Cut length of one. Absent with demands given directly."`
+	Mass   units.Measure  `json:"mass" doc:"Mass of all, from the catalog's mass a length."`
+}
+
+// Quantities of a beam.
+type Quantities struct {
+	SteelMass        units.Measure  `json:"steel_mass" doc:"Mass of bars and stirrups."`
+	StirrupMass      units.Measure  `json:"stirrup_mass" doc:"Mass of the stirrups, part of steel_mass."`
+	Concrete         units.Measure  `json:"concrete" doc:"Volume of the concrete."`
+	Form             units.Measure  `json:"form" doc:"Area of formwork: soffit and both sides."`
+	SteelPerConcrete units.Measure  `json:"steel_per_concrete" doc:"Mass of steel in a volume of concrete."`
+	PerLength        *units.Measure `json:"per_length,omitzero" doc:"Length that the quantities are for, with demands given directly. Absent: the whole beam."`
+}
