@@ -3,6 +3,7 @@ package aci318
 import (
 	"errors"
 	"fmt"
+	"math"
 
 	"soffit.example/beam"
 	"soffit.example/beam/mechanics"
@@ -28,12 +29,11 @@ func (e *edition) block(strength units.Stress) (mechanics.Law, error) {
 	return mechanics.RectangularBlock(strength.Scale(blockIntensity), e.blockFactor(strength), crushing)
 }
 
-// reblock returns the law of a concrete, which is the kept one if that fits.
+// reblock returns the law of a concrete, which is the kept one if that is the
+// same but for rounding: making a law allocates.
 func (e *edition) reblock(kept mechanics.Law, strength units.Stress) (mechanics.Law, error) {
-	if kept.Ultimate() == crushing {
-		mean, depth := kept.Resultant()
-		factor := e.blockFactor(strength)
-		if depth == factor/2 && mean == strength.Scale(blockIntensity).Scale(factor) {
+	if kept.Ultimate() == crushing && kept.Stress(crushing) == strength.Scale(blockIntensity) {
+		if _, depth := kept.Resultant(); math.Abs(2*depth-e.blockFactor(strength)) < 1e-14 {
 			return kept, nil
 		}
 	}
