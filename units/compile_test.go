@@ -8,12 +8,18 @@ import (
 	"go/token"
 	"go/types"
 	"strings"
+	"sync"
 	"testing"
 
 	"github.com/stretchr/testify/require"
 
 	"soffit.example/units"
 )
+
+// source imports packages from their source, once for all tests.
+var source = sync.OnceValue(func() types.Importer {
+	return importer.ForCompiler(token.NewFileSet(), "source", nil)
+})
 
 // typeCheck type-checks each statement, in a function of its own of a package
 // that imports units, and returns the errors by statement.
@@ -35,7 +41,7 @@ func typeCheck(t *testing.T, statements []string) [][]string {
 
 	found := make([][]string, len(statements))
 	conf := types.Config{
-		Importer: importer.ForCompiler(fset, "source", nil),
+		Importer: source(),
 		Error: func(err error) {
 			e, ok := err.(types.Error)
 			require.True(t, ok, "%v", err)

@@ -236,6 +236,10 @@ func TestAmountOf(t *testing.T) {
 // The obvious way to read a number is arbitrary-precision decimal; what is
 // read must be the float64 nearest to it, for every form.
 func TestParseAgainstDecimal(t *testing.T) {
+	count := 100_000
+	if testing.Short() {
+		count /= 20
+	}
 	rng := rand.New(rand.NewPCG(2, 1))
 	digits := func(least, most int) string {
 		var b strings.Builder
@@ -244,7 +248,7 @@ func TestParseAgainstDecimal(t *testing.T) {
 		}
 		return b.String()
 	}
-	for range 100_000 {
+	for range count {
 		text := digits(1, 20) + "." + digits(0, 12)
 		if rng.IntN(2) == 0 {
 			text += "e" + strconv.Itoa(rng.IntN(16)-8)
@@ -256,7 +260,7 @@ func TestParseAgainstDecimal(t *testing.T) {
 			require.Equal(t, want.InexactFloat64(), got.SI(), text)
 		}
 	}
-	for range 100_000 {
+	for range count {
 		feet, whole := rng.Int64N(1e8), rng.Int64N(11)
 		den := 1 + rng.Int64N(999_999)
 		num := rng.Int64N(den)

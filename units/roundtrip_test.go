@@ -107,8 +107,12 @@ var pow10 = func() (p [13]uint64) {
 
 // The lossless forms bring every float64 back bit by bit.
 func TestLossless(t *testing.T) {
+	count := 200_000
+	if testing.Short() {
+		count /= 20
+	}
 	rng := rand.New(rand.NewPCG(1, 2))
-	for range 200_000 {
+	for range count {
 		v := units.Metre.Of((rng.Float64() - 0.5) * float64(pow10[rng.IntN(13)]) / float64(pow10[rng.IntN(13)]))
 		text, err := v.MarshalText()
 		require.NoError(t, err)
