@@ -4,6 +4,8 @@ import (
 	"cmp"
 	"math"
 	"slices"
+
+	"soffit.example/units"
 )
 
 // The search for equilibria.
@@ -146,7 +148,7 @@ func (s *Solver) solve(dst *Ultimate) {
 			if start := g[0] + hi*(g[1]+hi*g[2]); !block || !(start*end > 0) || start*before < 0 {
 				end = s.search(&g, degree, lo, hi, before)
 				if len(s.roots) > 0 && dst.NeutralAxis.IsZero() {
-					s.report(dst, s.roots[0])
+					s.roots[0] = s.settle(dst, &g, lo == 0)
 				}
 			}
 			before, hi = end, lo
@@ -156,7 +158,37 @@ func (s *Solver) solve(dst *Ultimate) {
 		}
 	}
 	// A root on the border of two intervals may have been found in both.
-	s.roots = slices.CompactFunc(s.roots, func(a, b float64) bool { return a-b <= 1e-10*b })
+	s.roots = slices.CompactFunc(s.roots, func(a, b float64) bool { return math.Abs(a-b) <= 1e-10*a })
+}
+
+// settle reports the first root, of the balance g, and returns it. Where a law of
+// thin and steep pieces has cost the polynomial some digits, the root is first
+// improved by Newton's steps on the sum of the forces themselves.
+func (s *Solver) settle(dst *Ultimate, g *polynomial, divided bool) float64 {
+	k := s.roots[0]
+	size := s.report(dst, k)
+	residual := dst.Residual.In(units.Newton)
+	for range 4 {
+		if math.Abs(residual) <= 1e-13*size {
+			break
+		}
+		slope := g.slope(k) * s.depth
+		if !divided {
+			slope /= k
+		}
+		next := k - residual/slope
+		if !(math.Abs(next-k) <= 1e-6*k) {
+			break // a bar at a jump: no depth leaves nothing over
+		}
+		s.report(dst, next)
+		after := dst.Residual.In(units.Newton)
+		if math.Abs(after) >= math.Abs(residual) {
+			s.report(dst, k)
+			break
+		}
+		k, residual = next, after
+	}
+	return k
 }
 
 // search appends the roots of the balance g between lo and hi, the border at hi

@@ -57,7 +57,7 @@ func checkStress(field string, s units.Stress) error {
 	return nil
 }
 
-const stressRange = "from 1e-6 to 1e7 MPa"
+const stressRange = "from 1e-6 to 1e9 MPa"
 
 func stressInRange(s units.Stress) bool {
 	v := s.In(units.Pascal)

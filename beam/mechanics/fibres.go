@@ -130,6 +130,11 @@ func newFibreModel(s Section, law Law, bending Bending) *fibreModel {
 			m.bars[i].depth = m.height - m.bars[i].depth
 		}
 	}
+	for i := range m.bars {
+		if m.bars[i].depth < 1e-9*m.height {
+			m.bars[i].depth = 0 // on the compression face itself
+		}
+	}
 	return m
 }
 

@@ -22,7 +22,7 @@ func fit(f func(s float64) float64, joints []float64) ([]piece, error) {
 		v := f(s)
 		if !(v >= 0 && v <= mostStress) {
 			return nil, &InputError{Field: fmt.Sprintf("stress at %.6g of the ultimate strain", s),
-				Value: fmt.Sprintf("%v Pa", v), Allowed: "from 0 to 1e7 MPa"}
+				Value: fmt.Sprintf("%v Pa", v), Allowed: "from 0 to 1e9 MPa"}
 		}
 		greatest = math.Max(greatest, v)
 	}

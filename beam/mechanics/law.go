@@ -35,7 +35,7 @@ const (
 	leastUltimate = 1e-5
 	mostUltimate  = 0.1
 	leastStress   = 1.0  // Pa
-	mostStress    = 1e13 // Pa
+	mostStress    = 1e15 // Pa
 )
 
 // RectangularBlock returns the law of a constant intensity over depthFactor
@@ -122,7 +122,7 @@ func Polyline(points ...Point) (Law, error) {
 			return Law{}, err
 		}
 		if s := p.Stress.In(units.Pascal); !(s >= 0 && s <= mostStress) {
-			return Law{}, &InputError{Field: field + ".stress", Value: p.Stress.String(), Allowed: "from 0 to 1e7 MPa"}
+			return Law{}, &InputError{Field: field + ".stress", Value: p.Stress.String(), Allowed: "from 0 to 1e9 MPa"}
 		}
 		most = most.Max(p.Stress)
 	}

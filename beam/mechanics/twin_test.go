@@ -1,5 +1,14 @@
 package mechanics
 
+import (
+	"fmt"
+	"testing"
+
+	"github.com/stretchr/testify/require"
+
+	"soffit.example/units"
+)
+
 // The hand-written twin of the kernel, for the benchmarks: a rectangle, the
 // rectangular block and plain float64, for sagging without axial force, and
 // nothing else. It does the same work: layers of any number, displaced concrete
@@ -71,4 +80,126 @@ func (t *twin) solve(height float64) (c, moment float64) {
 		moment += l.force * (height/2 - l.depth)
 	}
 	return c, moment
+}
+
+// beamOf returns the same invented beam for both, with n layers.
+func beamOf(tb testing.TB, n int) (Section, Law, twin) {
+	tb.Helper()
+	law, err := RectangularBlock(units.Megapascal.Of(25.5), 0.85, 0.003)
+	require.NoError(tb, err)
+	steel := Steel{Modulus: units.Megapascal.Of(200000), Yield: units.Megapascal.Of(420)}
+	s := Section{Parts: Rectangle(units.Millimetre.Of(350), units.Millimetre.Of(700))}
+	t := twin{width: 350, intensity: 25.5, factor: 0.85, ultimate: 0.003}
+	for i := range n {
+		depth := 640 - 580*float64(i)/float64(max(1, n-1))
+		area := 3000 / float64(1+i*i)
+		s.Layers = append(s.Layers, Layer{Depth: units.Millimetre.Of(depth), Area: units.SquareMillimetre.Of(area), Steel: steel})
+		t.layers = append(t.layers, twinLayer{depth: depth, area: area, modulus: 200000, yield: 420})
+	}
+	return s, law, t
+}
+
+func TestTwinAgrees(t *testing.T) {
+	for n := 1; n <= 30; n++ {
+		s, law, tw := beamOf(t, n)
+		u, err := s.Ultimate(law, Bending{})
+		require.NoError(t, err)
+		c, moment := tw.solve(700)
+		require.InEpsilon(t, c, u.NeutralAxis.In(units.Millimetre), 1e-11)
+		require.InEpsilon(t, moment, u.Nominal.In(units.NewtonMillimetre), 1e-11)
+	}
+}
+
+func TestSolverAllocatesNothing(t *testing.T) {
+	for _, n := range []int{1, 2, 6, 30} {
+		s, law, _ := beamOf(t, n)
+		var solver Solver
+		var u Ultimate
+		allocations := testing.AllocsPerRun(100, func() {
+			if err := solver.Ultimate(&u, s, law, Bending{}); err != nil {
+				t.Fatal(err)
+			}
+		})
+		require.Zero(t, allocations, "%d layers", n)
+		allocations = testing.AllocsPerRun(100, func() {
+			if _, err := s.Cracked(8, Hogging); err != nil {
+				t.Fatal(err)
+			}
+		})
+		require.Zero(t, allocations, "cracked, %d layers", n)
+	}
+}
+
+// BenchmarkUltimate times the kernel beside its twin; the ratio of the two is
+// the price of the general section, the general law and the typed edges.
+func BenchmarkUltimate(b *testing.B) {
+	for _, n := range []int{1, 2, 4, 10, 30} {
+		s, law, tw := beamOf(b, n)
+		b.Run(fmt.Sprintf("layers=%d/solver", n), func(b *testing.B) {
+			var solver Solver
+			var u Ultimate
+			b.ReportAllocs()
+			for b.Loop() {
+				if err := solver.Ultimate(&u, s, law, Bending{}); err != nil {
+					b.Fatal(err)
+				}
+			}
+		})
+		b.Run(fmt.Sprintf("layers=%d/twin", n), func(b *testing.B) {
+			for b.Loop() {
+				tw.solve(700)
+			}
+		})
+	}
+}
+
+func BenchmarkLaws(b *testing.B) {
+	s, block, _ := beamOf(b, 2)
+	strength := units.Megapascal.Of(30)
+	parabola, err := ParabolaRectangle(strength, 0.002, 0.0035, 2)
+	require.NoError(b, err)
+	fitted, err := ParabolaRectangle(strength, 0.0023, 0.0029, 1.6)
+	require.NoError(b, err)
+	for _, l := range []struct {
+		name string
+		law  Law
+	}{{"block", block}, {"parabola-rectangle", parabola}, {"fitted", fitted}} {
+		b.Run(l.name, func(b *testing.B) {
+			var solver Solver
+			var u Ultimate
+			for b.Loop() {
+				if err := solver.Ultimate(&u, s, l.law, Bending{}); err != nil {
+					b.Fatal(err)
+				}
+			}
+		})
+	}
+}
+
+func BenchmarkFibres(b *testing.B) {
+	s, law, _ := beamOf(b, 2)
+	for b.Loop() {
+		if _, err := s.Fibres(law, Bending{}); err != nil {
+			b.Fatal(err)
+		}
+	}
+}
+
+func BenchmarkRequiredArea(b *testing.B) {
+	s, law, _ := beamOf(b, 2)
+	var solver Solver
+	for b.Loop() {
+		if _, err := solver.RequiredArea(s, 0, law, Bending{}, units.KilonewtonMetre.Of(600)); err != nil {
+			b.Fatal(err)
+		}
+	}
+}
+
+func BenchmarkCracked(b *testing.B) {
+	s, _, _ := beamOf(b, 2)
+	for b.Loop() {
+		if _, err := s.Cracked(8, Sagging); err != nil {
+			b.Fatal(err)
+		}
+	}
 }

@@ -188,13 +188,20 @@ func (s *Solver) loadEdges(parts []Part, hogging bool) {
 	s.edges = append(s.edges, edge{at: 1, weight: -above, piece: -1})
 }
 
+// onFace is the fraction of the depth below which a bar lies on the compression
+// face itself.
+const onFace = 1e-9
+
 func (s *Solver) loadBars(layers []Layer, hogging bool) {
 	s.bars = s.bars[:0]
 	for i := range layers {
 		l := &layers[i]
 		at := l.Depth.In(units.Metre) / s.depth
 		if hogging {
-			at = max(0, 1-at)
+			at = 1 - at
+		}
+		if at < onFace {
+			at = 0
 		}
 		yield := l.Steel.Yield.In(units.Pascal)
 		elastic := l.Steel.Modulus.In(units.Pascal) * s.law.ultimate
@@ -215,8 +222,9 @@ func (s *Solver) loadBars(layers []Layer, hogging bool) {
 }
 
 // report writes the equilibrium at k, with each bar on the branch of its present
-// state. A bar that stands at a jump is thus on the side where the root is.
-func (s *Solver) report(dst *Ultimate, k float64) {
+// state: a bar that stands at a jump is thus on the side where the root is. It
+// returns the force against which the residual is to be judged.
+func (s *Solver) report(dst *Ultimate, k float64) (size float64) {
 	c := s.depth / k
 	force, first, centroid := s.concrete(k)
 	force *= c
@@ -224,9 +232,10 @@ func (s *Solver) report(dst *Ultimate, k float64) {
 	centroid *= s.depth
 
 	sum := force - s.axial*s.depth
+	size = math.Abs(force) + math.Abs(s.axial*s.depth)
 	moment := force*centroid - first
 	var tension, tensionFirst, side, sideFirst, extreme float64
-	dst.Layers = slices.Grow(dst.Layers, len(s.bars))
+	dst.Layers = slices.Grow(dst.Layers[:0], len(s.bars))
 	for i := range s.bars {
 		b := &s.bars[i]
 		at, area := b.at*s.depth, b.area*s.depth
@@ -238,6 +247,7 @@ func (s *Solver) report(dst *Ultimate, k float64) {
 		}
 		f := area * (stress - displaced)
 		sum += f
+		size += math.Abs(f)
 		moment += f * (centroid - at)
 		if strain < 0 {
 			tension += area
@@ -276,6 +286,7 @@ func (s *Solver) report(dst *Ultimate, k float64) {
 	}
 	dst.Nominal = units.NewtonMetre.Of(moment)
 	dst.Residual = units.Newton.Of(sum)
+	return size
 }
 
 // concrete returns the force of the concrete over the neutral-axis depth, its
