@@ -44,6 +44,12 @@ type Code interface {
 	// ok is false where no amount would do.
 	LeastTension(p *Problem, s Sense, depth units.Length) (area units.Area, ok bool)
 
+	// WidestSpacing is an upper bound of the spacing along the beam at which
+	// the code could accept stirrups where it requires them, for tension
+	// steel at an effective depth. The search proposes no wider ones, even
+	// where none are required.
+	WidestSpacing(p *Problem, depth units.Length) units.Length
+
 	// Judge appends to dst the checks of one group of limit states on a
 	// trial. A check that rests on the bars of one face carries that Face:
 	// in bending the tension face. It must not keep the trial. With t.Record it also writes the

@@ -140,20 +140,58 @@ func (s *search) result() (*Result, error) {
 	if chosen != nil {
 		layout = s.layoutOf(chosen)
 		s.addSideBars(&layout)
+		s.assumeDepths(chosen)
 	}
 	r, faults := s.p.finish(layout)
 	if len(faults) > 0 {
 		return nil, fmt.Errorf("beam: the search proposed a layout that is not one: %v", &InputError{Faults: faults})
 	}
-	r.Rejected = s.rejects.list
 	if len(s.kept) == 0 {
+		r.Rejected = s.rejects.list
 		r.Verdict = Unsatisfied
 		return r, nil
 	}
+	s.retrace(chosen)
+	r.Rejected = s.rejects.list
 	for i := 1; i < len(s.kept); i++ {
-		r.Alternatives = append(r.Alternatives, s.alternative(&s.kept[i]))
+		if a, ok := s.alternative(&s.kept[i]); ok {
+			r.Alternatives = append(r.Alternatives, a)
+		}
 	}
 	return r, nil
+}
+
+// retrace repeats the search for the stirrups of the chosen bars, to log
+// every arrangement that failed on the way. The log of each pair of bars
+// would say the same many times over.
+func (s *search) retrace(f *found) {
+	s.logs = true
+	s.t.enclose(f.stirrup, larger(f.bottom.largest(), f.top.largest()))
+	if s.put(Bottom, &f.bottom, f.inCompress == Bottom) && s.put(Top, &f.top, f.inCompress == Top) {
+		s.boundStirrups()
+		s.eachStirrup(f.stirrup, func(float64) bool { return true }, func([]Zone, float64) {})
+	}
+	s.logs = false
+}
+
+// assumeDepths lists the effective depths that the search sized tension
+// steel with before any bar was laid: one layer of the size that was chosen.
+// The finished bars have depths of their own, by which every check goes.
+func (s *search) assumeDepths(f *found) {
+	for sense, set := range [...]*barSet{Positive: &f.bottom, Negative: &f.top} {
+		if sense := Sense(sense); set == nil || !s.bent(sense) {
+			continue
+		}
+		size, sense := set.largest(), Sense(sense)
+		s.t.enclose(f.stirrup, size)
+		d := s.singleLayerDepth(f.stirrup, size)
+		s.p.assumedDepth[sense] = d
+		s.p.register.Assume(Assumption{
+			ID:      "effective-depth." + sense.String(),
+			Assumed: fmt.Sprintf("d = %s: one layer of %s in %s stirrups", s.p.System.Format(d.Amount()), size.Name, f.stirrup.Name),
+			UsedIn:  []string{"the least tension steel that the search tried"},
+		})
+	}
 }
 
 // closest is the arrangement that came nearest to passing; nil if there was
@@ -242,30 +280,41 @@ func (s *search) addSideBars(l *Layout) {
 	l.Longitudinal = l.Longitudinal[:len(l.Longitudinal)-1]
 }
 
-// alternative says how a kept layout differs from the first.
-func (s *search) alternative(f *found) Alternative {
-	sys := s.p.System
+// alternative says how a kept layout differs from the first. ok is false
+// where a check of the member as a whole fails, which the search leaves to
+// the end.
+func (s *search) alternative(f *found) (a Alternative, ok bool) {
+	a = Alternative{Layout: s.layoutOf(f), SteelMass: units.Kilogram.Of(f.mass), Depth: s.p.Brief.Section.Depth, WhyNotFirst: s.whyNotFirst(f)}
+	s.addSideBars(&a.Layout)
+	t, faults := trialOf(s.p.Problem, &a.Layout)
+	if len(faults) > 0 {
+		return a, false
+	}
+	s.checks = t.buildable(s.checks[:0])
+	for _, g := range Groups() {
+		s.checks = s.p.Code.Judge(s.checks, g, t)
+	}
+	if g := Governing(s.checks); g != nil {
+		a.Governing, a.Utilization = g.ID, g.Utilization
+	}
+	return a, !Failing(s.checks)
+}
+
+// whyNotFirst compares a kept layout with the first in the terms that rank.
+func (s *search) whyNotFirst(f *found) string {
 	first := &s.kept[0]
-	a := Alternative{Layout: s.layoutOf(f), SteelMass: units.Kilogram.Of(f.mass), Depth: s.p.Brief.Section.Depth}
+	if more := f.key[0] - first.key[0]; more > 0 {
+		switch s.prefer {
+		case FewestBars:
+			return fmt.Sprintf("%g bars more", more)
+		case OneSize:
+			return fmt.Sprintf("%g sizes instead of %g", f.key[0], first.key[0])
+		case FewestMarks:
+			return fmt.Sprintf("%g marks more", more)
+		}
+	}
 	more := units.Kilogram.Of(f.mass - first.mass)
-	switch {
-	case s.prefer == FewestBars && f.key[0] > first.key[0]:
-		a.WhyNotFirst = fmt.Sprintf("%g bars more", f.key[0]-first.key[0])
-	case s.prefer == OneSize && f.key[0] > first.key[0]:
-		a.WhyNotFirst = fmt.Sprintf("%g sizes instead of %g", f.key[0], first.key[0])
-	case s.prefer == FewestMarks && f.key[0] > first.key[0]:
-		a.WhyNotFirst = fmt.Sprintf("%g marks more", f.key[0]-first.key[0])
-	default:
-		a.WhyNotFirst = fmt.Sprintf("%s more steel (%.1f %%)", sys.Format(more.Amount()), 100*(f.mass-first.mass)/first.mass)
-	}
-	if t, faults := trialOf(s.p.Problem, &a.Layout); len(faults) == 0 {
-		s.checks = s.checks[:0]
-		for _, g := range Groups() {
-			s.checks = s.p.Code.Judge(s.checks, g, t)
-		}
-		if g := Governing(s.checks); g != nil {
-			a.Governing, a.Utilization = g.ID, g.Utilization
-		}
-	}
-	return a
+	percent := 100 * (f.mass - first.mass) / first.mass
+	sys := s.p.System
+	return fmt.Sprintf("%.3g %s more steel (%.1f %%)", sys.Float(more.Amount()), sys.Unit(units.DimMass), percent)
 }

@@ -36,6 +36,7 @@ func (p *prepared) finish(layout Layout) (*Result, []Fault) {
 	r := p.blank()
 	r.Layout = layout
 	r.Layout.Transverse = slices.Clone(t.Zones)
+	r.Cover = t.Cover
 	r.Checks = t.buildable(nil)
 	for _, g := range Groups() {
 		r.Checks = p.Code.Judge(r.Checks, g, t)
@@ -73,6 +74,18 @@ func judgedStrength(checks []Check) bool { return Governing(checks) != nil }
 
 // settle holds the assumptions that need no code against the finished trial.
 func (p *prepared) settle(t *Trial, register *Register) {
+	for sense, assumed := range p.assumedDepth {
+		if assumed.IsZero() {
+			continue
+		}
+		d := t.EffectiveDepth(Sense(sense))
+		found := "d = " + p.System.Format(d.Amount()) + " of the bars as laid"
+		same := d.AtMost(assumed) && assumed.AtMost(d)
+		if !same {
+			found += "; every check goes by it"
+		}
+		register.Settle("effective-depth."+Sense(sense).String(), found, same)
+	}
 	if p.SelfWeight.IsZero() {
 		return
 	}

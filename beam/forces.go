@@ -33,6 +33,19 @@ type spanForces struct {
 	length float64 // m
 	twists []twist
 	holds  [2]bool // whether each end holds against twist
+
+	// whole keeps the extremes between the support faces, which every trial
+	// of a search asks for.
+	from, to units.Length
+	whole    statics.Extremes
+}
+
+// extremes are those of all combinations between two positions.
+func (sp *spanForces) extremes(from, to units.Length) (statics.Extremes, error) {
+	if from == sp.from && to == sp.to {
+		return sp.whole, nil
+	}
+	return sp.all.Extremes(from, to)
 }
 
 // twist is one torque on a span, with its factor in each combination.
@@ -66,7 +79,7 @@ const noMoment = 1e-12
 // positions of a span, at its true position. ok is false where no
 // combination bends that way.
 func (f *Forces) Moment(s Sense, span int, from, to units.Length) (a Action, ok bool) {
-	e, err := f.spans[span-1].all.Extremes(from, to)
+	e, err := f.spans[span-1].extremes(from, to)
 	if err != nil {
 		return Action{}, false
 	}
@@ -84,7 +97,7 @@ func (f *Forces) Moment(s Sense, span int, from, to units.Length) (a Action, ok 
 // Shear is the action with the largest magnitude of shear between two
 // positions of a span.
 func (f *Forces) Shear(span int, from, to units.Length) (a Action, ok bool) {
-	e, err := f.spans[span-1].all.Extremes(from, to)
+	e, err := f.spans[span-1].extremes(from, to)
 	if err != nil {
 		return Action{}, false
 	}
@@ -232,6 +245,10 @@ func memberForces(b *Brief, selfWeight units.LineLoad, kept []Combination) (Forc
 		sp.breaks = all.AppendBreaks(nil)
 		sp.holds = [2]bool{b.Supports[i].Kind != statics.Free, b.Supports[i+1].Kind != statics.Free}
 		sp.addTwists(b.Loads, i+1, kept)
+		sp.from, sp.to = b.Supports[i].Width.Scale(0.5), b.Spans[i].Sub(b.Supports[i+1].Width.Scale(0.5))
+		if sp.whole, err = all.Extremes(sp.from, sp.to); err != nil {
+			return Forces{}, err
+		}
 	}
 	return f, nil
 }

@@ -15,6 +15,9 @@ type prepared struct {
 	*Problem
 	register Register
 	refusals []Refusal
+	// assumedDepth is the effective depth of each sense that the search
+	// started from; zero where there was no search.
+	assumedDepth [Negative + 1]units.Length
 }
 
 // prepare resolves a brief under a code and analyses it. The error is an

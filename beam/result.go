@@ -19,8 +19,9 @@ type Result struct {
 
 	Problem  *Problem // the resolved brief and its forces; nil when out of scope before analysis
 	Layout   Layout
-	Bars     []BarAt // every longitudinal bar by coordinates
-	Section  Section // as designed: its depth may be one of Preferences.Depths
+	Bars     []BarAt      // every longitudinal bar by coordinates
+	Cover    units.Length // clear, to the stirrups
+	Section  Section      // as designed: its depth may be one of Preferences.Depths
 	Checks   []Check
 	Flexure  []FlexureStrength // of the final bars, one per sense that is bent
 	Refusals []Refusal

@@ -12,8 +12,11 @@ import (
 //
 //   - longitudinal sets of one size (two neighbouring ones if asked), layers
 //     filled from the face, on each face;
+//   - two bars of the smallest size, not smaller than the stirrup, on a face
+//     that is never in tension, to hold the stirrups;
 //   - stirrups of each allowed size and 2 to MaxLegs legs, at multiples of
-//     the spacing step, in one zone from face to face or in three;
+//     the spacing step up to the code's widest, in one zone from face to face
+//     or in three; more legs only while they buy a wider spacing;
 //   - compression steel only for a face that no tension steel alone can
 //     satisfy.
 //
@@ -31,11 +34,14 @@ type search struct {
 	failed  []Check // scratch
 	layers  []bars.Layer
 	zones   []Zone // scratch of the zone search
+	best    []Zone // scratch, the lightest zones of a pair so far
+	widest  int    // spacing steps that the code could accept for the current bars
 	member  bool   // spans are given, so zones have extents
 	from    units.Length
 	to      units.Length
 	kept    []found
 	rejects rejectLog
+	logs    bool    // log every arrangement of stirrups that fails
 	near    [3]near // by face, and at 0 for whole pairs
 }
 
@@ -133,7 +139,9 @@ func (s *search) sets(face Face, tie bars.Size) []barSet {
 	var sets []barSet
 	for i, size := range s.main {
 		if !bent {
-			sets = uniformSets(sets, size, 2, 2, 1)
+			if len(sets) == 0 && (tie.Area.AtMost(size.Area) || i == len(s.main)-1) {
+				sets = uniformSets(sets, size, 2, 2, 1)
+			}
 			continue
 		}
 		most, least, ok := s.bounds(sense, tie, size)
@@ -159,15 +167,21 @@ func (s *search) bounds(sense Sense, tie, size bars.Size) (most int, least units
 	if err != nil {
 		return 0, least, false
 	}
-	depth := s.p.Brief.Section.Depth.Sub(s.t.Cover).Sub(tie.Diameter).Sub(size.Diameter.Scale(0.5))
-	least, ok = s.p.Code.LeastTension(s.p.Problem, sense, depth)
+	least, ok = s.p.Code.LeastTension(s.p.Problem, sense, s.singleLayerDepth(tie, size))
 	return most, least, ok
+}
+
+// singleLayerDepth is the effective depth of one layer of a size resting on
+// the stirrup, with the cover of the trial.
+func (s *search) singleLayerDepth(tie, size bars.Size) units.Length {
+	return s.p.Brief.Section.Depth.Sub(s.t.Cover).Sub(tie.Diameter).Sub(size.Diameter.Scale(0.5))
 }
 
 // judge puts the current trial to groups of checks and keeps those that fail
 // in s.failed; with a face given, only that face's and those of no face.
 func (s *search) judge(face Face, groups ...Group) (ok bool) {
 	s.checks, s.failed = s.checks[:0], s.failed[:0]
+	s.checks = s.t.buildable(s.checks)
 	for _, g := range groups {
 		s.checks = s.p.Code.Judge(s.checks, g, &s.t)
 	}
@@ -227,7 +241,7 @@ func (s *search) pairs(tie bars.Size, bottoms, tops []barSet) {
 		b := &bottoms[i]
 		for j := range tops {
 			t := &tops[j]
-			if !s.promising(b, t) {
+			if !s.promising(b, t, 0) {
 				continue
 			}
 			if !s.accepts(Top, tie, t) {
@@ -263,12 +277,12 @@ func (s *search) compressed(tie bars.Size, face Face) {
 	heaviest := &others[len(others)-1]
 	for i := range sets {
 		b := &sets[i]
-		if !s.promising(b, &others[0]) || !s.relied(tie, face, b, heaviest) {
+		if !s.promising(b, &others[0], 0) || !s.relied(tie, face, b, heaviest) {
 			continue
 		}
 		for j := range others {
 			o := &others[j]
-			if !s.promising(b, o) {
+			if !s.promising(b, o, 0) {
 				continue
 			}
 			if s.relied(tie, face, b, o) {
@@ -308,8 +322,12 @@ func (s *search) shear(tie bars.Size, bottom, top *barSet, inCompression Face) {
 	if !s.judge(0, Fitting, Bending) {
 		return
 	}
+	s.boundStirrups()
+	if !s.promising(bottom, top, s.leastStirrups(tie)) {
+		return
+	}
 	long := s.longitudinal(bottom, top)
-	s.eachStirrup(tie, func(zones []Zone, stirrups float64) {
+	s.eachStirrup(tie, func(mass float64) bool { return s.promising(bottom, top, mass) }, func(zones []Zone, stirrups float64) {
 		f := found{
 			bottom: *bottom, top: *top, inCompress: inCompression, stirrup: tie,
 			mass: long + stirrups, stirrupMass: stirrups,
@@ -371,9 +389,9 @@ func differentSizes(sets ...*barSet) int {
 }
 
 // promising reports whether a pair could still be kept if its stirrups
-// weighed nothing.
-func (s *search) promising(bottom, top *barSet) bool {
-	return s.ranks(s.key(bottom, top, s.longitudinal(bottom, top), 1))
+// weighed no more than a given mass.
+func (s *search) promising(bottom, top *barSet, stirrups float64) bool {
+	return s.ranks(s.key(bottom, top, s.longitudinal(bottom, top)+stirrups, 1))
 }
 
 func (s *search) ranks(key [3]float64) bool {

@@ -11,26 +11,48 @@ import (
 // practice, no source).
 var leastSpacing = units.Millimetre.Of(50)
 
+// boundStirrups finds the widest spacing that the code could accept for the
+// bars of the trial.
+func (s *search) boundStirrups() {
+	d := s.t.EffectiveDepth(Positive).Max(s.t.EffectiveDepth(Negative))
+	least, _ := s.steps()
+	s.widest = max(least, int(s.p.Code.WidestSpacing(s.p.Problem, d).Ratio(s.p.Brief.Preferences.SpacingBy)+1e-9))
+}
+
+// leastStirrups bounds the mass of stirrups from below: two legs at the
+// widest spacing throughout.
+func (s *search) leastStirrups(tie bars.Size) float64 {
+	s.setUniform(tie, 2, s.widest)
+	return s.stirrupMass(tie)
+}
+
 // eachStirrup calls keep with the lightest passing zones of every number of
-// legs for the bars of the trial. More legs are tried only while they buy a
-// wider spacing.
-func (s *search) eachStirrup(tie bars.Size, keep func(zones []Zone, mass float64)) {
-	widest := 0
+// legs for the bars of the trial, unless promising says that no zones of
+// that mass could be kept. More legs are tried only while they buy a wider
+// spacing.
+func (s *search) eachStirrup(tie bars.Size, promising func(mass float64) bool, keep func(zones []Zone, mass float64)) {
+	before := 0
 	for legs := 2; legs <= s.p.Brief.Preferences.MaxLegs; legs++ {
 		uniform, ok := s.uniform(tie, legs)
 		if !ok {
 			continue
 		}
-		if uniform <= widest {
+		if uniform <= before {
 			return
 		}
-		widest = uniform
-		s.setUniform(tie, legs, uniform)
-		best, mass := append([]Zone(nil), s.zones...), s.stirrupMass(tie)
-		if zones, m, ok := s.threeZones(tie, legs, uniform); ok && m < mass {
-			best, mass = zones, m
+		before = uniform
+		s.setUniform(tie, legs, s.widest)
+		if !promising(s.stirrupMass(tie)) {
+			continue
 		}
-		keep(best, mass)
+		s.setUniform(tie, legs, uniform)
+		s.best = append(s.best[:0], s.zones...)
+		if mass := s.threeZones(tie, legs, uniform, s.stirrupMass(tie)); promising(mass) {
+			keep(s.best, mass)
+		}
+		if uniform == s.widest {
+			return
+		}
 	}
 }
 
@@ -43,21 +65,28 @@ func (s *search) step(k int) units.Length {
 func (s *search) steps() (least, most int) {
 	by := s.p.Brief.Preferences.SpacingBy
 	least = int(math.Ceil(leastSpacing.Ratio(by) - 1e-9))
-	return least, max(least, int(s.p.Brief.Section.Depth.Ratio(by)+1e-9))
+	return least, max(least, s.widest)
 }
 
 // uniform is the widest passing spacing of one zone, in steps. A closer
 // spacing never fails where a wider one passes.
 func (s *search) uniform(tie bars.Size, legs int) (k int, ok bool) {
 	least, most := s.steps()
+	s.setUniform(tie, legs, most)
+	if s.try(tie, legs, most, 1) {
+		return most, true
+	}
 	s.setUniform(tie, legs, least)
 	if !s.try(tie, legs, least, 1) {
 		if worst := s.worst(); !s.near[0].ok || worst < s.near[0].worst {
 			s.near[0] = near{ok: true, worst: worst, pair: s.current(tie)}
 		}
+		if !s.logs {
+			s.logStirrups(tie, legs, least, 1)
+		}
 		return 0, false
 	}
-	return s.last(least, most, func(k int) bool {
+	return s.last(least, most-1, func(k int) bool {
 		s.setUniform(tie, legs, k)
 		return s.try(tie, legs, k, 1)
 	}), true
@@ -82,8 +111,15 @@ func (s *search) try(tie bars.Size, legs, k, zones int) bool {
 	if s.judge(0, Shearing) {
 		return true
 	}
-	s.reject(Arrangement{Depth: s.p.Brief.Section.Depth, Bar: tie.Name, Legs: legs, Spacing: s.step(k), Zones: zones})
+	if s.logs {
+		s.logStirrups(tie, legs, k, zones)
+	}
 	return false
+}
+
+// logStirrups logs the zones that just failed.
+func (s *search) logStirrups(tie bars.Size, legs, k, zones int) {
+	s.reject(Arrangement{Depth: s.p.Brief.Section.Depth, Bar: tie.Name, Legs: legs, Spacing: s.step(k), Zones: zones})
 }
 
 // setUniform puts one zone from face to face.
@@ -126,35 +162,42 @@ func stirrupCount(z Zone) int {
 // zones of their own.
 const widerSteps = 3
 
-// threeZones looks for lighter stirrups with close ends at the given spacing
-// and a wider middle. The zones returned are a copy.
-func (s *search) threeZones(tie bars.Size, legs, close int) (best []Zone, mass float64, ok bool) {
+// threeZones looks for lighter stirrups than those in s.best, of a given
+// mass, with close ends at a spacing and a wider middle. It returns the mass
+// of the lightest and leaves them in s.best.
+func (s *search) threeZones(tie bars.Size, legs, close int, mass float64) float64 {
 	if !s.member || s.p.Brief.Preferences.MaxZones < 3 {
-		return nil, 0, false
+		return mass
 	}
-	_, most := s.steps()
 	longest := int(s.to.Sub(s.from).Ratio(s.step(close)) * 0.45)
-	if longest < 1 {
-		return nil, 0, false
+	if longest < 1 || close >= s.widest {
+		return mass
 	}
 	passes := func(wide, left, right int) bool {
 		s.setThree(tie, legs, close, wide, left, right)
 		return s.try(tie, legs, wide, 3)
 	}
-	widest := s.last(close, most, func(k int) bool { return passes(k, longest, longest) })
+	widest := s.widest
+	if !passes(widest, longest, longest) {
+		widest = s.last(close, widest-1, func(k int) bool { return passes(k, longest, longest) })
+	}
 	for wide := widest; wide > close && wide > widest-widerSteps; wide-- {
-		// The shortest end zone on each side; a longer one never fails where
-		// a shorter one passes.
+		// A longer end zone never fails where a shorter one passes: first
+		// the same on both sides, then the right one for itself.
 		left := longest - s.last(0, longest, func(cut int) bool { return passes(wide, longest-cut, longest) })
-		right := longest - s.last(0, longest, func(cut int) bool { return passes(wide, left, longest-cut) })
-		if !passes(wide, left, right) {
-			continue
+		right := left
+		if !passes(wide, left, left) {
+			right = longest - s.last(0, longest-left, func(cut int) bool { return passes(wide, left, longest-cut) })
+		} else {
+			right = left - s.last(0, left, func(cut int) bool { return passes(wide, left, left-cut) })
 		}
-		if m := s.stirrupMass(tie); !ok || m < mass {
-			best, mass, ok = append(best[:0], s.zones...), m, true
+		s.setThree(tie, legs, close, wide, left, right)
+		m := s.stirrupMass(tie)
+		if m < mass {
+			mass, s.best = m, append(s.best[:0], s.zones...)
 		}
 	}
-	return best, mass, ok
+	return mass
 }
 
 // stirrupMass is the mass of the current zones in kg; per metre of beam with

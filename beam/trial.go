@@ -35,9 +35,10 @@ type Trial struct {
 	// Record asks Judge for the working of each check.
 	Record bool
 
-	// Solver, Ultimate and Parts are working space for the code's flexure
-	// kernel, so that a search allocates once.
+	// Solver, Law, Ultimate and Parts are working space for the code's
+	// flexure kernel, so that a search allocates once.
 	Solver   mechanics.Solver
+	Law      mechanics.Law
 	Ultimate mechanics.Ultimate
 	Parts    []mechanics.Part
 	layers   []mechanics.Layer
