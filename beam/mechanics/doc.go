@@ -10,7 +10,8 @@
 //   - [Section.Ultimate] and [Solver.Ultimate] find the equilibrium at which
 //     the compression face reaches the law's ultimate strain.
 //   - [Section.Fibres] finds the same equilibrium by another route, fibre
-//     integration, and shares no function with the first.
+//     integration, and shares nothing with the first but the law and the
+//     validation of input.
 //   - [Section.Gross], [Section.Uncracked] and [Section.Cracked] are the elastic
 //     properties used in service.
 //   - [RequiredTension] and [Solver.RequiredArea] turn the question round.
@@ -20,8 +21,8 @@
 // A section is described from its top face down, for either sense of bending.
 // Results are measured from the compression face, which is the top face in
 // [Sagging] and the bottom face in [Hogging]. Strains, stresses and forces are
-// positive in compression; the one exception is [Ultimate.ExtremeStrain], which
-// is positive in tension and says so.
+// positive in compression. The exceptions say so: [Ultimate.ExtremeStrain] and
+// [Cracked.SteelStress] are positive in tension.
 //
 // # Exactness
 //

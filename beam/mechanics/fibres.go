@@ -25,8 +25,8 @@ type FibreUltimate struct {
 // at Gauss's points, each bar is a fibre, and the neutral axis is found by
 // scanning and halving. Strips end where a part ends and where the law
 // kinks, so that no strip straddles a break. Of the law it asks only the stress
-// at a strain. It is a check on [Section.Ultimate], slower and written
-// without sharing any of its functions.
+// at a strain. It is a check on [Section.Ultimate], slower, and shares nothing
+// with it but the law and the validation of input.
 //
 // Its errors are [*InputError] and [*NoEquilibriumError].
 func (s Section) Fibres(law Law, bending Bending) (FibreUltimate, error) {
