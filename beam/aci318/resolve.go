@@ -171,7 +171,7 @@ func (r *resolution) readings() {
 		r.assume("reading.yield-strain", "the yield strain of Grade 60 bars is rounded to 0.002 (21.2.2.1)", "flexure.strain.positive", "flexure.strain.negative")
 	case g.RoundedYield:
 		r.assume("reading.yield-strain", "the yield strain is fy/Es: 21.2.2.1 permits its rounding for Grade 60 only", "flexure.strain.positive", "flexure.strain.negative")
-	case grade60:
+	default:
 		r.assume("reading.yield-strain", "the yield strain is fy/Es, not rounded", "flexure.strain.positive", "flexure.strain.negative")
 	}
 	if g.ShearRow == 0 {
