@@ -30,7 +30,7 @@ func (t *Trial) stirrupSet(size bars.Size, legs int) bars.StirrupSet {
 // That is geometry, whatever the code.
 func (t *Trial) buildable(dst []Check) []Check {
 	for i := range t.Zones {
-		c := Check{ID: "stirrup.bends", Clause: "geometry", Span: t.Zones[i].Span, At: t.Zones[i].From}
+		c := Check{ID: "stirrup.bends", Clause: "geometry", Span: t.Zones[i].Span, At: t.Zones[i].From, Detailing: true}
 		cage := t.cage()
 		width, depth := cage.Outside()
 		bend, err := t.ZoneBar[i].Bend(bars.Stirrup)

@@ -18,8 +18,11 @@ type Check struct {
 	Capacity    units.Amount
 	Utilization float64
 	Outcome     Outcome
-	Reason      string // why not applicable or not judged, or what was decided on the way
-	Steps       []Step // the working, in order; only in a final judgement
+	// Detailing marks a rule of arrangement that a layout is commonly drawn
+	// to exactly, such as a cover or a spacing. It governs only if it fails.
+	Detailing bool
+	Reason    string // why not applicable or not judged, or what was decided on the way
+	Steps     []Step // the working, in order; only in a final judgement
 }
 
 // Step is one line of the working: a value that was given or computed, the
@@ -81,13 +84,13 @@ func Failing(checks []Check) bool {
 	return false
 }
 
-// Governing is the judged check with the largest utilization; nil if none
-// was judged.
+// Governing is the judged check with the largest utilization, rules of
+// arrangement that are kept left aside; nil if none was judged.
 func Governing(checks []Check) *Check {
 	var g *Check
 	for i := range checks {
 		c := &checks[i]
-		if c.Outcome != Pass && c.Outcome != Fail {
+		if c.Outcome != Pass && c.Outcome != Fail || c.Detailing && c.Outcome == Pass {
 			continue
 		}
 		if g == nil || c.Utilization > g.Utilization {

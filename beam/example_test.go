@@ -34,4 +34,7 @@ func Example() {
 		fmt.Println(row.Face, row.Count, row.Bar)
 	}
 	// Output:
+	// satisfied governed by flexure.positive
+	// bottom 6 #6
+	// top 2 #3
 }

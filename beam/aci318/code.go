@@ -24,17 +24,32 @@ func (c Code) LeastTension(p *beam.Problem, s beam.Sense, depth units.Length) (u
 
 // Judge appends the checks of a group.
 func (c Code) Judge(dst []beam.Check, g beam.Group, t *beam.Trial) []beam.Check {
+	first := len(dst)
 	switch g {
 	case beam.Fitting:
-		return c.e.judgeFitting(dst, t)
+		dst = c.e.judgeFitting(dst, t)
 	case beam.Bending:
-		return c.e.judgeBending(dst, t)
+		dst = c.e.judgeBending(dst, t)
 	case beam.Shearing:
-		return c.e.judgeShearing(dst, t)
+		dst = c.e.judgeShearing(dst, t)
 	case beam.Whole:
-		return c.e.judgeWhole(dst, t)
+		dst = c.e.judgeWhole(dst, t)
+	}
+	for i := first; i < len(dst); i++ {
+		dst[i].Detailing = g == beam.Fitting || isArrangement(dst[i].ID)
 	}
 	return dst
+}
+
+// isArrangement reports whether a check outside Fitting is a rule of
+// arrangement, which layouts are drawn to exactly.
+func isArrangement(id string) bool {
+	switch id {
+	case "shear.spacing-along", "shear.spacing-across", "shear.stirrup-size", "shear.stirrup-anchorage",
+		"ties.size", "ties.spacing", "ties.held-bars", "side-face.spacing", "bracing.spacing":
+		return true
+	}
+	return false
 }
 
 // Cautions are what a reader must know of any result under this code.

@@ -94,7 +94,20 @@ func report(w io.Writer, live float64, r *beam.Result) error {
 		return err
 	}
 	for _, l := range working.Lines(g, r.System) {
-		if _, err := fmt.Fprintf(w, "    %s\n", l); err != nil {
+		value := l.Value.Number.String() + " " + l.Value.Unit
+		if l.Substitution != "" {
+			value = l.Substitution + " = " + value
+		}
+		if l.Expression != "" && l.Substitution != "" {
+			value = l.Expression + " = " + value
+		}
+		if l.Clause != "" {
+			value += "  (" + l.Clause + ")"
+		}
+		if l.Note != "" {
+			value += "  " + l.Note
+		}
+		if _, err := fmt.Fprintf(w, "    %-4s = %s\n", l.Symbol, value); err != nil {
 			return err
 		}
 	}

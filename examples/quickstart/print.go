@@ -111,7 +111,7 @@ func (p *printer) round(a units.Amount) string {
 	if v != 0 {
 		digits = max(0, 2-int(math.Floor(math.Log10(math.Abs(v)))))
 	}
-	return strings.TrimSuffix(fmt.Sprintf("%.*f %s", digits, v, p.sys.Unit(a.Dimension())), " ")
+	return strings.TrimSpace(fmt.Sprintf("%.*f %s", digits, v, p.sys.Unit(a.Dimension())))
 }
 
 func (p *printer) checks(r *beam.Result) {
