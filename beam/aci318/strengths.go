@@ -23,6 +23,7 @@ func (c Code) Strengths(q beam.SectionQuery) (beam.Strengths, error) {
 	}
 	if q.Concrete.Kind == 0 {
 		q.Concrete.Kind = beam.Normalweight
+		out.Notes = append(out.Notes, "the kind of concrete is not stated: taken as normalweight, λ = 1")
 	}
 	if faults := e.queryFaults(&q); len(faults) > 0 {
 		return beam.Strengths{}, &beam.InputError{Faults: faults}

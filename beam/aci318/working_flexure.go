@@ -65,18 +65,24 @@ func stateOf(section mechanics.Section, u *mechanics.Ultimate, i int) layerState
 // yieldingSteps is the closed form: all steel in tension at its yield
 // strength.
 func (e *edition) yieldingSteps(w *working, section mechanics.Section, u *mechanics.Ultimate, f *flexure) {
-	e.layerInputs(w, section, u)
-	area, depth := e.areaIn(u.TensionArea), e.lengthIn(u.EffectiveDepth)
-	if n := len(u.Layers); n > 1 {
-		w.find("As", "area of all bars in tension", "", sum(n, "As#"), e.asArea(area))
-		w.find("d", "depth to the centroid of all bars in tension", "", "("+sum(n, "As# d#")+") / As", e.asLength(depth))
+	area, depth := e.asArea(e.areaIn(u.TensionArea)), e.asLength(e.lengthIn(u.EffectiveDepth))
+	n := len(u.Layers)
+	if n == 1 {
+		w.given("As", "area of the bars in tension", "", area)
+		w.given("d", "depth of the bars in tension from the compression face", "", depth)
+	} else {
+		e.layerInputs(w, section, u)
+		w.find("As", "area of all bars in tension", "", sum(n, "As#"), area)
+		w.find("d", "depth to the centroid of all bars in tension", "", "("+sum(n, "As# d#")+") / As", depth)
 	}
 	a := e.lengthIn(u.NeutralAxis) * f.blockFactor
 	w.find("a", "depth of the stress block", "22.2.2.4.1", "As fy / (0.85 f'c b)", e.asLength(a))
-	w.note("every layer yields: see its strain below")
+	w.note("every bar yields: see the strains below")
 	e.blockFactorStep(w, f.blockFactor)
 	w.find("c", "depth of the neutral axis", "22.2.2.4.2", "a / β1", e.asLength(e.lengthIn(u.NeutralAxis)))
-	e.layerStrains(w, u)
+	if n > 1 {
+		e.layerStrains(w, u)
+	}
 	e.extremeStep(w, u, f)
 	w.find("Mn", "nominal strength", "22.3", "As fy (d - a / 2)", e.asMoment(e.momentIn(u.Nominal)))
 }
@@ -166,19 +172,12 @@ func (e *edition) axisSteps(w *working, section mechanics.Section, u *mechanics.
 
 func inBlock(l *mechanics.LayerState) bool { return !l.Displaced.IsZero() }
 
-// layerInputs gives area and depth of each layer; those of a single layer are
-// As and d.
+// layerInputs gives area and depth of each layer.
 func (e *edition) layerInputs(w *working, section mechanics.Section, u *mechanics.Ultimate) {
-	single := len(u.Layers) == 1
 	for i, l := range u.Layers {
-		k, of := strconv.Itoa(i+1), "layer "+strconv.Itoa(i+1)
-		area, depth := e.asArea(e.areaIn(section.Layers[i].Area)), e.asLength(e.lengthIn(l.Depth))
-		w.given("As"+k, "area of "+of, "", area)
-		w.given("d"+k, "depth of "+of+" from the compression face", "", depth)
-		if single {
-			w.find("As", "area of all bars in tension", "", "As1", area)
-			w.find("d", "depth to the centroid of all bars in tension", "", "d1", depth)
-		}
+		k := strconv.Itoa(i + 1)
+		w.given("As"+k, "area of layer "+k, "", e.asArea(e.areaIn(section.Layers[i].Area)))
+		w.given("d"+k, "depth of layer "+k+" from the compression face", "", e.asLength(e.lengthIn(l.Depth)))
 	}
 }
 
