@@ -12,8 +12,8 @@ import (
 //
 //   - longitudinal sets of one size (two neighbouring ones if asked), layers
 //     filled from the face, on each face;
-//   - two bars of the smallest size, not smaller than the stirrup, on a face
-//     that is never in tension, to hold the stirrups;
+//   - on a face that is never in tension, two to MaxLegs bars of the smallest
+//     size that is not smaller than the stirrup, to hold its legs;
 //   - stirrups of each allowed size and 2 to MaxLegs legs, at multiples of
 //     the spacing step up to the code's widest, in one zone from face to face
 //     or in three; more legs only while they buy a wider spacing;
@@ -131,7 +131,7 @@ func tensionSense(f Face) Sense {
 }
 
 // sets lists the sets of bars worth trying at a face inside a stirrup size,
-// lightest first. A face that is never in tension gets two bars to hold the
+// lightest first. A face that is never in tension gets bars to hold the
 // stirrups.
 func (s *search) sets(face Face, tie bars.Size) []barSet {
 	sense := tensionSense(face)
@@ -140,7 +140,7 @@ func (s *search) sets(face Face, tie bars.Size) []barSet {
 	for i, size := range s.main {
 		if !bent {
 			if len(sets) == 0 && (tie.Area.AtMost(size.Area) || i == len(s.main)-1) {
-				sets = uniformSets(sets, size, 2, 2, 1)
+				sets = uniformSets(sets, size, 2, s.p.Brief.Preferences.MaxLegs, 1)
 			}
 			continue
 		}

@@ -45,7 +45,7 @@ func (c Code) Judge(dst []beam.Check, g beam.Group, t *beam.Trial) []beam.Check 
 // arrangement, which layouts are drawn to exactly.
 func isArrangement(id string) bool {
 	switch id {
-	case "shear.spacing-along", "shear.spacing-across", "shear.stirrup-size", "shear.stirrup-anchorage",
+	case "shear.spacing-along", "shear.spacing-across", "shear.stirrup-size", "shear.stirrup-anchorage", "shear.leg-bars",
 		"ties.size", "ties.spacing", "ties.held-bars", "side-face.spacing", "bracing.spacing":
 		return true
 	}
