@@ -27,7 +27,8 @@ type Code interface {
 	Scope(p *Problem) []Refusal
 
 	// Cover is the clear cover to the stirrups (or to the bars, where stirrup
-	// is zero) that satisfies the code for both sizes.
+	// is zero) that satisfies the code for both sizes. A brief that gives a
+	// cover of its own is laid out with that.
 	Cover(p *Problem, stirrup, bar bars.Size) units.Length
 
 	// Gaps are the least clear distances between bars of a layer and between

@@ -320,3 +320,16 @@ func TestWorseLayoutsFail(t *testing.T) {
 	fewer.Longitudinal[0].Count -= 2
 	require.Equal(t, beam.Unsatisfied, check(fewer).Verdict, "two bars fewer")
 }
+
+// A cover given in the brief is the one that bars are laid with.
+func TestCoverOfTheBrief(t *testing.T) {
+	b := plain()
+	b.Cover = units.Inch.Of(2.5)
+	r := design(t, b)
+	require.Equal(t, units.Inch.Of(2.5), r.Cover)
+	for _, bar := range r.Bars {
+		if bar.Face == beam.Bottom && bar.Layer == 1 {
+			require.True(t, units.Inch.Of(2.5).Less(bar.Y.Sub(bar.Diameter.Scale(0.5))))
+		}
+	}
+}

@@ -3,10 +3,14 @@ package beam
 import "soffit.example/bars"
 
 // enclose sets the stirrup that the bars of a trial lie in, and with it the
-// cover: the greatest that any bar of the trial needs.
+// cover: the brief's own, or the least by which the code accepts the stirrup
+// and the largest bar.
 func (t *Trial) enclose(stirrup, largest bars.Size) {
 	t.Stirrup = stirrup
-	t.Cover = t.Code.Cover(t.Problem, stirrup, largest)
+	t.Cover = t.Brief.Cover
+	if t.Cover.IsZero() {
+		t.Cover = t.Code.Cover(t.Problem, stirrup, largest)
+	}
 }
 
 // cage is the stirrup as the bars see it.
