@@ -11,7 +11,7 @@ import (
 // barSet is a choice of longitudinal bars for one face: up to MaxLayers
 // layers of one size, or of two with the larger at the corners.
 type barSet struct {
-	layers [MaxLayers][2]bars.Group
+	layers [MaxLayers][2]barGroup
 	used   int // layers
 	count  int
 	area   units.Area
@@ -21,16 +21,23 @@ type barSet struct {
 	judged, passes bool
 }
 
+// barGroup is some bars of one size. A search makes thousands of sets, so
+// they point at their sizes rather than hold them.
+type barGroup struct {
+	size  *bars.Size
+	count int
+}
+
 // add puts a group into a layer.
-func (b *barSet) add(layer int, size bars.Size, count int) {
+func (b *barSet) add(layer int, size *bars.Size, count int) {
 	if count == 0 {
 		return
 	}
 	slot := 0
-	if b.layers[layer][0].Count > 0 {
+	if b.layers[layer][0].count > 0 {
 		slot = 1
 	}
-	b.layers[layer][slot] = bars.Group{Size: size, Count: count}
+	b.layers[layer][slot] = barGroup{size, count}
 	b.used = max(b.used, layer+1)
 	b.count += count
 	b.area = b.area.Add(size.Area.Scale(float64(count)))
@@ -39,35 +46,44 @@ func (b *barSet) add(layer int, size bars.Size, count int) {
 
 // largest is the largest bar of the set.
 func (b *barSet) largest() bars.Size {
-	s := b.layers[0][0].Size
+	if b.used == 0 {
+		return bars.Size{}
+	}
+	s := b.layers[0][0].size
 	for i := range b.layers[:b.used] {
 		for _, g := range b.layers[i] {
-			if g.Count > 0 && s.Diameter.Less(g.Size.Diameter) {
-				s = g.Size
+			if g.count > 0 && s.Diameter.Less(g.size.Diameter) {
+				s = g.size
 			}
 		}
 	}
-	return s
+	return *s
 }
 
 // names lists the set's layers for the reject log.
 func (b *barSet) names() (out [MaxLayers]LayerBars) {
 	for i := range b.layers[:b.used] {
 		for j, g := range b.layers[i] {
-			out[i].Size[j], out[i].Count[j] = g.Size.Name, g.Count
+			if g.count > 0 {
+				out[i].Size[j], out[i].Count[j] = g.size.Name, g.count
+			}
 		}
 	}
 	return out
 }
 
-// appendLayers gives the set to package bars.
-func (b *barSet) appendLayers(dst []bars.Layer) []bars.Layer {
+// appendLayers gives the set to package bars. The groups of the layers stand
+// in groups, which must have room for them.
+func (b *barSet) appendLayers(dst []bars.Layer, groups []bars.Group) []bars.Layer {
+	groups = groups[:0]
 	for i := range b.layers[:b.used] {
-		n := 1
-		if b.layers[i][1].Count > 0 {
-			n = 2
+		first := len(groups)
+		for _, g := range b.layers[i] {
+			if g.count > 0 {
+				groups = append(groups, bars.Group{Size: *g.size, Count: g.count})
+			}
 		}
-		dst = append(dst, b.layers[i][:n:n])
+		dst = append(dst, groups[first:len(groups):len(groups)])
 	}
 	return dst
 }
@@ -75,7 +91,7 @@ func (b *barSet) appendLayers(dst []bars.Layer) []bars.Layer {
 // uniformSets appends every set of one size with at least fewest bars that
 // fits into layers of most bars: a layer is filled before the next is begun,
 // as far as upper bars can lie above lower ones symmetrically.
-func uniformSets(dst []barSet, size bars.Size, fewest, most, layers int) []barSet {
+func uniformSets(dst []barSet, size *bars.Size, fewest, most, layers int) []barSet {
 	for n := max(fewest, 2); n <= most*layers; n++ {
 		split, ok := splitLayers(n, most, layers)
 		if !ok {
@@ -125,7 +141,7 @@ func oddAbove(rest, k, layers int) bool { return layers > 0 && k > 0 && rest%2 =
 // mixedSets appends sets of two neighbouring sizes: an even number of the
 // larger one outermost in the first layer with the smaller between, or the
 // larger one below and the smaller above.
-func mixedSets(dst []barSet, larger, smaller bars.Size, least units.Area, most, layers int) []barSet {
+func mixedSets(dst []barSet, larger, smaller *bars.Size, least units.Area, most, layers int) []barSet {
 	enough := func(a, b int) bool {
 		return !larger.Area.Scale(float64(a)).Add(smaller.Area.Scale(float64(b + 1))).Less(least)
 	}

@@ -74,16 +74,18 @@ func TestMixedSetsHoldTheLargerBarsOutside(t *testing.T) {
 	require.NoError(t, err)
 	small, err := catalog.Size("#7")
 	require.NoError(t, err)
-	sets := mixedSets(nil, large, small, units.Area{}, 5, 2)
+	sets := mixedSets(nil, &large, &small, units.Area{}, 5, 2)
 	require.NotEmpty(t, sets)
 	for _, s := range sets {
 		require.Equal(t, 2, s.sizes)
-		require.Equal(t, "#8", s.layers[0][0].Size.Name)
+		require.Equal(t, "#8", s.layers[0][0].size.Name)
 		require.Equal(t, "#8", s.largest().Name)
 		total := units.Area{}
 		for _, l := range s.layers {
 			for _, g := range l {
-				total = total.Add(bars.TotalArea(g))
+				if g.count > 0 {
+					total = total.Add(bars.TotalArea(bars.Group{Size: *g.size, Count: g.count}))
+				}
 			}
 		}
 		require.InEpsilon(t, total.In(units.SquareInch), s.area.In(units.SquareInch), 1e-12)

@@ -71,12 +71,12 @@ func (l *Layout) appendRows(face Face, b *barSet, inCompression bool, letter str
 	n := 0
 	for i := range b.layers[:b.used] {
 		for _, g := range b.layers[i] {
-			if g.Count == 0 {
+			if g.count == 0 {
 				continue
 			}
 			n++
 			l.Longitudinal = append(l.Longitudinal, Row{
-				Mark: fmt.Sprintf("%s%d", letter, n), Bar: g.Size.Name, Count: g.Count, Face: face, Layer: i + 1,
+				Mark: fmt.Sprintf("%s%d", letter, n), Bar: g.size.Name, Count: g.count, Face: face, Layer: i + 1,
 				InCompression: inCompression, To: length, Start: "straight", End: "straight",
 			})
 		}

@@ -226,7 +226,8 @@ func (s *search) closest() *found {
 // a face where the code saw no set worth trying; two bars where none fit.
 func (s *search) fullest(face Face) *barSet {
 	var best *barSet
-	for _, size := range s.main {
+	for i := range s.main {
+		size := &s.main[i]
 		most, _, _ := s.bounds(tensionSense(face), s.ties[0], size)
 		n := 2
 		if s.bent(tensionSense(face)) {

@@ -33,6 +33,7 @@ type search struct {
 	checks  []Check // scratch
 	failed  []Check // scratch
 	layers  []bars.Layer
+	groups  [2 * MaxLayers]bars.Group
 	zones   []Zone // scratch of the zone search
 	best    []Zone // scratch, the lightest zones of a pair so far
 	widest  int    // spacing steps that the code could accept for the current bars
@@ -137,7 +138,8 @@ func (s *search) sets(face Face, tie bars.Size) []barSet {
 	sense := tensionSense(face)
 	bent := s.bent(sense)
 	var sets []barSet
-	for i, size := range s.main {
+	for i := range s.main {
+		size := &s.main[i]
 		if !bent {
 			if len(sets) == 0 && (tie.Area.AtMost(size.Area) || i == len(s.main)-1) {
 				sets = uniformSets(sets, size, 2, s.p.Brief.Preferences.MaxLegs, 1)
@@ -151,7 +153,7 @@ func (s *search) sets(face Face, tie bars.Size) []barSet {
 		fewest := int(math.Ceil(least.Ratio(size.Area)-1e-9)) - 1 // one too few is tried, for the record
 		sets = uniformSets(sets, size, fewest, most, s.p.Brief.Preferences.MaxLayers)
 		if s.p.Brief.Preferences.Mixed && i > 0 && s.main[i].Order == s.main[i-1].Order+1 {
-			sets = mixedSets(sets, size, s.main[i-1], least, most, s.p.Brief.Preferences.MaxLayers)
+			sets = mixedSets(sets, size, &s.main[i-1], least, most, s.p.Brief.Preferences.MaxLayers)
 		}
 	}
 	sortSets(sets)
@@ -160,14 +162,14 @@ func (s *search) sets(face Face, tie bars.Size) []barSet {
 
 // bounds are the most bars of a size in a layer, and the least tension steel
 // that the code could accept at the depth of a single layer of them.
-func (s *search) bounds(sense Sense, tie, size bars.Size) (most int, least units.Area, ok bool) {
-	s.t.enclose(tie, size)
+func (s *search) bounds(sense Sense, tie bars.Size, size *bars.Size) (most int, least units.Area, ok bool) {
+	s.t.enclose(tie, *size)
 	cage := s.t.cage()
-	most, err := cage.MostInLayer(size, s.p.Code.Gaps(s.p.Problem).InLayer)
+	most, err := cage.MostInLayer(*size, s.p.Code.Gaps(s.p.Problem).InLayer)
 	if err != nil {
 		return 0, least, false
 	}
-	least, ok = s.p.Code.LeastTension(s.p.Problem, sense, s.singleLayerDepth(tie, size))
+	least, ok = s.p.Code.LeastTension(s.p.Problem, sense, s.singleLayerDepth(tie, *size))
 	return most, least, ok
 }
 
@@ -198,7 +200,7 @@ func (s *search) judge(face Face, groups ...Group) (ok bool) {
 func (s *search) put(face Face, b *barSet, inCompression bool) bool {
 	s.layers = s.layers[:0]
 	if b != nil {
-		s.layers = b.appendLayers(s.layers)
+		s.layers = b.appendLayers(s.layers, s.groups[:])
 	}
 	return s.t.lay(face, s.layers, inCompression) == nil
 }
@@ -264,7 +266,8 @@ func (s *search) compressed(tie bars.Size, face Face) {
 	}
 	var sets, others []barSet
 	layers := s.p.Brief.Preferences.MaxLayers
-	for _, size := range s.main {
+	for i := range s.main {
+		size := &s.main[i]
 		most, _, _ := s.bounds(sense, tie, size)
 		sets = uniformSets(sets, size, 2, most, layers)
 		others = uniformSets(others, size, 2, most, 1)
@@ -379,8 +382,8 @@ func differentSizes(sets ...*barSet) int {
 	for _, b := range sets {
 		for _, l := range b.layers[:b.used] {
 			for _, g := range l {
-				if g.Count > 0 && !slices.Contains(names, g.Size.Name) {
-					names = append(names, g.Size.Name)
+				if g.count > 0 && !slices.Contains(names, g.size.Name) {
+					names = append(names, g.size.Name)
 				}
 			}
 		}

@@ -225,7 +225,7 @@ func (s *search) current(tie bars.Size) found {
 			b = &f.top
 		}
 		for _, r := range s.t.Steel(face).Rows {
-			b.add(r.Layer-1, r.Size, r.Count)
+			b.add(r.Layer-1, &r.Size, r.Count)
 		}
 		if s.t.Steel(face).InCompression {
 			f.inCompress = face

@@ -40,6 +40,14 @@ func (o *outlet) place(q units.Length) *units.Measure {
 	return &m
 }
 
+// surface is an area of formwork, in square feet or metres.
+func (o *outlet) surface(q units.Area) units.Measure {
+	if o.system == units.US {
+		return units.SquareFoot.Express(q)
+	}
+	return units.SquareMetre.Express(q)
+}
+
 func (o *outlet) design(r *beam.Result, inputHash string) wire.Design {
 	d := wire.Design{
 		Engine: engine(r.Engine), Code: r.Code, Reference: r.Reference, ReportIn: o.system, InputHash: inputHash,
@@ -200,13 +208,17 @@ func combinations(kept []beam.Combination, dropped []beam.DroppedCombination) wi
 func (o *outlet) quantities(q *beam.Quantities) *wire.Quantities {
 	w := &wire.Quantities{
 		SteelMass: express(o, q.SteelMass), StirrupMass: express(o, q.StirrupMass), Concrete: express(o, q.Concrete),
-		Form: express(o, q.Form), SteelPerConcrete: express(o, q.SteelPerConcrete),
+		Form: o.surface(q.Form), SteelPerConcrete: express(o, q.SteelPerConcrete),
 	}
 	if q.PerLength {
 		w.PerLength = o.place(units.Metre.Of(1))
 	}
 	return w
 }
+
+// printedDigits is the relative size of the last digit that replies have; a
+// difference below it is noise, not the same on every machine.
+const printedDigits = 1e-12
 
 func (o *outlet) flexure(f *beam.FlexureStrength) wire.Flexure {
 	w := wire.Flexure{
@@ -221,7 +233,10 @@ func (o *outlet) flexure(f *beam.FlexureStrength) wire.Flexure {
 		w.Layers[i] = wire.LayerState{Strain: l.Strain, Stress: express(o, l.Stress), Force: express(o, l.Force)}
 	}
 	if c := f.CrossCheck; c.Method != "" {
-		w.CrossCheck = &wire.CrossCheck{Method: c.Method, Nominal: express(o, c.Nominal), Difference: c.Difference}
+		w.CrossCheck = &wire.CrossCheck{Method: c.Method, Nominal: express(o, c.Nominal)}
+		if c.Difference > printedDigits {
+			w.CrossCheck.Difference = c.Difference
+		}
 	}
 	return w
 }

@@ -213,6 +213,7 @@ func TestBendingWorkingIsEvaluable(t *testing.T) {
 		"single":                    {bottom(3, "#9"), top(2, "#4")},
 		"two layers":                {bottom(4, "#9"), second, top(2, "#4")},
 		"compression steel":         {bottom(4, "#9"), relied},
+		"more than balances":        {bottom(6, "#11"), {Mark: "B2", Bar: "#11", Count: 6, Face: beam.Bottom, Layer: 2}, relied},
 		"layers and compression":    {bottom(5, "#9"), second, relied},
 		"little steel, for 9.6.1.3": {bottom(2, "#4"), top(2, "#4")},
 	} {
@@ -236,6 +237,16 @@ func TestBendingWorkingIsEvaluable(t *testing.T) {
 			}
 		}
 	}
+}
+
+// So is that of least steel under the cap on fy of 318-19.
+func TestWorkingOfCappedLeastSteel(t *testing.T) {
+	strong := func(b *beam.Brief) { b.Reinforcement.Yield, b.Concrete.Strength = psi(100000), psi(6000) }
+	r, _ := checkUS(t, ACI31819(), []beam.Row{bottom(3, "#6"), top(2, "#4")}, strong, beam.Demand{Name: "1", Moment: units.KipFoot.Of(80)})
+	c := find1(t, r, "flexure.minimum.positive")
+	requireEvaluable(t, c)
+	d := 24 - 1.5 - 0.375 - 0.375
+	require.InEpsilon(t, 3*math.Sqrt(6000)/80000*14*d, units.SquareMetre.Of(c.Demand.SI()).In(units.SquareInch), 1e-9)
 }
 
 // The working ends in the values that the check compares.

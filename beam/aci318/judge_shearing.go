@@ -263,7 +263,8 @@ func (z *webZone) settle() {
 func (e *edition) judgeSpanShear(dst []beam.Check, t *beam.Trial, span int) []beam.Check {
 	var room [48]units.Length
 	s := newShearSpan(t, span)
-	s.e, s.ends, s.breaks = e, shearEnds(t, span), t.Forces.Breaks(room[:0], span)
+	s.e, s.ends = e, shearEnds(t, span)
+	breaks := t.Forces.Breaks(room[:0], span)
 	length := t.Brief.Spans[span-1]
 	_, s.bends[0] = t.Forces.Moment(beam.Positive, span, units.Length{}, length)
 	_, s.bends[1] = t.Forces.Moment(beam.Negative, span, units.Length{}, length)
@@ -276,7 +277,7 @@ func (e *edition) judgeSpanShear(dst []beam.Check, t *beam.Trial, span int) []be
 		if !s.clearlyLess(from, s.right) || !s.clearlyLess(s.left, to) {
 			continue
 		}
-		dst = s.judge(dst, k, from, to, "")
+		dst = s.judge(dst, breaks, k, from, to, "")
 		dst = e.judgeStirrups(dst, t, k, before)
 		before = k
 	}
@@ -287,7 +288,7 @@ func (e *edition) judgeSpanShear(dst []beam.Check, t *beam.Trial, span int) []be
 	for at := s.left; s.clearlyLess(at, s.right); {
 		end, covered := s.cover(at)
 		if !covered {
-			dst = s.judge(dst, -1, at, end, note)
+			dst = s.judge(dst, breaks, -1, at, end, note)
 		}
 		at = end
 	}
@@ -346,7 +347,6 @@ type shearSpan struct {
 	e      *edition
 	ends   [2]shearEnd
 	bends  [2]bool // senses that bend it at all
-	breaks []units.Length
 
 	limit    worstSection // of the section limit, over all zones
 	limitWeb webSteel
@@ -407,7 +407,7 @@ func (s *shearSpan) cover(at units.Length) (end units.Length, covered bool) {
 // judge judges the length between two places with the stirrups of zone k, or
 // with none. Where a force jumps at an end of a zone, both sides of the jump
 // count.
-func (s *shearSpan) judge(dst []beam.Check, k int, from, to units.Length, note string) []beam.Check {
+func (s *shearSpan) judge(dst []beam.Check, breaks []units.Length, k int, from, to units.Length, note string) []beam.Check {
 	z := s.e.newWebZone(s.t, s.span, k)
 	z.note, z.bends = note, s.bends
 	f := &s.t.Forces
@@ -417,15 +417,16 @@ func (s *shearSpan) judge(dst []beam.Check, k int, from, to units.Length, note s
 		if z.to.Less(z.from) {
 			z.from, z.to = s.left, s.right
 		}
-		lo := from.Max(z.from).Min(z.to)
-		hi := to.Min(z.to).Max(z.from)
-		if z.from.Less(lo) {
+		lo, hi := z.from, z.to
+		if s.clearlyLess(lo, from) {
+			lo = from.Min(z.to)
 			z.point(f.Action(i, s.span, lo, false))
 		}
-		z.follow(i, lo, hi, s.breaks)
-		if hi.Less(z.to) {
+		if s.clearlyLess(to, hi) {
+			hi = to.Max(z.from)
 			z.point(f.Action(i, s.span, hi, true))
 		}
+		z.follow(i, lo, hi, breaks)
 	}
 	z.settle()
 	if z.limit.found && (!s.limit.found || z.limit.utilization > s.limit.utilization) {

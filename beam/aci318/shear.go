@@ -151,9 +151,8 @@ type webShear struct {
 	web              float64 // bw d
 }
 
-// newWebShear prepares a section; enough tells that it has at least the least
-// stirrups, which lifts the cap on √f'c (22.5.3.2).
-func (e *edition) newWebShear(s *shearSection, enough bool) webShear {
+// newWebShear prepares a section, with the cap on √f'c of 22.5.3.1.
+func (e *edition) newWebShear(s *shearSection) webShear {
 	r := &e.shear
 	w := webShear{
 		shearSection: *s,
@@ -162,10 +161,7 @@ func (e *edition) newWebShear(s *shearSection, enough bool) webShear {
 		as: e.areaIn(s.area),
 	}
 	w.root = math.Sqrt(w.fc)
-	w.rootUsed = w.root
-	if !enough {
-		w.rootUsed = min(w.root, e.materials.rootCap)
-	}
+	w.rootUsed = min(w.root, e.materials.rootCap)
 	w.gross, w.web = w.bw*w.h, w.bw*w.d
 	if w.web > 0 {
 		w.ratio = w.as / w.web

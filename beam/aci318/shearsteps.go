@@ -82,7 +82,7 @@ func (w *webShear) rowSteps(e *edition, out *working, c *concreteShear, enough b
 		out.find("λs", "size effect factor", "22.5.5.1.3", "min("+size+", 1)", asPlain(w.size))
 		out.find("Vc,c", "concrete shear strength by row (c)", rowC.clause(),
 			"("+number(r.byRatio)+" λs λ ρw^(1/3) r"+plus+") bw d", e.asForce(c.c))
-		out.note("row (c): the stirrups are less than the least of 9.6.3.4, or there are none")
+		out.note("row (c): there are no stirrups, fewer than the least of 9.6.3.4, or they are too far apart to count")
 	}
 	out.find("Vc,max", "greatest concrete shear strength", "22.5.5.1.1", number(r.most)+" λ r bw d", e.asForce(c.most))
 	out.find("Vc", "concrete shear strength", c.row.clause(), "max(min("+choice+", Vc,max), 0)", e.asForce(c.strength))
@@ -173,7 +173,10 @@ func (w *webSteel) strengthSteps(e *edition, s *sectionShear) []beam.Step {
 	var out working
 	w.concreteSteps(e, &out, s)
 	if w.steel == 0 {
-		out.find("φVn", "design shear strength, without stirrups", "22.5.1.1", "φ Vc", e.asForce(s.design))
+		out.find("φVn", "design shear strength, of the concrete alone", "9.5.1.1", "φ Vc", e.asForce(s.design))
+		if w.wide {
+			out.note("the stirrups are further apart than the greatest spacing of Table 9.7.6.2.2: none is sure to cross a crack, and they do not count")
+		}
 		return out.steps
 	}
 	w.stirrupSteps(e, &out)

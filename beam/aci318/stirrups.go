@@ -83,7 +83,8 @@ type webSteel struct {
 	byRoot     float64 // Av,min/s by the first expression of the table
 	byFloor    float64
 	least      float64 // Av,min/s, the greater
-	enough     bool    // at least that, at a spacing that lets it count
+	wide       bool    // too far apart for any of it to count
+	enough     bool    // at least Av,min/s, and not wide
 	steel      float64 // Vs
 	exempt     bool    // h is small enough for the exemption of Table 9.6.3.1
 	mostAlong  float64 // greatest spacings while the required Vs is small
@@ -91,12 +92,12 @@ type webSteel struct {
 	reserve    float64 // 8√f'c bw d of 22.5.1.2
 }
 
-// newWebSteel prepares a section. Stirrups count as least reinforcement only
-// at a spacing that Table 9.7.6.2.2 allows: wider apart, a crack may run
-// between them.
+// newWebSteel prepares a section. Stirrups count, for strength and as least
+// reinforcement, only at a spacing that Table 9.7.6.2.2 allows: wider apart, a
+// crack may run between them.
 func (e *edition) newWebSteel(s *shearSection) webSteel {
 	r := &e.stirrups
-	w := webSteel{bare: e.newWebShear(s, false), phi: e.reduction.shear}
+	w := webSteel{bare: e.newWebShear(s), phi: e.reduction.shear}
 	w.counted = w.bare
 	b := &w.bare
 	yield, capped := e.shearYield(s.stirrups.yield)
@@ -112,11 +113,14 @@ func (e *edition) newWebSteel(s *shearSection) webSteel {
 	}
 	if w.av > 0 && w.s > 0 {
 		w.provided = w.av / w.s
+		w.wide = !units.AtMost(w.s, w.mostAlong)
+	}
+	if w.provided > 0 && !w.wide {
 		w.steel = w.av * w.fyt * b.d / w.s
-		w.enough = units.AtMost(w.least, w.provided) && units.AtMost(w.s, w.mostAlong)
+		w.enough = units.AtMost(w.least, w.provided)
 	}
 	if w.enough {
-		w.counted.rootUsed = w.counted.root // 22.5.3.2
+		w.counted.rootUsed = w.counted.root // the cap is lifted, 22.5.3.2
 	}
 	return w
 }

@@ -110,6 +110,48 @@ func TestStrengthsWithoutDemandOrStirrups(t *testing.T) {
 	require.Equal(t, beam.Fail, checkOf(t, s.Checks, "shear.minimum-stirrups").Outcome)
 }
 
+// What 9.6 asks at a demand: the waiver of 9.6.1.3, stirrups that strength or
+// 9.6.3.1 calls for or not, legs whose distance is not known.
+func TestStrengthsJudgeDetailing(t *testing.T) {
+	q := query()
+	q.Layers = []beam.SteelLayer{{Area: in2(0.9), Depth: in(23.5), Yield: psi(60000)}}
+	q.Demand.Moment = units.KipFoot.Of(60)
+	s, err := ACI31819().Strengths(q)
+	require.NoError(t, err)
+	c := checkOf(t, s.Checks, "flexure.minimum.positive")
+	require.Equal(t, "9.6.1.3", c.Clause)
+	require.Equal(t, beam.Pass, c.Outcome)
+	q.Demand.Moment = units.KipFoot.Of(90)
+	s, err = ACI31819().Strengths(q)
+	require.NoError(t, err)
+	c = checkOf(t, s.Checks, "flexure.minimum.positive")
+	require.Equal(t, beam.Fail, c.Outcome)
+
+	// As,min = 3 √4500/60000 × 16 × 23.5 = 1.2611 in2; for 120 kip-ft 4/3 of
+	// what is required is more.
+	q.Demand.Moment = units.KipFoot.Of(120)
+	s, err = ACI31819().Strengths(q)
+	require.NoError(t, err)
+	c = checkOf(t, s.Checks, "flexure.minimum.positive")
+	require.Equal(t, "9.6.1.2", c.Clause)
+	require.InEpsilon(t, 3*math.Sqrt(4500)/60000*16*23.5, units.SquareMetre.Of(c.Demand.SI()).In(units.SquareInch), 1e-12)
+
+	q = query()
+	q.Demand.Shear = units.Kip.Of(5) // below φλ√f'c bw d = 18.9 kip
+	s, err = ACI31819().Strengths(q)
+	require.NoError(t, err)
+	require.Equal(t, beam.NotApplicable, checkOf(t, s.Checks, "shear.spacing-along").Outcome)
+	q.Demand.Shear, q.Stirrups.Across = units.Kip.Of(40), units.Length{}
+	s, err = ACI31819().Strengths(q)
+	require.NoError(t, err)
+	require.Equal(t, beam.NotJudged, checkOf(t, s.Checks, "shear.spacing-across").Outcome)
+	s, err = ACI31814().Strengths(q) // 318-14 has no such rule
+	require.NoError(t, err)
+	for _, c := range s.Checks {
+		require.NotEqual(t, "shear.spacing-across", c.ID)
+	}
+}
+
 // The depth of a layer is measured from the top for either sense.
 func TestStrengthsInNegativeBending(t *testing.T) {
 	q := query()

@@ -41,7 +41,7 @@ func allYieldInTension(section mechanics.Section, u *mechanics.Ultimate) bool {
 			return false
 		}
 	}
-	return u.NeutralAxis.Less(section.Depth())
+	return true
 }
 
 type layerState uint8
@@ -93,21 +93,13 @@ func (e *edition) yieldingSteps(w *working, section mechanics.Section, u *mechan
 //	0.85 f'c β1 b c² + P c - Q = 0
 //
 // where P collects what is constant and Q what the elastic layers owe to c.
+// The block ends inside the section: beyond it no layer would pull.
 func (e *edition) layeredSteps(w *working, section mechanics.Section, u *mechanics.Ultimate, f *flexure, strength units.Stress) {
 	e.layerInputs(w, section, u)
 	w.given("Es", "modulus of elasticity of the bars", "20.2.2.2", e.asStress(e.materials.steelModulus))
 	e.blockFactorStep(w, f.blockFactor)
-	c := e.lengthIn(u.NeutralAxis)
-	block := "a"
-	if u.NeutralAxis.Scale(f.blockFactor).AtMost(section.Depth()) {
-		e.axisSteps(w, section, u, strength)
-		w.find("a", "depth of the stress block", "22.2.2.4.1", "β1 c", e.asLength(f.blockFactor*c))
-	} else {
-		w.given("c", "depth of the neutral axis", "22.2.2.4.2", e.asLength(c))
-		w.note("found so that the forces below balance; the block covers the whole section")
-		block = "h"
-		w.given("h", "overall depth", "", e.asLength(e.lengthIn(section.Depth())))
-	}
+	e.axisSteps(w, section, u, strength)
+	w.find("a", "depth of the stress block", "22.2.2.4.1", "β1 c", e.asLength(f.blockFactor*e.lengthIn(u.NeutralAxis)))
 	e.layerStrains(w, u)
 	n := len(u.Layers)
 	for i, l := range u.Layers {
@@ -120,9 +112,9 @@ func (e *edition) layeredSteps(w *working, section mechanics.Section, u *mechani
 		w.find("Fs"+k, "force of layer "+k+", tension positive", "22.2.1.1", form, e.asForce(-e.forceIn(l.Force)))
 		w.note(note)
 	}
-	w.find("Cc", "compression in the concrete", "22.2.2.4.1", "0.85 f'c "+block+" b", e.asForce(e.forceIn(u.Concrete)))
+	w.find("Cc", "compression in the concrete", "22.2.2.4.1", "0.85 f'c a b", e.asForce(e.forceIn(u.Concrete)))
 	e.extremeStep(w, u, f)
-	w.find("Mn", "nominal strength, moments about the compression face", "22.3", sum(n, "Fs# d#")+" - Cc "+block+" / 2", e.asMoment(e.momentIn(u.Nominal)))
+	w.find("Mn", "nominal strength, moments about the compression face", "22.3", sum(n, "Fs# d#")+" - Cc a / 2", e.asMoment(e.momentIn(u.Nominal)))
 	if u.Equilibria > 1 {
 		w.note("more than one depth of the neutral axis balances the section; the least was taken")
 	}

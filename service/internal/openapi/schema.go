@@ -157,7 +157,7 @@ func input(d units.Dimension) *openapi3.Schema {
 	text := openapi3.NewStringSchema().WithMinLength(1).WithMaxLength(64)
 	text.Description = "Number and unit, with fractions where wanted: 24 in, 3/4 in, 1 1/2 in."
 	s := openapi3.NewOneOfSchema(object, text)
-	s.Description = fmt.Sprintf("A %s with its unit: %s.", d, strings.Join(symbols, ", "))
+	s.Description = fmt.Sprintf("Quantity with its unit (%s): %s.", d, strings.Join(symbols, ", "))
 	return s
 }
 

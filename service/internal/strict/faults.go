@@ -36,10 +36,9 @@ func (f *Faults) Add(fault Fault) {
 }
 
 // inside reports whether the pointer p names what q names, or a part of it.
-// The whole document hides only itself.
 func inside(p, q string) bool {
 	rest, ok := strings.CutPrefix(p, q)
-	return ok && (rest == "" || rest[0] == '/' && q != "")
+	return ok && (rest == "" || rest[0] == '/')
 }
 
 // count is the number of faults found, listed or not.

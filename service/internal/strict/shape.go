@@ -113,11 +113,18 @@ func (s *shape) describe() {
 	if !errors.As(s.read([]byte(`""`)), &pe) {
 		panic(fmt.Sprintf("strict: %s does not say what it reads", s.typ))
 	}
-	s.wanted = fmt.Sprintf("a %s in %s", pe.Dimension, orList(pe.Accepted))
+	s.wanted = withArticle(pe.Dimension.String()) + " in " + orList(pe.Accepted)
 	s.measure = &shape{kind: object, names: []string{"value", "unit"}, fields: []field{
 		{name: "value", required: true, shape: &shape{kind: number}},
 		{name: "unit", required: true, shape: &shape{kind: text, rule: rule{words: pe.Accepted}}},
 	}}
+}
+
+func withArticle(noun string) string {
+	if strings.HasPrefix(noun, "a") {
+		return "an " + noun
+	}
+	return "a " + noun
 }
 
 // read asks the type of s whether it can read a value.

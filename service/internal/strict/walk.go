@@ -15,9 +15,9 @@ import (
 )
 
 const (
-	longestNumber = 40 // characters, so that no number costs much to read
-	longestName   = 64 // bytes of an unknown member's name that a fault repeats
-	longestQuote  = 48 // bytes of a value that a fault repeats
+	longestNumber = 40  // characters, so that no number costs much to read
+	longestName   = 128 // bytes of a member's name
+	longestQuote  = 48  // bytes of a value that a fault repeats
 )
 
 // walker reads a document token by token against a shape. What is in order it
@@ -122,6 +122,9 @@ func (w *walker) object(s *shape) (ok bool, err error) {
 			return false, err
 		}
 		name := tok.String()
+		if len(name) > longestName {
+			return false, w.refuse("a member has a name of %d bytes; at most %d are read", len(name), longestName)
+		}
 		i := s.find(name)
 		if i < 0 {
 			w.unknown(s, name)
@@ -162,9 +165,7 @@ func (w *walker) object(s *shape) (ok bool, err error) {
 
 func (w *walker) unknown(s *shape, name string) {
 	mark := len(w.path)
-	if len(name) <= longestName {
-		w.path = appendName(w.path, name)
-	}
+	w.path = appendName(w.path, name)
 	detail := fmt.Sprintf("%q is not a member here", clip([]byte(name)))
 	if near := Nearest(name, s.names); near != "" {
 		detail += fmt.Sprintf("; did you mean %q?", near)
@@ -208,12 +209,12 @@ func (w *walker) number(s *shape, literal string) {
 	}
 	if s.kind == whole {
 		if _, err := strconv.ParseInt(literal, 10, 32); err != nil {
-			w.fault(s.words(), "is %s; it must be a whole number written with digits alone", literal)
+			w.fault(s.allowed(), "is %s; it must be a whole number written with digits alone", literal)
 		}
 		return
 	}
 	if _, err := strconv.ParseFloat(literal, 64); err != nil {
-		w.fault(s.words(), "is %s, which is out of range", literal)
+		w.fault(s.allowed(), "is %s, which is out of range", literal)
 	}
 }
 
@@ -272,8 +273,7 @@ func (w *walker) token() (jsontext.Token, error) {
 		return tok, w.syntax(err)
 	}
 	if w.dec.StackDepth() > w.limits.Depth {
-		return tok, &SyntaxError{Path: string(w.path), Offset: w.dec.InputOffset(),
-			Reason: fmt.Sprintf("the document is nested deeper than %d levels", w.limits.Depth)}
+		return tok, w.refuse("the document is nested deeper than %d levels", w.limits.Depth)
 	}
 	return tok, w.counted()
 }
@@ -289,10 +289,14 @@ func (w *walker) raw() ([]byte, error) {
 
 func (w *walker) counted() error {
 	if w.values++; w.values > w.limits.Values {
-		return &SyntaxError{Path: string(w.path), Offset: w.dec.InputOffset(),
-			Reason: fmt.Sprintf("the document has more than %d names and values", w.limits.Values)}
+		return w.refuse("the document has more than %d names and values", w.limits.Values)
 	}
 	return nil
+}
+
+// refuse ends the reading at the current place.
+func (w *walker) refuse(format string, args ...any) *SyntaxError {
+	return &SyntaxError{Path: string(w.path), Offset: w.dec.InputOffset(), Reason: fmt.Sprintf(format, args...)}
 }
 
 // skip passes over the next value, whatever it is.

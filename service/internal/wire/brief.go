@@ -12,8 +12,8 @@ type Brief struct {
 	Section       Section       `json:"section" doc:"Outline of the concrete section."`
 	Concrete      Concrete      `json:"concrete" doc:"The concrete as specified."`
 	Reinforcement Reinforcement `json:"reinforcement" doc:"Where bars come from and how strong they are."`
-	Exposure      *string       `json:"exposure,omitzero" validate:"omitnil,oneof=interior weather ground" doc:"What the concrete surface is exposed to; ground means cast against it. Default: interior, listed as an assumption."`
-	Cover         *units.Length `json:"cover,omitzero" doc:"Clear cover to the outermost steel, above zero. Default: by the code's table."`
+	Exposure      *string       `json:"exposure,omitzero" validate:"omitnil,oneof=interior weather ground" doc:"What the concrete surface is exposed to, from which the cover follows; ground means cast against it. Needed unless cover is given."`
+	Cover         *units.Length `json:"cover,omitzero" doc:"Clear cover to the outermost steel, above zero. Default: by the code's table for the exposure."`
 
 	Spans      []units.Length `json:"spans,omitzero" validate:"omitnil,min=1,max=20" doc:"Distances between support centres, left to right. This version designs a single span."`
 	Supports   []Support      `json:"supports,omitzero" validate:"omitnil,min=2,max=21,dive" doc:"Supports from left to right, one more than spans."`

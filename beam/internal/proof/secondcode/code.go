@@ -145,6 +145,11 @@ func (Code) Allows(use bars.Use, s bars.Size) bool {
 	return d >= 10 && d <= 32
 }
 
+// WidestSpacing is the greatest spacing of rule V6.
+func (Code) WidestSpacing(_ *beam.Problem, depth units.Length) units.Length {
+	return depth.Scale(spacingShare).Min(units.Millimetre.Of(spacingMost))
+}
+
 // LeastTension is the steel of a singly reinforced rectangle, never below the
 // least ratio.
 func (Code) LeastTension(p *beam.Problem, s beam.Sense, depth units.Length) (units.Area, bool) {
