@@ -344,9 +344,9 @@ type shearSpan struct {
 	left, right units.Length // faces of the supports
 	slip        units.Length // what is no length, but rounding
 
-	e      *edition
-	ends   [2]shearEnd
-	bends  [2]bool // senses that bend it at all
+	e     *edition
+	ends  [2]shearEnd
+	bends [2]bool // senses that bend it at all
 
 	limit    worstSection // of the section limit, over all zones
 	limitWeb webSteel
