@@ -98,13 +98,17 @@ func searchDepths(ctx context.Context, first *prepared) (*search, error) {
 		}
 		s := newSearch(p, 1+p.Brief.Preferences.KeepBest)
 		s.run()
+		if len(s.kept) > 0 {
+			l := s.layoutOf(&s.kept[0])
+			s.whole = s.addSideBars(&l)
+		}
 		if best == nil || s.better(best) {
 			s.rejects.absorb(best)
 			best = s
 		} else {
 			best.rejects.absorb(s)
 		}
-		if p.Brief.Preferences.Prefer == Shallowest && len(best.kept) > 0 {
+		if p.Brief.Preferences.Prefer == Shallowest && best.whole {
 			break
 		}
 	}
@@ -118,13 +122,17 @@ func (l *rejectLog) absorb(s *search) {
 	}
 }
 
-// better reports whether the first layout of s ranks before that of t.
+// better reports whether the first layout of s ranks before that of t. A
+// depth at which the member as a whole fails comes after those at which it
+// passes.
 func (s *search) better(t *search) bool {
 	switch {
 	case len(s.kept) == 0:
 		return false
 	case len(t.kept) == 0:
 		return true
+	case s.whole != t.whole:
+		return s.whole
 	}
 	return slices.Compare(s.kept[0].key[:], t.kept[0].key[:]) < 0
 }
@@ -243,42 +251,51 @@ func (s *search) fullest(face Face) *barSet {
 }
 
 // sideBarsMost is the most side-face bars a side that the search adds.
-const sideBarsMost = 20
+const sideBarsMost = 30
 
-// addSideBars adds the fewest bars along the side faces that the code's
-// checks ask for; none where no number changes anything.
-func (s *search) addSideBars(l *Layout) {
-	fails := func() (n int) {
-		t, faults := trialOf(s.p.Problem, l)
-		if len(faults) > 0 {
-			return 1 << 30
-		}
-		s.checks = s.p.Code.Judge(s.checks[:0], Whole, t)
-		for i := range s.checks {
-			if s.checks[i].Outcome == Fail {
-				n++
-			}
-		}
-		return n
+// addSideBars adds the fewest bars along the side faces with which no more
+// checks of the member as a whole fail than must: from the bottom bars to
+// mid-depth, or over the whole height of a beam that hogs. It reports whether
+// none fails.
+func (s *search) addSideBars(l *Layout) (passes bool) {
+	t, faults := trialOf(s.p.Problem, l)
+	if len(faults) > 0 || t.Bottom.Count == 0 || t.Top.Count == 0 {
+		return false
 	}
-	bare := fails()
+	bare := s.wholeFails(t)
 	if bare == 0 {
-		return
+		return true
 	}
-	size := s.main[0].Name
-	half := s.p.Brief.Section.Depth.Scale(0.5)
-	l.Longitudinal = append(l.Longitudinal, Row{})
-	side := &l.Longitudinal[len(l.Longitudinal)-1]
-	for n := 1; n <= sideBarsMost; n++ {
-		*side = Row{
-			Mark: "F1", Bar: size, Count: n, Face: Side, Spacing: half.Scale(1 / float64(n+1)),
+	reach := t.Brief.Section.Depth.Scale(0.5)
+	if s.bent(Negative) {
+		reach = t.Brief.Section.Depth.Sub(t.Top.Nearest)
+	}
+	reach = reach.Sub(t.Bottom.Nearest)
+	best, fewest := 0, bare
+	for n := 1; n <= sideBarsMost && fewest > 0; n++ {
+		t.Side = SideSteel{Size: s.main[0], Each: n, Spacing: reach.Scale(1 / float64(n+1)), TensionFace: Bottom}
+		if fails := s.wholeFails(t); fails < fewest {
+			best, fewest = n, fails
+		}
+	}
+	if best > 0 {
+		l.Longitudinal = append(l.Longitudinal, Row{
+			Mark: "F1", Bar: s.main[0].Name, Count: best, Face: Side, Spacing: reach.Scale(1 / float64(best+1)),
 			To: l.Longitudinal[0].To, Start: "straight", End: "straight",
-		}
-		if fails() < bare {
-			return
+		})
+	}
+	return fewest == 0
+}
+
+// wholeFails counts the failing checks of the member as a whole.
+func (s *search) wholeFails(t *Trial) (n int) {
+	s.checks = s.p.Code.Judge(s.checks[:0], Whole, t)
+	for i := range s.checks {
+		if s.checks[i].Outcome == Fail {
+			n++
 		}
 	}
-	l.Longitudinal = l.Longitudinal[:len(l.Longitudinal)-1]
+	return n
 }
 
 // alternative says how a kept layout differs from the first. ok is false

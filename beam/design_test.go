@@ -32,15 +32,6 @@ func failures(r *beam.Result) []string {
 	return out
 }
 
-func bottomRows(r *beam.Result) (rows []beam.Row) {
-	for _, row := range r.Layout.Longitudinal {
-		if row.Face == beam.Bottom {
-			rows = append(rows, row)
-		}
-	}
-	return rows
-}
-
 func TestDesignOfAnOrdinaryBeam(t *testing.T) {
 	r := design(t, plain())
 	require.Equal(t, beam.Satisfied, r.Verdict, failures(r))
@@ -332,4 +323,51 @@ func TestCoverOfTheBrief(t *testing.T) {
 			require.True(t, units.Inch.Of(2.5).Less(bar.Y.Sub(bar.Diameter.Scale(0.5))))
 		}
 	}
+}
+
+// Side-face bars come with depth, for beams that sag and for those that hog
+// (ACI 318-19 9.7.2.3).
+func TestSideBarsOfADeepBeam(t *testing.T) {
+	for _, kind := range []statics.SupportKind{statics.Pinned, statics.Fixed} {
+		b := plain()
+		b.Section.Depth, b.Spans[0] = units.Inch.Of(44), units.Foot.Of(34)
+		b.Supports[0].Kind = kind
+		if kind == statics.Fixed {
+			b.Supports[1].Kind = kind
+		}
+		r := design(t, b)
+		require.Equal(t, beam.Satisfied, r.Verdict, failures(r))
+		i := slices.IndexFunc(r.Layout.Longitudinal, func(row beam.Row) bool { return row.Face == beam.Side })
+		require.GreaterOrEqual(t, i, 0)
+		n := 0
+		for _, bar := range r.Bars {
+			if bar.Face == beam.Side {
+				n++
+			}
+		}
+		require.Equal(t, 2*r.Layout.Longitudinal[i].Count, n)
+	}
+}
+
+// A depth at which only the member as a whole fails does not win by its
+// weight.
+func TestDepthsAreRankedAsWholeMembers(t *testing.T) {
+	b := plain()
+	b.Preferences.Prefer = beam.Shallowest
+	b.Preferences.Depths = []units.Length{units.Inch.Of(14), units.Inch.Of(16), units.Inch.Of(18), units.Inch.Of(20)}
+	b.Loads[0].Intensity, b.Loads[1].Intensity = units.KipPerFoot.Of(0.1), units.KipPerFoot.Of(0.1)
+	r := design(t, b)
+	require.Equal(t, beam.Satisfied, r.Verdict, failures(r))
+	// Table 9.3.1.1: l/16 = 264/16 = 16.5 in for a simple span
+	require.Equal(t, units.Inch.Of(18), r.Section.Depth)
+}
+
+// The strengths of the final bars come with the second route's answer.
+func TestResultHoldsStrengths(t *testing.T) {
+	r := design(t, plain())
+	require.Len(t, r.Flexure, 1)
+	require.Equal(t, beam.Positive, r.Flexure[0].Sense)
+	require.Less(t, r.Flexure[0].CrossCheck.Difference, 1e-6)
+	i := slices.IndexFunc(r.Checks, func(c beam.Check) bool { return c.ID == "flexure.positive" })
+	require.InEpsilon(t, r.Checks[i].Capacity.SI(), r.Flexure[0].Design.Amount().SI(), 1e-12)
 }

@@ -4,6 +4,7 @@ import (
 	"fmt"
 	"slices"
 
+	"soffit.example/beam/mechanics"
 	"soffit.example/units"
 )
 
@@ -62,10 +63,34 @@ func (p *prepared) finish(layout Layout) (*Result, []Fault) {
 		}
 	}
 	r.Governing = Governing(r.Checks)
+	if err := r.strengths(p, t); err != nil {
+		return nil, []Fault{{Path: "/layout", Detail: err.Error()}}
+	}
 	r.Bars = t.positions(&layout)
 	r.takeOff(t)
 	r.Cautions = p.cautions(r)
 	return r, nil
+}
+
+// strengths gives the flexural strength of the final bars in each sense that
+// has tension steel, with the second route beside the first.
+func (r *Result) strengths(p *prepared, t *Trial) error {
+	for _, sense := range [2]Sense{Positive, Negative} {
+		if !p.bent(sense) || t.Steel(sense.TensionFace()).Count == 0 {
+			continue
+		}
+		b := &t.Brief
+		q := SectionQuery{Section: b.Section, Concrete: b.Concrete, Bending: sense, Readings: b.Readings}
+		for _, l := range t.Layers(sense, mechanics.Steel{}) {
+			q.Layers = append(q.Layers, SteelLayer{Area: l.Area, Depth: l.Depth, Yield: b.Reinforcement.Yield})
+		}
+		found, err := p.Code.Strengths(q)
+		if err != nil {
+			return fmt.Errorf("the strength of the finished section: %w", err)
+		}
+		r.Flexure = append(r.Flexure, found.Flexure)
+	}
+	return nil
 }
 
 // judgedStrength reports whether anything was judged at all: a result in

@@ -41,6 +41,7 @@ type search struct {
 	from    units.Length
 	to      units.Length
 	kept    []found
+	whole   bool // the first of kept passes as a whole member too
 	rejects rejectLog
 	logs    bool    // log every arrangement of stirrups that fails
 	near    [3]near // by face, and at 0 for whole pairs
@@ -106,22 +107,7 @@ func (s *search) run() {
 	}
 }
 
-// bent reports whether any combination bends the beam in a sense.
-func (s *search) bent(sense Sense) bool {
-	f := &s.p.Forces
-	for _, d := range f.Demands() {
-		if sense == Positive && d.Moment.Amount().SI() > 0 || sense == Negative && d.Moment.Amount().SI() < 0 {
-			return true
-		}
-	}
-	for span := 1; span <= f.Spans(); span++ {
-		from, to := s.p.Faces(span)
-		if _, ok := f.Moment(sense, span, from, to); ok {
-			return true
-		}
-	}
-	return false
-}
+func (s *search) bent(sense Sense) bool { return s.p.bent(sense) }
 
 // tensionSense is the sense of bending that puts a face in tension.
 func tensionSense(f Face) Sense {

@@ -185,7 +185,7 @@ func (s *search) threeZones(tie bars.Size, legs, close int, mass float64) float6
 		// A longer end zone never fails where a shorter one passes: first
 		// the same on both sides, then the right one for itself.
 		left := longest - s.last(0, longest, func(cut int) bool { return passes(wide, longest-cut, longest) })
-		right := left
+		var right int
 		if !passes(wide, left, left) {
 			right = longest - s.last(0, longest-left, func(cut int) bool { return passes(wide, left, longest-cut) })
 		} else {
