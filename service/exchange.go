@@ -99,24 +99,22 @@ func clip(s string) string {
 	return s
 }
 
-// format is how replies are written: plain numbers like quantities, at 12
+// replyForm is how replies are written: plain numbers like quantities, at 12
 // significant digits.
-func format() json2.Options {
-	return json2.JoinOptions(
-		json2.Deterministic(true),
-		json2.WithMarshalers(json2.MarshalToFunc(func(e *jsontext.Encoder, v float64) error {
-			m, err := units.SI.Express(units.Plain(v)).MarshalJSON()
-			if err != nil {
-				return err
-			}
-			return e.WriteValue(m)
-		})),
-	)
-}
+var replyForm = json2.JoinOptions(
+	json2.Deterministic(true),
+	json2.WithMarshalers(json2.MarshalToFunc(func(e *jsontext.Encoder, v float64) error {
+		m, err := units.SI.Express(units.Plain(v)).MarshalJSON()
+		if err != nil {
+			return err
+		}
+		return e.WriteValue(m)
+	})),
+)
 
 func encode(v any) ([]byte, error) {
 	var b bytes.Buffer
-	if err := json2.MarshalWrite(&b, v, format()); err != nil {
+	if err := json2.MarshalWrite(&b, v, replyForm); err != nil {
 		return nil, fmt.Errorf("service: encoding a reply: %w", err)
 	}
 	b.WriteByte('\n')

@@ -1,0 +1,58 @@
+package service_test
+
+import (
+	"encoding/json"
+	"net/http"
+	"strings"
+	"testing"
+
+	"github.com/stretchr/testify/require"
+
+	"soffit.example/service"
+)
+
+// fuzzDoor sends whatever comes to a door: it must answer with a complete
+// JSON document, never with a fault of its own, and a problem must name what
+// is wrong.
+func fuzzDoor(f *testing.F, path string, seeds ...string) {
+	s := newService(f, func(o *service.Options) { o.Limits.Body = 16 << 10 })
+	for _, seed := range seeds {
+		f.Add(seed)
+	}
+	for _, tc := range append(onOtherDoors()[path], badInput{}) {
+		if len(seeds) > 0 && tc.replace != "" {
+			f.Add(strings.Replace(seeds[0], tc.replace, tc.with, 1))
+		}
+	}
+	f.Fuzz(func(t *testing.T, body string) {
+		if dear(body) {
+			return
+		}
+		w := send(s, "POST", path, body, "Content-Type", "application/json")
+		require.True(t, json.Valid(w.Body.Bytes()), "%q", w.Body)
+		switch w.Code {
+		case http.StatusOK:
+			require.Equal(t, w.Body.String(), send(s, "POST", path, body, "Content-Type", "application/json").Body.String())
+		case http.StatusBadRequest, http.StatusUnprocessableEntity:
+			require.NotEmpty(t, problemOf(t, w).Errors)
+		case http.StatusRequestEntityTooLarge:
+		default:
+			require.Fail(t, "unexpected status", "%d for %q: %s", w.Code, body, w.Body)
+		}
+	})
+}
+
+// dear reports whether a body asks for a long search: many depths to try.
+func dear(body string) bool { return strings.Count(body, `"depths"`) > 0 || len(body) > 8<<10 }
+
+func FuzzDesigns(f *testing.F) {
+	seeds := []string{goodBrief, goodDemands}
+	for _, tc := range onBrief() {
+		seeds = append(seeds, strings.Replace(goodBrief, tc.replace, tc.with, 1))
+	}
+	fuzzDoor(f, "/v1/designs", seeds...)
+}
+
+func FuzzChecks(f *testing.F)    { fuzzDoor(f, "/v1/checks", goodCheck) }
+func FuzzStrengths(f *testing.F) { fuzzDoor(f, "/v1/strengths", goodStrengths) }
+func FuzzFits(f *testing.F)      { fuzzDoor(f, "/v1/fits", goodFits) }
