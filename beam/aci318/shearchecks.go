@@ -54,6 +54,9 @@ func (z *webZone) appendLeast(dst []beam.Check) []beam.Check {
 		c.Compare(e.forceOf(w.values.shear).Amount(), e.forceOf(w.values.trigger).Amount())
 	case units.AtMost(w.values.shear, w.values.trigger):
 		c.Outcome, c.Reason = beam.NotApplicable, noteNotRequired
+		if w.values.required {
+			c.Reason = noteForStrength
+		}
 	default:
 		c.Clause = e.stirrups.leastClause
 		c.Compare(e.steelOf(web.least).Amount(), e.steelOf(web.provided).Amount())

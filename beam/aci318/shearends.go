@@ -28,6 +28,7 @@ const (
 	noteNoStirrups  = "judged without stirrups: there are none"
 	noteGap         = "judged without stirrups: no zone of the layout reaches this length"
 	noteNotRequired = "stirrups are not required here: Vu is below the shear that calls for them, and below φVc"
+	noteForStrength = "9.6.3.1 does not ask for least stirrups here; strength does"
 	noteHook        = "a standard hook round a bar develops stirrups of this size and strength"
 )
 

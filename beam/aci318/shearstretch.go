@@ -10,6 +10,7 @@ type shearStretch struct {
 	length float64
 	m      float64
 	v      [3]float64
+	end    float64 // V at the end, as given
 	scale  float64 // the greatest moment, or shear times length, of the ends
 }
 
@@ -17,13 +18,18 @@ type shearStretch struct {
 func newShearStretch(length, m0, v0, m1, v1 float64) shearStretch {
 	mean := (m1 - m0) / length
 	return shearStretch{
-		length: length, m: m0,
+		length: length, m: m0, end: v1,
 		v:     [3]float64{v0, 2 * (3*mean - 2*v0 - v1) / length, 3 * (v0 + v1 - 2*mean) / (length * length)},
 		scale: max(math.Abs(m0), math.Abs(m1), math.Abs(v0)*length, math.Abs(v1)*length),
 	}
 }
 
-func (p *shearStretch) shear(t float64) float64 { return p.v[0] + t*(p.v[1]+t*p.v[2]) }
+func (p *shearStretch) shear(t float64) float64 {
+	if t >= p.length { // without the rounding of a very short stretch
+		return p.end
+	}
+	return p.v[0] + t*(p.v[1]+t*p.v[2])
+}
 
 func (p *shearStretch) moment(t float64) float64 {
 	return p.m + t*(p.v[0]+t*(p.v[1]/2+t*p.v[2]/3))

@@ -1,0 +1,298 @@
+package aci318
+
+import (
+	"math"
+	"testing"
+
+	"github.com/stretchr/testify/require"
+
+	"soffit.example/beam"
+	"soffit.example/beam/statics"
+	"soffit.example/units"
+)
+
+// Table 9.3.1.1 with its multipliers for yield strength and lightweight
+// concrete. Own calculations from the clauses.
+func TestLeastDepth(t *testing.T) {
+	pinned, fixed, free := statics.Pinned, statics.Fixed, statics.Free
+	for _, c := range []struct {
+		name        string
+		code        Code
+		left, right statics.SupportKind
+		fy          units.Stress
+		kind        beam.ConcreteKind
+		density     units.Density
+		want        float64 // in., of a 20 ft span, or mm, of 6 m
+	}{
+		{"simple", ACI31819(), pinned, pinned, units.KSI.Of(60), beam.Normalweight, units.Density{}, 240.0 / 16},
+		{"one end continuous", ACI31814(), fixed, pinned, units.KSI.Of(60), beam.Normalweight, units.Density{}, 240 / 18.5},
+		{"the other end continuous", ACI31814(), pinned, fixed, units.KSI.Of(60), beam.Normalweight, units.Density{}, 240 / 18.5},
+		{"both ends continuous", ACI31819(), fixed, fixed, units.KSI.Of(60), beam.Normalweight, units.Density{}, 240.0 / 21},
+		{"cantilever, clear projection", ACI31819(), fixed, free, units.KSI.Of(60), beam.Normalweight, units.Density{}, (240 - 6) / 8.0},
+		{"cantilever to the left", ACI31819(), free, fixed, units.KSI.Of(60), beam.Normalweight, units.Density{}, (240 - 6) / 8.0},
+		{"Grade 40", ACI31814(), pinned, pinned, units.KSI.Of(40), beam.Normalweight, units.Density{}, 240.0 / 16 * 0.8},
+		{"Grade 80", ACI31819(), pinned, pinned, units.KSI.Of(80), beam.Normalweight, units.Density{}, 240.0 / 16 * 1.2},
+		{"lightweight 100", ACI31819(), pinned, pinned, units.KSI.Of(60), beam.AllLightweight, units.PoundPerCubicFoot.Of(100), 240.0 / 16 * 1.15},
+		{"lightweight 115: not less than 1.09", ACI31819(), pinned, pinned, units.KSI.Of(60), beam.SandLightweight, units.PoundPerCubicFoot.Of(115), 240.0 / 16 * 1.09},
+		{"lightweight 120 has no multiplier", ACI31819(), pinned, pinned, units.KSI.Of(60), beam.SandLightweight, units.PoundPerCubicFoot.Of(120), 240.0 / 16},
+		{"metric", ACI31819M(), pinned, pinned, units.Megapascal.Of(420), beam.Normalweight, units.Density{}, 6000.0 / 16},
+		{"metric Grade 550", ACI31819M(), pinned, pinned, units.Megapascal.Of(550), beam.Normalweight, units.Density{}, 6000.0 / 16 * (0.4 + 550.0/700)},
+		{"metric lightweight", ACI31814M(), pinned, pinned, units.Megapascal.Of(420), beam.AllLightweight, units.KilogramPerCubicMetre.Of(1600), 6000.0 / 16 * (1.65 - 0.48)},
+	} {
+		t.Run(c.name, func(t *testing.T) {
+			b := usBrief()
+			b.Spans[0] = units.Foot.Of(20)
+			b.Loads = b.Loads[:1]
+			if c.code.e.system == units.SI {
+				b.Spans[0] = units.Metre.Of(6)
+				b.Reinforcement.Catalog = "astm-metric"
+			}
+			b.Reinforcement.Yield = c.fy
+			b.Concrete.Kind, b.Concrete.Density = c.kind, c.density
+			b.Supports[0].Kind, b.Supports[1].Kind = c.left, c.right
+			for i := range b.Supports {
+				if b.Supports[i].Kind == free {
+					b.Supports[i].Width = units.Length{}
+				}
+			}
+			p := problemOf(t, c.code, b)
+			d := c.code.e.tableDepth(p, 1)
+			require.InEpsilon(t, c.want, d.depth, 1e-12)
+			tr := &beam.Trial{Problem: p, Record: true}
+			got := only(t, c.code.e.appendDepth(nil, tr), "depth.minimum")
+			requireEvaluable(t, &got)
+		})
+	}
+}
+
+// The table stands in for a computed deflection only where it is met and
+// nothing that deflection could damage is attached (trap 25).
+func TestDepthAndDeflection(t *testing.T) {
+	for _, c := range []struct {
+		name       string
+		depth      float64 // least: 264/16 = 16.5 in.
+		attached   beam.Attachment
+		minimum    beam.Outcome
+		deflection beam.Outcome
+		reason     string
+	}{
+		{"met", 16.5, beam.NothingAttached, beam.Pass, beam.NotApplicable, noteTableDoes},
+		{"met, robust", 16.5, beam.Robust, beam.Pass, beam.NotApplicable, noteTableDoes},
+		{"met, fragile", 24, beam.Fragile, beam.Pass, beam.NotJudged, noteFragile},
+		{"not met", 16.49, beam.NothingAttached, beam.Fail, beam.NotJudged, noteShallow},
+		{"not met, fragile", 16.49, beam.Fragile, beam.Fail, beam.NotJudged, noteFragile},
+	} {
+		t.Run(c.name, func(t *testing.T) {
+			b := usBrief()
+			b.Section.Depth, b.Serviceability.Attached = units.Inch.Of(c.depth), c.attached
+			tr := &beam.Trial{Problem: problemOf(t, ACI31819(), b)}
+			checks := us19.judgeWhole(nil, tr)
+			require.Equal(t, c.minimum, only(t, checks, "depth.minimum").Outcome)
+			d := only(t, checks, "deflection.computed")
+			require.Equal(t, c.deflection, d.Outcome)
+			require.Equal(t, c.reason, d.Reason)
+		})
+	}
+	p := problemOf(t, ACI31819(), demandBrief(beam.Demand{Name: "A", Moment: units.KipFoot.Of(100)}))
+	checks := us19.judgeWhole(nil, &beam.Trial{Problem: p})
+	require.Equal(t, beam.NotJudged, only(t, checks, "depth.minimum").Outcome)
+	require.Equal(t, beam.NotJudged, only(t, checks, "deflection.computed").Outcome)
+}
+
+// 9.2.3.1: 50 times the least width of the compression face.
+func TestBracing(t *testing.T) {
+	b := usBrief()
+	tr := &beam.Trial{Problem: problemOf(t, ACI31819(), b)}
+	require.Equal(t, beam.NotJudged, only(t, us19.judgeWhole(nil, tr), "bracing.spacing").Outcome)
+	for _, c := range []struct {
+		feet float64
+		want beam.Outcome
+	}{{700.0 / 12, beam.Pass}, {58.4, beam.Fail}} {
+		tr.Brief.Braced = units.Foot.Of(c.feet)
+		require.Equal(t, c.want, only(t, us19.judgeWhole(nil, tr), "bracing.spacing").Outcome)
+	}
+}
+
+// What is not judged is named with its reason, always.
+func TestWhatIsNotJudgedIsNamed(t *testing.T) {
+	tr := &beam.Trial{Problem: problemOf(t, ACI31814(), usBrief())}
+	checks := us14.judgeWhole(nil, tr)
+	for _, id := range []string{"development.anchorage", "cutoff.extension", "integrity.continuity", "seismic.detailing", "durability.exposure", "fire.cover"} {
+		c := only(t, checks, id)
+		require.Equal(t, beam.NotJudged, c.Outcome, id)
+		require.NotEmpty(t, c.Reason, id)
+	}
+	require.Empty(t, checksOf(checks, "shear.hanger-steel"))
+	tr.Brief.Supports[0].Hung = true
+	require.Len(t, checksOf(us14.judgeWhole(nil, tr), "shear.hanger-steel"), 1)
+	tr.Brief.Supports[0].Hung = false
+	tr.Brief.Loads[0].Hung = true
+	require.Len(t, checksOf(us14.judgeWhole(nil, tr), "shear.hanger-steel"), 1)
+}
+
+// 22.7.4.1 and 22.7.5.1 of a solid rectangle. Own calculations: 16 by 28 in.,
+// Acp = 448 in2, pcp = 88 in.
+func TestThresholdAndCrackingTorsion(t *testing.T) {
+	section := beam.Section{Shape: beam.Rectangular, Width: units.Inch.Of(16), Depth: units.Inch.Of(28)}
+	unit := 448.0 * 448 / 88
+	for _, c := range []struct {
+		name     string
+		e        *edition
+		concrete beam.Concrete
+		axial    units.Force
+		root     float64
+		factor   float64
+	}{
+		{"4000 psi", &us19, beam.Concrete{Strength: units.PSI.Of(4000)}, units.Force{}, math.Sqrt(4000), 1},
+		{"sand-lightweight, 318-14", &us14, beam.Concrete{Strength: units.PSI.Of(4000), Kind: beam.SandLightweight, Density: units.PoundPerCubicFoot.Of(110)},
+			units.Force{}, 0.85 * math.Sqrt(4000), 1},
+		{"root capped at 100 psi whatever the stirrups", &us19, beam.Concrete{Strength: units.PSI.Of(14400)}, units.Force{}, 100, 1},
+		{"compression", &us19, beam.Concrete{Strength: units.PSI.Of(4900)}, units.Kip.Of(100), 70, math.Sqrt(1 + 100000/(4*448*70.0))},
+		{"tension", &us19, beam.Concrete{Strength: units.PSI.Of(4900)}, units.Kip.Of(-100), 70, math.Sqrt(1 - 100000/(4*448*70.0))},
+		{"so much tension leaves nothing", &us19, beam.Concrete{Strength: units.PSI.Of(4900)}, units.Kip.Of(-200), 70, 0},
+	} {
+		t.Run(c.name, func(t *testing.T) {
+			s := c.e.torsionStrength(section, &c.concrete, c.axial)
+			require.InDelta(t, c.root*unit*c.factor, s.threshold, 1e-6)
+			require.InDelta(t, 4*c.root*unit*c.factor, s.cracking, 1e-6)
+		})
+	}
+	metric := beam.Section{Shape: beam.Rectangular, Width: units.Millimetre.Of(400), Depth: units.Millimetre.Of(700)}
+	concrete := beam.Concrete{Strength: units.Megapascal.Of(25)}
+	s := si19.torsionStrength(metric, &concrete, units.Kilonewton.Of(200))
+	unit = 5 * 280000.0 * 280000 / 2200 * math.Sqrt(1+200000/(0.33*280000*5.0))
+	require.InEpsilon(t, 0.083*unit, s.threshold, 1e-12)
+	require.InEpsilon(t, 0.33*unit, s.cracking, 1e-12)
+}
+
+// A torque below φTth is neglected, one equal to it is not (9.5.4.1).
+func TestTorqueThreshold(t *testing.T) {
+	section := usBrief().Section
+	concrete := usBrief().Concrete
+	limit := 0.75 * math.Sqrt(4000) * 336 * 336 / 76 // lb-in.
+	s := us19.torsionStrength(section, &concrete, units.Force{})
+	for _, c := range []struct {
+		share float64
+		want  bool
+	}{{0.999999, true}, {1, false}, {1.000001, false}} {
+		require.Equal(t, c.want, s.neglects(&us19, units.PoundInch.Of(-limit*c.share)), "%g", c.share)
+	}
+
+	below := beam.Load{Case: beam.Dead, Shape: beam.Torque, Moment: units.PoundInch.Of(1), At: units.Foot.Of(11)}
+	tr := shearTrial(t, ACI31819(), func(b *beam.Brief) {
+		// 1.4D: half of the torque to each end.
+		below.Moment = units.PoundInch.Of(limit / 0.7 * 0.9)
+		b.Loads = append(b.Loads, below)
+	})
+	tr.Record = true
+	got := only(t, us19.judgeTorsion(nil, tr), "torsion.threshold")
+	require.Equal(t, beam.Pass, got.Outcome)
+	require.InEpsilon(t, 0.9, got.Utilization, 1e-9)
+	requireEvaluable(t, &got)
+	require.Equal(t, beam.NotApplicable, only(t, us19.judgeTorsion(nil, shearTrial(t, ACI31819(), nil)), "torsion.threshold").Outcome)
+
+	p := problemOf(t, ACI31819(), demandBrief(beam.Demand{Name: "A", Moment: units.KipFoot.Of(50), Torque: units.PoundInch.Of(0.5 * limit), Axial: units.Kip.Of(20)}))
+	tr = trialOf(t, p, "#3", []group{{5, "#8"}}, []group{{2, "#6"}})
+	tr.Record = true
+	got = only(t, us19.judgeTorsion(nil, tr), "torsion.threshold")
+	require.Equal(t, "A", got.Combination)
+	requireEvaluable(t, &got)
+}
+
+// Every rule that puts a problem outside the method is named, with the clause
+// and the values, before any number is given.
+func TestRefusals(t *testing.T) {
+	point := func(at float64, edit ...func(*beam.Load)) func(*beam.Brief) {
+		return func(b *beam.Brief) {
+			l := beam.Load{Case: beam.Live, Shape: beam.PointLoad, Force: units.Kip.Of(10), At: units.Inch.Of(at)}
+			for _, f := range edit {
+				f(&l)
+			}
+			b.Loads = append(b.Loads, l)
+		}
+	}
+	demand := func(d beam.Demand) func(*beam.Brief) {
+		return func(b *beam.Brief) { *b = demandBrief(d) }
+	}
+	cantilever := func(length float64) func(*beam.Brief) {
+		return func(b *beam.Brief) {
+			b.Spans[0] = units.Inch.Of(length)
+			b.Supports = []beam.Support{{Kind: statics.Fixed}, {Kind: statics.Free}}
+		}
+	}
+	limit := 0.10 * 4000 * 14 * 24.0 // lb
+	for _, c := range []struct {
+		name string
+		code Code
+		edit func(*beam.Brief)
+		rule string // empty: none
+		says string
+	}{
+		{"within scope", ACI31819(), func(*beam.Brief) {}, "", ""},
+		{"f'c at the least", ACI31819(), func(b *beam.Brief) { b.Concrete.Strength = units.PSI.Of(2500) }, "", ""},
+		{"f'c below it", ACI31819(), func(b *beam.Brief) { b.Concrete.Strength = units.PSI.Of(2499) }, "scope.concrete-strength", "2500 psi"},
+		{"f'c at the least, metric", ACI31814M(), func(b *beam.Brief) { b.Concrete.Strength = units.Megapascal.Of(17) }, "", ""},
+		{"f'c below it, metric", ACI31814M(), func(b *beam.Brief) { b.Concrete.Strength = units.Megapascal.Of(16.9) }, "scope.concrete-strength", "17 MPa"},
+		{"Grade 100 in 318-19", ACI31819(), func(b *beam.Brief) { b.Reinforcement.Yield = units.KSI.Of(100) }, "", ""},
+		{"above Grade 100", ACI31819(), func(b *beam.Brief) { b.Reinforcement.Yield = units.KSI.Of(101) }, "scope.steel-grade", "100000 psi"},
+		{"Grade 80 in 318-14", ACI31814(), func(b *beam.Brief) { b.Reinforcement.Yield = units.KSI.Of(80) }, "", ""},
+		{"Grade 100 in 318-14", ACI31814(), func(b *beam.Brief) { b.Reinforcement.Yield = units.KSI.Of(100) }, "scope.steel-grade", "80000 psi"},
+
+		{"bars of another standard", ACI31819(), func(b *beam.Brief) { b.Reinforcement.Catalog = "en-10080" }, "scope.bar-catalog", "en-10080"},
+		{"no stirrup size with a bend", ACI31819(), func(b *beam.Brief) { b.Preferences.Stirrups = []string{"#9", "#10"} }, "scope.bar-size", "Table 25.3.2"},
+		{"one stirrup size with a bend", ACI31819(), func(b *beam.Brief) { b.Preferences.Stirrups = []string{"#9", "#4"} }, "", ""},
+
+		// h = 24 in.: 4h = 96 in. clear; supports are 12 in. wide.
+		{"clear span above 4h", ACI31819(), func(b *beam.Brief) { b.Spans[0] = units.Inch.Of(108.1) }, "", ""},
+		{"clear span of 4h", ACI31819(), func(b *beam.Brief) { b.Spans[0] = units.Inch.Of(108) }, "scope.deep-beam", "96 in"},
+		{"cantilever above 2h", ACI31819(), cantilever(48.1), "", ""},
+		{"cantilever of 2h", ACI31819(), cantilever(48), "scope.deep-beam", "projection 48 in"},
+
+		// 2h = 48 in. from the face at 6 in.
+		{"load beyond 2h", ACI31819(), point(54.01), "", ""},
+		{"load at 2h", ACI31819(), point(54), "scope.load-within-2h", "48 in from the face of support 1"},
+		{"load near the right support", ACI31819(), point(240), "scope.load-within-2h", "support 2"},
+		{"load over the support", ACI31819(), point(5), "", ""},
+		{"load hung from the soffit", ACI31819(), point(30, func(l *beam.Load) { l.Hung = true }), "", ""},
+		{"load of nothing", ACI31819(), point(30, func(l *beam.Load) { l.Force = units.Force{} }), "", ""},
+		{"support hung", ACI31819(), func(b *beam.Brief) { point(30)(b); b.Supports[0].Hung = true }, "", ""},
+		{"load at a free end", ACI31819(), func(b *beam.Brief) { cantilever(120)(b); point(120)(b) }, "", ""},
+
+		{"small compression", ACI31819(), demand(beam.Demand{Name: "A", Moment: units.KipFoot.Of(50), Axial: units.PoundForce.Of(limit * 0.999)}), "", ""},
+		{"compression at 0.10 f'c Ag", ACI31819(), demand(beam.Demand{Name: "A", Moment: units.KipFoot.Of(50), Axial: units.PoundForce.Of(limit)}), "scope.axial", "(A)"},
+		{"tension", ACI31819(), demand(beam.Demand{Name: "A", Moment: units.KipFoot.Of(50), Axial: units.PoundForce.Of(-1)}), "scope.axial", "tension"},
+
+		{"torque below the threshold", ACI31819(), demand(beam.Demand{Name: "A", Moment: units.KipFoot.Of(50), Torque: units.KipFoot.Of(5.8)}), "", ""}, // φTth = 5.87 kip-ft
+		{"torque above the threshold", ACI31819(), demand(beam.Demand{Name: "A", Moment: units.KipFoot.Of(50), Torque: units.KipFoot.Of(-5.9)}), "scope.torsion", "22.7"},
+		{"torque on a span", ACI31819(), func(b *beam.Brief) {
+			b.Loads = append(b.Loads, beam.Load{Case: beam.Live, Shape: beam.UniformTorque, Moment: units.KipFoot.Of(10)})
+		}, "scope.torsion", "φTth"},
+	} {
+		t.Run(c.name, func(t *testing.T) {
+			b := usBrief()
+			c.edit(&b)
+			found := refusalsOf(t, c.code, b)
+			if c.rule == "" {
+				require.Empty(t, found)
+				return
+			}
+			require.Len(t, found, 1)
+			r, ok := found[c.rule]
+			require.True(t, ok, "%v", found)
+			require.NotEmpty(t, r.Clause)
+			require.Contains(t, r.Detail, c.says)
+		})
+	}
+}
+
+// Several rules are named together.
+func TestEveryRefusalIsNamed(t *testing.T) {
+	b := usBrief()
+	b.Spans[0] = units.Inch.Of(100)
+	b.Concrete.Strength = units.PSI.Of(2000)
+	b.Loads = append(b.Loads, beam.Load{Case: beam.Live, Shape: beam.PointLoad, Force: units.Kip.Of(10), At: units.Inch.Of(50)})
+	found := refusalsOf(t, ACI31819(), b)
+	for _, rule := range []string{"scope.concrete-strength", "scope.deep-beam", "scope.load-within-2h"} {
+		require.Contains(t, found, rule)
+	}
+}
