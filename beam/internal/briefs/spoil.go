@@ -1,0 +1,129 @@
+package briefs
+
+import (
+	"math"
+
+	"soffit.example/beam"
+	"soffit.example/beam/statics"
+	"soffit.example/units"
+)
+
+// breakScope makes a sound brief break a rule of scope.
+func (m *maker) breakScope(b *beam.Brief) {
+	member := len(b.Spans) > 0
+	switch r := m.IntN(9); {
+	case r == 0:
+		b.Concrete.Strength = m.stress(m.either(2400, 16))
+	case r == 1:
+		b.Reinforcement.Yield = m.stress(m.either(120000, 800))
+	case r == 2:
+		b.Reinforcement.Yield = m.stress(m.either(33000, 230))
+	case r == 3:
+		b.Reinforcement.Catalog = pick(m, "en-10080", "csa-g30-18", "as-nzs-4671")
+		b.Preferences.Bars, b.Preferences.Stirrups = nil, nil
+	case r == 4 && member:
+		b.Spans[0] = b.Section.Depth.Scale(m.between(0.8, 1.9))
+		b.Loads = b.Loads[:0]
+		b.Supports[0].Width, b.Supports[1].Width = units.Length{}, units.Length{}
+		b.NoSelfWeight = false
+	case r == 5 && member:
+		b.Loads = append(b.Loads, beam.Load{
+			Case: beam.Live, Shape: beam.PointLoad, Force: m.forceOf(m.either(10e3, 40e3)),
+			At: b.Section.Depth.Scale(m.between(1.1, 1.8)).Min(b.Spans[0].Scale(0.9)),
+		})
+	case r == 6 && member:
+		b.Loads = append(b.Loads, beam.Load{
+			Case: beam.Dead, Shape: pick(m, beam.Torque, beam.UniformTorque),
+			Moment: m.momentOf(m.fc * m.width * m.width * m.depth * m.between(0.01, 0.5)), At: b.Spans[0].Scale(m.Float64()),
+		})
+	case !member && r < 7:
+		b.Demands[0].Axial = m.forceOf(m.fc * m.width * m.depth * m.between(-0.3, 0.4))
+	case !member:
+		b.Demands[0].Torque = m.momentOf(m.fc * m.width * m.width * m.depth * m.between(0.01, 0.5))
+	default:
+		b.Preferences.Stirrups = []string{"#9"}
+		if b.Reinforcement.Catalog == "astm-metric" {
+			b.Preferences.Stirrups = []string{"No. 29"}
+		}
+	}
+}
+
+// spoil puts something absurd into a brief.
+func (m *maker) spoil(b *beam.Brief) {
+	odd := pick(m, math.NaN(), math.Inf(1), math.Inf(-1), 0, -1, 1e300, -1e300, 1e-300, 5e-324, math.MaxFloat64)
+	member := len(b.Spans) > 0
+	switch r := m.IntN(24); {
+	case r == 0:
+		b.Section.Width = units.Metre.Of(odd)
+	case r == 1:
+		b.Section.Depth = units.Metre.Of(odd)
+	case r == 2:
+		b.Concrete.Strength = units.Pascal.Of(odd)
+	case r == 3:
+		b.Reinforcement.Yield = units.Pascal.Of(odd)
+	case r == 4:
+		b.Reinforcement.StirrupYield = units.Pascal.Of(odd)
+	case r == 5:
+		b.Concrete.Density = units.KilogramPerCubicMetre.Of(odd)
+	case r == 6:
+		b.Concrete.Aggregate = units.Metre.Of(odd)
+	case r == 7:
+		b.Cover = units.Metre.Of(odd)
+	case r == 8:
+		b.Reinforcement.Catalog = pick(m, "", "astm-inches", "ASTM-INCH", "bars")
+	case r == 9:
+		b.Section.Shape = beam.Shape(pick(m, 0, 9, 255))
+	case r == 10:
+		b.Exposure = beam.Exposure(pick(m, 0, 77))
+		b.Cover = units.Length{}
+	case r == 11:
+		b.Preferences.Bars = []string{pick(m, "#2", "", "8", "#8 ", "No. 99")}
+	case r == 12:
+		b.Preferences.MaxLayers = pick(m, -1, 5, 1<<40)
+	case r == 13:
+		b.Preferences.MaxLegs = pick(m, -2, 1, 99)
+	case r == 14:
+		b.Preferences.SpacingBy = units.Metre.Of(odd)
+	case r == 15:
+		b.Preferences.Depths = []units.Length{units.Metre.Of(odd)}
+	case r == 16:
+		b.Demands = append(b.Demands, beam.Demand{Name: "x", Moment: units.NewtonMetre.Of(odd), Shear: units.Newton.Of(odd)})
+	case r == 17:
+		b.Concrete.Kind = beam.SandLightweight
+		b.Concrete.Density = units.Density{}
+	case r == 18:
+		b.Braced = units.Metre.Of(odd)
+	case r == 19:
+		b.Serviceability.Months = pick(m, -1, 1<<40)
+	case r == 20:
+		b.Readings.ShearRow, b.Readings.ShearMethod = beam.ShearRow(m.IntN(256)), beam.ShearMethod(m.IntN(256))
+	case r == 21:
+		b.Preferences.Prefer = beam.Preference(pick(m, 6, 7, 255))
+	case !member:
+		b.Demands[0].Shear = units.Newton.Of(odd)
+	case r == 22:
+		pick(m,
+			func() { b.Spans[0] = units.Metre.Of(odd) },
+			func() { b.Spans = nil },
+			func() { b.Spans = append(b.Spans, b.Spans[0]) },
+			func() { b.Supports = b.Supports[:1] },
+			func() { b.Supports[0].Kind = statics.SupportKind(77) },
+			func() { b.Supports[0].Kind, b.Supports[1].Kind = statics.Free, statics.Free },
+			func() { b.Supports[0].Kind, b.Supports[1].Kind = statics.Pinned, statics.Free },
+			func() { b.Supports[1].Width = units.Metre.Of(odd) },
+		)()
+	default:
+		l := beam.Load{Case: beam.Live, Shape: beam.Uniform, Intensity: units.NewtonPerMetre.Of(odd)}
+		pick(m,
+			func() {},
+			func() { l.Case = beam.LoadCase(pick(m, 0, 8, 255)) },
+			func() { l.Shape = beam.LoadShape(pick(m, 0, 7, 255)) },
+			func() { l.Shape, l.Force, l.At = beam.PointLoad, units.Newton.Of(odd), units.Metre.Of(odd) },
+			func() { l.Shape, l.From, l.To = beam.Partial, units.Metre.Of(odd), b.Spans[0] },
+			func() { l.Intensity, l.Sustained = units.LineLoad{}, odd },
+			func() { l.Intensity, l.Span = units.LineLoad{}, pick(m, -1, 2, 1<<40) },
+			func() { l.Shape, l.Moment = beam.Torque, units.NewtonMetre.Of(odd) },
+		)()
+		b.Loads = append(b.Loads, l)
+	}
+}

@@ -1,0 +1,318 @@
+package rederive
+
+import (
+	"math"
+
+	"soffit.example/beam"
+	"soffit.example/beam/statics"
+)
+
+// webOf prepares a section for one sense of bending and one zone; nil: none.
+func (j *judge) webOf(k int, z *zone) (*web, bool) {
+	b := j.beds[k]
+	if b.count == 0 {
+		return nil, false
+	}
+	w := &web{
+		p: j.printed, fc: j.fc, lambda: j.lambda, bw: j.bw, h: j.h, d: j.h - b.centroid, as: b.area, fyt: j.fyt,
+		detailed: j.b.Readings.ShearMethod == beam.DetailedShear,
+		rowA:     j.b.Readings.ShearRow == beam.RowA, rowB: j.b.Readings.ShearRow == beam.RowB,
+	}
+	if z != nil {
+		w.av, w.s = z.area, z.s
+		w.across = (j.bw - 2*j.cover - z.db) / float64(z.legs-1)
+	}
+	w.prepare()
+	return w, true
+}
+
+// worst gathers the largest utilizations of a zone.
+type worst struct {
+	shearing
+	x, v float64
+}
+
+func (w *worst) take(s shearing, x, v float64) {
+	if s.strength > w.strength {
+		w.x, w.v = x, v
+	}
+	w.strength, w.limit = math.Max(w.strength, s.strength), math.Max(w.limit, s.limit)
+	w.least, w.along, w.across = math.Max(w.least, s.least), math.Max(w.along, s.along), math.Max(w.across, s.across)
+}
+
+// lesser is the more lenient of two.
+func lesser(a, b shearing) shearing {
+	return shearing{
+		math.Min(a.strength, b.strength), math.Min(a.limit, b.limit), math.Min(a.least, b.least),
+		math.Min(a.along, b.along), math.Min(a.across, b.across),
+	}
+}
+
+// sectionShear judges a section by the sense of its moment; where it has none,
+// by the sense that asks less of those that bend the beam at all.
+func (j *judge) sectionShear(webs [2]*web, m, v, nu float64) (shearing, bool) {
+	tiny := 1e-9 * j.scale
+	if k := 0; m > tiny || m < -tiny {
+		if m < 0 {
+			k = 1
+		}
+		if webs[k] == nil {
+			return shearing{}, false
+		}
+		return webs[k].at(v, m, nu), true
+	}
+	var out shearing
+	found := false
+	for k, w := range webs {
+		if w == nil || !j.bent[k] && j.bent[1-k] {
+			continue
+		}
+		s := w.at(v, 0, nu)
+		if found {
+			s = lesser(out, s)
+		}
+		out, found = s, true
+	}
+	return out, found
+}
+
+func (j *judge) webs(z *zone) (webs [2]*web) {
+	for k := range webs {
+		if w, ok := j.webOf(k, z); ok {
+			webs[k] = w
+		}
+	}
+	return webs
+}
+
+func (j *judge) reportShear(w *worst, where string) {
+	j.check("shear strength 22.5.1.1", w.strength, 1, "%s: at %.5g, Vu %.5g", where, w.x, w.v)
+	j.check("section limit 22.5.1.2", w.limit, 1, "%s: at %.5g", where, w.x)
+	j.check("least stirrups 9.6.3", w.least, 1, "%s", where)
+	j.check("stirrup spacing along 9.7.6.2.2", w.along, 1, "%s", where)
+	j.check("stirrup spacing across 9.7.6.2.2", w.across, 1, "%s", where)
+}
+
+// shear judges the stirrups of every zone and the lengths between them.
+func (j *judge) shear() {
+	for i := range j.zones {
+		j.hooks(&j.zones[i])
+	}
+	if j.member == nil {
+		var z *zone
+		if len(j.zones) > 0 {
+			z = &j.zones[0]
+		}
+		webs := j.webs(z)
+		var w worst
+		for i := range j.b.Demands {
+			d := &j.b.Demands[i]
+			v := j.force(d.Shear)
+			if s, ok := j.sectionShear(webs, j.moment(d.Moment), v, j.force(d.Axial)); ok {
+				w.take(s, float64(i), v)
+			}
+		}
+		j.reportShear(&w, "demands")
+		return
+	}
+	m := j.member
+	for i := range j.zones {
+		z := &j.zones[i]
+		j.stretch(z, math.Max(z.from, m.faceL), math.Min(z.to, m.faceR), "zone")
+	}
+	// What no zone reaches has no stirrups.
+	at := m.faceL
+	for at < m.faceR-1e-9*m.length {
+		end, covered := m.faceR, false
+		for i := range j.zones {
+			z := &j.zones[i]
+			switch {
+			case z.from <= at+1e-9*m.length && z.to > at+1e-9*m.length:
+				if !covered {
+					end = z.to
+				}
+				covered, end = true, math.Max(end, z.to)
+			case z.from > at && !covered:
+				end = math.Min(end, z.from)
+			}
+		}
+		if !covered {
+			j.stretch(nil, at, end, "no stirrups")
+		}
+		at = end
+	}
+}
+
+// Enough tells of places along the span, in metres, whether the stirrups of
+// the first zone of a layout would do for shear there, wherever the zone
+// itself lies. It is nil where the brief has no span.
+func (b *Beam) Enough(l beam.Layout) (at []float64, ok []bool, err error) {
+	j, err := b.with(&l)
+	if err != nil || j.member == nil {
+		return nil, nil, err
+	}
+	m := j.member
+	webs := j.webs(&j.zones[0])
+	unit := 0.001
+	if j.us {
+		unit = 0.0254
+	}
+	for _, s := range j.all {
+		if s.x < m.faceL || s.x > m.faceR {
+			continue
+		}
+		c := j.critical(&m.combos[s.combo])
+		x := math.Max(c[0], math.Min(c[1], s.x))
+		a, v := s.m, s.v
+		if x != s.x {
+			a, v = m.at(&m.combos[s.combo], x, x > s.x)
+		}
+		fits, found := j.sectionShear(webs, a, v, 0)
+		well := !found || max(fits.strength, fits.limit, fits.least, fits.along, fits.across) <= 1+slack
+		if n := len(at); n > 0 && at[n-1] == s.x*unit {
+			ok[n-1] = ok[n-1] && well
+			continue
+		}
+		at, ok = append(at, s.x*unit), append(ok, well)
+	}
+	return at, ok, nil
+}
+
+// stretch judges a length with like stirrups, or without any.
+func (j *judge) stretch(z *zone, from, to float64, where string) {
+	m := j.member
+	if from >= to {
+		return
+	}
+	webs := j.webs(z)
+	critical := make([][2]float64, len(m.combos))
+	for i := range m.combos {
+		critical[i] = j.critical(&m.combos[i])
+	}
+	var w worst
+	one := func(a, b, x float64) {
+		if s, ok := j.sectionShear(webs, a, b, 0); ok {
+			w.take(s, x, b)
+		}
+	}
+	for i := range m.combos {
+		low := math.Max(critical[i][0], math.Min(critical[i][1], from))
+		high := math.Max(critical[i][0], math.Min(critical[i][1], to))
+		a, b := m.at(&m.combos[i], low, true)
+		one(a, b, low)
+		a, b = m.at(&m.combos[i], high, false)
+		one(a, b, high)
+	}
+	for _, s := range j.all {
+		c := critical[s.combo]
+		low, high := math.Max(from, c[0]), math.Min(to, c[1])
+		if s.x > low && s.x < high {
+			one(s.m, s.v, s.x)
+		}
+	}
+	j.reportShear(&w, where)
+}
+
+// critical are the sections of a combination beyond which the shear need not
+// be followed to the faces (9.4.3.2).
+func (j *judge) critical(c *combo) [2]float64 {
+	m := j.member
+	faces := [2]float64{m.faceL, m.faceR}
+	out := faces
+	for i := range j.b.Loads {
+		if j.b.Loads[i].Hung {
+			return faces
+		}
+	}
+	for end := range out {
+		inward := float64(1 - 2*end)
+		kind := [2]statics.SupportKind{m.left, m.right}[end]
+		if kind == statics.Free || j.b.Supports[end].Hung {
+			continue
+		}
+		if _, v := m.at(c, faces[end], end == 0); v*inward < 0 {
+			continue // the reaction pulls
+		}
+		// d of the senses that this combination shows near the face.
+		d := 0.0
+		for n := 1; n <= 8; n++ {
+			x := faces[end] + inward*j.h*float64(n)/8
+			if x < 0 || x > m.length {
+				break
+			}
+			a, _ := m.at(c, x, end == 0)
+			k := 0
+			if a < 0 {
+				k = 1
+			}
+			if j.beds[k].count > 0 {
+				d = math.Max(d, j.h-j.beds[k].centroid)
+			}
+		}
+		loaded := false
+		for i := range j.b.Loads {
+			l := &j.b.Loads[i]
+			if l.Shape != beam.PointLoad || l.Force.IsZero() {
+				continue
+			}
+			from := (j.length(l.At) - faces[end]) * inward
+			loaded = loaded || from > 1e-9*m.length && from < d*(1-1e-9)
+		}
+		if !loaded {
+			out[end] = faces[end] + inward*d
+		}
+	}
+	if out[0] >= out[1] {
+		return faces
+	}
+	return out
+}
+
+// hooks judges whether a stirrup is developed (25.7.1.3).
+func (j *judge) hooks(z *zone) {
+	if z.number <= 5 || j.fyt <= j.hookYield*(1+slack) {
+		return
+	}
+	need := j.hook * z.db * j.fyt / (j.lambda * math.Min(math.Sqrt(j.fc), j.rootMost))
+	j.check("stirrup hooks 25.7.1.3", need, j.h/2-j.cover, "number %d", z.number)
+}
+
+// ties judges the stirrups round bars relied on in compression (9.7.6.4).
+func (j *judge) ties() {
+	for k, b := range j.beds {
+		if !b.relied || b.count == 0 || !j.bent[1-k] {
+			continue
+		}
+		if len(j.zones) == 0 {
+			j.wrong("ties 9.7.6.4", math.Inf(1), "none")
+			continue
+		}
+		smallest, largest := math.Inf(1), 0
+		for _, row := range b.layers {
+			for _, o := range row {
+				smallest, largest = math.Min(smallest, 2*o.r), max(largest, o.number)
+			}
+		}
+		for i := range j.zones {
+			z := &j.zones[i]
+			if z.number < 3 || largest > 10 && z.number < 4 {
+				j.wrong("tie size 9.7.6.4.2", 2, "number %d round %d", z.number, largest)
+			}
+			if !z.closed {
+				j.wrong("tie form 9.7.6.4.1", 2, "open")
+			}
+			j.check("tie spacing 9.7.6.4.3", z.s, math.Min(math.Min(16*smallest, 48*z.db), math.Min(j.bw, j.h)), "zone %d", i)
+			outer := b.layers[0]
+			if n := len(outer); n > 2 {
+				j.check("alternate bars held 9.7.6.4.4", float64(2+(n-2)/2), float64(z.legs), "%d bars", n)
+				if n > z.legs {
+					clear := 0.0
+					for a := 1; a < n; a++ {
+						clear = math.Max(clear, outer[a].x-outer[a-1].x-outer[a].r-outer[a-1].r)
+					}
+					j.check("bars near held ones 9.7.6.4.4", clear, j.tieGap, "%d bars", n)
+				}
+			}
+		}
+	}
+}
