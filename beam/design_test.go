@@ -223,6 +223,10 @@ func TestSelfWeightFollowsTheDepth(t *testing.T) {
 	require.Equal(t, units.Inch.Of(20), r.Section.Depth)
 	// 150 lb/ft3 x 14 in x 20 in = 291.67 lb/ft (own calculation)
 	require.InEpsilon(t, 0.29166667, r.Problem.SelfWeight.In(units.KipPerFoot), 1e-7)
+	i := slices.IndexFunc(r.Assumptions, func(a beam.Assumption) bool { return a.ID == "self-weight.section" })
+	require.GreaterOrEqual(t, i, 0)
+	require.False(t, r.Assumptions[i].Holds, "the section first tried was 24 in deep")
+	require.Contains(t, r.Assumptions[i].Found, "analysed again")
 }
 
 func TestSameInputSameBytes(t *testing.T) {

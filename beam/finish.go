@@ -114,11 +114,11 @@ func (p *prepared) settle(t *Trial, register *Register) {
 	if p.SelfWeight.IsZero() {
 		return
 	}
-	s := t.Brief.Section
-	found := t.Brief.Concrete.Density.Weight().MulArea(s.Width.MulLength(s.Depth))
-	register.Settle("self-weight.section",
-		fmt.Sprintf("%s from the final section of %s by %s", p.System.Format(found.Amount()), p.System.Format(s.Width.Amount()), p.System.Format(s.Depth.Amount())),
-		found.AtMost(p.SelfWeight) && p.SelfWeight.AtMost(found))
+	found, same := p.describeWeight(), p.SelfWeight == p.assumedWeight
+	if !same {
+		found += "; the beam was analysed again with it"
+	}
+	register.Settle("self-weight.section", found, same)
 }
 
 // positions lists every longitudinal bar of the top and bottom by

@@ -279,21 +279,3 @@ func (sp *spanForces) addTwists(loads []Load, span int, kept []Combination) {
 	slices.SortFunc(sp.breaks, units.Length.Compare)
 	sp.breaks = slices.Compact(sp.breaks)
 }
-
-// bent reports whether any combination bends the beam in a sense between the
-// faces of its supports.
-func (p *Problem) bent(sense Sense) bool {
-	f := &p.Forces
-	for _, d := range f.Demands() {
-		if sign := d.Moment.Compare(units.Moment{}); sense == Positive && sign > 0 || sense == Negative && sign < 0 {
-			return true
-		}
-	}
-	for span := 1; span <= f.Spans(); span++ {
-		from, to := p.Faces(span)
-		if _, ok := f.Moment(sense, span, from, to); ok {
-			return true
-		}
-	}
-	return false
-}

@@ -9,6 +9,51 @@ import (
 	"soffit.example/units"
 )
 
+// Problem is a brief after the code has filled its gaps: sizes looked up,
+// loads combined and analysed. It is fixed before the first layout is tried.
+type Problem struct {
+	Brief   Brief // resolved copy: no field is left to the code any more
+	Code    Code
+	System  units.System // of the code's edition, for buildable steps
+	Catalog bars.Catalog
+	Forces  Forces
+	Kept    []Combination
+	Dropped []DroppedCombination
+
+	SelfWeight units.LineLoad // of the brief's section; zero if the brief excludes it
+}
+
+// Faces are the positions of the support faces of a span, from the centre of
+// its left support; at a free end, the end itself.
+func (p *Problem) Faces(span int) (left, right units.Length) {
+	l := p.Brief.Spans[span-1]
+	return p.Brief.Supports[span-1].Width.Scale(0.5), l.Sub(p.Brief.Supports[span].Width.Scale(0.5))
+}
+
+// ClearSpan is the distance between the support faces of a span.
+func (p *Problem) ClearSpan(span int) units.Length {
+	left, right := p.Faces(span)
+	return right.Sub(left)
+}
+
+// bent reports whether any combination bends the beam in a sense between the
+// faces of its supports.
+func (p *Problem) bent(sense Sense) bool {
+	f := &p.Forces
+	for _, d := range f.Demands() {
+		if sign := d.Moment.Compare(units.Moment{}); sense == Positive && sign > 0 || sense == Negative && sign < 0 {
+			return true
+		}
+	}
+	for span := 1; span <= f.Spans(); span++ {
+		from, to := p.Faces(span)
+		if _, ok := f.Moment(sense, span, from, to); ok {
+			return true
+		}
+	}
+	return false
+}
+
 // prepared is a problem on its way: resolved and analysed, with what was
 // assumed so far and what puts it out of scope.
 type prepared struct {
@@ -18,6 +63,8 @@ type prepared struct {
 	// assumedDepth is the effective depth of each sense that the search
 	// started from; zero where there was no search.
 	assumedDepth [Negative + 1]units.Length
+	// assumedWeight is the self-weight of the first section tried.
+	assumedWeight units.LineLoad
 }
 
 // prepare resolves a brief under a code and analyses it. The error is an
@@ -106,7 +153,7 @@ func setIfZero(v *int, def int) {
 func (p *prepared) atDepth(d units.Length) (*prepared, error) {
 	q := *p.Problem
 	q.Brief.Section.Depth = d
-	n := &prepared{Problem: &q, register: p.register.clone()}
+	n := &prepared{Problem: &q, register: p.register.clone(), assumedWeight: p.assumedWeight}
 	if err := n.analyse(); err != nil {
 		return nil, err
 	}
@@ -124,12 +171,7 @@ func (p *prepared) analyse() error {
 	p.SelfWeight = units.LineLoad{}
 	if !b.NoSelfWeight {
 		p.SelfWeight = b.Concrete.Density.Weight().MulArea(b.Section.Width.MulLength(b.Section.Depth))
-		p.register.Assume(Assumption{
-			ID: "self-weight.section",
-			Assumed: fmt.Sprintf("%s of self-weight, from a section of %s by %s",
-				p.System.Format(p.SelfWeight.Amount()), p.System.Format(b.Section.Width.Amount()), p.System.Format(b.Section.Depth.Amount())),
-			UsedIn: []string{"flexure", "shear"},
-		})
+		p.assumeWeight()
 	}
 	p.Kept, p.Dropped = p.Code.Combinations(b)
 	forces, err := memberForces(b, p.SelfWeight, p.Kept)
@@ -181,4 +223,24 @@ func memberLoads(b *Brief, selfWeight units.LineLoad) []statics.Load {
 		loads = append(loads, s)
 	}
 	return loads
+}
+
+// assumeWeight lists the self-weight of the first section tried.
+func (p *prepared) assumeWeight() {
+	if !p.assumedWeight.IsZero() {
+		return
+	}
+	p.assumedWeight = p.SelfWeight
+	p.register.Assume(Assumption{
+		ID:      "self-weight.section",
+		Assumed: p.describeWeight(),
+		UsedIn:  []string{"flexure", "shear"},
+	})
+}
+
+// describeWeight says the self-weight and the section that it is of.
+func (p *Problem) describeWeight() string {
+	s := p.Brief.Section
+	return fmt.Sprintf("%s of self-weight, from a section of %s by %s",
+		p.System.Format(p.SelfWeight.Amount()), p.System.Format(s.Width.Amount()), p.System.Format(s.Depth.Amount()))
 }

@@ -6,20 +6,6 @@ import (
 	"soffit.example/units"
 )
 
-// Problem is a brief after the code has filled its gaps: sizes looked up,
-// loads combined and analysed. It is fixed before the first layout is tried.
-type Problem struct {
-	Brief   Brief // resolved copy: no field is left to the code any more
-	Code    Code
-	System  units.System // of the code's edition, for buildable steps
-	Catalog bars.Catalog
-	Forces  Forces
-	Kept    []Combination
-	Dropped []DroppedCombination
-
-	SelfWeight units.LineLoad // of the brief's section; zero if the brief excludes it
-}
-
 // Trial is one complete arrangement put to the code: the problem and its
 // bars, lying where they would lie.
 type Trial struct {
@@ -124,17 +110,4 @@ func (t *Trial) Layers(s Sense, steel mechanics.Steel) []mechanics.Layer {
 		}
 	}
 	return t.layers
-}
-
-// Faces are the positions of the support faces of a span, from the centre of
-// its left support; at a free end, the end itself.
-func (p *Problem) Faces(span int) (left, right units.Length) {
-	l := p.Brief.Spans[span-1]
-	return p.Brief.Supports[span-1].Width.Scale(0.5), l.Sub(p.Brief.Supports[span].Width.Scale(0.5))
-}
-
-// ClearSpan is the distance between the support faces of a span.
-func (p *Problem) ClearSpan(span int) units.Length {
-	left, right := p.Faces(span)
-	return right.Sub(left)
 }
