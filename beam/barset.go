@@ -139,14 +139,15 @@ func splitLayers(n, most, layers int) (split [MaxLayers]int, ok bool) {
 func oddAbove(rest, k, layers int) bool { return layers > 0 && k > 0 && rest%2 == 1 }
 
 // mixedSets appends sets of two neighbouring sizes: an even number of the
-// larger one outermost in the first layer with the smaller between, or the
-// larger one below and the smaller above.
-func mixedSets(dst []barSet, larger, smaller *bars.Size, least units.Area, most, layers int) []barSet {
+// larger one outermost in the first layer with the smaller between, no more
+// in all than of the smaller alone would fit, or the larger one below and the
+// smaller above.
+func mixedSets(dst []barSet, larger, smaller *bars.Size, least units.Area, mostLarger, mostSmaller, layers int) []barSet {
 	enough := func(a, b int) bool {
 		return !larger.Area.Scale(float64(a)).Add(smaller.Area.Scale(float64(b + 1))).Less(least)
 	}
-	for a := 2; a < most; a += 2 {
-		for b := 1; a+b <= most; b++ {
+	for a := 2; a <= mostLarger && a < mostSmaller; a += 2 {
+		for b := 1; a+b <= mostSmaller; b++ {
 			if !enough(a, b) {
 				continue
 			}
@@ -159,7 +160,7 @@ func mixedSets(dst []barSet, larger, smaller *bars.Size, least units.Area, most,
 	if layers < 2 {
 		return dst
 	}
-	for a := 2; a <= most; a++ {
+	for a := 2; a <= mostLarger; a++ {
 		for b := 2 - a%2; b <= a; b++ {
 			if a%2 == 0 && b%2 == 1 || !enough(a, b) {
 				continue

@@ -74,7 +74,7 @@ func TestMixedSetsHoldTheLargerBarsOutside(t *testing.T) {
 	require.NoError(t, err)
 	small, err := catalog.Size("#7")
 	require.NoError(t, err)
-	sets := mixedSets(nil, &large, &small, units.Area{}, 5, 2)
+	sets := mixedSets(nil, &large, &small, units.Area{}, 5, 6, 2)
 	require.NotEmpty(t, sets)
 	for _, s := range sets {
 		require.Equal(t, 2, s.sizes)

@@ -124,6 +124,7 @@ func (s *search) sets(face Face, tie bars.Size) []barSet {
 	sense := tensionSense(face)
 	bent := s.bent(sense)
 	var sets []barSet
+	before := 0 // most of the next smaller size in a layer
 	for i := range s.main {
 		size := &s.main[i]
 		if !bent {
@@ -139,8 +140,9 @@ func (s *search) sets(face Face, tie bars.Size) []barSet {
 		fewest := int(math.Ceil(least.Ratio(size.Area)-1e-9)) - 1 // one too few is tried, for the record
 		sets = uniformSets(sets, size, fewest, most, s.p.Brief.Preferences.MaxLayers)
 		if s.p.Brief.Preferences.Mixed && i > 0 && s.main[i].Order == s.main[i-1].Order+1 {
-			sets = mixedSets(sets, size, &s.main[i-1], least, most, s.p.Brief.Preferences.MaxLayers)
+			sets = mixedSets(sets, size, &s.main[i-1], least, most, before, s.p.Brief.Preferences.MaxLayers)
 		}
+		before = most
 	}
 	sortSets(sets)
 	return sets
