@@ -98,6 +98,13 @@ func TestCoverChecks(t *testing.T) {
 		require.InEpsilon(t, 1, c.Utilization, 1e-9, "the cover is just that of the bars")
 	}
 
+	tr.Side = beam.SideSteel{Size: sizeOf(t, "astm-inch", "#6"), Each: 2, Spacing: units.Inch.Of(8), TensionFace: beam.Bottom}
+	tr.Record = true
+	side := checksOf(us19.judgeFitting(nil, tr), "cover.bar")[2]
+	require.Equal(t, beam.Side, side.Face)
+	require.InEpsilon(t, 1, side.Utilization, 1e-9)
+	requireEvaluable(t, &side)
+
 	// The bars stay where they are, and the ground asks for 3 in.
 	tr.Brief.Exposure = beam.Ground
 	checks = us19.judgeFitting(nil, tr)
@@ -302,6 +309,12 @@ func TestSideFaceBars(t *testing.T) {
 		require.InEpsilon(t, 10.3125, valueIn(t, got.Capacity, "in"), 1e-9)
 		requireEvaluable(t, &got)
 	}
+
+	// Demands of either sense ask for bars from their own tension face.
+	b := demandBrief(beam.Demand{Name: "A", Moment: units.KipFoot.Of(-200)})
+	b.Section.Depth = units.Inch.Of(48)
+	hog := trialOf(t, problemOf(t, ACI31819(), b), "#3", []group{{3, "#8"}}, []group{{3, "#8"}})
+	require.Equal(t, beam.Top, only(t, us19.judgeWhole(nil, hog), "side-face.spacing").Face)
 
 	// Bars counted from the bottom serve a top face in tension only where they
 	// reach it: top bars at 2.25 in., the fourth bar at 42.375 in. from the

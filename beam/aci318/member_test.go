@@ -178,6 +178,10 @@ func TestTorqueThreshold(t *testing.T) {
 		require.Equal(t, c.want, s.neglects(&us19, units.PoundInch.Of(-limit*c.share)), "%g", c.share)
 	}
 
+	edge := trialOf(t, problemOf(t, ACI31819(), demandBrief(beam.Demand{Name: "A", Moment: units.KipFoot.Of(50)})), "#3", []group{{5, "#8"}}, []group{{2, "#6"}})
+	edge.Forces.Demands()[0].Torque = units.PoundInch.Of(limit)
+	require.Equal(t, beam.Fail, only(t, us19.judgeTorsion(nil, edge), "torsion.threshold").Outcome)
+
 	below := beam.Load{Case: beam.Dead, Shape: beam.Torque, Moment: units.PoundInch.Of(1), At: units.Foot.Of(11)}
 	tr := shearTrial(t, ACI31819(), func(b *beam.Brief) {
 		// 1.4D: half of the torque to each end.
@@ -191,7 +195,9 @@ func TestTorqueThreshold(t *testing.T) {
 	requireEvaluable(t, &got)
 	require.Equal(t, beam.NotApplicable, only(t, us19.judgeTorsion(nil, shearTrial(t, ACI31819(), nil)), "torsion.threshold").Outcome)
 
-	p := problemOf(t, ACI31819(), demandBrief(beam.Demand{Name: "A", Moment: units.KipFoot.Of(50), Torque: units.PoundInch.Of(0.5 * limit), Axial: units.Kip.Of(20)}))
+	strong := demandBrief(beam.Demand{Name: "A", Moment: units.KipFoot.Of(50), Torque: units.PoundInch.Of(0.5 * limit), Axial: units.Kip.Of(20)})
+	strong.Concrete.Strength = units.PSI.Of(12000)
+	p := problemOf(t, ACI31819(), strong)
 	tr = trialOf(t, p, "#3", []group{{5, "#8"}}, []group{{2, "#6"}})
 	tr.Record = true
 	got = only(t, us19.judgeTorsion(nil, tr), "torsion.threshold")
@@ -264,6 +270,7 @@ func TestRefusals(t *testing.T) {
 
 		{"torque below the threshold", ACI31819(), demand(beam.Demand{Name: "A", Moment: units.KipFoot.Of(50), Torque: units.KipFoot.Of(5.8)}), "", ""}, // φTth = 5.87 kip-ft
 		{"torque above the threshold", ACI31819(), demand(beam.Demand{Name: "A", Moment: units.KipFoot.Of(50), Torque: units.KipFoot.Of(-5.9)}), "scope.torsion", "22.7"},
+		{"unnamed demand", ACI31819(), demand(beam.Demand{Moment: units.KipFoot.Of(50), Axial: units.Kip.Of(-1)}), "scope.axial", "1000 lb: flexure"},
 		{"torque on a span", ACI31819(), func(b *beam.Brief) {
 			b.Loads = append(b.Loads, beam.Load{Case: beam.Live, Shape: beam.UniformTorque, Moment: units.KipFoot.Of(10)})
 		}, "scope.torsion", "φTth"},

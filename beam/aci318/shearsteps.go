@@ -116,13 +116,9 @@ func (w *webShear) methodSteps(e *edition, out *working, c *concreteShear, s *se
 	const meaning = "concrete shear strength"
 	switch {
 	case c.axial != 0:
-		per := r.compression
+		per, clause := r.compression, rowCompression.clause()
 		if c.axial < 0 {
-			per = r.tension
-		}
-		clause := rowCompression.clause()
-		if c.axial < 0 {
-			clause = rowTension.clause()
+			per, clause = r.tension, rowTension.clause()
 		}
 		out.find("k", "factor for the axial force", clause, "1 + Nu / ("+number(per)+" Ag)", asPlain(c.axialTerm))
 		out.find("Vc", meaning, clause, "max("+number(r.plain)+" k λ r bw d, 0)", e.asForce(c.strength))

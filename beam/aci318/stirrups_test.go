@@ -175,5 +175,6 @@ func TestSpacingClassFollowsRequiredVs(t *testing.T) {
 func TestLegsAreSpreadEvenly(t *testing.T) {
 	width, cover, tie := units.Inch.Of(24), units.Inch.Of(1.5), units.Inch.Of(0.5)
 	require.InEpsilon(t, 20.5, legSpacing(width, cover, tie, 2).In(units.Inch), 1e-12)
+	require.InEpsilon(t, 20.5, legSpacing(width, cover, tie, 1).In(units.Inch), 1e-12, "a single leg leaves the whole width")
 	require.InEpsilon(t, 20.5/3, legSpacing(width, cover, tie, 4).In(units.Inch), 1e-12)
 }
