@@ -124,7 +124,7 @@ func (s *search) sets(face Face, tie bars.Size) []barSet {
 	sense := tensionSense(face)
 	bent := s.bent(sense)
 	var sets []barSet
-	before := 0 // most of the next smaller size in a layer
+	most := 0 // of a size in a layer; in turn, of the next smaller one
 	for i := range s.main {
 		size := &s.main[i]
 		if !bent {
@@ -133,16 +133,17 @@ func (s *search) sets(face Face, tie bars.Size) []barSet {
 			}
 			continue
 		}
-		most, least, ok := s.bounds(sense, tie, size)
-		if !ok || most < 2 {
+		smaller := most
+		var least units.Area
+		var ok bool
+		if most, least, ok = s.bounds(sense, tie, size); !ok || most < 2 {
 			continue
 		}
 		fewest := int(math.Ceil(least.Ratio(size.Area)-1e-9)) - 1 // one too few is tried, for the record
 		sets = uniformSets(sets, size, fewest, most, s.p.Brief.Preferences.MaxLayers)
 		if s.p.Brief.Preferences.Mixed && i > 0 && s.main[i].Order == s.main[i-1].Order+1 {
-			sets = mixedSets(sets, size, &s.main[i-1], least, most, before, s.p.Brief.Preferences.MaxLayers)
+			sets = mixedSets(sets, size, &s.main[i-1], least, most, smaller, s.p.Brief.Preferences.MaxLayers)
 		}
-		before = most
 	}
 	sortSets(sets)
 	return sets
