@@ -250,7 +250,7 @@ func TestAllowedSizes(t *testing.T) {
 	}
 }
 
-// Table 24.3.2, with the cover to the longitudinal bar (traps: 0.6 fy, cover
+// Table 24.3.2, with the cover to the longitudinal bar (not 0.6 fy, not the cover
 // to the stirrup). Own calculations from the clause.
 func TestGreatestCrackSpacing(t *testing.T) {
 	for _, c := range []struct {

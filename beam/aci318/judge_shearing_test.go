@@ -234,7 +234,7 @@ func TestZoneEndsTakeBothSidesOfAJump(t *testing.T) {
 }
 
 // The steel ratio and d are those of the face in tension at the section
-// (trap: bottom steel under a negative moment).
+// (not the bottom steel under a negative moment).
 func TestSteelRatioFollowsTheSenseOfBending(t *testing.T) {
 	for _, c := range []struct {
 		moment float64

@@ -66,7 +66,7 @@ func TestLeastDepth(t *testing.T) {
 }
 
 // The table stands in for a computed deflection only where it is met and
-// nothing that deflection could damage is attached (trap 25).
+// nothing that deflection could damage is attached.
 func TestDepthAndDeflection(t *testing.T) {
 	for _, c := range []struct {
 		name       string
