@@ -22,7 +22,7 @@ func (s *Service) designs(w http.ResponseWriter, r *http.Request) error {
 	code := s.code(request.Code, faults, "/code")
 	brief := in.brief(&request, "")
 	design := func(ctx context.Context) (*beam.Result, error) { return beam.Design(ctx, code, brief) }
-	result, err := s.judge(r.Context(), code, faults, "", design)
+	result, err := s.judge(r.Context(), code, &brief, faults, "", design)
 	if err != nil {
 		return err
 	}
@@ -41,24 +41,23 @@ func (s *Service) checkLayout(w http.ResponseWriter, r *http.Request) error {
 	brief := in.brief(&request.Brief, "/brief")
 	layout := in.layout(&request.Layout, &brief, "/layout")
 	check := func(ctx context.Context) (*beam.Result, error) { return beam.CheckLayout(ctx, code, brief, layout) }
-	result, err := s.judge(r.Context(), code, faults, "/brief", check)
+	result, err := s.judge(r.Context(), code, &brief, faults, "/brief", check)
 	if err != nil {
 		return err
 	}
 	return s.replyDesign(w, result, &request.Brief, request)
 }
 
-// judge runs do, unless the request has faults. Then it lets package beam add
-// what it sees before it computes anything, so that one reply lists all: with
-// a context that is over, nothing is computed.
-func (s *Service) judge(ctx context.Context, code beam.Code, faults *strict.Faults, at string, do func(context.Context) (*beam.Result, error)) (*beam.Result, error) {
+// judge runs do, unless the request has faults. Then it has package beam add
+// those that it sees before it computes anything, so that one reply lists
+// all: with a context that is over, nothing is computed.
+func (s *Service) judge(ctx context.Context, code beam.Code, brief *beam.Brief, faults *strict.Faults, at string, do func(context.Context) (*beam.Result, error)) (*beam.Result, error) {
 	if !faults.None() {
 		if code != nil {
 			over, cancel := context.WithCancel(ctx)
 			cancel()
-			if _, err := do(over); err != nil {
-				addInput(faults, err, at)
-			}
+			_, err := beam.Design(over, code, *brief)
+			addInput(faults, err, at)
 		}
 		return nil, invalidInput(faults.All())
 	}

@@ -2,12 +2,15 @@ package service
 
 import (
 	"bytes"
+	"context"
 	"crypto/sha256"
 	"encoding/hex"
+	"errors"
 	"fmt"
 	"io"
 	"mime"
 	"net/http"
+	"os"
 	"strconv"
 	"strings"
 
@@ -32,13 +35,14 @@ func read[T any](s *Service, w http.ResponseWriter, r *http.Request, reader *str
 	return reader.Read(body, faults)
 }
 
-// bodyError tells a body that was cut short, which is the sender's fault,
-// from the errors that problemOf knows.
+// bodyError turns every failure to read a body into the sender's, save those
+// that problemOf knows better.
 func bodyError(err error) error {
-	if err == io.ErrUnexpectedEOF {
-		return &strict.SyntaxError{Reason: "the body ends before the length it announced"}
+	var large *http.MaxBytesError
+	if errors.As(err, &large) || errors.Is(err, os.ErrDeadlineExceeded) || errors.Is(err, context.Canceled) {
+		return err
 	}
-	return err
+	return &strict.SyntaxError{Reason: "the body does not arrive as its headers announce it"}
 }
 
 // jsonOnly checks what the headers say of the body and of the reply.

@@ -94,11 +94,7 @@ func (in *intake) fit(w *wire.FitsRequest) (*bars.Cage, bars.Catalog, []bars.Lay
 func (in *intake) catalogID(id, path string) (bars.Catalog, bool) {
 	c, err := bars.Lookup(id)
 	if err != nil {
-		var known []string
-		for _, c := range bars.Catalogs() {
-			known = append(known, c.ID())
-		}
-		in.faults.Add(unknownName(path, "catalog", id, known))
+		in.faults.Add(unknownName(path, "catalog", id, catalogIDs()))
 	}
 	return c, err == nil
 }

@@ -202,13 +202,13 @@ func (in *intake) demand(w *wire.Demand, i int, at string) beam.Demand {
 }
 
 func (in *intake) preferences(w *wire.Preferences, at string) beam.Preferences {
-	p := beam.Preferences{
+	return beam.Preferences{
 		Bars: w.Bars, Stirrups: w.Stirrups,
 		MaxLayers: value(w.MaxLayers), MaxLegs: value(w.MaxLegs), MaxZones: value(w.MaxZones),
 		Mixed: value(w.Mixed), Depths: w.Depths, Prefer: word[beam.Preference](w.Prefer),
 		SpacingBy: above(in, at+"/spacing_step", w.SpacingStep), KeepBest: value(w.Alternatives),
+		NoCures: w.Cures != nil && !*w.Cures,
 	}
-	return p
 }
 
 func readings(displaced, yield, row, method, corner *string) beam.Readings {
@@ -267,7 +267,7 @@ func (in *intake) zone(w *wire.Zone, b *beam.Brief, at string) beam.Zone {
 	if w.Form != nil {
 		z.Form = *w.Form
 	}
-	if len(b.Spans) == 0 {
+	if len(b.Demands) > 0 {
 		if w.From != nil || w.To != nil || w.Count != nil || w.Span != nil {
 			in.fault(at, "", "has a place along a span, and the brief has demands in place of spans")
 		}

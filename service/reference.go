@@ -58,7 +58,7 @@ func (s *Service) publish() (map[string]*document, error) {
 	var list wire.Catalogs
 	for _, c := range bars.Catalogs() {
 		list.Catalogs = append(list.Catalogs, wire.CatalogLine{ID: c.ID(), Title: c.Title(), Sizes: sizeNames(c)})
-		if err := add("/v1/bars/"+c.ID(), catalogOf(c)); err != nil {
+		if err := add(catalogRoot+c.ID(), catalogOf(c)); err != nil {
 			return nil, err
 		}
 	}
@@ -79,14 +79,24 @@ func (s *Service) publish() (map[string]*document, error) {
 	return docs, nil
 }
 
-// catalog answers for a bar catalog that there is not; those that there are
-// are documents.
+// catalogRoot is the path of the bar catalogs, each by its id.
+const catalogRoot = "/v1/bars/"
+
+// catalog answers GET /v1/bars/{catalog}.
 func (s *Service) catalog(w http.ResponseWriter, r *http.Request) error {
-	var known []string
-	for _, c := range bars.Catalogs() {
-		known = append(known, c.ID())
+	id := r.PathValue("catalog")
+	if d, ok := s.documents[catalogRoot+id]; ok {
+		return d.serve(w, r)
 	}
-	return &problem{kind: notFound, detail: unknownName("", "catalog", clip(r.PathValue("catalog")), known).Detail}
+	return &problem{kind: notFound, detail: unknownName("", "catalog", clip(id), catalogIDs()).Detail}
+}
+
+func catalogIDs() []string {
+	var ids []string
+	for _, c := range bars.Catalogs() {
+		ids = append(ids, c.ID())
+	}
+	return ids
 }
 
 func catalogOf(c bars.Catalog) wire.Catalog {

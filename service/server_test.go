@@ -3,6 +3,7 @@ package service_test
 import (
 	"bytes"
 	"fmt"
+	"io"
 	"log/slog"
 	"net"
 	"net/http"
@@ -282,4 +283,69 @@ func TestManyAtOnceGetTheSameBytes(t *testing.T) {
 		}
 	}
 	wg.Wait()
+}
+
+// What cannot be read as a body at all is the sender's fault too.
+func TestABrokenBodyIsTheSendersFault(t *testing.T) {
+	server := httptest.NewServer(newService(t))
+	defer server.Close()
+	for name, request := range map[string]string{
+		"chunk":  "Transfer-Encoding: chunked\r\n\r\nzz\r\n{}\r\n0\r\n\r\n",
+		"length": "Content-Length: 1000\r\n\r\n{}",
+	} {
+		t.Run(name, func(t *testing.T) {
+			conn, err := net.Dial("tcp", server.Listener.Addr().String())
+			require.NoError(t, err)
+			defer conn.Close()
+			_, err = fmt.Fprint(conn, "POST /v1/fits HTTP/1.1\r\nHost: localhost\r\nContent-Type: application/json\r\n"+request)
+			require.NoError(t, err)
+			require.NoError(t, conn.(*net.TCPConn).CloseWrite())
+			require.NoError(t, conn.SetReadDeadline(time.Now().Add(5*time.Second)))
+			reply, err := io.ReadAll(conn)
+			require.NoError(t, err)
+			require.Contains(t, string(reply), "HTTP/1.1 400 ")
+			require.Contains(t, string(reply), "the body does not arrive as its headers announce it")
+		})
+	}
+}
+
+func TestOddPathsAreNotFoundOrMisplaced(t *testing.T) {
+	s := newService(t)
+	for path, want := range map[string]int{
+		"/v1/bars/%2e%2e": 404, "//": 404, "/v1//bars": 404, "/V1/bars": 404, "/v1/bars/astm-inch/": 404, "/v1/bars/astm%2Dinch": 200, "/problems/%00": 404,
+	} {
+		require.Equal(t, want, send(s, "GET", path, "").Code, path)
+	}
+	for _, method := range []string{"PUT", "DELETE", "PATCH", "HEAD", "TRACE"} {
+		w := send(s, method, "/v1/designs", "")
+		require.Equal(t, http.StatusMethodNotAllowed, w.Code, method)
+		require.Contains(t, w.Header().Get("Allow"), "POST")
+	}
+	require.Contains(t, send(s, "OPTIONS", "/v1/designs", "").Header().Get("Allow"), "POST")
+}
+
+// The dearest documents that the limits let in are still cheap to refuse.
+func TestHostileDocumentsAreCheap(t *testing.T) {
+	s := newService(t)
+	var unknown, similar strings.Builder
+	for i := range 9000 {
+		fmt.Fprintf(&unknown, `"colour of the beam %d":1,`, i)
+		if i < 3000 {
+			fmt.Fprintf(&similar, `{"intensity_and": "1 k%d"},`, i)
+		}
+	}
+	for name, body := range map[string]string{
+		"unknown members": `{` + strings.TrimSuffix(unknown.String(), ",") + `}`,
+		"faulty items":    `{"loads": [` + strings.TrimSuffix(similar.String(), ",") + `]}`,
+		"long text":       `{"reference": "` + strings.Repeat("é", 120<<10) + `"}`,
+		"long number":     `{"serviceability": {"months": ` + strings.Repeat("9", 200<<10) + `}}`,
+		"many digits":     strings.Replace(goodFits, `"16 in"`, `"`+strings.Repeat("9", 200<<10)+` in"`, 1),
+	} {
+		start := time.Now()
+		w := send(s, "POST", "/v1/designs", body)
+		require.Contains(t, []int{400, 422}, w.Code, name)
+		require.Less(t, time.Since(start), 2*time.Second, name)
+		require.Less(t, w.Body.Len(), 200<<10, name)
+		t.Logf("%s: %v, %d, %d bytes back", name, time.Since(start), w.Code, w.Body.Len())
+	}
 }

@@ -7,8 +7,10 @@ import (
 	"io"
 	"log/slog"
 	"net/http"
+	"net/url"
 	"runtime"
 	"slices"
+	"strings"
 	"sync/atomic"
 	"time"
 
@@ -149,7 +151,11 @@ func (s *Service) routes() http.Handler {
 		e.Match(methods, path, func(c echo.Context) error {
 			r := c.Request()
 			for _, name := range c.ParamNames() {
-				r.SetPathValue(name, c.Param(name))
+				value, err := url.PathUnescape(c.Param(name))
+				if err != nil {
+					return echo.ErrNotFound
+				}
+				r.SetPathValue(name, value)
 			}
 			return h(c.Response(), r)
 		})
@@ -161,9 +167,11 @@ func (s *Service) routes() http.Handler {
 	post("/v1/checks", s.checkLayout)
 	post("/v1/strengths", s.strengths)
 	post("/v1/fits", s.fits)
-	get("/v1/bars/:catalog", s.catalog)
+	get(catalogRoot+":catalog", s.catalog)
 	for path, d := range s.documents {
-		get(path, d.serve)
+		if !strings.HasPrefix(path, catalogRoot) {
+			get(path, d.serve)
+		}
 	}
 	get("/problems/:kind", s.problemKind)
 	get("/healthz", s.health)

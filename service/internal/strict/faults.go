@@ -44,6 +44,9 @@ func inside(p, q string) bool {
 // count is the number of faults found, listed or not.
 func (f *Faults) count() int { return len(f.list) + f.unlisted }
 
+// full reports whether further faults are counted only.
+func (f *Faults) full() bool { return len(f.list) >= f.Most }
+
 // None reports whether nothing was found.
 func (f *Faults) None() bool { return f.count() == 0 }
 

@@ -167,8 +167,10 @@ func (w *walker) unknown(s *shape, name string) {
 	mark := len(w.path)
 	w.path = appendName(w.path, name)
 	detail := fmt.Sprintf("%q is not a member here", clip([]byte(name)))
-	if near := Nearest(name, s.names); near != "" {
-		detail += fmt.Sprintf("; did you mean %q?", near)
+	if !w.faults.full() { // what is not listed need not be helpful
+		if near := Nearest(name, s.names); near != "" {
+			detail += fmt.Sprintf("; did you mean %q?", near)
+		}
 	}
 	w.faults.Add(Fault{Path: string(w.path), Detail: detail, Allowed: strings.Join(s.names, ", ")})
 	w.path = w.path[:mark]
