@@ -61,7 +61,7 @@ func onBrief() []badInput {
 		{name: "density of a feather", replace: `"150 lb/ft3"`, with: `"1.5 lb/ft3"`, pointer: "/concrete/density", detail: "1.5 lb/ft3", allowed: "lb/ft3 to"},
 		{name: "zero density", replace: `"150 lb/ft3"`, with: `"0 lb/ft3"`, pointer: "/concrete/density", detail: "it must be above zero", allowed: "above zero"},
 		{name: "negative aggregate", replace: `"3/4 in"`, with: `"-3/4 in"`, pointer: "/concrete/aggregate", detail: "it must be above zero", allowed: "above zero"},
-		{name: "zero cover", replace: `"exposure": "interior"`, with: `"cover": "0 in"`, pointer: "/cover", detail: "cover is 0 m; it must be above zero", allowed: "above zero"},
+		{name: "zero cover", replace: `"exposure": "interior"`, with: `"cover": "0 in"`, pointer: "/cover", detail: "cover is 0 in; it must be above zero", allowed: "above zero"},
 		{name: "cover of half the beam", replace: `"exposure": "interior"`, with: `"cover": "8 in"`, pointer: "/cover", detail: "cover is 8 in", allowed: "half the smaller side"},
 		{name: "negative support width", replace: `"kind": "pinned", "width": "12 in"`, with: `"kind": "pinned", "width": "-12 in"`, pointer: "/supports/0/width", detail: "-12 in", allowed: "0 in to"},
 		{name: "support wider than the span", replace: `"kind": "roller", "width": "12 in"`, with: `"kind": "roller", "width": "20 ft"`, pointer: "/supports/1/width", detail: "240 in", allowed: "0 in to 162 in"},
@@ -117,7 +117,7 @@ func onBrief() []badInput {
 
 		// Contradictions.
 		{name: "force on a uniform load", replace: `"intensity": "1.05 kip/ft"`, with: `"intensity": "1.05 kip/ft", "force": "1 kip"`, pointer: "/loads/0/force", detail: "force does not belong to a uniform load, which has intensity"},
-		{name: "uniform load without intensity", replace: `, "intensity": "1.05 kip/ft"`, with: ``, pointer: "/loads/0/intensity", detail: "intensity is missing; a uniform load needs it"},
+		{name: "uniform load without intensity", replace: `, "intensity": "1.05 kip/ft"`, with: ``, pointer: "/loads/0/intensity", detail: "intensity is missing; a uniform load needs it", allowed: "a line load"},
 		{name: "point load without place", replace: `"shape": "uniform", "intensity": "1.05 kip/ft"`, with: `"shape": "point", "force": "10 kip"`, pointer: "/loads/0/at", detail: "at is missing; a point load needs it"},
 		{name: "point load beyond the span", replace: `"shape": "uniform", "intensity": "1.05 kip/ft"`, with: `"shape": "point", "force": "10 kip", "at": "28 ft"`, pointer: "/loads/0/at", detail: "at is 336 in", allowed: "0 in to 324 in"},
 		{name: "partial load backwards", replace: `"shape": "uniform", "intensity": "1.05 kip/ft"`, with: `"shape": "partial", "intensity": "1 kip/ft", "from": "20 ft", "to": "10 ft"`, pointer: "/loads/0/to", detail: "from 240 in to 120 in", allowed: "beyond from"},
@@ -187,9 +187,9 @@ func onOtherDoors() map[string][]badInput {
 		"/v1/fits": {
 			{name: "unknown size", replace: `"#9", "count": 4`, with: `"#12", "count": 4`, pointer: "/layers/0/size", detail: `size is "#12", which is not in astm-inch`, allowed: "#3, #4"},
 			{name: "unknown catalog", replace: `"astm-inch"`, with: `"astm"`, pointer: "/stirrup/catalog", detail: `did you mean "astm-inch"?`, allowed: "astm-inch"},
-			{name: "cover of half the width", replace: `"1.5 in"`, with: `"8 in"`, pointer: "/cover", detail: "cover is 0.2032 m", allowed: "less than half the smaller side"},
-			{name: "negative cover", replace: `"1.5 in"`, with: `"-1.5 in"`, pointer: "/cover", detail: "cover is -0.0381 m", allowed: "zero"},
-			{name: "narrow", replace: `"16 in"`, with: `"16 mm"`, pointer: "/width", detail: "width is 0.016 m", allowed: "50 mm to 10 m"},
+			{name: "cover of half the width", replace: `"1.5 in"`, with: `"8 in"`, pointer: "/cover", detail: "cover is 8 in", allowed: "less than half the smaller side"},
+			{name: "negative cover", replace: `"1.5 in"`, with: `"-1.5 in"`, pointer: "/cover", detail: "cover is -1.5 in", allowed: "zero"},
+			{name: "narrow", replace: `"16 in"`, with: `"16 mm"`, pointer: "/width", detail: "width is 0.629921259843 in", allowed: "50 mm to 10 m"},
 			{name: "no bars", replace: `"count": 4`, with: `"count": 0`, pointer: "/layers/0/count", detail: "count is 0", allowed: "a whole number from 1 to 200"},
 			{name: "thick stirrup", replace: `"size": "#4"`, with: `"size": "#18"`, pointer: "/stirrup/size", detail: "#18"},
 		},

@@ -18,8 +18,8 @@ func (s *Service) designs(w http.ResponseWriter, r *http.Request) error {
 	if err != nil {
 		return err
 	}
-	in := intake{faults: faults}
 	code := s.code(request.Code, faults, "/code")
+	in := intakeFor(code, faults)
 	brief := in.brief(&request, "")
 	design := func(ctx context.Context) (*beam.Result, error) { return beam.Design(ctx, code, brief) }
 	result, err := s.judge(r.Context(), code, &brief, faults, "", design)
@@ -36,8 +36,8 @@ func (s *Service) checkLayout(w http.ResponseWriter, r *http.Request) error {
 	if err != nil {
 		return err
 	}
-	in := intake{faults: faults}
 	code := s.code(request.Brief.Code, faults, "/brief/code")
+	in := intakeFor(code, faults)
 	brief := in.brief(&request.Brief, "/brief")
 	layout := in.layout(&request.Layout, &brief, "/layout")
 	check := func(ctx context.Context) (*beam.Result, error) { return beam.CheckLayout(ctx, code, brief, layout) }

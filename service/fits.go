@@ -26,8 +26,8 @@ func (s *Service) fits(w http.ResponseWriter, r *http.Request) error {
 	if err != nil {
 		return err
 	}
-	in := intake{faults: faults}
 	code := s.code(request.Code, faults, "/code")
+	in := intakeFor(code, faults)
 	cage, catalog, layers := in.fit(&request)
 	if !faults.None() {
 		return invalidInput(faults.All())
@@ -61,12 +61,12 @@ func (in *intake) fit(w *wire.FitsRequest) (*bars.Cage, bars.Catalog, []bars.Lay
 		v    units.Length
 	}{{"/width", w.Width}, {"/depth", w.Depth}} {
 		if !leastSide.AtMost(side.v) || !side.v.AtMost(greatestSide) {
-			in.fault(side.path, "50 mm to 10 m", "is %s; it must be from 50 mm to 10 m", side.v)
+			in.fault(side.path, "50 mm to 10 m", "is %s; it must be from 50 mm to 10 m", in.system.Format(side.v.Amount()))
 		}
 	}
 	above(in, "/aggregate", w.Aggregate)
 	if c := w.Cover.Amount().SI(); !(c >= 0) || !w.Cover.Scale(2).Less(w.Width.Min(w.Depth)) {
-		in.fault("/cover", "zero, to less than half the smaller side", "is %s; it must be from zero to less than half the smaller side", w.Cover)
+		in.fault("/cover", "zero, to less than half the smaller side", "is %s; it must be from zero to less than half the smaller side", in.system.Format(w.Cover.Amount()))
 	}
 	cage := &bars.Cage{Width: w.Width, Depth: w.Depth, SideCover: w.Cover, FaceCover: w.Cover}
 	if value(w.Corner) == "tucked" {

@@ -16,6 +16,17 @@ import (
 // missing or contradicts itself. Ranges of quantities are package beam's.
 type intake struct {
 	faults *strict.Faults
+	system units.System // in which faults say values
+}
+
+// intakeFor is an intake that speaks in the units of a design code; the code
+// may be nil.
+func intakeFor(code beam.Code, faults *strict.Faults) *intake {
+	in := &intake{faults: faults}
+	if code != nil {
+		in.system = code.Edition().System
+	}
+	return in
 }
 
 func (in *intake) fault(path, allowed, format string, args ...any) {
@@ -31,17 +42,14 @@ func value[T any](given *T) T {
 	return v
 }
 
-type quantity interface {
-	Amount() units.Amount
-	fmt.Stringer
-}
+type quantity interface{ Amount() units.Amount }
 
 // above takes an optional quantity for which zero means that it is not given,
 // so that a zero that is given must not pass for one.
 func above[Q quantity](in *intake, path string, given *Q) Q {
 	v := value(given)
 	if given != nil && !(v.Amount().SI() > 0) {
-		in.fault(path, "above zero", "is %s; it must be above zero", v)
+		in.fault(path, "above zero", "is %s; it must be above zero", in.system.Format(v.Amount()))
 	}
 	return v
 }
@@ -130,8 +138,16 @@ func support(w *wire.Support) beam.Support {
 	return s
 }
 
-// loadMembers are the members that place and size a load.
-var loadMembers = [...]string{"from", "to", "at", "intensity", "intensity_end", "force", "moment"}
+// loadMembers are the members that place and size a load, with what they are.
+var loadMembers = [...]struct{ name, what string }{
+	{"from", `a length, e.g. "12 ft" or "3.5 m"`},
+	{"to", `a length, e.g. "12 ft" or "3.5 m"`},
+	{"at", `a length, e.g. "12 ft" or "3.5 m"`},
+	{"intensity", `a line load, e.g. "1.2 kip/ft" or "18 kN/m"`},
+	{"intensity_end", `a line load, e.g. "1.2 kip/ft" or "18 kN/m"`},
+	{"force", `a force, e.g. "20 kip" or "90 kN"`},
+	{"moment", `a moment, e.g. "50 kip-ft" or "70 kN-m"`},
+}
 
 // belongs says which of loadMembers a load of a shape needs, and which it may
 // have.
@@ -148,7 +164,7 @@ func belongs(shape beam.LoadShape) (needs, may string) {
 	case beam.UniformTorque:
 		return "moment", ""
 	}
-	return "", strings.Join(loadMembers[:], " ") // the shape has a fault of its own
+	return "", "from to at intensity intensity_end force moment" // the shape has a fault of its own
 }
 
 func (in *intake) load(w *wire.Load, at string) beam.Load {
@@ -169,13 +185,13 @@ func (in *intake) load(w *wire.Load, at string) beam.Load {
 		"intensity_end": w.IntensityEnd != nil, "force": w.Force != nil, "moment": w.Moment != nil,
 	}
 	needs, may := belongs(l.Shape)
-	for _, name := range loadMembers {
-		needed := hasWord(needs, name)
+	for _, m := range loadMembers {
+		needed := hasWord(needs, m.name)
 		switch {
-		case needed && !given[name]:
-			in.fault(at+"/"+name, "", "is missing; a %s load needs it", w.Shape)
-		case given[name] && !needed && !hasWord(may, name):
-			in.fault(at+"/"+name, "", "does not belong to a %s load, which has %s", w.Shape, strings.Join(strings.Fields(needs+" "+may), ", "))
+		case needed && !given[m.name]:
+			in.fault(at+"/"+m.name, m.what, "is missing; a %s load needs it", w.Shape)
+		case given[m.name] && !needed && !hasWord(may, m.name):
+			in.fault(at+"/"+m.name, "", "does not belong to a %s load, which has %s", w.Shape, strings.Join(strings.Fields(needs+" "+may), ", "))
 		}
 	}
 	return l
@@ -249,12 +265,12 @@ func (in *intake) row(w *wire.Row, at string) beam.Row {
 	case side && w.InCompression != nil:
 		in.fault(at+"/in_compression", "", "does not belong to side bars")
 	case side && w.Spacing == nil:
-		in.fault(at+"/spacing", "", "is missing; side bars need it")
+		in.fault(at+"/spacing", `a length, e.g. "5 in" or "120 mm"`, "is missing; side bars need it")
 	case !side && w.Spacing != nil:
 		in.fault(at+"/spacing", "", "belongs to side bars alone")
 	}
 	if w.From != nil && w.To == nil {
-		in.fault(at+"/to", "", "is missing, and from is given")
+		in.fault(at+"/to", `a length, e.g. "12 ft" or "3.5 m"`, "is missing, and from is given")
 	}
 	return r
 }

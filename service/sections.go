@@ -18,8 +18,8 @@ func (s *Service) strengths(w http.ResponseWriter, r *http.Request) error {
 	if err != nil {
 		return err
 	}
-	in := intake{faults: faults}
 	code := s.code(request.Code, faults, "/code")
+	in := intakeFor(code, faults)
 	query := in.query(&request)
 	if !faults.None() {
 		// The code adds what it sees; it computes next to nothing.

@@ -220,3 +220,10 @@ func TestNewRefusesUnsuitableOptions(t *testing.T) {
 		require.Error(t, err, name)
 	}
 }
+
+// What the service itself takes is bounded by allocations, which do not
+// depend on the machine: reading, converting, hashing and writing.
+func TestTheServiceItselfIsCheap(t *testing.T) {
+	s := newService(t)
+	require.LessOrEqual(t, testing.AllocsPerRun(50, func() { send(s, "POST", "/v1/fits", goodFits) }), 400.0)
+}
