@@ -1,6 +1,8 @@
 package beam
 
 import (
+	"errors"
+
 	"soffit.example/bars"
 	"soffit.example/units"
 )
@@ -61,12 +63,16 @@ type Code interface {
 	// expressions assumed and whether the trial bears it out.
 	Settle(t *Trial, checks []Check, note *Register)
 
-	// Strengths gives the strengths of a bare section.
+	// Strengths gives the strengths of a bare section. A code that does not
+	// returns an error that wraps ErrNotOffered.
 	Strengths(q SectionQuery) (Strengths, error)
 
 	// Cautions are the code's own standing cautions for a result.
 	Cautions() []string
 }
+
+// ErrNotOffered says that a code has no answer of the kind asked for.
+var ErrNotOffered = errors.New("not offered by this design code")
 
 // Edition names a code and the units its formulas are printed in.
 type Edition struct {

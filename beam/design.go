@@ -46,11 +46,7 @@ func CheckLayout(ctx context.Context, code Code, brief Brief, layout Layout) (*R
 	if len(p.refusals) > 0 {
 		return p.outOfScope(), nil
 	}
-	r, faults := p.finish(layout)
-	if len(faults) > 0 {
-		return nil, &InputError{Faults: faults}
-	}
-	return r, nil
+	return p.finish(layout)
 }
 
 // design is Design without the cures.
@@ -150,9 +146,10 @@ func (s *search) result() (*Result, error) {
 		s.addSideBars(&layout)
 		s.assumeDepths(chosen)
 	}
-	r, faults := s.p.finish(layout)
-	if len(faults) > 0 {
-		return nil, fmt.Errorf("beam: the search proposed a layout that is not one: %v", &InputError{Faults: faults})
+	r, err := s.p.finish(layout)
+	if err != nil {
+		// %v, not %w: it is no fault of the brief.
+		return nil, fmt.Errorf("beam: the layout that was found: %v", err)
 	}
 	if len(s.kept) == 0 {
 		r.Rejected = s.rejects.list

@@ -1,6 +1,7 @@
 package beam
 
 import (
+	"errors"
 	"fmt"
 	"slices"
 
@@ -27,11 +28,12 @@ func (p *prepared) blank() *Result {
 
 // finish judges a layout in full: every group of checks with its working,
 // the assumptions against what was found, schedule and quantities. Design
-// and CheckLayout both end here.
-func (p *prepared) finish(layout Layout) (*Result, []Fault) {
+// and CheckLayout both end here. The error is an *InputError for a layout
+// that makes no sense for the problem, or the code's own.
+func (p *prepared) finish(layout Layout) (*Result, error) {
 	t, faults := trialOf(p.Problem, &layout)
 	if len(faults) > 0 {
-		return nil, faults
+		return nil, &InputError{Faults: faults}
 	}
 	t.Record = true
 	r := p.blank()
@@ -64,7 +66,7 @@ func (p *prepared) finish(layout Layout) (*Result, []Fault) {
 	}
 	r.Governing = Governing(r.Checks)
 	if err := r.strengths(p, t); err != nil {
-		return nil, []Fault{{Path: "/layout", Detail: err.Error()}}
+		return nil, err
 	}
 	r.Bars = t.positions(&layout)
 	r.takeOff(t)
@@ -85,8 +87,11 @@ func (r *Result) strengths(p *prepared, t *Trial) error {
 			q.Layers = append(q.Layers, SteelLayer{Area: l.Area, Depth: l.Depth, Yield: b.Reinforcement.Yield})
 		}
 		found, err := p.Code.Strengths(q)
-		if err != nil {
-			return fmt.Errorf("the strength of the finished section: %w", err)
+		switch {
+		case errors.Is(err, ErrNotOffered):
+			return nil
+		case err != nil:
+			return fmt.Errorf("beam: strength of the finished section: %w", err)
 		}
 		r.Flexure = append(r.Flexure, found.Flexure)
 	}

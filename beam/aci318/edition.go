@@ -1,6 +1,8 @@
 package aci318
 
 import (
+	"slices"
+
 	"soffit.example/beam"
 	"soffit.example/units"
 )
@@ -91,5 +93,5 @@ var si19 = edition{
 
 // Edition names the code.
 func (c Code) Edition() beam.Edition {
-	return beam.Edition{ID: c.e.id, Title: c.e.title, Year: c.e.year, System: c.e.system, Scope: scopeWords}
+	return beam.Edition{ID: c.e.id, Title: c.e.title, Year: c.e.year, System: c.e.system, Scope: slices.Clone(scopeWords)}
 }

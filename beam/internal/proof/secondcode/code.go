@@ -205,7 +205,7 @@ func (Code) Settle(*beam.Trial, []beam.Check, *beam.Register) {}
 
 // Strengths are not offered.
 func (Code) Strengths(beam.SectionQuery) (beam.Strengths, error) {
-	return beam.Strengths{}, fmt.Errorf("secondcode: section strengths are not offered")
+	return beam.Strengths{}, fmt.Errorf("secondcode: section strengths are %w", beam.ErrNotOffered)
 }
 
 // Cautions say what the code is.
