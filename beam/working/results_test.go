@@ -9,6 +9,7 @@ import (
 
 	"soffit.example/beam"
 	"soffit.example/beam/aci318"
+	"soffit.example/beam/internal/expression"
 	"soffit.example/beam/statics"
 	"soffit.example/beam/working"
 	"soffit.example/units"
@@ -82,14 +83,14 @@ func TestEveryStepFollowsFromItsExpression(t *testing.T) {
 					require.NoError(t, err, where)
 					if l.Expression != "" {
 						computed++
-						got, err := evaluate(l.Expression, known)
+						got, err := expression.Evaluate(l.Expression, known)
 						require.NoError(t, err, where)
 						requireClose(t, value, got, 1e-8, where)
 					}
 					if l.Substitution != "" {
 						// Six digits are put in, so that differences of like
 						// numbers lose some.
-						_, err := evaluate(l.Substitution, nil)
+						_, err := expression.Evaluate(l.Substitution, nil)
 						require.NoError(t, err, "%s: %s", where, l.Substitution)
 					}
 					known[l.Symbol] = value

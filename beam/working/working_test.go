@@ -6,6 +6,7 @@ import (
 	"github.com/stretchr/testify/require"
 
 	"soffit.example/beam"
+	"soffit.example/beam/internal/expression"
 	"soffit.example/beam/working"
 	"soffit.example/units"
 )
@@ -45,16 +46,16 @@ func TestSubstitutionHasTheValueOfItsExpression(t *testing.T) {
 	for _, s := range []string{"As", "fy", "f'c", "b", "d", "x"} {
 		given = append(given, plain(s, known[s]))
 	}
-	for _, expression := range []string{
+	for _, text := range []string{
 		"As fy (d - As fy / (2 0.85 f'c b))", "√f'c b d / x", "min(As, b, d) x^2", "d - -x", "fy / b d", "max(3 √f'c, 200) / fy b d",
 	} {
-		c := beam.Check{Steps: append(given[:len(given):len(given)], beam.Step{Symbol: "r", Expression: expression})}
+		c := beam.Check{Steps: append(given[:len(given):len(given)], beam.Step{Symbol: "r", Expression: text})}
 		lines := working.Lines(&c, units.US)
-		want, err := evaluate(expression, known)
+		want, err := expression.Evaluate(text, known)
 		require.NoError(t, err)
-		got, err := evaluate(lines[len(lines)-1].Substitution, nil)
+		got, err := expression.Evaluate(lines[len(lines)-1].Substitution, nil)
 		require.NoError(t, err, lines[len(lines)-1].Substitution)
-		require.InEpsilon(t, want, got, 1e-12, expression)
+		require.InEpsilon(t, want, got, 1e-12, text)
 	}
 }
 

@@ -1,4 +1,12 @@
-package working_test
+// Package expression computes the expressions of a working again, from
+// nothing but their text and the values of their symbols. It stands apart
+// from the code that made the values and from the code that prints them, so
+// that tests can hold both against it.
+//
+// Expressions use + - * / ^ √ min max, brackets, numbers, a space or × for a
+// product, and symbols. Products and quotients are taken from left to right. A
+// comma between arguments is followed by a space, one within a symbol is not.
+package expression
 
 import (
 	"fmt"
@@ -9,9 +17,8 @@ import (
 	"unicode/utf8"
 )
 
-// evaluate computes an expression in the grammar of the package comment, with
-// the values of known symbols. It shares nothing with the substitution.
-func evaluate(expression string, known map[string]float64) (v float64, err error) {
+// Evaluate computes an expression with the values of known symbols.
+func Evaluate(expression string, known map[string]float64) (v float64, err error) {
 	p := &parser{rest: []rune(expression), known: known}
 	defer func() {
 		if r := recover(); r != nil {
