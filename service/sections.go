@@ -2,6 +2,7 @@ package service
 
 import (
 	"context"
+	"errors"
 	"fmt"
 	"net/http"
 	"strings"
@@ -35,7 +36,10 @@ func (s *Service) strengths(w http.ResponseWriter, r *http.Request) error {
 		found, err = code.Strengths(query)
 		return err
 	})
-	if err != nil {
+	switch {
+	case errors.Is(err, beam.ErrNotOffered):
+		return invalidInput([]strict.Fault{{Path: "/code", Detail: fmt.Sprintf("code is %q, which gives no strengths of a bare section", request.Code)}})
+	case err != nil:
 		return err
 	}
 	sum, err := hash(request)

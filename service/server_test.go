@@ -157,6 +157,20 @@ func (c stubborn) Strengths(q beam.SectionQuery) (beam.Strengths, error) {
 	return c.Code.Strengths(q)
 }
 
+// bare is a code that leaves section strengths out.
+type bare struct{ beam.Code }
+
+func (bare) Strengths(beam.SectionQuery) (beam.Strengths, error) {
+	return beam.Strengths{}, fmt.Errorf("bare: %w", beam.ErrNotOffered)
+}
+
+func TestACodeMayLeaveStrengthsOut(t *testing.T) {
+	s := newService(t, func(o *service.Options) { o.Codes = []beam.Code{bare{codes()[0]}} })
+	w := send(s, "POST", "/v1/strengths", goodStrengths)
+	require.Equal(t, http.StatusUnprocessableEntity, w.Code)
+	require.Equal(t, "/code", problemOf(t, w).Errors[0].Path)
+}
+
 func TestAPanicBecomesAProblemThatSaysNothing(t *testing.T) {
 	var log bytes.Buffer
 	s := newService(t, func(o *service.Options) {
