@@ -373,7 +373,7 @@ func (m *maker) member(moment float64) {
 		s := &b.Supports[i]
 		s.Kind = kinds[i]
 		if s.Kind != statics.Free && m.chance(75) {
-			s.Width = m.length(m.either(step(m.between(6, 18), 1), step(m.between(150, 450), 10)))
+			s.Width = m.length(min(m.either(step(m.between(6, 18), 1), step(m.between(150, 450), 10)), span/3))
 		}
 		s.Hung = s.Kind != statics.Free && m.chance(4)
 	}
