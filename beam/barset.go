@@ -19,6 +19,7 @@ type barSet struct {
 	sizes  int     // different sizes, 1 or 2
 
 	judged, passes bool
+	cover          units.Length // with which it was judged
 }
 
 // barGroup is some bars of one size. A search makes thousands of sets, so

@@ -173,7 +173,7 @@ func (s *search) retrace(f *found) {
 	s.logs = true
 	s.t.enclose(f.stirrup, larger(f.bottom.largest(), f.top.largest()))
 	if s.put(Bottom, &f.bottom, f.inCompress == Bottom) && s.put(Top, &f.top, f.inCompress == Top) {
-		s.boundStirrups()
+		s.leastStirrups(f.stirrup, s.tensionDepth())
 		s.eachStirrup(f.stirrup, func(float64) bool { return true }, func([]Zone, float64) {})
 	}
 	s.logs = false
@@ -220,9 +220,8 @@ func (s *search) closest() *found {
 			f.top = *set
 		}
 	}
-	least, _ := s.steps()
 	s.t.enclose(f.stirrup, larger(f.bottom.largest(), f.top.largest()))
-	s.setUniform(f.stirrup, 2, least)
+	s.setUniform(f.stirrup, 2, s.closestSteps())
 	f.zones = slices.Clone(s.zones)
 	return f
 }

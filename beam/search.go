@@ -94,6 +94,9 @@ func newSearch(p *prepared, keep int) *search {
 
 // run searches every stirrup size, singly reinforced first.
 func (s *search) run() {
+	if len(s.main) == 0 {
+		return
+	}
 	for _, tie := range s.ties {
 		bottoms, tops := s.sets(Bottom, tie), s.sets(Top, tie)
 		s.pairs(tie, bottoms, tops)
@@ -201,6 +204,7 @@ func (s *search) accepts(face Face, tie bars.Size, b *barSet) bool {
 	}
 	b.judged = true
 	s.t.enclose(tie, b.largest())
+	b.cover = s.t.Cover
 	s.t.Zones, s.t.ZoneBar = nil, nil
 	if !s.put(face, b, false) || !s.put(face.Opposite(), nil, false) {
 		return false
@@ -228,11 +232,13 @@ func (s *search) worst() float64 {
 // pairs joins bottom and top sets and finds stirrups for each pair that could
 // still be kept.
 func (s *search) pairs(tie bars.Size, bottoms, tops []barSet) {
+	s.t.enclose(tie, s.main[len(s.main)-1]) // the greatest cover, and so the shortest stirrups
+	lightest := s.leastStirrups(tie, s.p.Brief.Section.Depth)
 	for i := range bottoms {
 		b := &bottoms[i]
 		for j := range tops {
 			t := &tops[j]
-			if !s.promising(b, t, 0) {
+			if !s.promising(b, t, lightest) {
 				continue
 			}
 			if !s.accepts(Top, tie, t) {
@@ -302,20 +308,19 @@ func larger(a, b bars.Size) bars.Size {
 	return a
 }
 
-// shear completes a pair with stirrups and keeps what passes. The pair is
-// judged again as a whole: bars of one face may ask for cover that moves the
-// other's.
+// shear completes a pair with stirrups and keeps what passes. Where bars of
+// one face ask for cover that moves the other's, the pair is judged again as
+// a whole first.
 func (s *search) shear(tie bars.Size, bottom, top *barSet, inCompression Face) {
 	s.t.enclose(tie, larger(bottom.largest(), top.largest()))
 	s.t.Zones, s.t.ZoneBar = nil, nil
 	if !s.put(Bottom, bottom, inCompression == Bottom) || !s.put(Top, top, inCompression == Top) {
 		return
 	}
-	if !s.judge(0, Fitting, Bending) {
+	if moved := s.t.Cover != bottom.cover || s.t.Cover != top.cover; moved && inCompression == 0 && !s.judge(0, Fitting, Bending) {
 		return
 	}
-	s.boundStirrups()
-	if !s.promising(bottom, top, s.leastStirrups(tie)) {
+	if !s.promising(bottom, top, s.leastStirrups(tie, s.tensionDepth())) {
 		return
 	}
 	long := s.longitudinal(bottom, top)

@@ -11,19 +11,18 @@ import (
 // practice, no source).
 var leastSpacing = units.Millimetre.Of(50)
 
-// boundStirrups finds the widest spacing that the code could accept for the
-// bars of the trial.
-func (s *search) boundStirrups() {
-	d := s.t.EffectiveDepth(Positive).Max(s.t.EffectiveDepth(Negative))
-	least, _ := s.steps()
-	s.widest = max(least, int(s.p.Code.WidestSpacing(s.p.Problem, d).Ratio(s.p.Brief.Preferences.SpacingBy)+1e-9))
-}
-
-// leastStirrups bounds the mass of stirrups from below: two legs at the
-// widest spacing throughout.
-func (s *search) leastStirrups(tie bars.Size) float64 {
+// leastStirrups bounds the mass of stirrups from below, for tension steel at
+// an effective depth: two legs at the widest spacing that the code could
+// accept throughout. It sets that spacing as the widest tried.
+func (s *search) leastStirrups(tie bars.Size, depth units.Length) float64 {
+	s.widest = max(s.closestSteps(), int(s.p.Code.WidestSpacing(s.p.Problem, depth).Ratio(s.p.Brief.Preferences.SpacingBy)+1e-9))
 	s.setUniform(tie, 2, s.widest)
 	return s.stirrupMass(tie)
+}
+
+// tensionDepth is the larger effective depth of the bars of the trial.
+func (s *search) tensionDepth() units.Length {
+	return s.t.EffectiveDepth(Positive).Max(s.t.EffectiveDepth(Negative))
 }
 
 // eachStirrup calls keep with the lightest passing zones of every number of
@@ -61,17 +60,15 @@ func (s *search) step(k int) units.Length {
 	return s.p.Brief.Preferences.SpacingBy.Scale(float64(k))
 }
 
-// steps are the least and the greatest number of spacing steps tried.
-func (s *search) steps() (least, most int) {
-	by := s.p.Brief.Preferences.SpacingBy
-	least = int(math.Ceil(leastSpacing.Ratio(by) - 1e-9))
-	return least, max(least, s.widest)
+// closestSteps is the least spacing tried, in steps.
+func (s *search) closestSteps() int {
+	return int(math.Ceil(leastSpacing.Ratio(s.p.Brief.Preferences.SpacingBy) - 1e-9))
 }
 
 // uniform is the widest passing spacing of one zone, in steps. A closer
 // spacing never fails where a wider one passes.
 func (s *search) uniform(tie bars.Size, legs int) (k int, ok bool) {
-	least, most := s.steps()
+	least, most := s.closestSteps(), s.widest
 	s.setUniform(tie, legs, most)
 	if s.try(tie, legs, most, 1) {
 		return most, true
