@@ -86,7 +86,7 @@ func (l *Layout) appendRows(face Face, b *barSet, inCompression bool, letter str
 // trialOf lays a layout out as a trial. Faults name the fields of the layout
 // that make no sense for the problem.
 func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
-	f := faults{system: p.System}
+	f := newFaults(p.System)
 	t := &Trial{Problem: p}
 	length := units.Length{}
 	for _, s := range p.Brief.Spans {
@@ -188,8 +188,8 @@ func (t *Trial) setZones(f *faults, l *Layout) bars.Size {
 		if z.Legs < 2 || z.Legs > 20 {
 			f.add(path+"/legs", "2 to 20", "legs is %d", z.Legs)
 		}
-		if !(z.Spacing.Amount().SI() > 0) || greatestSide.Less(z.Spacing) {
-			f.add(path+"/spacing", "above zero, to "+f.system.Format(greatestSide.Amount()), "spacing is %s", f.system.Format(z.Spacing.Amount()))
+		if !(z.Spacing.Amount().SI() > 0) || f.mostSide.Less(z.Spacing) {
+			f.add(path+"/spacing", "above zero, to "+f.system.Format(f.mostSide.Amount()), "spacing is %s", f.system.Format(z.Spacing.Amount()))
 			continue
 		}
 		if z.Form != "" && z.Form != "closed" && z.Form != "open" {

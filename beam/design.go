@@ -93,7 +93,9 @@ func searchDepths(ctx context.Context, first *prepared) (*search, error) {
 			continue
 		}
 		s := newSearch(p, 1+p.Brief.Preferences.KeepBest)
-		s.run()
+		if err := s.run(ctx); err != nil {
+			return nil, err
+		}
 		if len(s.kept) > 0 {
 			l := s.layoutOf(&s.kept[0])
 			s.whole = s.addSideBars(&l)

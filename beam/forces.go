@@ -34,18 +34,42 @@ type spanForces struct {
 	twists []twist
 	holds  [2]bool // whether each end holds against twist
 
-	// whole keeps the extremes between the support faces, which every trial
-	// of a search asks for.
+	// known keeps the extremes that every trial of a search asks for:
+	// between the support faces, and over one depth from each.
+	known [3]stretch
+}
+
+// stretch is a length of a span with its extremes.
+type stretch struct {
 	from, to units.Length
-	whole    statics.Extremes
+	extremes statics.Extremes
 }
 
 // extremes are those of all combinations between two positions.
 func (sp *spanForces) extremes(from, to units.Length) (statics.Extremes, error) {
-	if from == sp.from && to == sp.to {
-		return sp.whole, nil
+	for i := range sp.known {
+		if k := &sp.known[i]; from == k.from && to == k.to {
+			return k.extremes, nil
+		}
 	}
 	return sp.all.Extremes(from, to)
+}
+
+// keep fills known for a span between support faces.
+func (sp *spanForces) keep(left, right, depth units.Length) error {
+	known := [3]stretch{
+		{from: left, to: right},
+		{from: left, to: left.Add(depth).Min(sp.all.Length())},
+		{from: right.Sub(depth).Max(units.Length{}), to: right},
+	}
+	for i := range known {
+		var err error
+		if known[i].extremes, err = sp.all.Extremes(known[i].from, known[i].to); err != nil {
+			return err
+		}
+	}
+	sp.known = known
+	return nil
 }
 
 // twist is one torque on a span, with its factor in each combination.
@@ -245,8 +269,8 @@ func memberForces(b *Brief, selfWeight units.LineLoad, kept []Combination) (Forc
 		sp.breaks = all.AppendBreaks(nil)
 		sp.holds = [2]bool{b.Supports[i].Kind != statics.Free, b.Supports[i+1].Kind != statics.Free}
 		sp.addTwists(b.Loads, i+1, kept)
-		sp.from, sp.to = b.Supports[i].Width.Scale(0.5), b.Spans[i].Sub(b.Supports[i+1].Width.Scale(0.5))
-		if sp.whole, err = all.Extremes(sp.from, sp.to); err != nil {
+		left, right := b.Supports[i].Width.Scale(0.5), b.Spans[i].Sub(b.Supports[i+1].Width.Scale(0.5))
+		if err := sp.keep(left, right, b.Section.Depth); err != nil {
 			return Forces{}, err
 		}
 	}

@@ -71,7 +71,7 @@ type prepared struct {
 // *InputError holding every fault found.
 func prepare(code Code, given Brief) (*prepared, error) {
 	b := given.clone()
-	f := faults{system: code.Edition().System}
+	f := newFaults(code.Edition().System)
 	catalog, err := bars.Lookup(b.Reinforcement.Catalog)
 	if err != nil {
 		f.add("/reinforcement/catalog", "an id of the bar catalogs", "%v", err)
@@ -91,6 +91,13 @@ func prepare(code Code, given Brief) (*prepared, error) {
 	}
 	p.refusals = code.Scope(p.Problem)
 	return p, nil
+}
+
+// Validate reports every fault of a brief under a code, as Design would, and
+// designs nothing. The error is an *InputError, or nil.
+func Validate(code Code, brief Brief) error {
+	_, err := prepare(code, brief)
+	return err
 }
 
 // clone copies a brief so that resolving it leaves the caller's alone.

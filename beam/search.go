@@ -1,6 +1,7 @@
 package beam
 
 import (
+	"context"
 	"math"
 	"slices"
 
@@ -16,9 +17,11 @@ import (
 //     size that is not smaller than the stirrup, to hold its legs;
 //   - stirrups of each allowed size and 2 to MaxLegs legs, at multiples of
 //     the spacing step up to the code's widest, in one zone from face to face
-//     or in three; more legs only while they buy a wider spacing;
+//     or in three, the outer ones at the widest spacing that would pass
+//     throughout and each at most 45 % of the clear length (of a cantilever,
+//     one of at most 90 %); more legs only while they buy a wider spacing;
 //   - compression steel only for a face that no tension steel alone can
-//     satisfy.
+//     satisfy: of each size the fewest bars, in one layer, that do.
 //
 // Within that space it is exhaustive: what it skips could not be ranked among
 // the layouts kept, or is below the code's own bound on tension steel.
@@ -30,6 +33,7 @@ type search struct {
 	main, ties []bars.Size
 
 	t       Trial
+	laid    [Top + 1]laid
 	checks  []Check // scratch
 	failed  []Check // scratch
 	layers  []bars.Layer
@@ -45,6 +49,14 @@ type search struct {
 	rejects rejectLog
 	logs    bool    // log every arrangement of stirrups that fails
 	near    [3]near // by face, and at 0 for whole pairs
+}
+
+// laid is what lies at a face of the trial. The zero value is not known.
+type laid struct {
+	set           *barSet
+	inCompression bool
+	stirrup       bars.Size
+	cover         units.Length
 }
 
 // found is a layout that passes.
@@ -93,21 +105,27 @@ func newSearch(p *prepared, keep int) *search {
 }
 
 // run searches every stirrup size, singly reinforced first.
-func (s *search) run() {
+func (s *search) run(ctx context.Context) error {
 	if len(s.main) == 0 {
-		return
+		return nil
 	}
 	for _, tie := range s.ties {
 		bottoms, tops := s.sets(Bottom, tie), s.sets(Top, tie)
-		s.pairs(tie, bottoms, tops)
+		if err := s.pairs(ctx, tie, bottoms, tops); err != nil {
+			return err
+		}
 	}
 	if len(s.kept) > 0 {
-		return
+		return nil
 	}
 	for _, tie := range s.ties {
-		s.compressed(tie, Bottom)
-		s.compressed(tie, Top)
+		for _, face := range [2]Face{Bottom, Top} {
+			if err := s.compressed(ctx, tie, face); err != nil {
+				return err
+			}
+		}
 	}
+	return nil
 }
 
 func (s *search) bent(sense Sense) bool { return s.p.bent(sense) }
@@ -188,13 +206,22 @@ func (s *search) judge(face Face, groups ...Group) (ok bool) {
 	return len(s.failed) == 0
 }
 
-// put lays a set at a face of the trial.
+// put lays a set at a face of the trial, unless it lies there already.
 func (s *search) put(face Face, b *barSet, inCompression bool) bool {
+	now := laid{set: b, inCompression: inCompression, stirrup: s.t.Stirrup, cover: s.t.Cover}
+	if s.laid[face] == now {
+		return true
+	}
 	s.layers = s.layers[:0]
 	if b != nil {
 		s.layers = b.appendLayers(s.layers, s.groups[:])
 	}
-	return s.t.lay(face, s.layers, inCompression) == nil
+	s.laid[face] = now
+	if s.t.lay(face, s.layers, inCompression) != nil {
+		s.laid[face] = laid{}
+		return false
+	}
+	return true
 }
 
 // accepts judges a set on its own face, once.
@@ -231,10 +258,13 @@ func (s *search) worst() float64 {
 
 // pairs joins bottom and top sets and finds stirrups for each pair that could
 // still be kept.
-func (s *search) pairs(tie bars.Size, bottoms, tops []barSet) {
+func (s *search) pairs(ctx context.Context, tie bars.Size, bottoms, tops []barSet) error {
 	s.t.enclose(tie, s.main[len(s.main)-1]) // the greatest cover, and so the shortest stirrups
 	lightest := s.leastStirrups(tie, s.p.Brief.Section.Depth)
 	for i := range bottoms {
+		if err := ctx.Err(); err != nil {
+			return err
+		}
 		b := &bottoms[i]
 		for j := range tops {
 			t := &tops[j]
@@ -250,48 +280,88 @@ func (s *search) pairs(tie bars.Size, bottoms, tops []barSet) {
 			s.shear(tie, b, t, 0)
 		}
 	}
+	return nil
 }
 
 // compressed looks for tension sets at a face that pass once bars on the
-// other face are relied on in compression.
-func (s *search) compressed(tie bars.Size, face Face) {
+// other face are relied on in compression: of each size the fewest that do,
+// or more where the stirrups have legs to hold.
+func (s *search) compressed(ctx context.Context, tie bars.Size, face Face) error {
 	sense := tensionSense(face)
 	if !s.bent(sense) {
-		return
+		return nil
 	}
-	var sets, others []barSet
-	layers := s.p.Brief.Preferences.MaxLayers
+	var sets []barSet
+	others := make([][]barSet, len(s.main)) // by size, fewest bars first
 	for i := range s.main {
-		size := &s.main[i]
-		most, _, _ := s.bounds(sense, tie, size)
-		sets = uniformSets(sets, size, 2, most, layers)
-		others = uniformSets(others, size, 2, most, 1)
+		most, _, _ := s.bounds(sense, tie, &s.main[i])
+		sets = uniformSets(sets, &s.main[i], 2, most, s.p.Brief.Preferences.MaxLayers)
+		others[i] = uniformSets(nil, &s.main[i], 2, most, 1)
 	}
 	sortSets(sets)
-	sortSets(others)
-	if len(others) == 0 {
-		return
-	}
-	heaviest := &others[len(others)-1]
+	s.t.enclose(tie, s.main[len(s.main)-1])
+	lightest := s.leastStirrups(tie, s.p.Brief.Section.Depth)
 	for i := range sets {
+		if err := ctx.Err(); err != nil {
+			return err
+		}
 		b := &sets[i]
-		if !s.promising(b, &others[0], 0) || !s.relied(tie, face, b, heaviest) {
+		if !s.promising(b, &barSet{}, lightest) || !s.helped(tie, face, b, others) {
 			continue
 		}
-		for j := range others {
-			o := &others[j]
-			if !s.promising(b, o, 0) {
-				continue
-			}
-			if s.relied(tie, face, b, o) {
-				bottom, top := b, o
-				if face == Top {
-					bottom, top = o, b
-				}
-				s.shear(tie, bottom, top, face.Opposite())
+		for _, of := range others {
+			if !s.compress(tie, face, b, of, lightest) {
+				break
 			}
 		}
 	}
+	return nil
+}
+
+// helped reports whether the most steel of one of the largest sizes in
+// compression makes a tension set pass. Less would not.
+func (s *search) helped(tie bars.Size, face Face, b *barSet, others [][]barSet) bool {
+	tried := 0
+	for i := len(others) - 1; i >= 0 && tried < 3; i-- {
+		n := len(others[i])
+		if n == 0 {
+			continue
+		}
+		if s.relied(tie, face, b, &others[i][n-1]) {
+			return true
+		}
+		tried++
+	}
+	return false
+}
+
+// compress completes a tension set with bars of one size in compression. It
+// reports false once no stirrups were found although every leg had a bar to
+// hold: other sizes would change nothing in that.
+func (s *search) compress(tie bars.Size, face Face, b *barSet, of []barSet, lightest float64) bool {
+	n := len(of)
+	if n == 0 || !s.relied(tie, face, b, &of[n-1]) {
+		return true
+	}
+	// More compression steel never fails where less passes.
+	first := n - 1 - s.last(0, n-1, func(fewer int) bool { return s.relied(tie, face, b, &of[n-1-fewer]) })
+	for i := first; i < n; i++ {
+		o := &of[i]
+		if !s.promising(b, o, lightest) || !s.relied(tie, face, b, o) {
+			return true
+		}
+		bottom, top := b, o
+		if face == Top {
+			bottom, top = o, b
+		}
+		if s.shear(tie, bottom, top, face.Opposite()) {
+			return true
+		}
+		if o.count >= s.p.Brief.Preferences.MaxLegs {
+			return false
+		}
+	}
+	return true
 }
 
 // relied judges a tension set with compression steel opposite.
@@ -311,20 +381,21 @@ func larger(a, b bars.Size) bars.Size {
 // shear completes a pair with stirrups and keeps what passes. Where bars of
 // one face ask for cover that moves the other's, the pair is judged again as
 // a whole first.
-func (s *search) shear(tie bars.Size, bottom, top *barSet, inCompression Face) {
+// It reports whether any stirrups do for the pair.
+func (s *search) shear(tie bars.Size, bottom, top *barSet, inCompression Face) (ok bool) {
 	s.t.enclose(tie, larger(bottom.largest(), top.largest()))
 	s.t.Zones, s.t.ZoneBar = nil, nil
 	if !s.put(Bottom, bottom, inCompression == Bottom) || !s.put(Top, top, inCompression == Top) {
-		return
+		return false
 	}
 	if moved := s.t.Cover != bottom.cover || s.t.Cover != top.cover; moved && inCompression == 0 && !s.judge(0, Fitting, Bending) {
-		return
+		return false
 	}
 	if !s.promising(bottom, top, s.leastStirrups(tie, s.tensionDepth())) {
-		return
+		return true
 	}
 	long := s.longitudinal(bottom, top)
-	s.eachStirrup(tie, func(mass float64) bool { return s.promising(bottom, top, mass) }, func(zones []Zone, stirrups float64) {
+	return s.eachStirrup(tie, func(mass float64) bool { return s.promising(bottom, top, mass) }, func(zones []Zone, stirrups float64) {
 		f := found{
 			bottom: *bottom, top: *top, inCompress: inCompression, stirrup: tie,
 			mass: long + stirrups, stirrupMass: stirrups,

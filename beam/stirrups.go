@@ -4,6 +4,7 @@ import (
 	"math"
 
 	"soffit.example/bars"
+	"soffit.example/beam/statics"
 	"soffit.example/units"
 )
 
@@ -28,16 +29,17 @@ func (s *search) tensionDepth() units.Length {
 // eachStirrup calls keep with the lightest passing zones of every number of
 // legs for the bars of the trial, unless promising says that no zones of
 // that mass could be kept. More legs are tried only while they buy a wider
-// spacing.
-func (s *search) eachStirrup(tie bars.Size, promising func(mass float64) bool, keep func(zones []Zone, mass float64)) {
+// spacing. It reports whether any number of legs passes.
+func (s *search) eachStirrup(tie bars.Size, promising func(mass float64) bool, keep func(zones []Zone, mass float64)) (any bool) {
 	before := 0
 	for legs := 2; legs <= s.p.Brief.Preferences.MaxLegs; legs++ {
 		uniform, ok := s.uniform(tie, legs)
 		if !ok {
 			continue
 		}
+		any = true
 		if uniform <= before {
-			return
+			break
 		}
 		before = uniform
 		s.setUniform(tie, legs, s.widest)
@@ -50,9 +52,10 @@ func (s *search) eachStirrup(tie bars.Size, promising func(mass float64) bool, k
 			keep(s.best, mass)
 		}
 		if uniform == s.widest {
-			return
+			break
 		}
 	}
+	return any
 }
 
 // step is the spacing of k steps.
@@ -166,8 +169,8 @@ func (s *search) threeZones(tie bars.Size, legs, close int, mass float64) float6
 	if !s.member || s.p.Brief.Preferences.MaxZones < 3 {
 		return mass
 	}
-	longest := int(s.to.Sub(s.from).Ratio(s.step(close)) * 0.45)
-	if longest < 1 || close >= s.widest {
+	mostLeft, mostRight := s.longestEnds(close)
+	if mostLeft+mostRight == 0 || close >= s.widest {
 		return mass
 	}
 	passes := func(wide, left, right int) bool {
@@ -175,26 +178,63 @@ func (s *search) threeZones(tie bars.Size, legs, close int, mass float64) float6
 		return s.try(tie, legs, wide, 3)
 	}
 	widest := s.widest
-	if !passes(widest, longest, longest) {
-		widest = s.last(close, widest-1, func(k int) bool { return passes(k, longest, longest) })
+	if !passes(widest, mostLeft, mostRight) {
+		widest = s.last(close, widest-1, func(k int) bool { return passes(k, mostLeft, mostRight) })
 	}
+	// A longer end zone never fails where a shorter one passes, nor does a
+	// closer middle: each search starts from the one before.
+	left, right := mostLeft, mostRight
 	for wide := widest; wide > close && wide > widest-widerSteps; wide-- {
-		// A longer end zone never fails where a shorter one passes: first
-		// the same on both sides, then the right one for itself.
-		left := longest - s.last(0, longest, func(cut int) bool { return passes(wide, longest-cut, longest) })
-		var right int
-		if !passes(wide, left, left) {
-			right = longest - s.last(0, longest-left, func(cut int) bool { return passes(wide, left, longest-cut) })
+		if wide == widest {
+			left = mostLeft - s.last(0, mostLeft, func(cut int) bool { return passes(wide, mostLeft-cut, mostRight) })
+			if left < mostRight && passes(wide, left, left) {
+				right = left
+			}
 		} else {
-			right = left - s.last(0, left, func(cut int) bool { return passes(wide, left, left-cut) })
+			left = shrink(left, func(n int) bool { return passes(wide, n, right) })
 		}
+		right = shrink(right, func(n int) bool { return passes(wide, left, n) })
 		s.setThree(tie, legs, close, wide, left, right)
-		m := s.stirrupMass(tie)
-		if m < mass {
+		if m := s.stirrupMass(tie); m < mass {
 			mass, s.best = m, append(s.best[:0], s.zones...)
 		}
 	}
 	return mass
+}
+
+// endShare is how much of the clear length a zone of close stirrups may take
+// at each end; a cantilever has one, of twice that, at the end that is held.
+const endShare = 0.45
+
+// longestEnds are the most spacings that the zones of close stirrups may
+// have at each end.
+func (s *search) longestEnds(close int) (left, right int) {
+	n := s.to.Sub(s.from).Ratio(s.step(close)) * endShare
+	supports := s.p.Brief.Supports
+	switch {
+	case supports[0].Kind == statics.Free:
+		return 0, int(2 * n)
+	case supports[len(supports)-1].Kind == statics.Free:
+		return int(2 * n), 0
+	}
+	return int(n), int(n)
+}
+
+// shrink is the least n that passes, from one that does, by growing strides:
+// it is mostly near.
+func shrink(n int, passes func(int) bool) int {
+	for stride := 1; n > 0; {
+		to := max(0, n-stride)
+		switch {
+		case passes(to):
+			n, stride = to, 2*stride
+		case to == n-1:
+			return n
+		default:
+			stride = 1
+		}
+	}
+	return n
 }
 
 // stirrupMass is the mass of the current zones in kg; per metre of beam with

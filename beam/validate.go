@@ -11,25 +11,46 @@ import (
 	"soffit.example/units"
 )
 
-// Physical bounds of a brief. They belong to no design code: they are wide
-// enough for any beam that is built and narrow enough that a slipped unit is
-// caught.
-var (
-	leastSide       = units.Millimetre.Of(50)
-	greatestSide    = units.Metre.Of(10)
-	leastStrength   = units.Megapascal.Of(1)
-	mostStrength    = units.Megapascal.Of(250)
-	leastYield      = units.Megapascal.Of(100)
-	mostYield       = units.Megapascal.Of(1500)
-	leastDensity    = units.KilogramPerCubicMetre.Of(500)
-	mostDensity     = units.KilogramPerCubicMetre.Of(5000)
-	mostAggregate   = units.Millimetre.Of(200)
-	mostCover       = units.Millimetre.Of(300)
-	leastSpan       = units.Metre.Of(0.1)
-	mostSpan        = units.Metre.Of(200)
-	mostIntensity   = units.KilonewtonPerMetre.Of(1e5)
-	mostForce       = units.Kilonewton.Of(1e6)
-	mostMoment      = units.KilonewtonMetre.Of(1e7)
+// bounds are the physical bounds of a brief, in round numbers of each system.
+// They belong to no design code: they are wide enough for any beam that is
+// built and narrow enough that a slipped unit is caught.
+type bounds struct {
+	leastSide, mostSide         units.Length
+	leastStrength, mostStrength units.Stress
+	leastYield, mostYield       units.Stress
+	leastDensity, mostDensity   units.Density
+	mostAggregate, mostCover    units.Length
+	leastSpan, mostSpan         units.Length
+	leastStep, mostStep         units.Length
+	mostIntensity               units.LineLoad
+	mostForce                   units.Force
+	mostMoment                  units.Moment
+}
+
+var boundsIn = [...]bounds{
+	units.SI: {
+		units.Millimetre.Of(50), units.Millimetre.Of(10_000),
+		units.Megapascal.Of(1), units.Megapascal.Of(250),
+		units.Megapascal.Of(100), units.Megapascal.Of(1500),
+		units.KilogramPerCubicMetre.Of(500), units.KilogramPerCubicMetre.Of(5000),
+		units.Millimetre.Of(200), units.Millimetre.Of(300),
+		units.Millimetre.Of(100), units.Millimetre.Of(200_000),
+		units.Millimetre.Of(1), units.Millimetre.Of(300),
+		units.KilonewtonPerMetre.Of(1e5), units.Kilonewton.Of(1e6), units.KilonewtonMetre.Of(1e7),
+	},
+	units.US: {
+		units.Inch.Of(2), units.Inch.Of(400),
+		units.KSI.Of(0.15), units.KSI.Of(36),
+		units.KSI.Of(15), units.KSI.Of(200),
+		units.PoundPerCubicFoot.Of(30), units.PoundPerCubicFoot.Of(300),
+		units.Inch.Of(8), units.Inch.Of(12),
+		units.Inch.Of(4), units.Inch.Of(8000),
+		units.Inch.Of(0.05), units.Inch.Of(12),
+		units.KipPerFoot.Of(7000), units.Kip.Of(200_000), units.KipFoot.Of(7e6),
+	},
+}
+
+const (
 	mostLoads       = 1000
 	mostDemands     = 1000
 	mostMonths      = 1200
@@ -40,8 +61,11 @@ var (
 // faults collects everything wrong with an input, in the units of system.
 type faults struct {
 	system units.System
-	list   []Fault
+	bounds
+	list []Fault
 }
+
+func newFaults(system units.System) faults { return faults{system: system, bounds: boundsIn[system]} }
 
 func (f *faults) add(path, allowed, format string, args ...any) {
 	f.list = append(f.list, Fault{Path: path, Detail: fmt.Sprintf(format, args...), Allowed: allowed})
@@ -95,28 +119,28 @@ func (b *Brief) check(f *faults, catalog bars.Catalog) {
 	if b.Section.Shape != Rectangular {
 		f.add("/section/shape", "rectangular", "shape %q is not one that this version designs", b.Section.Shape.String())
 	}
-	f.within("/section/width", "width", b.Section.Width.Amount(), leastSide.Amount(), greatestSide.Amount())
-	f.within("/section/depth", "depth", b.Section.Depth.Amount(), leastSide.Amount(), greatestSide.Amount())
-	f.within("/concrete/strength", "concrete strength", b.Concrete.Strength.Amount(), leastStrength.Amount(), mostStrength.Amount())
+	f.within("/section/width", "width", b.Section.Width.Amount(), f.leastSide.Amount(), f.mostSide.Amount())
+	f.within("/section/depth", "depth", b.Section.Depth.Amount(), f.leastSide.Amount(), f.mostSide.Amount())
+	f.within("/concrete/strength", "concrete strength", b.Concrete.Strength.Amount(), f.leastStrength.Amount(), f.mostStrength.Amount())
 	if !b.Concrete.Density.IsZero() {
-		f.within("/concrete/density", "concrete density", b.Concrete.Density.Amount(), leastDensity.Amount(), mostDensity.Amount())
+		f.within("/concrete/density", "concrete density", b.Concrete.Density.Amount(), f.leastDensity.Amount(), f.mostDensity.Amount())
 	}
 	f.word("/concrete/kind", "concrete kind", b.Concrete.Kind.String(), b.Concrete.Kind == 0, kindWords)
 	if !b.Concrete.Aggregate.IsZero() {
-		f.positive("/concrete/aggregate", "aggregate size", b.Concrete.Aggregate.Amount(), mostAggregate.Amount())
+		f.positive("/concrete/aggregate", "aggregate size", b.Concrete.Aggregate.Amount(), f.mostAggregate.Amount())
 	}
-	f.within("/reinforcement/yield", "yield strength", b.Reinforcement.Yield.Amount(), leastYield.Amount(), mostYield.Amount())
+	f.within("/reinforcement/yield", "yield strength", b.Reinforcement.Yield.Amount(), f.leastYield.Amount(), f.mostYield.Amount())
 	if !b.Reinforcement.StirrupYield.IsZero() {
-		f.within("/reinforcement/stirrup_yield", "stirrup yield strength", b.Reinforcement.StirrupYield.Amount(), leastYield.Amount(), mostYield.Amount())
+		f.within("/reinforcement/stirrup_yield", "stirrup yield strength", b.Reinforcement.StirrupYield.Amount(), f.leastYield.Amount(), f.mostYield.Amount())
 	}
 	f.word("/reinforcement/coating", "coating", b.Reinforcement.Coating.String(), b.Reinforcement.Coating == 0, coatingWords)
 	f.word("/exposure", "exposure", b.Exposure.String(), b.Exposure == 0, exposureWords)
-	if !b.Cover.IsZero() && f.positive("/cover", "cover", b.Cover.Amount(), mostCover.Amount()) &&
+	if !b.Cover.IsZero() && f.positive("/cover", "cover", b.Cover.Amount(), f.mostCover.Amount()) &&
 		!b.Cover.Scale(2).Less(b.Section.Width.Min(b.Section.Depth)) {
 		f.add("/cover", "less than half the smaller side of the section", "cover is %s", f.system.Format(b.Cover.Amount()))
 	}
 	if !b.Braced.IsZero() {
-		f.positive("/braced", "bracing spacing", b.Braced.Amount(), mostSpan.Amount())
+		f.positive("/braced", "bracing spacing", b.Braced.Amount(), f.mostSpan.Amount())
 	}
 	f.word("/serviceability/attached", "attached construction", b.Serviceability.Attached.String(), b.Serviceability.Attached == 0, attachmentWords)
 	f.count("/serviceability/months", "months", b.Serviceability.Months, 0, mostMonths)
@@ -144,7 +168,7 @@ func (b *Brief) checkActions(f *faults) {
 		f.add("/spans", "one span", "%d spans given; this version designs a single span", len(b.Spans))
 		return
 	}
-	sound := f.within("/spans/0", "span", b.Spans[0].Amount(), leastSpan.Amount(), mostSpan.Amount())
+	sound := f.within("/spans/0", "span", b.Spans[0].Amount(), f.leastSpan.Amount(), f.mostSpan.Amount())
 	if len(b.Supports) != 2 {
 		f.add("/supports", "2", "%d supports given for one span", len(b.Supports))
 		return
@@ -189,10 +213,10 @@ func (l *Load) check(f *faults, path string, span units.Length) {
 		f.within(path+"/"+field, field, at.Amount(), units.Length{}.Amount(), span.Amount())
 	}
 	intensity := func(field string, w units.LineLoad) {
-		f.within(path+"/"+field, "intensity", w.Amount(), mostIntensity.Neg().Amount(), mostIntensity.Amount())
+		f.within(path+"/"+field, "intensity", w.Amount(), f.mostIntensity.Neg().Amount(), f.mostIntensity.Amount())
 	}
 	moment := func(what string) {
-		f.within(path+"/moment", what, l.Moment.Amount(), mostMoment.Neg().Amount(), mostMoment.Amount())
+		f.within(path+"/moment", what, l.Moment.Amount(), f.mostMoment.Neg().Amount(), f.mostMoment.Amount())
 	}
 	switch l.Shape {
 	case Uniform:
@@ -208,7 +232,7 @@ func (l *Load) check(f *faults, path string, span units.Length) {
 			f.add(path+"/to", "beyond from", "the load runs from %s to %s", f.system.Format(l.From.Amount()), f.system.Format(l.To.Amount()))
 		}
 	case PointLoad:
-		f.within(path+"/force", "force", l.Force.Amount(), mostForce.Neg().Amount(), mostForce.Amount())
+		f.within(path+"/force", "force", l.Force.Amount(), f.mostForce.Neg().Amount(), f.mostForce.Amount())
 		along("at", l.At)
 	case Couple:
 		moment("couple")
@@ -235,10 +259,10 @@ func (b *Brief) checkDemands(f *faults) {
 			f.add(path+"/name", "a name of its own", "name %q is that of demand %d too", d.Name, j)
 		}
 		names[d.Name] = i
-		f.within(path+"/moment", "moment", d.Moment.Amount(), mostMoment.Neg().Amount(), mostMoment.Amount())
-		f.within(path+"/shear", "shear", d.Shear.Amount(), mostForce.Neg().Amount(), mostForce.Amount())
-		f.within(path+"/torque", "torque", d.Torque.Amount(), mostMoment.Neg().Amount(), mostMoment.Amount())
-		f.within(path+"/axial", "axial force", d.Axial.Amount(), mostForce.Neg().Amount(), mostForce.Amount())
+		f.within(path+"/moment", "moment", d.Moment.Amount(), f.mostMoment.Neg().Amount(), f.mostMoment.Amount())
+		f.within(path+"/shear", "shear", d.Shear.Amount(), f.mostForce.Neg().Amount(), f.mostForce.Amount())
+		f.within(path+"/torque", "torque", d.Torque.Amount(), f.mostMoment.Neg().Amount(), f.mostMoment.Amount())
+		f.within(path+"/axial", "axial force", d.Axial.Amount(), f.mostForce.Neg().Amount(), f.mostForce.Amount())
 	}
 }
 
@@ -271,11 +295,11 @@ func (p *Preferences) check(f *faults, catalog bars.Catalog) {
 		f.add("/preferences/depths", fmt.Sprintf("at most %d", mostDepths), "%d depths given", len(p.Depths))
 	}
 	for i, d := range p.Depths {
-		f.within(fmt.Sprintf("/preferences/depths/%d", i), "depth", d.Amount(), leastSide.Amount(), greatestSide.Amount())
+		f.within(fmt.Sprintf("/preferences/depths/%d", i), "depth", d.Amount(), f.leastSide.Amount(), f.mostSide.Amount())
 	}
 	f.word("/preferences/prefer", "preference", p.Prefer.String(), p.Prefer == 0, preferenceWords)
 	if !p.SpacingBy.IsZero() {
-		f.within("/preferences/spacing_step", "spacing step", p.SpacingBy.Amount(), units.Millimetre.Of(1).Amount(), units.Millimetre.Of(300).Amount())
+		f.within("/preferences/spacing_step", "spacing step", p.SpacingBy.Amount(), f.leastStep.Amount(), f.mostStep.Amount())
 	}
 	f.count("/preferences/alternatives", "alternatives", p.KeepBest, -1, mostAlternative)
 }

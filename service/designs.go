@@ -49,15 +49,11 @@ func (s *Service) checkLayout(w http.ResponseWriter, r *http.Request) error {
 }
 
 // judge runs do, unless the request has faults. Then it has package beam add
-// those that it sees before it computes anything, so that one reply lists
-// all: with a context that is over, nothing is computed.
+// those that it sees, so that one reply lists all.
 func (s *Service) judge(ctx context.Context, code beam.Code, brief *beam.Brief, faults *strict.Faults, at string, do func(context.Context) (*beam.Result, error)) (*beam.Result, error) {
 	if !faults.None() {
 		if code != nil {
-			over, cancel := context.WithCancel(ctx)
-			cancel()
-			_, err := beam.Design(over, code, *brief)
-			addInput(faults, err, at)
+			addInput(faults, beam.Validate(code, *brief), at)
 		}
 		return nil, invalidInput(faults.All())
 	}
