@@ -11,7 +11,7 @@ import (
 
 // stirrupLength is the cut length of one set of stirrups of a trial, with
 // its cross ties; zero where the section has no room for the bends, which
-// buildable reports.
+// appendGeometry reports.
 func (t *Trial) stirrupLength(size bars.Size, legs int) units.Length {
 	l, err := t.stirrupSet(size, legs).Lengths()
 	if err != nil {
@@ -26,11 +26,33 @@ func (t *Trial) stirrupSet(size bars.Size, legs int) bars.StirrupSet {
 	return bars.StirrupSet{Size: size, Form: bars.ClosedForm, Width: width, Depth: depth, Legs: legs}
 }
 
-// buildable reports whether the stirrups of the trial can be bent at all.
-// That is geometry, whatever the code.
-func (t *Trial) buildable(dst []Check) []Check {
+// appendGeometry appends what no code is needed to see: whether the stirrups
+// can be bent, and whether the bars lie inside them, clear of those at the
+// opposite face.
+func (t *Trial) appendGeometry(dst []Check) []Check {
+	const clause = "geometry"
+	depth := t.Brief.Section.Depth
+	for _, face := range [2]Face{Bottom, Top} {
+		f := t.Steel(face)
+		if f.Count == 0 {
+			continue
+		}
+		c := Check{ID: "fit.width", Clause: clause, Face: face, Detailing: true}
+		c.Compare(f.Fit.LeastWidth.Amount(), t.Brief.Section.Width.Amount())
+		dst = append(dst, c)
+
+		c = Check{ID: "fit.depth", Clause: clause, Face: face, Detailing: true}
+		// Opposite bars keep the distance of layers; without any, the leg of
+		// the stirrup is opposite.
+		other := t.Cover.Add(t.Stirrup.Diameter)
+		if o := t.Steel(face.Opposite()); o.Count > 0 {
+			other = o.Fit.Height.Add(t.Code.Gaps(t.Problem).BetweenLayers.Least)
+		}
+		c.Compare(f.Fit.Height.Add(other).Amount(), depth.Amount())
+		dst = append(dst, c)
+	}
 	for i := range t.Zones {
-		c := Check{ID: "stirrup.bends", Clause: "geometry", Span: t.Zones[i].Span, At: t.Zones[i].From, Detailing: true}
+		c := Check{ID: "stirrup.bends", Clause: clause, Span: t.Zones[i].Span, At: t.Zones[i].From, Detailing: true}
 		cage := t.cage()
 		width, depth := cage.Outside()
 		bend, err := t.ZoneBar[i].Bend(bars.Stirrup)

@@ -306,7 +306,7 @@ func (s *search) alternative(f *found) (a Alternative, ok bool) {
 	if len(faults) > 0 {
 		return a, false
 	}
-	s.checks = t.buildable(s.checks[:0])
+	s.checks = t.appendGeometry(s.checks[:0])
 	for _, g := range Groups() {
 		s.checks = s.p.Code.Judge(s.checks, g, t)
 	}

@@ -40,7 +40,7 @@ func (p *prepared) finish(layout Layout) (*Result, error) {
 	r.Layout = layout
 	r.Layout.Transverse = slices.Clone(t.Zones)
 	r.Cover = t.Cover
-	r.Checks = t.buildable(nil)
+	r.Checks = t.appendGeometry(nil)
 	for _, g := range Groups() {
 		r.Checks = p.Code.Judge(r.Checks, g, t)
 	}

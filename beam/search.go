@@ -193,7 +193,7 @@ func (s *search) singleLayerDepth(tie, size bars.Size) units.Length {
 // in s.failed; with a face given, only that face's and those of no face.
 func (s *search) judge(face Face, groups ...Group) (ok bool) {
 	s.checks, s.failed = s.checks[:0], s.failed[:0]
-	s.checks = s.t.buildable(s.checks)
+	s.checks = s.t.appendGeometry(s.checks)
 	for _, g := range groups {
 		s.checks = s.p.Code.Judge(s.checks, g, &s.t)
 	}

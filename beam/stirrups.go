@@ -158,10 +158,6 @@ func stirrupCount(z Zone) int {
 	return max(1, int(math.Ceil(z.To.Sub(z.From).Ratio(z.Spacing)-1e-9)))
 }
 
-// widerSteps is how many of the widest middle spacings are tried with end
-// zones of their own.
-const widerSteps = 3
-
 // threeZones looks for lighter stirrups than those in s.best, of a given
 // mass, with close ends at a spacing and a wider middle. It returns the mass
 // of the lightest and leaves them in s.best.
@@ -184,7 +180,11 @@ func (s *search) threeZones(tie bars.Size, legs, close int, mass float64) float6
 	// A longer end zone never fails where a shorter one passes, nor does a
 	// closer middle: each search starts from the one before.
 	left, right := mostLeft, mostRight
-	for wide := widest; wide > close && wide > widest-widerSteps; wide-- {
+	for wide := widest; wide > close; wide-- {
+		s.setUniform(tie, legs, wide)
+		if s.stirrupMass(tie) >= mass {
+			break // with any close ends it would be heavier still
+		}
 		if wide == widest {
 			left = mostLeft - s.last(0, mostLeft, func(cut int) bool { return passes(wide, mostLeft-cut, mostRight) })
 			if left < mostRight && passes(wide, left, left) {

@@ -74,7 +74,7 @@ func (f *faults) add(path, allowed, format string, args ...any) {
 // within reports a quantity outside [least, most], or not finite.
 func (f *faults) within(path, what string, v, least, most units.Amount) bool {
 	x := v.SI()
-	if x >= least.SI() && x <= most.SI() {
+	if x >= least.SI() && x <= most.SI() && (x == 0 || math.Abs(x) >= tiny) {
 		return true
 	}
 	said := f.system.Format(v)
@@ -85,9 +85,13 @@ func (f *faults) within(path, what string, v, least, most units.Amount) bool {
 	return false
 }
 
+// tiny is the magnitude, in SI units, below which a value other than zero is
+// taken for a slip: it could not be meant and would only lose digits.
+const tiny = 1e-9
+
 // positive is within (0, most].
 func (f *faults) positive(path, what string, v, most units.Amount) bool {
-	if x := v.SI(); x > 0 && x <= most.SI() {
+	if x := v.SI(); x >= tiny && x <= most.SI() {
 		return true
 	}
 	f.add(path, "above zero, to "+f.system.Format(most), "%s is %s", what, f.system.Format(v))

@@ -126,7 +126,8 @@ func TestCoverChecks(t *testing.T) {
 	require.InEpsilon(t, 1.875, valueIn(t, bottom.Capacity, "in"), 1e-9)
 }
 
-// 25.2.1: 1 in., db, 4/3 of the aggregate; 25.2.2: 1 in. between layers.
+// 25.2.1: 1 in., db, 4/3 of the aggregate; 25.2.2: 1 in. between layers, and
+// 4/3 of the aggregate there too, by the 3/4 of 26.4.2.1(a).
 func TestGaps(t *testing.T) {
 	for _, c := range []struct {
 		code      Code
@@ -135,10 +136,10 @@ func TestGaps(t *testing.T) {
 		between   units.Length
 	}{
 		{ACI31819(), units.Inch.Of(0.75), units.Inch.Of(1), units.Inch.Of(1)}, // 4/3 × 3/4 = 1
-		{ACI31819(), units.Inch.Of(1.5), units.Inch.Of(2), units.Inch.Of(1)},
+		{ACI31819(), units.Inch.Of(1.5), units.Inch.Of(2), units.Inch.Of(2)},
 		{ACI31814(), units.Inch.Of(0.375), units.Inch.Of(1), units.Inch.Of(1)},
 		{ACI31819M(), units.Millimetre.Of(18), units.Millimetre.Of(25), units.Millimetre.Of(25)},
-		{ACI31814M(), units.Millimetre.Of(30), units.Millimetre.Of(40), units.Millimetre.Of(25)},
+		{ACI31814M(), units.Millimetre.Of(30), units.Millimetre.Of(40), units.Millimetre.Of(40)},
 	} {
 		p := &beam.Problem{}
 		p.Brief.Concrete.Aggregate = c.aggregate

@@ -27,12 +27,14 @@ const (
 	stoneToGap  = 3.0 / 4 // of the least clear spacing of bars
 )
 
-// Gaps are the clear distances of 25.2.1 and 25.2.2 for the brief's aggregate.
+// Gaps are the clear distances of 25.2.1 and 25.2.2, widened where 26.4.2.1(a)
+// asks more for the brief's aggregate, so that layers are laid as they pass.
 func (c Code) Gaps(p *beam.Problem) bars.Clearances {
 	r := &c.e.spacing
-	least := c.e.lengthOf(r.least)
+	stone := p.Brief.Concrete.Aggregate
+	least := c.e.lengthOf(r.least).Max(stone.Scale(1 / stoneToGap))
 	return bars.Clearances{
-		InLayer:       bars.Clearance{Least: least.Max(p.Brief.Concrete.Aggregate.Scale(r.stone)), Diameters: r.diameter},
+		InLayer:       bars.Clearance{Least: least.Max(stone.Scale(r.stone)), Diameters: r.diameter},
 		BetweenLayers: bars.Clearance{Least: least},
 	}
 }

@@ -299,7 +299,8 @@ func (j *judge) place() error {
 	}
 	j.cage.width, j.cage.depth, j.cage.inner = j.bw, j.h, j.cover+thickest
 	j.cage.tucked = j.b.Readings.TuckedCorner
-	j.cage.least, j.cage.between = math.Max(j.gap, 4.0/3*j.stone), j.gap
+	j.cage.least = math.Max(j.gap, 4.0/3*j.stone)
+	j.cage.between = j.cage.least // layers keep the distance that 26.4.2.1(a) asks of the aggregate too
 	for k, face := range [2]beam.Face{beam.Bottom, beam.Top} {
 		bed, err := j.lay(&j.cage, j.catalog, j.l, face)
 		if err != nil {
@@ -485,7 +486,7 @@ func (j *judge) fit(k int) {
 		j.wrong("bars in bends 25.7.1.2", 2, "one bar at face %d", k)
 	}
 	if len(b.layers) > 1 {
-		j.check("aggregate between layers 26.4.2.1", j.stone, 0.75*j.gap, "face %d", k)
+		j.check("aggregate between layers 26.4.2.1", j.stone, 0.75*j.cage.between, "face %d", k)
 	}
 	j.check("aggregate in the form 26.4.2.1", j.stone, j.bw/5, "")
 	for _, z := range j.zones {
