@@ -423,8 +423,12 @@ func sweep(tr *beam.Trial, e *edition, n int) float64 {
 // with both senses of bending, and never less.
 func TestWorstSectionAgreesWithASweep(t *testing.T) {
 	rapid.Check(t, func(r *rapid.T) {
+		// A brief holds no value too small to be meant: draw thousandths.
+		draw := func(least, most int, name string) float64 {
+			return float64(rapid.IntRange(least, most).Draw(r, name)) / 1000
+		}
 		b := usBrief()
-		span := rapid.Float64Range(18, 30).Draw(r, "span")
+		span := draw(18_000, 30_000, "span")
 		b.Spans = []units.Length{units.Foot.Of(span)}
 		kinds := []statics.SupportKind{statics.Pinned, statics.Fixed}
 		for i := range b.Supports {
@@ -432,17 +436,17 @@ func TestWorstSectionAgreesWithASweep(t *testing.T) {
 		}
 		b.Loads = nil
 		for range rapid.IntRange(1, 4).Draw(r, "loads") {
-			from := rapid.Float64Range(0, 0.8).Draw(r, "from")
+			from := draw(0, 800, "from")
 			b.Loads = append(b.Loads, beam.Load{
 				Case: beam.LoadCases()[rapid.IntRange(0, 6).Draw(r, "case")], Shape: beam.Partial,
-				Intensity:    units.KipPerFoot.Of(rapid.Float64Range(-2, 3).Draw(r, "w")),
-				IntensityEnd: units.KipPerFoot.Of(rapid.Float64Range(-2, 3).Draw(r, "w end")), Varies: true,
+				Intensity:    units.KipPerFoot.Of(draw(-2000, 3000, "w")),
+				IntensityEnd: units.KipPerFoot.Of(draw(-2000, 3000, "w end")), Varies: true,
 				From: units.Foot.Of(span * from), To: units.Foot.Of(span * (from + 0.2)),
 			})
 		}
 		b.Loads = append(b.Loads, beam.Load{
-			Case: beam.Live, Shape: beam.PointLoad, Force: units.Kip.Of(rapid.Float64Range(-10, 20).Draw(r, "p")),
-			At: units.Foot.Of(span * rapid.Float64Range(0.3, 0.7).Draw(r, "at")),
+			Case: beam.Live, Shape: beam.PointLoad, Force: units.Kip.Of(draw(-10_000, 20_000, "p")),
+			At: units.Foot.Of(span * draw(300, 700, "at")),
 		})
 		for _, c := range []Code{ACI31819(), ACI31814()} {
 			if rapid.Bool().Draw(r, "detailed") {
