@@ -80,6 +80,8 @@ func prepare(code Code, given Brief) (*prepared, error) {
 	p := &prepared{Problem: &Problem{Code: code, System: f.system, Catalog: catalog}}
 	if len(f.list) == 0 {
 		f.list = append(f.list, code.Resolve(&b, &p.register)...)
+		f.allowed("/preferences/bars", b.Preferences.Bars, bars.Main, p.Problem)
+		f.allowed("/preferences/stirrups", b.Preferences.Stirrups, bars.Stirrup, p.Problem)
 	}
 	if err := f.err(); err != nil {
 		return nil, err

@@ -61,7 +61,7 @@ type laid struct {
 
 // found is a layout that passes.
 type found struct {
-	key         [3]float64
+	key         [2]float64
 	bottom, top barSet
 	inCompress  Face // zero: none
 	stirrup     bars.Size
@@ -428,18 +428,18 @@ func (s *search) length() float64 {
 // key ranks a layout under the chosen preference; less is better, and every
 // entry grows with the stirrups, so that the key of a pair without stirrups
 // bounds it from below.
-func (s *search) key(bottom, top *barSet, mass float64, zones int) [3]float64 {
+func (s *search) key(bottom, top *barSet, mass float64, zones int) [2]float64 {
 	switch s.prefer {
 	case FewestBars:
-		return [3]float64{float64(bottom.count + top.count), mass}
+		return [2]float64{float64(bottom.count + top.count), mass}
 	case OneSize:
-		return [3]float64{float64(differentSizes(bottom, top)), mass}
+		return [2]float64{float64(differentSizes(bottom, top)), mass}
 	case FewestMarks:
-		return [3]float64{float64(bottom.used*bottom.sizes + top.used*top.sizes + zones), mass}
+		return [2]float64{float64(bottom.used*bottom.sizes + top.used*top.sizes + zones), mass}
 	case Shallowest:
-		return [3]float64{s.p.Brief.Section.Depth.In(units.Metre), mass}
+		return [2]float64{s.p.Brief.Section.Depth.In(units.Metre), mass}
 	}
-	return [3]float64{mass}
+	return [2]float64{mass}
 }
 
 func differentSizes(sets ...*barSet) int {
@@ -462,7 +462,7 @@ func (s *search) promising(bottom, top *barSet, stirrups float64) bool {
 	return s.ranks(s.key(bottom, top, s.longitudinal(bottom, top)+stirrups, 1))
 }
 
-func (s *search) ranks(key [3]float64) bool {
+func (s *search) ranks(key [2]float64) bool {
 	return len(s.kept) < s.keep || slices.Compare(key[:], s.kept[len(s.kept)-1].key[:]) < 0
 }
 

@@ -308,6 +308,23 @@ func (p *Preferences) check(f *faults, catalog bars.Catalog) {
 	f.count("/preferences/alternatives", "alternatives", p.KeepBest, -1, mostAlternative)
 }
 
+// allowed reports preferred sizes that the code does not allow in their use.
+func (f *faults) allowed(path string, names []string, use bars.Use, p *Problem) {
+	for i, n := range names {
+		size, err := p.Catalog.Size(n)
+		if err == nil && p.Code.Allows(use, size) {
+			continue
+		}
+		var allowed []string
+		for _, s := range p.Catalog.Sizes() {
+			if p.Code.Allows(use, s) {
+				allowed = append(allowed, s.Name)
+			}
+		}
+		f.add(fmt.Sprintf("%s/%d", path, i), strings.Join(allowed, ", "), "%s does not allow %q as a %s", p.Code.Edition().ID, n, use)
+	}
+}
+
 // analysisFault turns a refusal of the analysis, which the checks above
 // should have foreseen, into a fault of the brief. A mechanism is the one
 // they leave to it.

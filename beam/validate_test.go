@@ -83,6 +83,7 @@ func TestFaultsOfABrief(t *testing.T) {
 		{"unknown bar", func(b *beam.Brief) { b.Preferences.Bars = []string{"#12"} }, "/preferences/bars/0", "#12"},
 		{"bar twice", func(b *beam.Brief) { b.Preferences.Bars = []string{"#8", "#8"} }, "/preferences/bars/1", "twice"},
 		{"unknown stirrup", func(b *beam.Brief) { b.Preferences.Stirrups = []string{"No. 3"} }, "/preferences/stirrups/0", "No. 3"},
+		{"stirrups too thick to bend", func(b *beam.Brief) { b.Preferences.Stirrups = []string{"#9"} }, "/preferences/stirrups/0", "#9"},
 		{"nine layers", func(b *beam.Brief) { b.Preferences.MaxLayers = 9 }, "/preferences/max_layers", "9"},
 		{"one leg", func(b *beam.Brief) { b.Preferences.MaxLegs = 1 }, "/preferences/max_legs", "1"},
 		{"two zones", func(b *beam.Brief) { b.Preferences.MaxZones = 2 }, "/preferences/max_zones", "2"},

@@ -311,7 +311,7 @@ func (m *maker) demands(moment float64) {
 		case m.chance(8):
 			d.Axial = m.forceOf(0.05 * m.between(0, 1.5) * m.fc * m.width * m.depth)
 		case m.chance(6):
-			d.Torque = m.momentOf(0.001 * moment)
+			d.Torque = m.momentOf(m.torque() * m.between(-0.7, 0.7))
 		}
 		m.b.Demands = append(m.b.Demands, d)
 	}

@@ -34,18 +34,24 @@ func (m *maker) breakScope(b *beam.Brief) {
 	case r == 6 && member:
 		b.Loads = append(b.Loads, beam.Load{
 			Case: beam.Dead, Shape: pick(m, beam.Torque, beam.UniformTorque),
-			Moment: m.momentOf(m.fc * m.width * m.width * m.depth * m.between(0.01, 0.5)), At: b.Spans[0].Scale(m.Float64()),
+			Moment: m.momentOf(m.torque() * m.between(0.2, 4)), At: b.Spans[0].Scale(m.Float64()),
 		})
 	case !member && r < 7:
 		b.Demands[0].Axial = m.forceOf(m.fc * m.width * m.depth * m.between(-0.3, 0.4))
 	case !member:
-		b.Demands[0].Torque = m.momentOf(m.fc * m.width * m.width * m.depth * m.between(0.01, 0.5))
+		b.Demands[0].Torque = m.momentOf(m.torque() * m.between(0.6, 3))
 	default:
 		b.Preferences.Stirrups = []string{"#9"}
 		if b.Reinforcement.Catalog == "astm-metric" {
 			b.Preferences.Stirrups = []string{"No. 29"}
 		}
 	}
+}
+
+// torque is about the greatest that may be neglected.
+func (m *maker) torque() float64 {
+	area := m.width * m.depth
+	return 0.75 * m.either(1, 0.083) * math.Sqrt(m.fc) * area * area / (2 * (m.width + m.depth))
 }
 
 // spoil puts something absurd into a brief.

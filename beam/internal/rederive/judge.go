@@ -130,6 +130,7 @@ func (b *Beam) Judge(l beam.Layout) (*Report, error) {
 	if err != nil {
 		return nil, err
 	}
+	j.apart()
 	for k := range j.beds {
 		j.fit(k)
 	}
@@ -149,6 +150,7 @@ func (b *Beam) Bars(l beam.Layout) (*Report, error) {
 	if err != nil {
 		return nil, err
 	}
+	j.apart()
 	for k := range j.beds {
 		j.fit(k)
 	}
@@ -467,6 +469,21 @@ func (j *judge) twist() {
 		}
 	}
 	j.torque(most, 0)
+}
+
+// apart sees that the bars of opposite faces lie clear of each other.
+func (j *judge) apart() {
+	sum := 0.0
+	for _, b := range j.beds {
+		top := 0.0
+		for _, row := range b.layers {
+			for _, o := range row {
+				top = math.Max(top, o.y+o.r)
+			}
+		}
+		sum += top
+	}
+	j.check("bars of opposite faces", sum, j.h, "they meet")
 }
 
 // fit judges how the bars of a face lie.
