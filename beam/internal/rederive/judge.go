@@ -33,6 +33,9 @@ type Report struct {
 	// Clear cover to the stirrups and the greater effective depth of the two
 	// faces, in metres.
 	Cover, Deepest float64
+	// Tight is the least clear gap between bars of a layer over the gap
+	// required, at the bottom and at the top.
+	Tight [2]float64
 }
 
 // OK reports whether nothing is wrong and the method applies.
@@ -116,7 +119,8 @@ func (b *Beam) with(l *beam.Layout) (*judge, error) {
 		metres = 0.0254
 	}
 	j.report.Cover = j.cover * metres
-	for _, bed := range j.beds {
+	for k, bed := range j.beds {
+		j.report.Tight[k] = bed.tight
 		if bed.count > 0 {
 			j.report.Deepest = math.Max(j.report.Deepest, (j.h-bed.centroid)*metres)
 		}

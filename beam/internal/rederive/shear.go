@@ -86,8 +86,25 @@ type shearing struct {
 }
 
 // at judges a section under a shear, the moment acting with it and an axial
-// force, compression positive.
+// force, compression positive. A section that needs no stirrups is none the
+// worse for those it has.
 func (w *web) at(v, m, nu float64) shearing {
+	out := w.judge(v, m, nu)
+	if w.s == 0 || out.most() <= 1+slack {
+		return out
+	}
+	without := *w
+	without.av, without.s = 0, 0
+	without.prepare()
+	if bare := without.judge(v, m, nu); bare.most() <= 1+slack {
+		return bare
+	}
+	return out
+}
+
+func (s shearing) most() float64 { return max(s.strength, s.limit, s.least, s.along, s.across) }
+
+func (w *web) judge(v, m, nu float64) shearing {
 	p, bd := w.p, w.bw*w.d
 	v, m = math.Abs(v), math.Abs(m)
 	if v == 0 {

@@ -168,7 +168,7 @@ func (b *Beam) Enough(l beam.Layout) (at []float64, ok []bool, err error) {
 			a, v = m.at(&m.combos[s.combo], x, x > s.x)
 		}
 		fits, found := j.sectionShear(webs, a, v, 0)
-		well := !found || max(fits.strength, fits.limit, fits.least, fits.along, fits.across) <= 1+slack
+		well := !found || fits.most() <= 1+slack
 		if n := len(at); n > 0 && at[n-1] == s.x*unit {
 			ok[n-1] = ok[n-1] && well
 			continue
