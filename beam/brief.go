@@ -75,7 +75,7 @@ type Load struct {
 	Force        units.Force
 	Moment       units.Moment // a couple, clockwise positive; a torque about the beam's axis
 	Hung         bool         // applied at or below the soffit
-	Sustained    float64      // share of the load that stays, 0 to 1
+	Sustained    float64      // share of the load that stays, 0 to 1; for deflection, which is not judged yet
 }
 
 // Demand is one set of factored forces from the caller's own analysis.
@@ -90,7 +90,7 @@ type Demand struct {
 // Serviceability says what the deflection must protect.
 type Serviceability struct {
 	Attached Attachment
-	Months   int // age at which long-term deflection is wanted; zero: 60
+	Months   int // age at which long-term deflection is wanted, which is not judged yet; zero: 60
 }
 
 // Preferences steer the search; none of them relaxes a check.

@@ -51,8 +51,14 @@ func (t *Trial) appendGeometry(dst []Check) []Check {
 		c.Compare(f.Fit.Height.Add(other).Amount(), depth.Amount())
 		dst = append(dst, c)
 	}
+	dst = t.appendSideGeometry(dst)
 	for i := range t.Zones {
-		c := Check{ID: "stirrup.bends", Clause: clause, Span: t.Zones[i].Span, At: t.Zones[i].From, Detailing: true}
+		// Stirrups stand clear of each other as bars do.
+		c := Check{ID: "stirrup.clear", Clause: clause, Span: t.Zones[i].Span, At: t.Zones[i].From, Detailing: true}
+		c.Compare(t.ZoneBar[i].Diameter.Add(t.Code.Gaps(t.Problem).InLayer.Least).Amount(), t.Zones[i].Spacing.Amount())
+		dst = append(dst, c)
+
+		c = Check{ID: "stirrup.bends", Clause: clause, Span: t.Zones[i].Span, At: t.Zones[i].From, Detailing: true}
 		cage := t.cage()
 		width, depth := cage.Outside()
 		bend, err := t.ZoneBar[i].Bend(bars.Stirrup)
@@ -65,6 +71,23 @@ func (t *Trial) appendGeometry(dst []Check) []Check {
 		dst = append(dst, c)
 	}
 	return dst
+}
+
+// appendSideGeometry sees whether side-face bars lie between the bars of top
+// and bottom, clear of both and of each other.
+func (t *Trial) appendSideGeometry(dst []Check) []Check {
+	s := &t.Side
+	if s.Each == 0 {
+		return dst
+	}
+	const clause = "geometry"
+	gap, radius := t.Code.Gaps(t.Problem).InLayer.Least, s.Size.Diameter.Scale(0.5)
+	near, far := t.Steel(s.TensionFace), t.Steel(s.TensionFace.Opposite())
+	clear := Check{ID: "side-face.clear", Clause: clause, Face: Side, Detailing: true}
+	clear.Compare(near.Fit.Height.Sub(near.Nearest).Max(radius).Add(gap).Add(radius).Amount(), s.Spacing.Amount())
+	room := Check{ID: "side-face.room", Clause: clause, Face: Side, Detailing: true}
+	room.Compare(near.Nearest.Add(s.Spacing.Scale(float64(s.Each))).Add(radius).Add(gap).Add(far.Fit.Height).Amount(), t.Brief.Section.Depth.Amount())
+	return append(dst, clear, room)
 }
 
 // layoutOf writes a found layout as a drawing would.
@@ -145,6 +168,10 @@ func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
 		switch r.Face {
 		case Bottom, Top:
 		case Side:
+			if t.Side.Each > 0 {
+				f.add(path, "one row of side bars", "a second row of side bars is given")
+				continue
+			}
 			t.Side = SideSteel{Size: size, Each: r.Count, Spacing: r.Spacing, TensionFace: Bottom}
 			if !(r.Spacing.Amount().SI() > 0) {
 				f.add(path+"/spacing", "above zero", "side bars need the distance between them, and it is %s", p.System.Format(r.Spacing.Amount()))

@@ -37,6 +37,11 @@ func cures(ctx context.Context, code Code, brief Brief, r *Result) ([]Cure, erro
 			b.Concrete.Strength = b.Concrete.Strength.Add(strength.Scale(float64(k)))
 			return from, b.Concrete.Strength.Amount()
 		}},
+		{"stirrup legs", func(b *Brief, k int) (from, to units.Amount) {
+			legs := &r.Problem.Brief.Preferences.MaxLegs
+			b.Preferences.MaxLegs = min(*legs+k, mostLegs)
+			return units.Plain(float64(*legs)), units.Plain(float64(b.Preferences.MaxLegs))
+		}},
 	}
 	var out []Cure
 	for _, change := range changes {

@@ -92,6 +92,9 @@ func TestCuresPassWhenApplied(t *testing.T) {
 			again.Section.Width, _ = c.To.Length()
 		case "concrete strength":
 			again.Concrete.Strength, _ = c.To.Stress()
+		case "stirrup legs":
+			legs, _ := c.To.Plain()
+			again.Preferences.MaxLegs = int(legs)
 		default:
 			t.Fatalf("unknown change %q", c.Change)
 		}
@@ -276,6 +279,10 @@ func TestFaultsOfALayout(t *testing.T) {
 		{"side bars without spacing", func(l *beam.Layout) {
 			l.Longitudinal = append(l.Longitudinal, beam.Row{Bar: "#4", Count: 2, Face: beam.Side})
 		}, "/layout/longitudinal/2/spacing"},
+		{"two rows of side bars", func(l *beam.Layout) {
+			side := beam.Row{Bar: "#4", Count: 2, Face: beam.Side, Spacing: units.Inch.Of(5)}
+			l.Longitudinal = append(l.Longitudinal, side, side)
+		}, "/layout/longitudinal/3"},
 		{"one leg", func(l *beam.Layout) { l.Transverse[0].Legs = 1 }, "/layout/transverse/0/legs"},
 		{"no spacing", func(l *beam.Layout) { l.Transverse[0].Spacing = units.Length{} }, "/layout/transverse/0/spacing"},
 		{"off the span", func(l *beam.Layout) { l.Transverse[0].To = units.Foot.Of(40) }, "/layout/transverse/0/to"},
@@ -374,4 +381,46 @@ func TestResultHoldsStrengths(t *testing.T) {
 	require.Less(t, r.Flexure[0].CrossCheck.Difference, 1e-6)
 	i := slices.IndexFunc(r.Checks, func(c beam.Check) bool { return c.ID == "flexure.positive" })
 	require.InEpsilon(t, r.Checks[i].Capacity.SI(), r.Flexure[0].Design.Amount().SI(), 1e-12)
+}
+
+// What no code is needed to see: bars and stirrups that would run through each
+// other or out of the beam.
+func TestGeometryOfALayout(t *testing.T) {
+	sound := design(t, plain()).Layout
+	tests := []struct {
+		name string
+		edit func(l *beam.Layout)
+		id   string
+	}{
+		{"side bars beyond the beam", func(l *beam.Layout) {
+			l.Longitudinal = append(l.Longitudinal, beam.Row{Bar: "#4", Count: 30, Face: beam.Side, Spacing: units.Inch.Of(9)})
+		}, "side-face.room"},
+		{"side bars on top of each other", func(l *beam.Layout) {
+			l.Longitudinal = append(l.Longitudinal, beam.Row{Bar: "#4", Count: 2, Face: beam.Side, Spacing: units.Inch.Of(0.9)})
+		}, "side-face.clear"},
+		{"stirrups through each other", func(l *beam.Layout) {
+			l.Transverse[0].Spacing, l.Transverse[0].Count = units.Inch.Of(0.4), 0
+		}, "stirrup.clear"},
+		{"more bars than the width holds", func(l *beam.Layout) { l.Longitudinal[0].Count = 12 }, "fit.width"},
+		{"layers up to the top", func(l *beam.Layout) {
+			for layer := 2; layer <= beam.MaxLayers; layer++ {
+				l.Longitudinal = append(l.Longitudinal, beam.Row{Bar: "#18", Count: 2, Face: beam.Bottom, Layer: layer})
+			}
+			l.Longitudinal[0].Bar, l.Longitudinal[0].Count = "#18", 2
+			for layer := 2; layer <= beam.MaxLayers; layer++ {
+				l.Longitudinal = append(l.Longitudinal, beam.Row{Bar: "#18", Count: 2, Face: beam.Top, Layer: layer})
+			}
+			l.Longitudinal[1].Bar = "#18"
+		}, "fit.depth"},
+	}
+	for _, tt := range tests {
+		t.Run(tt.name, func(t *testing.T) {
+			l := beam.Layout{Longitudinal: slices.Clone(sound.Longitudinal), Transverse: slices.Clone(sound.Transverse)}
+			tt.edit(&l)
+			r, err := beam.CheckLayout(context.Background(), aci318.ACI31819(), plain(), l)
+			require.NoError(t, err)
+			require.Equal(t, beam.Unsatisfied, r.Verdict)
+			require.Contains(t, r.Binding, tt.id)
+		})
+	}
 }

@@ -82,6 +82,9 @@ func (r *Result) strengths(p *prepared, t *Trial) error {
 			continue
 		}
 		b := &t.Brief
+		if !t.inside(sense) {
+			continue // a check says so; there is no strength to give
+		}
 		q := SectionQuery{Section: b.Section, Concrete: b.Concrete, Bending: sense, Readings: b.Readings}
 		for _, l := range t.Layers(sense, mechanics.Steel{}) {
 			q.Layers = append(q.Layers, SteelLayer{Area: l.Area, Depth: l.Depth, Yield: b.Reinforcement.Yield})
@@ -96,6 +99,16 @@ func (r *Result) strengths(p *prepared, t *Trial) error {
 		r.Flexure = append(r.Flexure, found.Flexure)
 	}
 	return nil
+}
+
+// inside reports whether the bars of a sense lie in the section at all.
+func (t *Trial) inside(sense Sense) bool {
+	for _, l := range t.Layers(sense, mechanics.Steel{}) {
+		if l.Depth.Compare(units.Length{}) < 0 || t.Brief.Section.Depth.Less(l.Depth) {
+			return false
+		}
+	}
+	return true
 }
 
 // judgedStrength reports whether anything was judged at all: a result in

@@ -19,9 +19,9 @@ type Row struct {
 	// Spacing is the vertical distance between side bars, counted from the
 	// bars nearest the tension face; zero for other faces.
 	Spacing units.Length
-	// InCompression says that the row is relied on as compression steel, so
-	// that the code's tie rules apply to it. Bars that only hold stirrups
-	// are not.
+	// InCompression says that the bars are relied on as compression steel, so
+	// that the code's tie rules apply to them; bars that only hold stirrups
+	// are not. It goes for the whole face: one row that says so is enough.
 	InCompression bool
 	From, To      units.Length // along the whole beam; both zero: full length
 	Start, End    string       // how each end stops; "straight" in this version

@@ -96,7 +96,7 @@ type Alternative struct {
 
 // Cure is a change of the brief that was itself designed and found to pass.
 type Cure struct {
-	Change      string // "depth", "width", "concrete strength"
+	Change      string // "depth", "width", "concrete strength", "stirrup legs"
 	From, To    units.Amount
 	Governing   string // of the beam so changed
 	Utilization float64

@@ -56,6 +56,7 @@ const (
 	mostMonths      = 1200
 	mostDepths      = 50
 	mostAlternative = 50
+	mostLegs        = 12
 )
 
 // faults collects everything wrong with an input, in the units of system.
@@ -290,7 +291,7 @@ func (p *Preferences) check(f *faults, catalog bars.Catalog) {
 	}
 	f.count("/preferences/max_layers", "most layers", p.MaxLayers, 0, MaxLayers)
 	if p.MaxLegs != 0 {
-		f.count("/preferences/max_legs", "most stirrup legs", p.MaxLegs, 2, 12)
+		f.count("/preferences/max_legs", "most stirrup legs", p.MaxLegs, 2, mostLegs)
 	}
 	if p.MaxZones != 0 && p.MaxZones != 1 && p.MaxZones != 3 {
 		f.add("/preferences/max_zones", "1, 3", "most stirrup zones is %d", p.MaxZones)

@@ -55,12 +55,27 @@ func (c Code) Cover(p *beam.Problem, stirrup, bar bars.Size) units.Length {
 // noteOwnCover is said where the brief's own cover is less than the table's.
 const noteOwnCover = "the brief asks for less cover than the table: whether that is permitted is not judged"
 
-// coverCheck compares a cover with the least. A cover that the brief itself
-// sets below the table is not judged.
+// ownCover reports whether the brief sets a cover below the table's for the
+// outermost steel: that is the engineer's decision, and no cover is judged. One
+// that only the bars behind the stirrup fall short of is no decision but a
+// choice of bars, and fails.
+func (e *edition) ownCover(t *beam.Trial) bool {
+	outermost := &t.Stirrup
+	if t.Stirrup.Diameter.IsZero() {
+		outermost = &t.Bottom.Largest
+		if outermost.Diameter.Less(t.Top.Largest.Diameter) {
+			outermost = &t.Top.Largest
+		}
+	}
+	own := t.Brief.Cover
+	return !own.IsZero() && !e.leastCover(t.Brief.Exposure, outermost).AtMost(own)
+}
+
+// coverCheck compares a cover with the least.
 func (e *edition) coverCheck(id string, t *beam.Trial, least, cover units.Length) beam.Check {
 	c := beam.Check{ID: id, Clause: e.cover.clause}
 	c.Compare(least.Amount(), cover.Amount())
-	if c.Outcome == beam.Fail && !t.Brief.Cover.IsZero() && t.Brief.Cover.AtMost(t.Cover) {
+	if c.Outcome == beam.Fail && e.ownCover(t) {
 		c.Outcome, c.Reason = beam.NotJudged, noteOwnCover
 	}
 	if t.Record {

@@ -111,8 +111,8 @@ func TestCoverChecks(t *testing.T) {
 	require.Equal(t, beam.Fail, only(t, checks, "cover.stirrup").Outcome)
 	require.Equal(t, beam.Fail, checksOf(checks, "cover.bar")[0].Outcome)
 
-	// Less cover than the table because the brief says so is not judged; that
-	// it is enough for the stirrups alone does not help the bars.
+	// A cover of the brief that is enough for the stirrups does not excuse bars
+	// that it leaves with too little.
 	tr = shearTrial(t, ACI31819(), exposed)
 	tr.Cover, tr.Brief.Cover = units.Inch.Of(1.5), units.Inch.Of(1.5)
 	for i := range tr.Bottom.Fit.Bars {
@@ -121,9 +121,20 @@ func TestCoverChecks(t *testing.T) {
 	checks = us19.judgeFitting(nil, tr)
 	require.Equal(t, beam.Pass, only(t, checks, "cover.stirrup").Outcome)
 	bottom := checksOf(checks, "cover.bar")[0]
-	require.Equal(t, beam.NotJudged, bottom.Outcome)
-	require.Equal(t, noteOwnCover, bottom.Reason)
+	require.Equal(t, beam.Fail, bottom.Outcome)
 	require.InEpsilon(t, 1.875, valueIn(t, bottom.Capacity, "in"), 1e-9)
+
+	// One below the table's for the stirrups is the engineer's decision: it is
+	// not judged, and stands among what only the engineer can confirm.
+	tr.Cover, tr.Brief.Cover = units.Inch.Of(1.25), units.Inch.Of(1.25)
+	checks = us19.judgeFitting(nil, tr)
+	require.Equal(t, beam.NotJudged, only(t, checks, "cover.stirrup").Outcome)
+	require.Equal(t, noteOwnCover, only(t, checks, "cover.stirrup").Reason)
+	require.Equal(t, beam.NotJudged, checksOf(checks, "cover.bar")[0].Outcome)
+	var note beam.Register
+	us19.settleCover(tr, &note)
+	require.Len(t, note.All(), 1)
+	require.True(t, note.All()[0].Open)
 }
 
 // 25.2.1: 1 in., db, 4/3 of the aggregate; 25.2.2: 1 in. between layers, and

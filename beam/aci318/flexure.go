@@ -116,6 +116,29 @@ func crossCheck(section mechanics.Section, law mechanics.Law, bending mechanics.
 	return c, nil
 }
 
+// tensionSide is the steel by which d, ρw and least steel go: the layers in
+// tension beyond mid-depth, or every layer in tension where none lies there. A
+// layer near the neutral axis that happens to be stretched is no tension
+// reinforcement; counted, it would pull d up and stand in for bars that are not
+// there.
+func tensionSide(u *mechanics.Ultimate, section mechanics.Section) (units.Area, units.Length) {
+	middle := section.Depth().Scale(0.5)
+	var area units.Area
+	moment := 0.0
+	for i := range u.Layers {
+		l := &u.Layers[i]
+		if l.Strain < 0 && middle.Less(l.Depth) {
+			a := section.Layers[i].Area
+			area = area.Add(a)
+			moment += a.In(units.SquareMetre) * l.Depth.In(units.Metre)
+		}
+	}
+	if area.IsZero() {
+		return u.TensionArea, u.EffectiveDepth
+	}
+	return area, units.Metre.Of(moment / area.In(units.SquareMetre))
+}
+
 // flexureStrength is the full account of a section's strength in bending.
 // Layers are measured from the top face, whichever the sense.
 func (e *edition) flexureStrength(section mechanics.Section, strength units.Stress, s beam.Sense, r *beam.Readings) (beam.FlexureStrength, error) {
@@ -129,12 +152,12 @@ func (e *edition) flexureStrength(section mechanics.Section, strength units.Stre
 		return beam.FlexureStrength{}, err
 	}
 	f := e.classify(&u, strength, extremeYield(section, s), r)
-	depth := u.EffectiveDepth
+	area, depth := tensionSide(&u, section)
 	out := beam.FlexureStrength{
 		Sense: s, NeutralAxis: u.NeutralAxis, BlockDepth: u.NeutralAxis.Scale(f.blockFactor), BlockFactor: f.blockFactor,
 		EffectiveDepth: depth, ExtremeDepth: u.ExtremeDepth, ExtremeStrain: f.strain, YieldStrain: f.yieldStrain,
 		Class: f.class, Phi: f.phi, Nominal: f.nominal, Design: f.design,
-		TensionSteel: u.TensionArea, LeastStrain: f.leastStrain, Equilibria: u.Equilibria,
+		TensionSteel: area, LeastStrain: f.leastStrain, Equilibria: u.Equilibria,
 		Layers: make([]beam.LayerState, len(u.Layers)),
 	}
 	for i, l := range u.Layers {

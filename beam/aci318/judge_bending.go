@@ -88,6 +88,9 @@ func (e *edition) judgeSense(dst []beam.Check, t *beam.Trial, s beam.Sense, a *b
 	strain.Compare(units.Plain(f.leastStrain), units.Plain(f.strain))
 	if t.Record {
 		w := e.flexureSteps(t, s, &f, mu)
+		if a.Combination != "" {
+			w.steps[0].Note = "under " + a.Combination
+		}
 		strength.Steps, strain.Steps = w.steps, e.strainSteps(t, &f).steps
 	}
 	dst = append(dst, strength, strain, e.judgeMinimum(t, s, a))

@@ -43,7 +43,7 @@ func (e *edition) judgeSpanShear(dst []beam.Check, t *beam.Trial, span int) []be
 		if !s.clearlyLess(from, s.right) || !s.clearlyLess(s.left, to) {
 			continue
 		}
-		dst = s.judge(dst, breaks, k, from, to, "")
+		dst = s.judge(dst, breaks, k, t.Zones[k].Spacing, from, to, "")
 		dst = e.judgeStirrups(dst, t, k, before)
 		before = k
 	}
@@ -54,7 +54,7 @@ func (e *edition) judgeSpanShear(dst []beam.Check, t *beam.Trial, span int) []be
 	for at := s.left; s.clearlyLess(at, s.right); {
 		end, covered := s.cover(at)
 		if !covered {
-			dst = s.judge(dst, breaks, -1, at, end, note)
+			dst = s.gap(dst, breaks, at, end, note)
 		}
 		at = end
 	}
@@ -68,11 +68,13 @@ func (e *edition) judgeDemandShear(dst []beam.Check, t *beam.Trial) []beam.Check
 	var limitWeb webSteel
 	zones := len(t.Zones)
 	for k := range max(zones, 1) {
-		note := ""
+		note, spacing := "", units.Length{}
 		if zones == 0 {
 			k, note = -1, noteNoStirrups
+		} else {
+			spacing = t.Zones[k].Spacing
 		}
-		z := e.newWebZone(t, 0, k)
+		z := e.newWebZone(t, 0, k, spacing)
 		z.note, z.local = note, true
 		z.bends = demandSenses(t)
 		for i := range t.Forces.Demands() {
@@ -170,11 +172,57 @@ func (s *shearSpan) cover(at units.Length) (end units.Length, covered bool) {
 	return next, false
 }
 
-// judge judges the length between two places with the stirrups of zone k, or
-// with none. Where a force jumps at an end of a zone, both sides of the jump
+// gap judges a length that no zone reaches. What counts is how far the stirrups
+// on either side of it are apart, or the first one from the face of the
+// support: up to a spacing, nothing is amiss; between two zones up to two
+// spacings are judged as the spacing that they are; anything else as bare.
+func (s *shearSpan) gap(dst []beam.Check, breaks []units.Length, at, end units.Length, note string) []beam.Check {
+	before, after := -1, -1
+	for k := range s.t.Zones {
+		if !s.stirrups(k) {
+			continue
+		}
+		if reach := s.reach(k); !s.clearlyLess(reach, at) && !s.clearlyLess(at, reach) {
+			before = k
+		}
+		if from := s.t.Zones[k].From; !s.clearlyLess(from, end) && !s.clearlyLess(end, from) {
+			after = k
+		}
+	}
+	one := max(before, after)
+	if one < 0 {
+		return s.judge(dst, breaks, -1, units.Length{}, at, end, note)
+	}
+	half := func(k int) units.Length { return s.t.Zones[k].Spacing.Scale(0.5) }
+	if before < 0 || after < 0 {
+		if end.Sub(at).AtMost(half(one)) {
+			return dst
+		}
+		return s.judge(dst, breaks, -1, units.Length{}, at, end, note)
+	}
+	apart := half(before).Add(end.Sub(at)).Add(half(after))
+	wider, weaker := before, before
+	if s.t.Zones[before].Spacing.Less(s.t.Zones[after].Spacing) {
+		wider = after
+	}
+	switch spacing := s.t.Zones[wider].Spacing; {
+	case apart.AtMost(spacing):
+		return dst
+	case !apart.AtMost(spacing.Scale(2)):
+		return s.judge(dst, breaks, -1, units.Length{}, at, end, note)
+	}
+	legs := func(k int) units.Area { return s.t.ZoneBar[k].Area.Scale(float64(s.t.Zones[k].Legs)) }
+	if legs(after).Less(legs(before)) {
+		weaker = after
+	}
+	return s.judge(dst, breaks, weaker, apart, at, end, noteBetween)
+}
+
+// judge judges the length between two places with the stirrups of zone k at a
+// spacing, or with none. Where a force jumps at an end of a zone, both sides of the jump
 // count.
-func (s *shearSpan) judge(dst []beam.Check, breaks []units.Length, k int, from, to units.Length, note string) []beam.Check {
-	z := s.e.newWebZone(s.t, s.span, k)
+func (s *shearSpan) judge(dst []beam.Check, breaks []units.Length, k int, spacing, from, to units.Length, note string) []beam.Check {
+	z := s.e.newWebZone(s.t, s.span, k, spacing)
 	z.note, z.bends = note, s.bends
 	f := &s.t.Forces
 	for i := range f.Combinations() {

@@ -145,7 +145,12 @@ func TestGapsBetweenZonesAreJudged(t *testing.T) {
 			addZone(tr, 2, 10, 206, 258)
 		}, nil},
 		{"no zones", func(*beam.Trial) {}, [][2]float64{{6, 258}}},
-		{"begins late", func(tr *beam.Trial) { addZone(tr, 2, 10, 8, 258) }, [][2]float64{{6, 8}}},
+		{"begins late", func(tr *beam.Trial) { addZone(tr, 2, 10, 14, 258) }, [][2]float64{{6, 14}}},
+		{"first stirrup within a spacing of the face", func(tr *beam.Trial) { addZone(tr, 2, 10, 11, 258) }, nil},
+		{"two spacings left out", func(tr *beam.Trial) {
+			addZone(tr, 2, 10, 6, 96)
+			addZone(tr, 2, 10, 106.1, 258)
+		}, [][2]float64{{96, 106.1}}},
 		{"ends early", func(tr *beam.Trial) { addZone(tr, 2, 10, 6, 250) }, [][2]float64{{250, 258}}},
 		{"middle left out", func(tr *beam.Trial) {
 			addZone(tr, 2, 10, 6, 96)
@@ -204,10 +209,31 @@ func TestGapsBetweenZonesAreJudged(t *testing.T) {
 	}
 }
 
+// A short gap between zones is a wider spacing, no more: what counts is how far
+// the stirrups on either side are apart.
+func TestShortGapIsAWiderSpacing(t *testing.T) {
+	tr := shearTrial(t, ACI31819(), nil)
+	addZone(tr, 2, 10, 6, 96)
+	addZone(tr, 2, 10, 96.5, 258)
+	checks := checksOf(us19.judgeShearing(nil, tr), "shear.strength")
+	require.Len(t, checks, 3)
+	require.Equal(t, noteBetween, checks[2].Reason)
+	require.Equal(t, beam.Pass, checks[2].Outcome)
+	// 2√f'c bw d and two legs of No. 4 or as laid, 10.5 in. apart.
+	legs := tr.ZoneBar[0].Area.Scale(2).In(units.SquareInch)
+	require.InEpsilon(t, 0.75*(2*math.Sqrt(4000)*14*21.625+legs*60000*21.625/10.5), valueIn(t, checks[2].Capacity, "lb"), 1e-9)
+
+	// A wider zone beside a closer one bridges up to its own spacing.
+	tr = shearTrial(t, ACI31819(), nil)
+	addZone(tr, 2, 6, 6, 96)
+	addZone(tr, 2, 10, 97, 258)
+	require.Len(t, checksOf(us19.judgeShearing(nil, tr), "shear.strength"), 2)
+}
+
 // A gap beside the face stands for the sections up to d from it, and fails.
 func TestGapAtTheFaceFails(t *testing.T) {
 	tr := shearTrial(t, ACI31819(), nil)
-	addZone(tr, 2, 10, 8, 258)
+	addZone(tr, 2, 10, 14, 258)
 	checks := us19.judgeShearing(nil, tr)
 	strength := checksOf(checks, "shear.strength")
 	require.Len(t, strength, 2)
@@ -396,7 +422,7 @@ func TestDetailedExpressionAlongTheBeam(t *testing.T) {
 func sweep(tr *beam.Trial, e *edition, n int) float64 {
 	worst := 0.0
 	ends := shearEnds(tr, 1)
-	z := e.newWebZone(tr, 1, 0)
+	z := e.newWebZone(tr, 1, 0, tr.Zones[0].Spacing)
 	for i := range tr.Forces.Combinations() {
 		from, _ := ends[0].start(&tr.Forces, i, 1)
 		to, _ := ends[1].start(&tr.Forces, i, 1)

@@ -8,6 +8,9 @@ func (e *edition) judgeWhole(dst []beam.Check, t *beam.Trial) []beam.Check {
 	dst = e.appendDepth(dst, t)
 	dst = e.appendSideFace(dst, t)
 	dst = e.appendBracing(dst, t)
+	if t.Forces.Spans() == 0 {
+		dst = append(dst, notJudgedDepth)
+	}
 	if hangs(&t.Brief) {
 		dst = append(dst, notJudgedHanger)
 	}
@@ -44,6 +47,9 @@ func hangs(b *beam.Brief) bool {
 	return false
 }
 
+var notJudgedDepth = beam.NotJudgedCheck("scope.deep-beam", "9.9.1.1",
+	"the demands come without a beam: whether it is deep, or loaded close to a support, is the caller's to see")
+
 var notJudgedHanger = beam.NotJudgedCheck("shear.hanger-steel", "R9.4.3.2",
 	"a load or a support hangs on the beam: the steel that lifts it to the top of the beam is not designed by this version")
 
@@ -53,6 +59,10 @@ var notJudged = [...]beam.Check{
 		"bars run the full length of the beam; whether they are developed at the supports and past critical sections is not judged by this version"),
 	beam.NotJudgedCheck("cutoff.extension", "9.7.3",
 		"no bar is cut off inside the beam; extensions into the supports (9.7.3.8) are not judged by this version"),
+	beam.NotJudgedCheck("splices.lap", "25.5",
+		"bars are drawn in one length; where stock is shorter they are spliced, which this version does not design"),
+	beam.NotJudgedCheck("supports.bearing", "22.8",
+		"bearing on the supports, and the supports themselves, are not judged by this version"),
 	beam.NotJudgedCheck("integrity.continuity", "9.7.7",
 		"whether the beam is one of a perimeter, and how its bars go on into its neighbours, is not part of the input"),
 	beam.NotJudgedCheck("seismic.detailing", "Chapter 18",

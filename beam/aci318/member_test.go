@@ -208,6 +208,14 @@ func TestTorqueThreshold(t *testing.T) {
 // Every rule that puts a problem outside the method is named, with the clause
 // and the values, before any number is given.
 func TestRefusals(t *testing.T) {
+	strip := func(from, to float64) func(*beam.Brief) {
+		return func(b *beam.Brief) {
+			b.Loads = append(b.Loads, beam.Load{
+				Case: beam.Live, Shape: beam.Partial, Intensity: units.KipPerFoot.Of(2),
+				From: units.Inch.Of(from), To: units.Inch.Of(to),
+			})
+		}
+	}
 	point := func(at float64, edit ...func(*beam.Load)) func(*beam.Brief) {
 		return func(b *beam.Brief) {
 			l := beam.Load{Case: beam.Live, Shape: beam.PointLoad, Force: units.Kip.Of(10), At: units.Inch.Of(at)}
@@ -245,8 +253,6 @@ func TestRefusals(t *testing.T) {
 		{"Grade 100 in 318-14", ACI31814(), func(b *beam.Brief) { b.Reinforcement.Yield = units.KSI.Of(100) }, "scope.steel-grade", "80000 psi"},
 
 		{"bars of another standard", ACI31819(), func(b *beam.Brief) { b.Reinforcement.Catalog = "en-10080" }, "scope.bar-catalog", "en-10080"},
-		{"no stirrup size with a bend", ACI31819(), func(b *beam.Brief) { b.Preferences.Stirrups = []string{"#9", "#10"} }, "scope.bar-size", "Table 25.3.2"},
-		{"one stirrup size with a bend", ACI31819(), func(b *beam.Brief) { b.Preferences.Stirrups = []string{"#9", "#4"} }, "", ""},
 
 		// h = 24 in.: 4h = 96 in. clear; supports are 12 in. wide.
 		{"clear span above 4h", ACI31819(), func(b *beam.Brief) { b.Spans[0] = units.Inch.Of(108.1) }, "", ""},
@@ -259,6 +265,10 @@ func TestRefusals(t *testing.T) {
 		{"load at 2h", ACI31819(), point(54), "scope.load-within-2h", "48 in from the face of support 1"},
 		{"load near the right support", ACI31819(), point(240), "scope.load-within-2h", "support 2"},
 		{"load over the support", ACI31819(), point(5), "", ""},
+		{"short load near the support", ACI31819(), strip(50, 74), "scope.load-within-2h", "44 in from the face of support 1"},
+		{"short load across the face", ACI31819(), strip(2, 10), "scope.load-within-2h", "0 in from the face of support 1"},
+		{"short load beyond 2h", ACI31819(), strip(54.01, 78), "", ""},
+		{"load longer than h near the support", ACI31819(), strip(50, 74.1), "", ""},
 		{"load hung from the soffit", ACI31819(), point(30, func(l *beam.Load) { l.Hung = true }), "", ""},
 		{"load of nothing", ACI31819(), point(30, func(l *beam.Load) { l.Force = units.Force{} }), "", ""},
 		{"support hung", ACI31819(), func(b *beam.Brief) { point(30)(b); b.Supports[0].Hung = true }, "", ""},

@@ -122,9 +122,38 @@ func (r *resolution) actions() {
 			"flexure.positive", "flexure.negative", "shear.strength")
 		return
 	}
-	hung := false
+	strengths := append(flexureChecks[:len(flexureChecks):len(flexureChecks)], shearChecks...)
+	hung, lives, laterals, wind, torque := false, 0, false, false, false
 	for i := range b.Loads {
-		hung = hung || b.Loads[i].Hung
+		l := &b.Loads[i]
+		hung = hung || l.Hung
+		if l.Case == beam.Live {
+			lives++
+		}
+		wind = wind || l.Case == beam.Wind
+		laterals = laterals || l.Case == beam.Wind || l.Case == beam.Earthquake
+		torque = torque || l.Shape == beam.Torque || l.Shape == beam.UniformTorque
+	}
+	if b.NoSelfWeight {
+		r.confirm("loads.self-weight", "the dead load given holds the beam's own weight", strengths...)
+	}
+	if lives > 0 {
+		r.confirm("loads.live", "live loads are as given: not reduced for area here, and those of one case act all together, even where one relieves another", strengths...)
+	}
+	if wind {
+		r.confirm("loads.wind", "wind is at strength level (5.3.5 asks 1.6W of a service-level wind)", strengths...)
+	}
+	if laterals {
+		r.confirm("loads.reversal", "wind and earthquake act with the same magnitude in both senses", strengths...)
+	}
+	if torque {
+		r.confirm("supports.torsion", "every support holds the beam against twist", "torsion.threshold")
+	}
+	for i := range b.Supports {
+		if b.Supports[i].Kind == statics.Fixed {
+			r.confirm("supports.fixity", "fixed ends do not turn, and pinned ends and rollers turn freely; the joint is designed for the moment", strengths...)
+			break
+		}
 	}
 	for i := range b.Supports {
 		s := &b.Supports[i]

@@ -5,7 +5,6 @@ import (
 	"math"
 	"slices"
 
-	"soffit.example/bars"
 	"soffit.example/beam"
 	"soffit.example/beam/statics"
 	"soffit.example/units"
@@ -26,10 +25,10 @@ var (
 // scopeWords is what every edition refuses, or leaves out, in words.
 var scopeWords = []string{
 	"deep beams: clear spans of at most 4h, cantilevers of at most 2h (9.9)",
-	"concentrated loads within 2h of the face of a support that they press towards (9.9)",
+	"concentrated loads within 2h of the face of a support, among them loads spread over no more than h (9.9)",
 	"axial compression of at least 0.10 f'c Ag, and axial tension (22.4)",
 	"torsion not below its threshold (22.7)",
-	"concrete below the least strength of 19.2.1.1, and densities outside 19.2.2.1",
+	"concrete below the least strength of 19.2.1.1",
 	"bars that are not of ASTM sizes (20.2.1.3), or stronger than Table 20.2.2.4 allows",
 	"flanged and hollow sections, openings, prestress, shotcrete and steel fibres",
 	"seismic detailing (chapter 18), and strut-and-tie design (chapter 23)",
@@ -39,7 +38,7 @@ var scopeWords = []string{
 func (e *edition) scopeOf(p *beam.Problem) []beam.Refusal {
 	b := &p.Brief
 	out := e.materialRefusals(&b.Concrete, b.Reinforcement.Yield)
-	out = append(out, barRefusals(p)...)
+	out = append(out, barRefusals(b)...)
 	for span := 1; span <= p.Forces.Spans(); span++ {
 		out = append(out, e.deepRefusals(p, span)...)
 	}
@@ -49,38 +48,15 @@ func (e *edition) scopeOf(p *beam.Problem) []beam.Refusal {
 	return append(out, e.torsionRefusals(p)...)
 }
 
-// barRefusals names a catalog or sizes that the standard does not know.
-func barRefusals(p *beam.Problem) []beam.Refusal {
-	b := &p.Brief
+// barRefusals names a catalog that the standard does not know.
+func barRefusals(b *beam.Brief) []beam.Refusal {
 	if known := []string{"astm-inch", "astm-metric"}; !slices.Contains(known, b.Reinforcement.Catalog) {
 		return []beam.Refusal{{
 			Rule: "scope.bar-catalog", Clause: "20.2.1.3",
 			Detail: fmt.Sprintf("bars of catalog %s are not bars of the ASTM standards that 20.2.1.3 names; those of %s and %s are", b.Reinforcement.Catalog, known[0], known[1]),
 		}}
 	}
-	var out []beam.Refusal
-	for _, use := range []struct {
-		what  string
-		as    bars.Use
-		names []string
-		rule  string
-	}{
-		{"longitudinal bars", bars.Main, b.Preferences.Bars, "sizes No. 3 to No. 18 may be"},
-		{"stirrups", bars.Stirrup, b.Preferences.Stirrups, "Table 25.3.2 has bends for No. 3 to No. 8"},
-	} {
-		allowed := len(use.names) == 0
-		for _, name := range use.names {
-			s, err := p.Catalog.Size(name)
-			allowed = allowed || err == nil && p.Code.Allows(use.as, s)
-		}
-		if !allowed {
-			out = append(out, beam.Refusal{
-				Rule: "scope.bar-size", Clause: "25.3",
-				Detail: fmt.Sprintf("none of the sizes %v may be used for %s: %s", use.names, use.what, use.rule),
-			})
-		}
-	}
-	return out
+	return nil
 }
 
 // deepRefusals names what makes a span, or a part of it, a deep beam. The
@@ -104,12 +80,15 @@ func (e *edition) deepRefusals(p *beam.Problem, span int) []beam.Refusal {
 	left, right := p.Faces(span)
 	for i := range b.Loads {
 		l := &b.Loads[i]
-		if l.Shape != beam.PointLoad || l.Force.IsZero() || l.Hung || l.Span != 0 && l.Span != span {
+		a, z, ok := concentratedOver(l, h)
+		if !ok || l.Hung || l.Span != 0 && l.Span != span {
 			continue
 		}
-		for end, from := range [2]units.Length{l.At.Sub(left), right.Sub(l.At)} {
+		// How far the load's near and far ends are from each face.
+		for end, reach := range [2][2]units.Length{{a.Sub(left), z.Sub(left)}, {right.Sub(z), right.Sub(a)}} {
 			s := &b.Supports[span-1+end]
-			if s.Kind == statics.Free || s.Hung || from.AtMost(units.Length{}) || !from.AtMost(h.Scale(r.deepLoad)) {
+			from := reach[0].Max(units.Length{})
+			if s.Kind == statics.Free || s.Hung || reach[1].AtMost(units.Length{}) || !from.AtMost(h.Scale(r.deepLoad)) {
 				continue
 			}
 			out = append(out, beam.Refusal{
@@ -120,6 +99,21 @@ func (e *edition) deepRefusals(p *beam.Problem, span int) []beam.Refusal {
 		}
 	}
 	return out
+}
+
+// concentratedOver is the length over which a load acts as a concentrated one:
+// a point load, or a load spread over no more than the depth of the beam, which
+// spreads that far on its way to mid-depth anyway (a judgement: the standard
+// draws no line).
+func concentratedOver(l *beam.Load, h units.Length) (from, to units.Length, ok bool) {
+	switch l.Shape {
+	case beam.PointLoad:
+		return l.At, l.At, !l.Force.IsZero()
+	case beam.Partial:
+		nothing := l.Intensity.IsZero() && (!l.Varies || l.IntensityEnd.IsZero())
+		return l.From, l.To, !nothing && l.To.Sub(l.From).AtMost(h)
+	}
+	return from, to, false
 }
 
 // axialRefusals names an axial force that pure bending does not cover: 9.5.2.1

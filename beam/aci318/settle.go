@@ -12,6 +12,22 @@ import (
 func (c Code) Settle(t *beam.Trial, checks []beam.Check, note *beam.Register) {
 	c.e.settleTensionControl(t, note)
 	c.e.settleLeastStirrups(t, note)
+	c.e.settleCover(t, note)
+}
+
+// settleCover lists a cover that the brief itself sets below the table's.
+func (e *edition) settleCover(t *beam.Trial, note *beam.Register) {
+	if !e.ownCover(t) {
+		return
+	}
+	least := e.leastCover(t.Brief.Exposure, &t.Stirrup)
+	note.Assume(beam.Assumption{
+		ID: "cover.below-table",
+		Assumed: fmt.Sprintf("a cover of %s is permitted here, though %s asks %s of %s exposure",
+			e.length.Format(t.Brief.Cover), e.cover.clause, e.length.Format(least), t.Brief.Exposure),
+		UsedIn: []string{"cover.stirrup", "cover.bar"},
+		Open:   true,
+	})
 }
 
 // settleTensionControl gives the class of each sense that is bent. φ follows

@@ -27,6 +27,7 @@ const (
 	notePulled      = "shear at the face, not at d: under this combination the reaction pulls (9.4.3.2(a))"
 	noteNoStirrups  = "judged without stirrups: there are none"
 	noteGap         = "judged without stirrups: no zone of the layout reaches this length"
+	noteBetween     = "between two zones: the spacing is the distance of the stirrups on either side"
 	noteNotRequired = "stirrups are not required here: Vu is below the shear that calls for them, and below φVc"
 	noteForStrength = "9.6.3.1 does not ask for least stirrups here; strength does"
 	noteHook        = "a standard hook round a bar develops stirrups of this size and strength"
@@ -129,7 +130,7 @@ func hungLoads(b *beam.Brief, span int) bool {
 	return false
 }
 
-// concentrated reports a point load or a couple on the span between two
+// concentrated reports a concentrated load or a couple on the span between two
 // places, the second of them included.
 func concentrated(b *beam.Brief, span int, face, critical units.Length) bool {
 	reach := critical.Sub(face).Abs()
@@ -138,14 +139,18 @@ func concentrated(b *beam.Brief, span int, face, critical units.Length) bool {
 		if l.Span != 0 && l.Span != span {
 			continue
 		}
-		if l.Shape != beam.PointLoad && l.Shape != beam.Couple || l.Force.IsZero() && l.Moment.IsZero() {
+		a, z, ok := concentratedOver(l, b.Section.Depth)
+		if l.Shape == beam.Couple {
+			a, z, ok = l.At, l.At, !l.Moment.IsZero()
+		}
+		if !ok {
 			continue
 		}
-		from := l.At.Sub(face)
+		near, far := a.Sub(face), z.Sub(face)
 		if critical.Less(face) {
-			from = from.Neg()
+			near, far = far.Neg(), near.Neg()
 		}
-		if !from.AtMost(units.Length{}) && from.AtMost(reach) {
+		if !far.AtMost(units.Length{}) && near.AtMost(reach) {
 			return true
 		}
 	}

@@ -59,7 +59,7 @@ func (w *webShear) rowSteps(e *edition, out *working, c *concreteShear, enough b
 		plus = " + n"
 	}
 	out.given("As", "steel on the flexural tension side", "", e.asArea(w.as))
-	out.find("ρw", "ratio of that steel to the web", "", "As / (bw d)", asPlain(w.ratio))
+	out.find("ρw", "ratio of that steel to the web", "22.5.5.1", "As / (bw d)", asPlain(w.ratio))
 	choice := "Vc,c"
 	if enough {
 		out.find("Vc,a", "concrete shear strength by row (a)", rowA.clause(),
@@ -127,7 +127,7 @@ func (w *webShear) methodSteps(e *edition, out *working, c *concreteShear, s *se
 		out.find("Vc", meaning, c.row.clause(), number(r.plain)+" λ r bw d", e.asForce(c.strength))
 	default:
 		out.given("As", "steel on the flexural tension side", "", e.asArea(w.as))
-		out.find("ρw", "ratio of that steel to the web", "", "As / (bw d)", asPlain(w.ratio))
+		out.find("ρw", "ratio of that steel to the web", "22.5.5.1", "As / (bw d)", asPlain(w.ratio))
 		least := "min(Vc,b, Vc,c)"
 		if c.a != 0 {
 			out.given("Mu", "factored moment acting with it", "", e.asMoment(s.moment))

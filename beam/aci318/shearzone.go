@@ -64,7 +64,7 @@ type peakShear struct {
 }
 
 // newWebZone prepares a stretch; zone is -1 where there are no stirrups.
-func (e *edition) newWebZone(t *beam.Trial, span, zone int) webZone {
+func (e *edition) newWebZone(t *beam.Trial, span, zone int, spacing units.Length) webZone {
 	z := webZone{e: e, t: t, span: span, zone: zone}
 	b := &t.Brief
 	z.local = !e.shear.rowsByStirrups && b.Readings.ShearMethod == beam.DetailedShear
@@ -76,7 +76,7 @@ func (e *edition) newWebZone(t *beam.Trial, span, zone int) webZone {
 	s.stirrups.yield = b.Reinforcement.StirrupYield
 	if zone >= 0 {
 		s.stirrups.area = bars.TotalArea(bars.Group{Size: t.ZoneBar[zone], Count: t.Zones[zone].Legs})
-		s.stirrups.spacing = t.Zones[zone].Spacing
+		s.stirrups.spacing = spacing
 		z.legs = legSpacing(b.Section.Width, t.Cover, t.ZoneBar[zone].Diameter, t.Zones[zone].Legs)
 	}
 	for i, sense := range [2]beam.Sense{beam.Positive, beam.Negative} {

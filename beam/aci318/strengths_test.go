@@ -259,3 +259,29 @@ func TestStrengthsSayWhenTwoEquilibriaExist(t *testing.T) {
 	}
 	require.True(t, found)
 }
+
+// A hanger layer that happens to lie just below the neutral axis is no tension
+// reinforcement: d, ρw and least steel go by the layers beyond mid-depth
+// (ACI 318-19 R22.5.5.1 counts bars farther than two-thirds of the depth).
+func TestStretchedHangerIsNoTensionSteel(t *testing.T) {
+	q := beam.SectionQuery{
+		Section:  beam.Section{Shape: beam.Rectangular, Width: units.Inch.Of(14), Depth: units.Inch.Of(24)},
+		Concrete: beam.Concrete{Strength: units.PSI.Of(4000)}, Bending: beam.Positive,
+		Layers: []beam.SteelLayer{{Area: units.SquareInch.Of(0.62), Depth: units.Inch.Of(21.8), Yield: units.KSI.Of(60)}},
+		Demand: beam.Demand{Moment: units.KipFoot.Of(58)},
+	}
+	alone, err := ACI31819().Strengths(q)
+	require.NoError(t, err)
+	q.Layers = append(q.Layers, beam.SteelLayer{Area: units.SquareInch.Of(0.62), Depth: units.Inch.Of(2.2), Yield: units.KSI.Of(60)})
+	with, err := ACI31819().Strengths(q)
+	require.NoError(t, err)
+	require.InEpsilon(t, 21.8, with.Flexure.EffectiveDepth.In(units.Inch), 1e-12)
+	require.Equal(t, alone.Flexure.TensionSteel, with.Flexure.TensionSteel)
+	require.Equal(t, alone.Flexure.MinimumSteel, with.Flexure.MinimumSteel)
+	// 200/60000 × 14 × 21.8 = 1.017 in2 against 0.62 (own calculation from 9.6.1.2)
+	for _, c := range with.Checks {
+		if c.ID == "flexure.minimum.positive" {
+			require.Equal(t, beam.Fail, c.Outcome)
+		}
+	}
+}

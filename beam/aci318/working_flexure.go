@@ -9,11 +9,20 @@ import (
 	"soffit.example/units"
 )
 
+// momentClause is where the critical section of a moment comes from; demands
+// bring their own.
+func momentClause(t *beam.Trial) string {
+	if t.Forces.Spans() == 0 {
+		return ""
+	}
+	return "9.4.2.1"
+}
+
 // flexureSteps is the working of φMn for the equilibrium in t.Ultimate.
 func (e *edition) flexureSteps(t *beam.Trial, s beam.Sense, f *flexure, moment units.Moment) *working {
 	b := &t.Brief
 	w := new(working)
-	w.given("Mu", "factored moment", "9.4.2.1", e.asMoment(e.momentIn(moment)))
+	w.given("Mu", "factored moment", momentClause(t), e.asMoment(e.momentIn(moment)))
 	e.strengthSteps(w, e.trialSection(t, s), &t.Ultimate, b.Concrete.Strength, f)
 	e.phiSteps(w, f, b.Reinforcement.Yield, b.Readings.RoundedYield)
 	w.find("φMn", "design strength", "9.5.1.1", "φ Mn", e.asMoment(e.momentIn(f.design)))
@@ -70,6 +79,7 @@ func (e *edition) yieldingSteps(w *working, section mechanics.Section, u *mechan
 	if n == 1 {
 		w.given("As", "area of the bars in tension", "", area)
 		w.given("d", "depth of the bars in tension from the compression face", "", depth)
+		w.note("h less the height of their centres above the tension face, by coordinates")
 	} else {
 		e.layerInputs(w, section, u)
 		w.find("As", "area of all bars in tension", "", sum(n, "As#"), area)
@@ -263,7 +273,7 @@ func (e *edition) minimumSteps(t *beam.Trial, s beam.Sense, m *minimumSteel, req
 	w.given("d", "depth to the centroid of the tension steel", "", e.asLength(m.depth))
 	m.steps(e, w)
 	if req.ok && req.phi == e.reduction.tension {
-		w.given("Mu", "factored moment", "9.4.2.1", e.asMoment(e.momentIn(moment)))
+		w.given("Mu", "factored moment", momentClause(t), e.asMoment(e.momentIn(moment)))
 		w.find("φ", "strength reduction factor", "Table 21.2.2", number(req.phi), asPlain(req.phi))
 		w.note("with so little steel the section is tension-controlled")
 		w.find("a", "depth of the block that the moment needs", "22.3", "d - √(d^2 - 2 Mu / (φ 0.85 f'c b))", e.asLength(req.block))
