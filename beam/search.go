@@ -340,7 +340,7 @@ func (s *search) helped(tie bars.Size, face Face, b *barSet, others [][]barSet) 
 // hold: other sizes would change nothing in that.
 func (s *search) compress(tie bars.Size, face Face, b *barSet, of []barSet, lightest float64) bool {
 	n := len(of)
-	if n == 0 || !s.relied(tie, face, b, &of[n-1]) {
+	if n == 0 || !s.promising(b, &of[0], lightest) || !s.relied(tie, face, b, &of[n-1]) {
 		return true
 	}
 	// More compression steel never fails where less passes.
@@ -368,7 +368,8 @@ func (s *search) compress(tie bars.Size, face Face, b *barSet, of []barSet, ligh
 func (s *search) relied(tie bars.Size, face Face, b, other *barSet) bool {
 	s.t.enclose(tie, larger(b.largest(), other.largest()))
 	s.t.Zones, s.t.ZoneBar = nil, nil
-	return s.put(face, b, false) && s.put(face.Opposite(), other, true) && s.judge(0, Fitting, Bending)
+	return s.put(face, b, false) && s.put(face.Opposite(), other, true) &&
+		s.judge(0, Bending) && s.judge(0, Fitting) // most fail the first
 }
 
 func larger(a, b bars.Size) bars.Size {

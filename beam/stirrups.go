@@ -169,9 +169,14 @@ func (s *search) threeZones(tie bars.Size, legs, close int, mass float64) float6
 	if mostLeft+mostRight == 0 || close >= s.widest {
 		return mass
 	}
+	// The close stirrups passed over the whole length: only the middle is in
+	// doubt.
 	passes := func(wide, left, right int) bool {
 		s.setThree(tie, legs, close, wide, left, right)
-		return s.try(tie, legs, wide, 3)
+		s.t.Focus = 1 + min(left, 1)
+		ok := s.try(tie, legs, wide, 3)
+		s.t.Focus = 0
+		return ok
 	}
 	widest := s.widest
 	if !passes(widest, mostLeft, mostRight) {

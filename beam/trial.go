@@ -21,6 +21,11 @@ type Trial struct {
 	// Record asks Judge for the working of each check.
 	Record bool
 
+	// Focus, if not zero, is the one zone (counted from one) that is in
+	// doubt: the search knows that the others pass. A code may judge them
+	// all the same.
+	Focus int
+
 	// Solver, Law, Ultimate and Parts are working space for the code's
 	// flexure kernel, so that a search allocates once.
 	Solver   mechanics.Solver

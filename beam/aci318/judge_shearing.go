@@ -43,8 +43,10 @@ func (e *edition) judgeSpanShear(dst []beam.Check, t *beam.Trial, span int) []be
 		if !s.clearlyLess(from, s.right) || !s.clearlyLess(s.left, to) {
 			continue
 		}
-		dst = s.judge(dst, breaks, k, t.Zones[k].Spacing, from, to, "")
-		dst = e.judgeStirrups(dst, t, k, before)
+		if t.Focus == 0 || t.Focus == k+1 {
+			dst = s.judge(dst, breaks, k, t.Zones[k].Spacing, from, to, "")
+			dst = e.judgeStirrups(dst, t, k, before)
+		}
 		before = k
 	}
 	note := noteGap

@@ -515,10 +515,7 @@ func (e *space) holds(p *pair) bool {
 // briefs: nothing that passes is lighter than what Design chose, and where
 // Design finds nothing there is nothing.
 func TestLeastSteelIsLeast(t *testing.T) {
-	n := 200
-	if full() {
-		n = 500
-	}
+	const n = 500
 	type outcome struct {
 		verdict beam.Verdict
 		judged  int

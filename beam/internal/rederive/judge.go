@@ -297,7 +297,12 @@ func (j *judge) place() error {
 	j.dst = thickest
 	switch {
 	case !j.b.Cover.IsZero():
+		// A cover that the caller gives is taken, but the main bars inside the
+		// stirrups still have theirs.
 		j.cover = j.length(j.b.Cover)
+		if thickest > 0 && j.cover >= j.tableCover(stirrup)*(1-slack) {
+			j.check("cover of main bars 20.5.1.3", j.tableCover(largest), j.cover+thickest, "number %d", largest)
+		}
 	case thickest == 0:
 		j.cover = j.tableCover(largest)
 	default:

@@ -65,7 +65,6 @@ func (p *printed) lay(c *cage, catalog bars.Catalog, l *beam.Layout, face beam.F
 			b.relied = b.relied || r.InCompression
 		}
 	}
-	level := c.inner
 	for k := 1; k <= layers; k++ {
 		var groups []bar
 		var counts []int
@@ -98,7 +97,7 @@ func (p *printed) lay(c *cage, catalog bars.Catalog, l *beam.Layout, face beam.F
 			b.first(c, row)
 		} else {
 			below := b.layers[k-2]
-			level = 0
+			level := 0.0
 			for _, o := range below {
 				level = math.Max(level, o.y+o.r)
 			}

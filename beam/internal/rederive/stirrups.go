@@ -120,7 +120,6 @@ func (j *judge) shear() {
 		z := &j.zones[i]
 		j.stretch(z, math.Max(z.from, m.faceL), math.Min(z.to, m.faceR), "zone")
 	}
-	// What no zone reaches has no stirrups.
 	at := m.faceL
 	for at < m.faceR-1e-9*m.length {
 		end, covered := m.faceR, false
@@ -137,9 +136,49 @@ func (j *judge) shear() {
 			}
 		}
 		if !covered {
-			j.stretch(nil, at, end, "no stirrups")
+			j.between(at, end)
 		}
 		at = end
+	}
+}
+
+// between judges a length that no zone reaches. The first stirrup of a zone
+// stands half a spacing inside it and the last one as far from its end: what
+// counts is how far the stirrups on either side are apart.
+func (j *judge) between(at, end float64) {
+	m := j.member
+	tiny := 1e-9 * m.length
+	var left, right *zone
+	for i := range j.zones {
+		z := &j.zones[i]
+		if math.Abs(z.to-at) <= tiny {
+			left = z
+		}
+		if math.Abs(z.from-end) <= tiny {
+			right = z
+		}
+	}
+	if left == nil || right == nil {
+		for _, z := range [2]*zone{left, right} {
+			if z != nil && end-at <= z.s/2*(1+slack) {
+				return // the stirrup nearest the face is within a spacing of it
+			}
+		}
+		j.stretch(nil, at, end, "no stirrups")
+		return
+	}
+	apart, widest := left.s/2+end-at+right.s/2, math.Max(left.s, right.s)
+	switch {
+	case apart <= widest*(1+slack):
+	case apart <= 2*widest*(1+slack):
+		z := *left
+		if right.area < z.area {
+			z = *right
+		}
+		z.s = apart
+		j.stretch(&z, at, end, "between zones")
+	default:
+		j.stretch(nil, at, end, "no stirrups")
 	}
 }
 
