@@ -515,7 +515,10 @@ func (e *space) holds(p *pair) bool {
 // briefs: nothing that passes is lighter than what Design chose, and where
 // Design finds nothing there is nothing.
 func TestLeastSteelIsLeast(t *testing.T) {
-	const n = 500
+	n := 500
+	if full() {
+		n = 3000
+	}
 	type outcome struct {
 		verdict beam.Verdict
 		judged  int
