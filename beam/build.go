@@ -84,9 +84,9 @@ func (t *Trial) appendSideGeometry(dst []Check) []Check {
 	gap, radius := t.Code.Gaps(t.Problem).InLayer.Least, s.Size.Diameter.Scale(0.5)
 	near, far := t.Steel(s.TensionFace), t.Steel(s.TensionFace.Opposite())
 	clear := Check{ID: "side-face.clear", Clause: clause, Face: Side, Detailing: true}
-	clear.Compare(near.Fit.Height.Sub(near.Nearest).Max(radius).Add(gap).Add(radius).Amount(), s.Spacing.Amount())
+	clear.Compare(near.Fit.Height.Sub(near.Farthest).Max(radius).Add(gap).Add(radius).Amount(), s.Spacing.Amount())
 	room := Check{ID: "side-face.room", Clause: clause, Face: Side, Detailing: true}
-	room.Compare(near.Nearest.Add(s.Spacing.Scale(float64(s.Each))).Add(radius).Add(gap).Add(far.Fit.Height).Amount(), t.Brief.Section.Depth.Amount())
+	room.Compare(near.Farthest.Add(s.Spacing.Scale(float64(s.Each))).Add(radius).Add(gap).Add(far.Fit.Height).Amount(), t.Brief.Section.Depth.Amount())
 	return append(dst, clear, room)
 }
 

@@ -223,7 +223,7 @@ func (s *search) closest() *found {
 		}
 	}
 	s.t.enclose(f.stirrup, larger(f.bottom.largest(), f.top.largest()))
-	s.setUniform(f.stirrup, 2, s.closestSteps())
+	s.setUniform(f.stirrup, 2, s.closestSteps(f.stirrup))
 	f.zones = slices.Clone(s.zones)
 	return f
 }
@@ -266,9 +266,9 @@ func (s *search) addSideBars(l *Layout) (passes bool) {
 	}
 	reach := t.Brief.Section.Depth.Scale(0.5)
 	if s.bent(Negative) {
-		reach = t.Brief.Section.Depth.Sub(t.Top.Nearest)
+		reach = t.Brief.Section.Depth.Sub(t.Top.Farthest)
 	}
-	reach = reach.Sub(t.Bottom.Nearest)
+	reach = reach.Sub(t.Bottom.Farthest)
 	best, fewest := 0, bare
 	for n := 1; n <= sideBarsMost && fewest > 0; n++ {
 		t.Side = SideSteel{Size: s.main[0], Each: n, Spacing: reach.Scale(1 / float64(n+1)), TensionFace: Bottom}

@@ -164,9 +164,9 @@ func (t *Trial) positions(l *Layout) []BarAt {
 	if s := &t.Side; s.Each > 0 {
 		x := t.Cover.Add(t.Stirrup.Diameter).Add(s.Size.Diameter.Scale(0.5))
 		for i := 1; i <= s.Each; i++ {
-			y := t.Bottom.Nearest.Add(s.Spacing.Scale(float64(i)))
+			y := t.Bottom.Farthest.Add(s.Spacing.Scale(float64(i)))
 			if s.TensionFace == Top {
-				y = depth.Sub(t.Top.Nearest.Add(s.Spacing.Scale(float64(i))))
+				y = depth.Sub(t.Top.Farthest.Add(s.Spacing.Scale(float64(i))))
 			}
 			for _, at := range [2]units.Length{x, width.Sub(x)} {
 				out = append(out, BarAt{Mark: mark(Side, 0, s.Size.Name), Bar: s.Size.Name, Diameter: s.Size.Diameter, X: at, Y: y, Face: Side})

@@ -16,8 +16,8 @@ type Row struct {
 	Count int    // of side bars: on each side face
 	Face  Face
 	Layer int // 1 is nearest the face; of side bars zero
-	// Spacing is the vertical distance between side bars, counted from the
-	// bars nearest the tension face; zero for other faces.
+	// Spacing is the vertical distance between side bars, counted up from the
+	// highest layer at the bottom; zero for other faces.
 	Spacing units.Length
 	// InCompression says that the bars are relied on as compression steel, so
 	// that the code's tie rules apply to them; bars that only hold stirrups

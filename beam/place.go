@@ -40,11 +40,11 @@ func (t *Trial) lay(face Face, layers []bars.Layer, inCompression bool) error {
 	}
 	f.InCompression = inCompression
 	f.Area, f.Centroid, f.Count = f.Fit.Area, f.Fit.Centroid, len(f.Fit.Bars)
-	f.Nearest = f.Fit.Bars[0].Y
+	f.Nearest, f.Farthest = f.Fit.Bars[0].Y, f.Fit.Bars[0].Y
 	f.Largest, f.Smallest = f.Fit.Bars[0].Size, f.Fit.Bars[0].Size
 	for i := range f.Fit.Bars {
 		b := &f.Fit.Bars[i]
-		f.Nearest = f.Nearest.Min(b.Y)
+		f.Nearest, f.Farthest = f.Nearest.Min(b.Y), f.Farthest.Max(b.Y)
 		if f.Largest.Diameter.Less(b.Size.Diameter) {
 			f.Largest = b.Size
 		}

@@ -16,7 +16,7 @@ var leastSpacing = units.Millimetre.Of(50)
 // an effective depth: two legs at the widest spacing that the code could
 // accept throughout. It sets that spacing as the widest tried.
 func (s *search) leastStirrups(tie bars.Size, depth units.Length) float64 {
-	s.widest = max(s.closestSteps(), int(s.p.Code.WidestSpacing(s.p.Problem, depth).Ratio(s.p.Brief.Preferences.SpacingBy)+1e-9))
+	s.widest = max(s.closestSteps(tie), int(s.p.Code.WidestSpacing(s.p.Problem, depth).Ratio(s.p.Brief.Preferences.SpacingBy)+1e-9))
 	s.setUniform(tie, 2, s.widest)
 	return s.stirrupMass(tie)
 }
@@ -63,15 +63,17 @@ func (s *search) step(k int) units.Length {
 	return s.p.Brief.Preferences.SpacingBy.Scale(float64(k))
 }
 
-// closestSteps is the least spacing tried, in steps.
-func (s *search) closestSteps() int {
-	return int(math.Ceil(leastSpacing.Ratio(s.p.Brief.Preferences.SpacingBy) - 1e-9))
+// closestSteps is the least spacing tried, in steps: no closer than stirrups
+// are set, and clear of each other as bars are.
+func (s *search) closestSteps(tie bars.Size) int {
+	least := leastSpacing.Max(tie.Diameter.Add(s.p.Code.Gaps(s.p.Problem).InLayer.Least))
+	return int(math.Ceil(least.Ratio(s.p.Brief.Preferences.SpacingBy) - 1e-9))
 }
 
 // uniform is the widest passing spacing of one zone, in steps. A closer
 // spacing never fails where a wider one passes.
 func (s *search) uniform(tie bars.Size, legs int) (k int, ok bool) {
-	least, most := s.closestSteps(), s.widest
+	least, most := s.closestSteps(tie), s.widest
 	s.setUniform(tie, legs, most)
 	if s.try(tie, legs, most, 1) {
 		return most, true

@@ -41,18 +41,20 @@ type FaceSteel struct {
 	Rows []RowSteel // by layer, nearest the face first; mixed sizes are rows of one layer
 	Fit  bars.Fit   // every bar by coordinates, with the gaps and spacings they leave
 	Area units.Area // catalogue areas, added as decimals
-	// Centroid and Nearest are distances from this face to the centroid of
-	// all bars and to the centre of the layer nearest the face.
-	Centroid, Nearest units.Length
-	Largest, Smallest bars.Size
-	Count             int
+	// Centroid, Nearest and Farthest are distances from this face to the
+	// centroid of all bars, and to the centres of the nearest and of the
+	// farthest of them.
+	Centroid, Nearest, Farthest units.Length
+	Largest, Smallest           bars.Size
+	Count                       int
 	// InCompression says that the bars are relied on as compression steel
 	// under the moment that presses on this face.
 	InCompression bool
 }
 
 // SideSteel is distributed steel along both side faces: Each bars a side at
-// Spacing, the first one spacing from the bars nearest TensionFace.
+// Spacing, the first one spacing from the layer of TensionFace that is farthest
+// from it.
 type SideSteel struct {
 	Size        bars.Size
 	Each        int

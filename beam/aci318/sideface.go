@@ -8,7 +8,7 @@ import (
 // appendSideFace appends the checks on bars along the side faces (9.7.2.3). In
 // a beam deeper than the limit they lie on both sides over half the depth from
 // a face in tension, no further apart than 24.3.2 allows with the cover to the
-// side face. The bars nearest that face are the first of the row, and the last
+// side face. The layers of that face are the first of the row, and the last
 // may leave no more than a spacing to mid-depth.
 func (e *edition) appendSideFace(dst []beam.Check, t *beam.Trial) []beam.Check {
 	const clause = "9.7.2.3"
@@ -27,7 +27,7 @@ func (e *edition) appendSideFace(dst []beam.Check, t *beam.Trial) []beam.Check {
 			continue
 		}
 		c := beam.Check{ID: "side-face.spacing", Clause: clause, Face: face}
-		c.Compare(sideGap(t, face, steel.Nearest).Amount(), most.Amount())
+		c.Compare(sideGap(t, face).Amount(), most.Amount())
 		if t.Side.Each == 0 && c.Outcome == beam.Fail {
 			c.Reason = "there are no bars along the side faces"
 		}
@@ -35,7 +35,7 @@ func (e *edition) appendSideFace(dst []beam.Check, t *beam.Trial) []beam.Check {
 			var out working
 			e.crackSteps(&out, yield, cc)
 			out.given("s", "greatest distance left between bars along the side, over half the depth", clause,
-				e.asLength(e.lengthIn(sideGap(t, face, steel.Nearest))))
+				e.asLength(e.lengthIn(sideGap(t, face))))
 			c.Steps = out.steps
 		}
 		dst = append(dst, c)
@@ -59,15 +59,19 @@ func bendsAnywhere(t *beam.Trial, s beam.Sense) bool {
 }
 
 // sideGap is the greatest distance along the side between bars, from the
-// layer nearest a face to mid-depth. Side bars are counted from the bars
-// nearest their own tension face, whichever face is asked for.
-func sideGap(t *beam.Trial, face beam.Face, first units.Length) units.Length {
+// layer nearest a face to mid-depth. Upper layers are bars along the side too.
+// Side bars are counted from the last layer of their own tension face,
+// whichever face is asked for.
+func sideGap(t *beam.Trial, face beam.Face) units.Length {
 	depth := t.Brief.Section.Depth
 	half := depth.Scale(0.5)
 	s := &t.Side
-	origin := t.Steel(s.TensionFace).Nearest
 	var worst units.Length
-	before := first
+	layers := t.Steel(face).Fit.Layers
+	for i := 1; i < len(layers); i++ {
+		worst = worst.Max(layers[i].Centroid.Sub(layers[i-1].Centroid))
+	}
+	origin, before := t.Steel(s.TensionFace).Farthest, t.Steel(face).Farthest
 	for i := 1; i <= s.Each && before.Less(half); i++ {
 		at := origin.Add(s.Spacing.Scale(float64(i)))
 		if face != s.TensionFace {

@@ -133,12 +133,13 @@ func publishedSideFace(c *vectors.Case, e *edition, most units.Length) map[strin
 	tr := &beam.Trial{Problem: &beam.Problem{}}
 	tr.Brief.Section.Depth = c.Length("h")
 	tr.Bottom.Nearest = c.Length("y")
+	tr.Bottom.Farthest = tr.Bottom.Nearest
 	tr.Side = beam.SideSteel{Spacing: most, TensionFace: beam.Bottom}
 	needed := 0.0
 	if !units.AtMost(e.lengthIn(c.Length("h")), e.crack.deep) {
 		needed = 1
 	}
-	for !sideGap(tr, beam.Bottom, tr.Bottom.Nearest).AtMost(most) {
+	for !sideGap(tr, beam.Bottom).AtMost(most) {
 		tr.Side.Each++
 	}
 	return map[string]units.Amount{
