@@ -17,7 +17,7 @@ type Row struct {
 	Face  Face
 	Layer int // 1 is nearest the face; of side bars zero
 	// Spacing is the vertical distance between side bars, counted up from the
-	// highest layer at the bottom; zero for other faces.
+	// highest layer at the bottom with more than one bar; zero for other faces.
 	Spacing units.Length
 	// InCompression says that the bars are relied on as compression steel, so
 	// that the code's tie rules apply to them; bars that only hold stirrups

@@ -44,7 +44,10 @@ func (t *Trial) lay(face Face, layers []bars.Layer, inCompression bool) error {
 	f.Largest, f.Smallest = f.Fit.Bars[0].Size, f.Fit.Bars[0].Size
 	for i := range f.Fit.Bars {
 		b := &f.Fit.Bars[i]
-		f.Nearest, f.Farthest = f.Nearest.Min(b.Y), f.Farthest.Max(b.Y)
+		f.Nearest = f.Nearest.Min(b.Y)
+		if f.Fit.Layers[b.Layer-1].Count > 1 {
+			f.Farthest = f.Farthest.Max(b.Y)
+		}
 		if f.Largest.Diameter.Less(b.Size.Diameter) {
 			f.Largest = b.Size
 		}

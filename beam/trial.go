@@ -42,8 +42,8 @@ type FaceSteel struct {
 	Fit  bars.Fit   // every bar by coordinates, with the gaps and spacings they leave
 	Area units.Area // catalogue areas, added as decimals
 	// Centroid, Nearest and Farthest are distances from this face to the
-	// centroid of all bars, and to the centres of the nearest and of the
-	// farthest of them.
+	// centroid of all bars, to the centre of the nearest, and to that of the
+	// farthest that stands at a stirrup's leg: a layer of one bar has none.
 	Centroid, Nearest, Farthest units.Length
 	Largest, Smallest           bars.Size
 	Count                       int

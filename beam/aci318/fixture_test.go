@@ -108,7 +108,9 @@ func trialOf(t testing.TB, p *beam.Problem, tie string, bottom, top []group) *be
 		f.Largest, f.Smallest = f.Fit.Bars[0].Size, f.Fit.Bars[0].Size
 		for i := range f.Fit.Bars {
 			s := f.Fit.Bars[i].Size
-			f.Farthest = f.Farthest.Max(f.Fit.Bars[i].Y)
+			if f.Fit.Layers[f.Fit.Bars[i].Layer-1].Count > 1 {
+				f.Farthest = f.Farthest.Max(f.Fit.Bars[i].Y)
+			}
 			if f.Largest.Diameter.Less(s.Diameter) {
 				f.Largest = s
 			}

@@ -59,7 +59,8 @@ func bendsAnywhere(t *beam.Trial, s beam.Sense) bool {
 }
 
 // sideGap is the greatest distance along the side between bars, from the
-// layer nearest a face to mid-depth. Upper layers are bars along the side too.
+// layer nearest a face to mid-depth. Upper layers are bars along the side too, but for one of a
+// single bar, which stands in the middle.
 // Side bars are counted from the last layer of their own tension face,
 // whichever face is asked for.
 func sideGap(t *beam.Trial, face beam.Face) units.Length {
@@ -68,8 +69,11 @@ func sideGap(t *beam.Trial, face beam.Face) units.Length {
 	s := &t.Side
 	var worst units.Length
 	layers := t.Steel(face).Fit.Layers
-	for i := 1; i < len(layers); i++ {
-		worst = worst.Max(layers[i].Centroid.Sub(layers[i-1].Centroid))
+	for i, below := 1, 0; i < len(layers); i++ {
+		if layers[i].Count > 1 {
+			worst = worst.Max(layers[i].Centroid.Sub(layers[below].Centroid))
+			below = i
+		}
 	}
 	origin, before := t.Steel(s.TensionFace).Farthest, t.Steel(face).Farthest
 	for i := 1; i <= s.Each && before.Less(half); i++ {
