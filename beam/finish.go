@@ -68,6 +68,7 @@ func (p *prepared) finish(layout Layout) (*Result, error) {
 	if err := r.strengths(p, t); err != nil {
 		return nil, err
 	}
+	r.Reactions = p.Forces.Reactions()
 	r.Bars = t.positions(&layout)
 	r.takeOff(t)
 	r.Cautions = p.cautions(r)

@@ -21,8 +21,20 @@ type Action struct {
 // Forces are the factored forces of a problem: of every combination along
 // every span, or the demands that the caller gave.
 type Forces struct {
-	spans   []spanForces
-	demands []Action
+	spans     []spanForces
+	reactions []Reaction
+	demands   []Action
+}
+
+// Reaction is what the combinations ask of one support: the greatest and least
+// force, positive upward, so that a negative least is uplift, and for a fixed
+// end the greatest moment that it must hold, whichever way it turns.
+type Reaction struct {
+	Support         int // 1-based, left to right
+	Most, Least     units.Force
+	MostBy, LeastBy string // combinations
+	Moment          units.Moment
+	MomentBy        string
 }
 
 // spanForces are the forces along one span.
@@ -82,6 +94,10 @@ type twist struct {
 
 // Demands lists the demands that the caller gave in place of spans.
 func (f *Forces) Demands() []Action { return f.demands }
+
+// Reactions are the factored reactions of the supports that hold; none with
+// demands given directly.
+func (f *Forces) Reactions() []Reaction { return f.reactions }
 
 // Spans is the number of analysed spans; zero with demands given directly.
 func (f *Forces) Spans() int { return len(f.spans) }
@@ -273,6 +289,26 @@ func memberForces(b *Brief, selfWeight units.LineLoad, kept []Combination) (Forc
 		if err := sp.keep(left, right, b.Section.Depth); err != nil {
 			return Forces{}, err
 		}
+	}
+	for i, s := range b.Supports {
+		if s.Kind == statics.Free {
+			continue
+		}
+		e, err := response.ReactionExtremes(i + 1)
+		if err != nil {
+			return Forces{}, err
+		}
+		r := Reaction{
+			Support: i + 1, Most: e.ForceMost.Force, MostBy: e.ForceMost.ID, Least: e.ForceLeast.Force, LeastBy: e.ForceLeast.ID,
+		}
+		if s.Kind == statics.Fixed {
+			m := e.MomentMost
+			if m.Moment.Abs().Less(e.MomentLeast.Moment.Abs()) {
+				m = e.MomentLeast
+			}
+			r.Moment, r.MomentBy = m.Moment.Abs(), m.ID
+		}
+		f.reactions = append(f.reactions, r)
 	}
 	return f, nil
 }

@@ -98,3 +98,31 @@ func TestMomentAndShearOfASimpleSpan(t *testing.T) {
 	_, ok = f.Torque(1, face, end)
 	require.False(t, ok)
 }
+
+// The reactions of a propped cantilever under w: 5wL/8 at the fixed end with
+// wL2/8, 3wL/8 at the prop (AISC Manual Table 3-23, from memory).
+func TestReactions(t *testing.T) {
+	b := Brief{
+		Spans:    []units.Length{units.Metre.Of(8)},
+		Supports: []Support{{Kind: statics.Fixed}, {Kind: statics.Roller}},
+		Loads: []Load{
+			{Case: Dead, Shape: Uniform, Intensity: units.KilonewtonPerMetre.Of(10)},
+			{Case: Wind, Shape: Uniform, Intensity: units.KilonewtonPerMetre.Of(-20)},
+		},
+	}
+	kept := []Combination{
+		{ID: "1.4D", Factors: []CaseFactor{{Case: Dead, Factor: 1.4}}},
+		{ID: "0.9D + 1.0W", Factors: []CaseFactor{{Case: Dead, Factor: 0.9}, {Case: Wind, Factor: 1}}},
+	}
+	f, err := memberForces(&b, units.LineLoad{}, kept)
+	require.NoError(t, err)
+	r := f.Reactions()
+	require.Len(t, r, 2)
+	require.InEpsilon(t, 14*8*5/8.0, r[0].Most.In(units.Kilonewton), 1e-12)
+	require.InEpsilon(t, -11*8*5/8.0, r[0].Least.In(units.Kilonewton), 1e-12)
+	require.InEpsilon(t, 14*64/8.0, r[0].Moment.In(units.KilonewtonMetre), 1e-12)
+	require.InEpsilon(t, 14*8*3/8.0, r[1].Most.In(units.Kilonewton), 1e-12)
+	require.Equal(t, "1.4D", r[1].MostBy)
+	require.Equal(t, "0.9D + 1.0W", r[1].LeastBy)
+	require.True(t, r[1].Moment.IsZero())
+}

@@ -17,6 +17,8 @@ type Result struct {
 	Verdict   Verdict
 	Governing *Check // the judged check with the largest utilization
 
+	Reactions []Reaction // factored, of each support; none with demands given directly
+
 	Problem  *Problem // the resolved brief and its forces; nil when out of scope before analysis
 	Layout   Layout
 	Bars     []BarAt      // every longitudinal bar by coordinates

@@ -72,6 +72,13 @@ func (o *outlet) design(r *beam.Result, inputHash string) wire.Design {
 	for i, b := range r.Bars {
 		d.Bars[i] = wire.BarAt{Mark: b.Mark, Bar: b.Bar, Diameter: express(o, b.Diameter), X: express(o, b.X), Y: express(o, b.Y), Face: b.Face.String(), Layer: b.Layer}
 	}
+	d.Reactions = make([]wire.Reaction, len(r.Reactions))
+	for i, s := range r.Reactions {
+		d.Reactions[i] = wire.Reaction{
+			Support: s.Support, Most: express(o, s.Most), Least: express(o, s.Least),
+			CombinationMost: s.MostBy, CombinationLeast: s.LeastBy, Moment: optional(o, s.Moment),
+		}
+	}
 	d.Flexure = make([]wire.Flexure, len(r.Flexure))
 	for i := range r.Flexure {
 		d.Flexure[i] = o.flexure(&r.Flexure[i])

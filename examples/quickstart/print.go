@@ -57,6 +57,9 @@ func (p *printer) loads(r *beam.Result) {
 		}
 	}
 	p.line("%-6s %s of self-weight", beam.Dead, p.sys.Format(r.Problem.SelfWeight.Amount()))
+	for _, s := range r.Reactions {
+		p.line("support %d holds up to %s (%s)", s.Support, p.round(s.Most.Amount()), s.MostBy)
+	}
 	for _, c := range r.Kept {
 		p.line("used:    %s (%s)", c.ID, c.Clause)
 	}

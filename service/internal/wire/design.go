@@ -16,6 +16,7 @@ type Design struct {
 	Bars      []BarAt       `json:"bars" doc:"Every longitudinal bar by coordinates."`
 	Checks    []Check       `json:"checks" doc:"Every limit state, judged or not."`
 	Flexure   []Flexure     `json:"flexure" doc:"Strength in bending of the layout, one for each sense that is bent."`
+	Reactions []Reaction    `json:"reactions" doc:"Factored reactions of the supports that hold; none with demands given directly."`
 	Refusals  []Refusal     `json:"refusals" doc:"Scope rules that put the problem outside the method."`
 
 	Assumptions  []Assumption  `json:"assumptions" doc:"What was taken for granted on the way, and what the finished design found."`
@@ -28,6 +29,16 @@ type Design struct {
 	Schedule   []ScheduleLine `json:"schedule" doc:"Bar schedule."`
 	Quantities *Quantities    `json:"quantities,omitzero" doc:"Quantities of the beam."`
 	Cautions   []string       `json:"cautions" doc:"What the reader must bear in mind."`
+}
+
+// Reaction is what the combinations ask of one support.
+type Reaction struct {
+	Support          int            `json:"support" doc:"Its place from the left, counted from 1."`
+	Most             units.Measure  `json:"most" doc:"Greatest force, positive upward."`
+	Least            units.Measure  `json:"least" doc:"Least force; negative is uplift."`
+	CombinationMost  string         `json:"combination_most" doc:"Combination of the greatest force."`
+	CombinationLeast string         `json:"combination_least" doc:"Combination of the least force."`
+	Moment           *units.Measure `json:"moment,omitzero" doc:"Of a fixed end: the greatest moment that it must hold."`
 }
 
 // Engine says what computed a reply.
