@@ -2,6 +2,8 @@ package beam
 
 import (
 	"fmt"
+	"math"
+	"strconv"
 	"strings"
 
 	"soffit.example/units"
@@ -48,9 +50,24 @@ func (c *Check) Describe(sys units.System) string {
 	if c.Outcome == Fail {
 		relation = ">"
 	}
-	s := fmt.Sprintf("%s: %s %s %s (%s)", c.ID, sys.Format(c.Demand), relation, sys.Format(c.Capacity), c.Clause)
+	s := fmt.Sprintf("%s: %s %s %s (%s)", c.ID, short(sys, c.Demand), relation, short(sys, c.Capacity), c.Clause)
 	if c.Reason != "" {
 		s += ": " + c.Reason
 	}
 	return s
+}
+
+// short prints an amount to five significant digits, enough to read beside a
+// limit.
+func short(sys units.System, a units.Amount) string {
+	v := sys.Float(a)
+	digits := 0
+	if v != 0 {
+		digits = max(0, 4-int(math.Floor(math.Log10(math.Abs(v)))))
+	}
+	number := strconv.FormatFloat(v, 'f', digits, 64)
+	if strings.Contains(number, ".") {
+		number = strings.TrimRight(strings.TrimRight(number, "0"), ".")
+	}
+	return strings.TrimSpace(number + " " + sys.Unit(a.Dimension()))
 }

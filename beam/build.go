@@ -63,7 +63,7 @@ func (t *Trial) appendGeometry(dst []Check) []Check {
 		width, depth := cage.Outside()
 		bend, err := t.ZoneBar[i].Bend(bars.Stirrup)
 		if err != nil {
-			c.Outcome, c.Utilization, c.Reason = Fail, Hopeless, err.Error()
+			c.Outcome, c.Utilization, c.Reason = Fail, NoCapacity, err.Error()
 			dst = append(dst, c)
 			continue
 		}

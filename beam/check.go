@@ -48,19 +48,19 @@ func (c *Check) Compare(demand, capacity units.Amount) {
 	case d <= 0:
 		c.Utilization = 0
 	case k <= 0:
-		c.Utilization = Hopeless
+		c.Utilization = NoCapacity
 	default:
-		c.Utilization = min(d/k, Hopeless)
+		c.Utilization = min(d/k, NoCapacity)
 	}
 	c.Outcome = Fail
-	if c.Utilization <= Hopeless/2 && units.AtMost(c.Utilization, 1) {
+	if c.Utilization <= NoCapacity/2 && units.AtMost(c.Utilization, 1) {
 		c.Outcome = Pass
 	}
 }
 
-// Hopeless is the utilization of a check whose capacity is nil. It is finite
+// NoCapacity is the utilization of a check whose capacity is nil. It is finite
 // so that results always print and compare.
-const Hopeless = 1e9
+const NoCapacity = 1e9
 
 // NotJudgedCheck reports a limit state that belongs to the job and was not
 // judged, with the reason.

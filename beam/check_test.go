@@ -24,9 +24,9 @@ func TestCompare(t *testing.T) {
 		{"above", 60, 50, 1.2, beam.Fail},
 		{"nothing asked", 0, 50, 0, beam.Pass},
 		{"nothing asked of nothing", 0, 0, 0, beam.Pass},
-		{"asked of nothing", 1, 0, beam.Hopeless, beam.Fail},
-		{"asked of less than nothing", 1, -5, beam.Hopeless, beam.Fail},
-		{"asked of next to nothing", 1e6, 1e-9, beam.Hopeless, beam.Fail},
+		{"asked of nothing", 1, 0, beam.NoCapacity, beam.Fail},
+		{"asked of less than nothing", 1, -5, beam.NoCapacity, beam.Fail},
+		{"asked of next to nothing", 1e6, 1e-9, beam.NoCapacity, beam.Fail},
 	}
 	for _, tt := range tests {
 		t.Run(tt.name, func(t *testing.T) {

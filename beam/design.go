@@ -29,6 +29,9 @@ func Design(ctx context.Context, code Code, brief Brief) (*Result, error) {
 	if err != nil {
 		return nil, err
 	}
+	if len(r.Cures) == 0 {
+		r.Cautions = append(r.Cautions, "No single change of depth, width, concrete strength or stirrup legs, up to about twice, was found to make the beam pass.")
+	}
 	return r, nil
 }
 
@@ -154,6 +157,7 @@ func (s *search) result() (*Result, error) {
 		return nil, fmt.Errorf("beam: the layout that was found: %v", err)
 	}
 	if len(s.kept) == 0 {
+		s.rejectClosest(chosen)
 		r.Rejected = s.rejects.list
 		r.Verdict = Unsatisfied
 		return r, nil
@@ -166,6 +170,24 @@ func (s *search) result() (*Result, error) {
 		}
 	}
 	return r, nil
+}
+
+// rejectClosest logs the closest arrangement where the search saw none worth
+// trying, so that the reasons are not missing where they are most wanted.
+func (s *search) rejectClosest(f *found) {
+	if f == nil || len(s.rejects.list) > 0 {
+		return
+	}
+	s.t.enclose(f.stirrup, larger(f.bottom.largest(), f.top.largest()))
+	s.t.Zones, s.t.ZoneBar = nil, nil
+	if !s.put(Bottom, &f.bottom, f.inCompress == Bottom) || !s.put(Top, &f.top, f.inCompress == Top) {
+		return
+	}
+	for face, set := range [...]*barSet{Bottom: &f.bottom, Top: &f.top} {
+		if set != nil && !s.judge(Face(face), Fitting, Bending) {
+			s.reject(Arrangement{Face: Face(face), Depth: s.p.Brief.Section.Depth, Layers: set.names(), With: f.stirrup.Name})
+		}
+	}
 }
 
 // retrace repeats the search for the stirrups of the chosen bars, to log
@@ -300,7 +322,7 @@ func (s *search) wholeFails(t *Trial) (n int) {
 // where a check of the member as a whole fails, which the search leaves to
 // the end.
 func (s *search) alternative(f *found) (a Alternative, ok bool) {
-	a = Alternative{Layout: s.layoutOf(f), SteelMass: units.Kilogram.Of(f.mass), Depth: s.p.Brief.Section.Depth, WhyNotFirst: s.whyNotFirst(f)}
+	a = Alternative{Layout: s.layoutOf(f), SteelMass: units.Kilogram.Of(f.mass * s.p.unitShare()), Depth: s.p.Brief.Section.Depth, WhyNotFirst: s.whyNotFirst(f)}
 	s.addSideBars(&a.Layout)
 	t, faults := trialOf(s.p.Problem, &a.Layout)
 	if len(faults) > 0 {
@@ -329,8 +351,18 @@ func (s *search) whyNotFirst(f *found) string {
 			return fmt.Sprintf("%g marks more", more)
 		}
 	}
+	what := "other bottom bars"
+	switch {
+	case f.bottom.layers == first.bottom.layers && f.top.layers == first.top.layers:
+		what = "other stirrups"
+	case f.bottom.layers == first.bottom.layers:
+		what = "other top bars"
+	}
 	more := units.Kilogram.Of(f.mass - first.mass)
 	percent := 100 * (f.mass - first.mass) / first.mass
 	sys := s.p.System
-	return fmt.Sprintf("%.3g %s more steel (%.1f %%)", sys.Float(more.Amount()), sys.Unit(units.DimMass), percent)
+	if !s.member {
+		return fmt.Sprintf("%s: %.1f %% more steel", what, percent)
+	}
+	return fmt.Sprintf("%s: %.3g %s more steel (%.1f %%)", what, sys.Float(more.Amount()), sys.Unit(units.DimMass), percent)
 }

@@ -8,8 +8,8 @@
 //
 // [Design] proposes layouts and keeps the best that passes; [CheckLayout] judges
 // a layout that already exists. Both put every layout through the same check
-// functions of the [Code], so a design never passes a check that an
-// check of it would fail.
+// functions of the [Code], so a design never passes a check that
+// checking its layout would fail.
 //
 // The package holds no number that belongs to a design code: factors, limits
 // and stress blocks come from the Code. A second code is a second value that

@@ -1,6 +1,10 @@
 package beam
 
-import "fmt"
+import (
+	"fmt"
+
+	"soffit.example/beam/statics"
+)
 
 // Every enumeration starts at one; zero means "not stated". The text forms
 // are the words of the JSON door.
@@ -11,6 +15,14 @@ type Shape uint8
 // Shapes judged by this version.
 const (
 	Rectangular Shape = iota + 1
+)
+
+// What a support holds; the words of package statics, for convenience.
+const (
+	Pinned = statics.Pinned
+	Roller = statics.Roller
+	Fixed  = statics.Fixed
+	Free   = statics.Free
 )
 
 // Exposure classes, from which the cover follows.

@@ -19,7 +19,7 @@ func Example() {
 		Reinforcement: beam.Reinforcement{Catalog: "astm-inch", Yield: units.KSI.Of(60)},
 		Exposure:      beam.Interior,
 		Spans:         []units.Length{units.Foot.Of(22)},
-		Supports:      []beam.Support{{Kind: statics.Pinned, Width: units.Inch.Of(12)}, {Kind: statics.Roller, Width: units.Inch.Of(12)}},
+		Supports:      []beam.Support{{Kind: beam.Pinned, Width: units.Inch.Of(12)}, {Kind: beam.Roller, Width: units.Inch.Of(12)}},
 		Loads: []beam.Load{
 			{Case: beam.Dead, Shape: beam.Uniform, Intensity: units.KipPerFoot.Of(1.1)},
 			{Case: beam.Live, Shape: beam.Uniform, Intensity: units.KipPerFoot.Of(1.3)},
@@ -28,6 +28,9 @@ func Example() {
 	result, err := beam.Design(context.Background(), aci318.ACI31819(), brief)
 	if err != nil {
 		log.Fatal(err) // every fault of the brief at once, each with its field and the range allowed
+	}
+	if result.Verdict != beam.Satisfied {
+		log.Fatal(result.Verdict, result.Binding, result.Refusals) // no error: the beam, not the input
 	}
 	fmt.Println(result.Verdict, "governed by", result.Governing.ID)
 	for _, row := range result.Layout.Longitudinal {

@@ -185,7 +185,9 @@ func (p *prepared) cautions(r *Result) []string {
 	}
 	for i := range r.Checks {
 		if k := &r.Checks[i]; k.Outcome == NotJudged {
-			c = append(c, fmt.Sprintf("Not judged: %s (%s): %s", k.ID, k.Clause, k.Reason))
+			if said := fmt.Sprintf("Not judged: %s (%s): %s", k.ID, k.Clause, k.Reason); !slices.Contains(c, said) {
+				c = append(c, said)
+			}
 		}
 	}
 	for _, a := range r.Assumptions {

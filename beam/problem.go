@@ -78,8 +78,10 @@ func prepare(code Code, given Brief) (*prepared, error) {
 	}
 	b.check(&f, catalog)
 	p := &prepared{Problem: &Problem{Code: code, System: f.system, Catalog: catalog}}
-	if len(f.list) == 0 {
-		f.list = append(f.list, code.Resolve(&b, &p.register)...)
+	for _, more := range code.Resolve(&b, &p.register) {
+		f.addNew(more)
+	}
+	if !catalog.IsZero() {
 		f.allowed("/preferences/bars", b.Preferences.Bars, bars.Main, p.Problem)
 		f.allowed("/preferences/stirrups", b.Preferences.Stirrups, bars.Stirrup, p.Problem)
 	}
@@ -100,6 +102,19 @@ func prepare(code Code, given Brief) (*prepared, error) {
 func Validate(code Code, brief Brief) error {
 	_, err := prepare(code, brief)
 	return err
+}
+
+// ValidateLayout reports every fault of a layout, as CheckLayout would, under a
+// brief without fault.
+func ValidateLayout(code Code, brief Brief, layout Layout) error {
+	p, err := prepare(code, brief)
+	if err != nil {
+		return err
+	}
+	if _, faults := trialOf(p.Problem, &layout); len(faults) > 0 {
+		return &InputError{Faults: faults}
+	}
+	return nil
 }
 
 // clone copies a brief so that resolving it leaves the caller's alone.

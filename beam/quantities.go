@@ -6,6 +6,24 @@ import (
 	"soffit.example/units"
 )
 
+// unitLength is what the quantities of demands given directly are for: a metre
+// or a foot.
+func unitLength(sys units.System) units.Length {
+	if sys == units.US {
+		return units.Foot.Of(1)
+	}
+	return units.Metre.Of(1)
+}
+
+// unitShare is how much of the search's masses, which are per metre with
+// demands, goes to the quantities' length.
+func (p *Problem) unitShare() float64 {
+	if len(p.Brief.Spans) > 0 {
+		return 1
+	}
+	return unitLength(p.System).In(units.Metre)
+}
+
 // takeOff counts the bars of a finished trial: masses by decimals from the
 // catalogue's printed mass per length, so that the schedule's lines add up
 // to the last digit.
@@ -17,7 +35,7 @@ func (r *Result) takeOff(t *Trial) {
 	q := &r.Quantities
 	q.PerLength = length.IsZero()
 	if q.PerLength {
-		length = units.Metre.Of(1)
+		length = unitLength(r.System)
 	}
 	massUnit, lengthUnit, printed := units.Kilogram, units.Metre, "kg"
 	if r.System == units.US {

@@ -15,7 +15,7 @@ type Result struct {
 	System    units.System
 
 	Verdict   Verdict
-	Governing *Check // the judged check with the largest utilization
+	Governing *Check // the judged check with the largest utilization; nil when out of scope
 
 	Reactions []Reaction // factored, of each support; none with demands given directly
 
@@ -123,5 +123,5 @@ type Quantities struct {
 	Concrete         units.Volume
 	Form             units.Area // soffit and both sides
 	SteelPerConcrete units.Density
-	PerLength        bool // demands given directly: all of it for a unit length, one metre
+	PerLength        bool // demands given directly: all of it for a unit length, one metre or one foot
 }

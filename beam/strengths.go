@@ -88,9 +88,9 @@ type ShearStrength struct {
 	Nominal          units.Force
 	Phi              float64
 	Design           units.Force
-	SectionLimit     units.Force // largest factored shear the section may carry
-	MinimumPerLength units.AreaPerLength
-	MinimumRequired  bool // at the shear asked for
+	SectionLimit     units.Force         // largest factored shear the section may carry
+	MinimumPerLength units.AreaPerLength // zero without stirrups, whose strength it goes by
+	MinimumRequired  bool                // at the shear asked for
 	GreatestSpacing  units.Length
 	GreatestAcross   units.Length // zero: the edition has no such rule
 	Notes            []string

@@ -72,6 +72,16 @@ func (f *faults) add(path, allowed, format string, args ...any) {
 	f.list = append(f.list, Fault{Path: path, Detail: fmt.Sprintf(format, args...), Allowed: allowed})
 }
 
+// addNew adds a fault unless its field, or what holds it, has one already.
+func (f *faults) addNew(more Fault) {
+	for _, old := range f.list {
+		if old.Path == more.Path || strings.HasPrefix(more.Path, old.Path+"/") {
+			return
+		}
+	}
+	f.list = append(f.list, more)
+}
+
 // within reports a quantity outside [least, most], or not finite.
 func (f *faults) within(path, what string, v, least, most units.Amount) bool {
 	x := v.SI()
@@ -178,9 +188,11 @@ func (b *Brief) checkActions(f *faults) {
 		f.add("/supports", "2", "%d supports given for one span", len(b.Supports))
 		return
 	}
+	kinds := true
 	for i, s := range b.Supports {
 		path := fmt.Sprintf("/supports/%d", i)
 		if s.Kind < statics.Pinned || s.Kind > statics.Free {
+			kinds = false
 			f.add(path+"/kind", "pinned, roller, fixed, free", "support kind is not one that is known")
 		}
 		if sound {
@@ -188,6 +200,14 @@ func (b *Brief) checkActions(f *faults) {
 		}
 		if s.Kind == statics.Free && !s.Width.IsZero() {
 			f.add(path+"/width", "0", "a free end has no width, and %s is given", f.system.Format(s.Width.Amount()))
+		}
+	}
+	if kinds {
+		// A span and a load of no consequence ask whether the beam is held.
+		held := statics.Beam{Spans: []statics.Span{{Length: units.Metre.Of(1)}}, Supports: memberBeam(b).Supports}
+		var m *statics.MechanismError
+		if _, err := statics.Analyze(held, []statics.Load{{Case: Dead.String(), Shape: statics.Uniform{}}}); errors.As(err, &m) {
+			f.list = append(f.list, analysisFault(err))
 		}
 	}
 	if len(b.Loads) == 0 && b.NoSelfWeight {
@@ -313,8 +333,8 @@ func (p *Preferences) check(f *faults, catalog bars.Catalog) {
 func (f *faults) allowed(path string, names []string, use bars.Use, p *Problem) {
 	for i, n := range names {
 		size, err := p.Catalog.Size(n)
-		if err == nil && p.Code.Allows(use, size) {
-			continue
+		if err != nil || p.Code.Allows(use, size) {
+			continue // an unknown name is a fault already
 		}
 		var allowed []string
 		for _, s := range p.Catalog.Sizes() {

@@ -22,7 +22,8 @@ func (s *Service) designs(w http.ResponseWriter, r *http.Request) error {
 	in := intakeFor(code, faults)
 	brief := in.brief(&request, "")
 	design := func(ctx context.Context) (*beam.Result, error) { return beam.Design(ctx, code, brief) }
-	result, err := s.judge(r.Context(), code, &brief, faults, "", design)
+	validate := func(code beam.Code) error { return beam.Validate(code, brief) }
+	result, err := s.judge(r.Context(), code, validate, faults, "", design)
 	if err != nil {
 		return err
 	}
@@ -41,7 +42,8 @@ func (s *Service) checkLayout(w http.ResponseWriter, r *http.Request) error {
 	brief := in.brief(&request.Brief, "/brief")
 	layout := in.layout(&request.Layout, &brief, "/layout")
 	check := func(ctx context.Context) (*beam.Result, error) { return beam.CheckLayout(ctx, code, brief, layout) }
-	result, err := s.judge(r.Context(), code, &brief, faults, "/brief", check)
+	validate := func(code beam.Code) error { return beam.ValidateLayout(code, brief, layout) }
+	result, err := s.judge(r.Context(), code, validate, faults, "/brief", check)
 	if err != nil {
 		return err
 	}
@@ -50,10 +52,10 @@ func (s *Service) checkLayout(w http.ResponseWriter, r *http.Request) error {
 
 // judge runs do, unless the request has faults. Then it has package beam add
 // those that it sees, so that one reply lists all.
-func (s *Service) judge(ctx context.Context, code beam.Code, brief *beam.Brief, faults *strict.Faults, at string, do func(context.Context) (*beam.Result, error)) (*beam.Result, error) {
+func (s *Service) judge(ctx context.Context, code beam.Code, validate func(beam.Code) error, faults *strict.Faults, at string, do func(context.Context) (*beam.Result, error)) (*beam.Result, error) {
 	if !faults.None() {
 		if code != nil {
-			addInput(faults, beam.Validate(code, *brief), at)
+			addInput(faults, validate(code), at)
 		}
 		return nil, invalidInput(faults.All())
 	}

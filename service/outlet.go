@@ -2,6 +2,7 @@ package service
 
 import (
 	"encoding/json"
+	"slices"
 
 	"soffit.example/beam"
 	"soffit.example/beam/working"
@@ -77,6 +78,12 @@ func (o *outlet) design(r *beam.Result, inputHash string) wire.Design {
 		d.Reactions[i] = wire.Reaction{
 			Support: s.Support, Most: express(o, s.Most), Least: express(o, s.Least),
 			CombinationMost: s.MostBy, CombinationLeast: s.LeastBy, Moment: optional(o, s.Moment),
+		}
+	}
+	d.NotJudged = []string{}
+	for i := range r.Checks {
+		if c := &r.Checks[i]; c.Outcome == beam.NotJudged && !slices.Contains(d.NotJudged, c.ID) {
+			d.NotJudged = append(d.NotJudged, c.ID)
 		}
 	}
 	d.Flexure = make([]wire.Flexure, len(r.Flexure))
@@ -159,7 +166,8 @@ func (o *outlet) checks(list []beam.Check) []wire.Check {
 		if c.HasAt {
 			w.At = o.place(c.At)
 		}
-		if c.Outcome == beam.Pass || c.Outcome == beam.Fail {
+		judged := c.Outcome == beam.Pass || c.Outcome == beam.Fail
+		if known := c.Capacity != (units.Amount{}); judged || known && c.Outcome == beam.NotJudged {
 			demand, capacity := o.system.Express(c.Demand), o.system.Express(c.Capacity)
 			w.Demand, w.Capacity, w.Utilization = &demand, &capacity, &c.Utilization
 		}
@@ -193,7 +201,14 @@ func refusals(list []beam.Refusal) []wire.Refusal {
 func assumptions(list []beam.Assumption) []wire.Assumption {
 	out := make([]wire.Assumption, len(list))
 	for i, a := range list {
-		out[i] = wire.Assumption{ID: a.ID, Assumed: a.Assumed, UsedIn: orEmpty(a.UsedIn), Found: a.Found, Holds: a.Holds, Open: a.Open, Decisive: a.Decisive}
+		status := "refuted"
+		switch {
+		case a.Open:
+			status = "to-confirm"
+		case a.Holds:
+			status = "confirmed"
+		}
+		out[i] = wire.Assumption{Status: status, ID: a.ID, Assumed: a.Assumed, UsedIn: orEmpty(a.UsedIn), Found: a.Found, Holds: a.Holds, Open: a.Open, Decisive: a.Decisive}
 	}
 	return out
 }

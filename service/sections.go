@@ -113,7 +113,7 @@ func (o *outlet) strengths(s *beam.Strengths) wire.Strengths {
 	w.Shear = &wire.Shear{
 		Concrete: express(o, v.Concrete), ConcreteRow: v.ConcreteRow, SizeEffect: v.SizeEffect, SteelRatio: v.SteelRatio,
 		Steel: express(o, v.Steel), Nominal: express(o, v.Nominal), Phi: v.Phi, Design: express(o, v.Design),
-		SectionLimit: express(o, v.SectionLimit), MinimumPerLength: express(o, v.MinimumPerLength), MinimumRequired: v.MinimumRequired,
+		SectionLimit: express(o, v.SectionLimit), MinimumPerLength: optional(o, v.MinimumPerLength), MinimumRequired: v.MinimumRequired,
 		GreatestSpacing: express(o, v.GreatestSpacing), GreatestAcross: optional(o, v.GreatestAcross),
 		Notes: orEmpty(v.Notes), Verdict: verdictOf(s.Checks, "shear"),
 	}

@@ -131,7 +131,7 @@ func (e *edition) judgeCrossCheck(t *beam.Trial, s beam.Sense, a *beam.Action, n
 	c := checkAt(bendingIDs[s].crossCheck, "22.2", s, a)
 	cross, err := crossCheck(e.trialSection(t, s), t.Law, bendingOf(s, &t.Brief.Readings), nominal)
 	if err != nil {
-		c.Compare(units.Plain(beam.Hopeless), units.Plain(crossCheckTolerance))
+		c.Compare(units.Plain(beam.NoCapacity), units.Plain(crossCheckTolerance))
 		c.Reason = "the second route finds no equilibrium: " + err.Error()
 		return c
 	}
@@ -153,6 +153,7 @@ func (e *edition) judgeCracks(dst []beam.Check, t *beam.Trial, s beam.Sense, a *
 	yield := t.Brief.Reinforcement.Yield
 	limit := e.crackSpacing(e.crackStress(yield), nearest.Cover)
 	c := checkAt("crack.spacing", "24.3.2", s, a)
+	c.Combination = "" // 24.3.2 goes by service loads, and here by 2/3 fy
 	given := nearest.Spacing
 	if nearest.Count == 1 {
 		c.ID, c.Clause, c.Reason = "crack.single-bar", "24.3.3", "one bar nearest the tension face: the width of the face may not exceed the spacing of 24.3.2"

@@ -113,7 +113,7 @@ func TestBentWithoutBars(t *testing.T) {
 	r, _ := checkUS(t, ACI31819(), []beam.Row{bottom(3, "#9")}, nil, beam.Demand{Name: "1", Moment: units.KipFoot.Of(-20)})
 	c := find1(t, r, "flexure.negative")
 	require.Equal(t, beam.Fail, c.Outcome)
-	require.Equal(t, beam.Hopeless, c.Utilization)
+	require.Equal(t, beam.NoCapacity, c.Utilization)
 	require.Equal(t, beam.NotApplicable, find1(t, r, "flexure.positive").Outcome)
 }
 

@@ -118,6 +118,13 @@ func (r *resolution) surroundings() {
 func (r *resolution) actions() {
 	b := r.b
 	if len(b.Demands) > 0 {
+		sheared := false
+		for i := range b.Demands {
+			sheared = sheared || !b.Demands[i].Shear.IsZero()
+		}
+		if !sheared {
+			r.confirm("demands.shear", "no demand carries shear: shear is taken as nil", shearChecks...)
+		}
 		r.confirm("demands.factored", "the demands are factored by 5.3, simultaneous, and those of the critical sections of 9.4",
 			"flexure.positive", "flexure.negative", "shear.strength")
 		return
@@ -133,6 +140,9 @@ func (r *resolution) actions() {
 		wind = wind || l.Case == beam.Wind
 		laterals = laterals || l.Case == beam.Wind || l.Case == beam.Earthquake
 		torque = torque || l.Shape == beam.Torque || l.Shape == beam.UniformTorque
+	}
+	if len(b.Loads) == 0 {
+		r.confirm("loads.none", "the beam carries nothing but its own weight: no load is given", strengths...)
 	}
 	if b.NoSelfWeight {
 		r.confirm("loads.self-weight", "the dead load given holds the beam's own weight", strengths...)

@@ -34,6 +34,9 @@ func (z *webZone) appendStrength(dst []beam.Check) []beam.Check {
 	c := beam.Check{ID: "shear.strength", Clause: "22.5.1.1", Reason: w.note}
 	w.at(&c, z.span)
 	c.Compare(e.forceOf(w.values.shear).Amount(), e.forceOf(w.values.design).Amount())
+	if z.web[senseIndex(w.sense)].wide && c.Outcome == beam.Fail {
+		c.Reason = noteTooWide
+	}
 	if z.t.Record {
 		c.Steps = z.web[senseIndex(w.sense)].strengthSteps(e, &w.values)
 	}

@@ -27,6 +27,7 @@ const (
 	notePulled      = "shear at the face, not at d: under this combination the reaction pulls (9.4.3.2(a))"
 	noteNoStirrups  = "judged without stirrups: there are none"
 	noteGap         = "judged without stirrups: no zone of the layout reaches this length"
+	noteTooWide     = "the stirrups are further apart than Table 9.7.6.2.2 allows and are not counted"
 	noteBetween     = "between two zones: the spacing is the distance of the stirrups on either side"
 	noteNotRequired = "stirrups are not required here: Vu is below the shear that calls for them, and below φVc"
 	noteForStrength = "9.6.3.1 does not ask for least stirrups here; strength does"

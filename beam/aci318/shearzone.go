@@ -108,9 +108,9 @@ func ratio(demand, capacity float64) float64 {
 	case demand <= 0:
 		return 0
 	case capacity <= 0:
-		return beam.Hopeless
+		return beam.NoCapacity
 	}
-	return min(demand/capacity, beam.Hopeless)
+	return min(demand/capacity, beam.NoCapacity)
 }
 
 // meet takes a section into account.

@@ -82,7 +82,7 @@ func (e *edition) appendTieSpacing(dst []beam.Check, t *beam.Trial, f *beam.Face
 	}
 	c.Compare(widest.Amount(), most.Amount())
 	if len(t.Zones) == 0 {
-		c.Outcome, c.Utilization = beam.Fail, beam.Hopeless
+		c.Outcome, c.Utilization = beam.Fail, beam.NoCapacity
 	}
 	if t.Record && len(t.Zones) > 0 {
 		var out working
@@ -145,7 +145,7 @@ func (e *edition) appendHeldBars(dst []beam.Check, t *beam.Trial, f *beam.FaceSt
 	inner := outerBars(f) - 2
 	for i := 1; i < len(f.Fit.Layers); i++ {
 		if f.Fit.Layers[i].Count > 2 {
-			c.Outcome, c.Utilization = beam.Fail, beam.Hopeless
+			c.Outcome, c.Utilization = beam.Fail, beam.NoCapacity
 			c.Reason = "bars of an inner layer, away from the legs, are held by no stirrup"
 			return append(dst, c)
 		}

@@ -110,6 +110,9 @@ func bottomBars(l *beam.Layout) string {
 // round prints an amount to three figures, for reading.
 func (p *printer) round(a units.Amount) string {
 	v := p.sys.Float(a)
+	if a.Dimension() == units.None {
+		return fmt.Sprintf("%.3g", v)
+	}
 	digits := 0
 	if v != 0 {
 		digits = max(0, 2-int(math.Floor(math.Log10(math.Abs(v)))))

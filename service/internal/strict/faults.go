@@ -24,7 +24,8 @@ type Faults struct {
 // Add adds a fault.
 func (f *Faults) Add(fault Fault) {
 	for _, g := range f.list {
-		if inside(fault.Path, g.Path) {
+		// What holds a faulty member, or stands in one, tells nothing new.
+		if inside(fault.Path, g.Path) || fault.Path != "" && inside(g.Path, fault.Path) {
 			return
 		}
 	}

@@ -132,7 +132,7 @@ type Row struct {
 	Count         int           `json:"count" validate:"min=1,max=200" doc:"Number of bars; of side bars, on each side face."`
 	Face          string        `json:"face" validate:"oneof=bottom top side" doc:"Face at which the bars lie."`
 	Layer         *int          `json:"layer,omitzero" validate:"omitnil,min=1,max=4" doc:"Layer of the face, 1 nearest to it. Default: 1. Side bars have none."`
-	Spacing       *units.Length `json:"spacing,omitzero" doc:"Vertical spacing of side bars, counted from the bars nearest the tension face."`
+	Spacing       *units.Length `json:"spacing,omitzero" doc:"Vertical spacing of side bars, counted up from the highest layer at the bottom with more than one bar."`
 	InCompression *bool         `json:"in_compression,omitzero" doc:"true: the bars are relied on as compression steel. Default: false, they hold stirrups."`
 	From          *units.Length `json:"from,omitzero" doc:"Start along the beam. Default: the whole length."`
 	To            *units.Length `json:"to,omitzero" doc:"End along the beam. Default: the whole length."`

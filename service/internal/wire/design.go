@@ -15,6 +15,7 @@ type Design struct {
 	Layout    LayoutReply   `json:"layout" doc:"The bars and stirrups."`
 	Bars      []BarAt       `json:"bars" doc:"Every longitudinal bar by coordinates."`
 	Checks    []Check       `json:"checks" doc:"Every limit state, judged or not."`
+	NotJudged []string      `json:"not_judged" doc:"Ids of the checks that belong to the job and were not judged: the verdict does not speak of them."`
 	Flexure   []Flexure     `json:"flexure" doc:"Strength in bending of the layout, one for each sense that is bent."`
 	Reactions []Reaction    `json:"reactions" doc:"Factored reactions of the supports that hold; none with demands given directly."`
 	Refusals  []Refusal     `json:"refusals" doc:"Scope rules that put the problem outside the method."`
@@ -50,7 +51,7 @@ type Engine struct {
 // Governing names the check that governs.
 type Governing struct {
 	Check       string  `json:"check" doc:"Id of the check."`
-	Utilization float64 `json:"utilization" doc:"Demand over capacity."`
+	Utilization float64 `json:"utilization" doc:"Demand over capacity; 1e9 stands for no capacity at all."`
 }
 
 // SectionReply is a section in a reply.
@@ -145,6 +146,7 @@ type Assumption struct {
 	Assumed  string   `json:"assumed" doc:"What was assumed, with its value."`
 	UsedIn   []string `json:"used_in" doc:"Ids of the checks that rest on it."`
 	Found    string   `json:"found,omitzero" doc:"What the finished design shows."`
+	Status   string   `json:"status" enum:"confirmed refuted to-confirm" doc:"confirmed, refuted by the finished design, or the engineer's to confirm."`
 	Holds    bool     `json:"holds" doc:"Whether the finished design bears it out."`
 	Open     bool     `json:"open,omitzero" doc:"true: nothing in the input can confirm it; it stays the engineer's to confirm."`
 	Decisive bool     `json:"decisive,omitzero" doc:"true: the verdict cannot stand if it does not hold."`

@@ -66,7 +66,7 @@ type Shear struct {
 	Phi              float64        `json:"phi" doc:"Strength reduction factor."`
 	Design           units.Measure  `json:"design" doc:"Design strength."`
 	SectionLimit     units.Measure  `json:"section_limit" doc:"Largest factored shear that the section may carry."`
-	MinimumPerLength units.Measure  `json:"minimum_area_per_spacing" doc:"Least stirrup area over spacing."`
+	MinimumPerLength *units.Measure `json:"minimum_area_per_spacing,omitzero" doc:"Least stirrup area over spacing; absent without stirrups, whose strength it goes by."`
 	MinimumRequired  bool           `json:"minimum_required" doc:"Whether the shear asked for requires it."`
 	GreatestSpacing  units.Measure  `json:"greatest_spacing" doc:"Greatest stirrup spacing along the span."`
 	GreatestAcross   *units.Measure `json:"greatest_across,omitzero" doc:"Greatest distance between legs across the web. Absent: the edition has no such rule."`
