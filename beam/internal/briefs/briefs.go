@@ -18,7 +18,7 @@ type Kind uint8
 
 const (
 	Sound    Kind = iota + 1 // of ordinary proportions and loads
-	Hopeless                 // loads far beyond the section
+	NoCapacity                 // loads far beyond the section
 	Outside                  // a scope rule is broken
 	Absurd                   // a field holds what no beam has
 )
@@ -41,13 +41,13 @@ func Random(seed, n uint64) Sample {
 	s := Sample{Code: m.code, Kind: Sound}
 	switch r := m.IntN(100); {
 	case r < 8:
-		s.Kind = Hopeless
+		s.Kind = NoCapacity
 	case r < 18:
 		s.Kind = Outside
 	case r < 26:
 		s.Kind = Absurd
 	}
-	m.fill(s.Kind == Hopeless)
+	m.fill(s.Kind == NoCapacity)
 	s.Brief = m.b
 	switch s.Kind {
 	case Outside:

@@ -26,7 +26,7 @@ import (
 //   - a face never in tension: two to MaxLegs of the smallest allowed size
 //     that is not smaller than the stirrup;
 //   - stirrups of one size and 2 to MaxLegs legs, at multiples of the step
-//     from 50 mm to the code's widest, in one zone from face to face or in
+//     from 50 mm and standing clear of each other to the code's widest, in one zone from face to face or in
 //     three with end zones a whole number of spacings long, each at most 45 %
 //     of the clear length; a cantilever has one of at most 90 %;
 //   - if none of that passes, one layer of bars opposite, relied on.
@@ -73,7 +73,7 @@ type space struct {
 	to     float64
 	length float64
 	step   float64
-	least  int // steps
+	gap    float64 // clear, between bars and between stirrups
 	member bool
 	judged int
 }
@@ -98,7 +98,18 @@ func newSpace(t *testing.T, s briefs.Sample) *space {
 	}
 	e.bent = prepared.Bent()
 	e.step = s.Brief.Preferences.SpacingBy.In(units.Metre)
-	e.least = int(math.Ceil(0.05/e.step - 1e-9))
+	e.gap = 0.0254
+	if e.code.Edition().System == units.SI {
+		e.gap = 0.025
+	}
+	stone := s.Brief.Concrete.Aggregate.In(units.Metre)
+	if stone == 0 {
+		stone = 0.75 * 0.0254
+		if e.code.Edition().System == units.SI {
+			stone = 0.020
+		}
+	}
+	e.gap = max(e.gap, stone*4/3)
 	if len(s.Brief.Spans) > 0 {
 		e.member = true
 		e.length = s.Brief.Spans[0].In(units.Metre)
@@ -106,6 +117,11 @@ func newSpace(t *testing.T, s briefs.Sample) *space {
 		e.to = e.length - s.Brief.Supports[1].Width.In(units.Metre)/2
 	}
 	return e
+}
+
+// least is the closest spacing of stirrups, in steps.
+func (e *space) least(tie bars.Size) int {
+	return int(math.Ceil(max(0.05, tie.Diameter.In(units.Metre)+e.gap)/e.step - 1e-9))
 }
 
 // most is a number of bars that no layer of a size can hold.
@@ -118,7 +134,7 @@ func (e *space) most(size bars.Size) int {
 func (e *space) capacity(tie, size bars.Size) int {
 	for n := 2; n <= e.most(size); n++ {
 		row := choice{{size, n, 1}}
-		report, err := e.beam.Bars(e.layout(row, choice{{size, 2, 1}}, 0, e.zone(tie, 2, e.least, e.from, e.to)))
+		report, err := e.beam.Bars(e.layout(row, choice{{size, 2, 1}}, 0, e.zone(tie, 2, e.least(tie), e.from, e.to)))
 		if err != nil || report.Tight[0] < 1-1e-9 {
 			return n - 1
 		}
@@ -290,7 +306,7 @@ func (e *space) stirrups(p *pair, limit float64, try func(zones []beam.Zone, mas
 	for legs := 2; legs <= min(e.brief.Preferences.MaxLegs, p.bottom.outer(), p.top.outer()); legs++ {
 		one := e.stirrup(p.tie, legs, p.cover)
 		if !e.member {
-			for k := e.least; k <= p.widest; k++ {
+			for k := e.least(p.tie); k <= p.widest; k++ {
 				if mass := one / (e.step * float64(k)); mass < limit {
 					try([]beam.Zone{e.zone(p.tie, legs, k, 0, 0)}, mass)
 				}
@@ -304,7 +320,7 @@ func (e *space) stirrups(p *pair, limit float64, try func(zones []beam.Zone, mas
 		if most < number(e.to-e.from, e.step*float64(p.widest)) {
 			continue
 		}
-		for k := e.least; k <= p.widest; k++ {
+		for k := e.least(p.tie); k <= p.widest; k++ {
 			if n := number(e.to-e.from, e.step*float64(k)); n <= most {
 				try([]beam.Zone{e.zone(p.tie, legs, k, e.from, e.to)}, float64(n)*one)
 			}
@@ -320,7 +336,7 @@ func (e *space) stirrups(p *pair, limit float64, try func(zones []beam.Zone, mas
 // place, to leave out what cannot pass.
 func (e *space) threeZones(p *pair, legs, most int, one float64, try func([]beam.Zone, float64)) {
 	enough := make([]func(a, b float64) bool, p.widest+1)
-	for k := e.least; k <= p.widest; k++ {
+	for k := e.least(p.tie); k <= p.widest; k++ {
 		at, ok, err := e.beam.Enough(e.layout(p.bottom, p.top, p.relied, e.zone(p.tie, legs, k, e.from, e.to)))
 		if err != nil {
 			return
@@ -335,7 +351,7 @@ func (e *space) threeZones(p *pair, legs, most int, one float64, try func([]beam
 		}
 	}
 	length := e.to - e.from
-	for near := e.least; near < p.widest; near++ {
+	for near := e.least(p.tie); near < p.widest; near++ {
 		s := e.step * float64(near)
 		mostLeft, mostRight := int(0.45*length/s), int(0.45*length/s)
 		switch {
@@ -496,7 +512,7 @@ func (e *space) fits(tie bars.Size, c choice) bool {
 // holds judges the bars of a pair with the closest stirrups, and reads off
 // what the stirrups depend on.
 func (e *space) holds(p *pair) bool {
-	l := e.layout(p.bottom, p.top, p.relied, e.zone(p.tie, 2, e.least, e.from, e.to))
+	l := e.layout(p.bottom, p.top, p.relied, e.zone(p.tie, 2, e.least(p.tie), e.from, e.to))
 	report, err := e.beam.Bars(l)
 	if err != nil || !report.OK() {
 		return false
@@ -507,7 +523,7 @@ func (e *space) holds(p *pair) bool {
 	if e.code.Edition().System == units.SI {
 		most = 0.6
 	}
-	p.widest = max(e.least, int(math.Min(deep/2, most)/e.step+1e-9))
+	p.widest = max(e.least(p.tie), int(math.Min(deep/2, most)/e.step+1e-9))
 	return true
 }
 

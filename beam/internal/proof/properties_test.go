@@ -190,7 +190,7 @@ func TestCuresCure(t *testing.T) {
 	}
 	for n := uint64(0); n < 2000 && cured < most; n++ {
 		s := briefs.Random(seed+2, n)
-		if s.Kind != briefs.Sound && s.Kind != briefs.Hopeless {
+		if s.Kind != briefs.Sound && s.Kind != briefs.NoCapacity {
 			continue
 		}
 		s.Brief.Preferences.NoCures = false

@@ -115,7 +115,7 @@ func put(i uint64) (a answer) {
 		switch {
 		case !errors.As(err, &in) || len(in.Faults) == 0:
 			wrong("an error that lists no faults: %v", err)
-		case s.Kind == briefs.Sound || s.Kind == briefs.Hopeless:
+		case s.Kind == briefs.Sound || s.Kind == briefs.NoCapacity:
 			wrong("a sensible brief is refused: %v", err)
 		}
 		if in != nil {

@@ -61,6 +61,7 @@ type judge struct {
 	stone              float64
 	cage               cage
 	cover, dst         float64
+	ownCover           bool // the caller's, and enough for the stirrups
 	beds               [2]*bed // bottom and top
 	zones              []zone
 	member             *member
@@ -297,12 +298,8 @@ func (j *judge) place() error {
 	j.dst = thickest
 	switch {
 	case !j.b.Cover.IsZero():
-		// A cover that the caller gives is taken, but the main bars inside the
-		// stirrups still have theirs.
 		j.cover = j.length(j.b.Cover)
-		if thickest > 0 && j.cover >= j.tableCover(stirrup)*(1-slack) {
-			j.check("cover of main bars 20.5.1.3", j.tableCover(largest), j.cover+thickest, "number %d", largest)
-		}
+		j.ownCover = thickest > 0 && j.cover >= j.tableCover(stirrup)*(1-slack)
 	case thickest == 0:
 		j.cover = j.tableCover(largest)
 	default:
@@ -504,6 +501,15 @@ func (j *judge) fit(k int) {
 		}
 		return
 	}
+	// A cover that the caller gives is taken, but bars inside stirrups that
+	// have theirs need their own.
+	for _, row := range b.layers {
+		for _, o := range row {
+			if j.ownCover {
+				j.check("cover of bars 20.5.1.3", j.tableCover(o.number), min(o.y, o.x, j.bw-o.x)-o.r, "number %d", o.number)
+			}
+		}
+	}
 	for _, f := range b.faults {
 		j.wrong("fit 25.2, 25.3", 2, "%s", f)
 	}
@@ -630,14 +636,28 @@ func (j *judge) sides() {
 		if !j.bent[k] || j.beds[k].count == 0 {
 			continue
 		}
-		heights := []float64{}
+		var heights []float64 // of bars along the side, from the face in tension
+		for _, row := range j.beds[k].layers {
+			if len(row) > 1 { // a single bar lies in the middle of the width
+				heights = append(heights, row[0].y)
+			}
+		}
+		last := 0.0 // the highest bar at the bottom
+		for _, row := range j.beds[0].layers {
+			for _, o := range row {
+				last = math.Max(last, o.y)
+			}
+		}
 		for i := range j.l.Longitudinal {
 			r := &j.l.Longitudinal[i]
 			if r.Face != beam.Side {
 				continue
 			}
 			for n := 1; n <= r.Count; n++ {
-				y := j.beds[0].nearest + float64(n)*j.length(r.Spacing)
+				y := last + float64(n)*j.length(r.Spacing)
+				if y >= j.h {
+					j.wrong(SideFace, 2, "a bar at %.5g lies outside the beam", y)
+				}
 				if k == 1 {
 					y = j.h - y
 				}
