@@ -310,16 +310,14 @@ func (s *search) compressed(ctx context.Context, tie bars.Size, face Face) error
 			continue
 		}
 		for _, of := range others {
-			if !s.compress(tie, face, b, of, lightest) {
-				break
-			}
+			s.compress(tie, face, b, of, lightest)
 		}
 	}
 	return nil
 }
 
 // helped reports whether the most steel of one of the largest sizes in
-// compression makes a tension set pass. Less would not.
+// compression makes a tension set pass in its own sense. Less would not.
 func (s *search) helped(tie bars.Size, face Face, b *barSet, others [][]barSet) bool {
 	tried := 0
 	for i := len(others) - 1; i >= 0 && tried < 3; i-- {
@@ -327,7 +325,7 @@ func (s *search) helped(tie bars.Size, face Face, b *barSet, others [][]barSet) 
 		if n == 0 {
 			continue
 		}
-		if s.relied(tie, face, b, &others[i][n-1]) {
+		if s.presses(tie, face, b, &others[i][n-1]) && s.judge(face, Bending) {
 			return true
 		}
 		tried++
@@ -335,41 +333,44 @@ func (s *search) helped(tie bars.Size, face Face, b *barSet, others [][]barSet) 
 	return false
 }
 
-// compress completes a tension set with bars of one size in compression. It
-// reports false once no stirrups were found although every leg had a bar to
-// hold: other sizes would change nothing in that.
-func (s *search) compress(tie bars.Size, face Face, b *barSet, of []barSet, lightest float64) bool {
+// compress completes a tension set with bars of one size in compression. In
+// the sense that they help, more of them never fail where fewer pass; what they
+// do to the other sense and to the fit is judged count by count.
+func (s *search) compress(tie bars.Size, face Face, b *barSet, of []barSet, lightest float64) {
 	n := len(of)
-	if n == 0 || !s.promising(b, &of[0], lightest) || !s.relied(tie, face, b, &of[n-1]) {
-		return true
+	helps := func(o *barSet) bool { return s.presses(tie, face, b, o) && s.judge(face, Bending) }
+	if n == 0 || !s.promising(b, &of[0], lightest) || !helps(&of[n-1]) {
+		return
 	}
-	// More compression steel never fails where less passes.
-	first := n - 1 - s.last(0, n-1, func(fewer int) bool { return s.relied(tie, face, b, &of[n-1-fewer]) })
+	first := n - 1 - s.last(0, n-1, func(fewer int) bool { return helps(&of[n-1-fewer]) })
 	for i := first; i < n; i++ {
 		o := &of[i]
-		if !s.promising(b, o, lightest) || !s.relied(tie, face, b, o) {
-			return true
+		if !s.promising(b, o, lightest) {
+			return
+		}
+		if !s.relied(tie, face, b, o) {
+			continue
 		}
 		bottom, top := b, o
 		if face == Top {
 			bottom, top = o, b
 		}
-		if s.shear(tie, bottom, top, face.Opposite()) {
-			return true
-		}
-		if o.count >= s.p.Brief.Preferences.MaxLegs {
-			return false
+		if s.shear(tie, bottom, top, face.Opposite()) || o.count >= s.p.Brief.Preferences.MaxLegs {
+			return
 		}
 	}
-	return true
+}
+
+// presses lays a tension set with compression steel opposite.
+func (s *search) presses(tie bars.Size, face Face, b, other *barSet) bool {
+	s.t.enclose(tie, larger(b.largest(), other.largest()))
+	s.t.Zones, s.t.ZoneBar = nil, nil
+	return s.put(face, b, false) && s.put(face.Opposite(), other, true)
 }
 
 // relied judges a tension set with compression steel opposite.
 func (s *search) relied(tie bars.Size, face Face, b, other *barSet) bool {
-	s.t.enclose(tie, larger(b.largest(), other.largest()))
-	s.t.Zones, s.t.ZoneBar = nil, nil
-	return s.put(face, b, false) && s.put(face.Opposite(), other, true) &&
-		s.judge(0, Bending) && s.judge(0, Fitting) // most fail the first
+	return s.presses(tie, face, b, other) && s.judge(0, Bending) && s.judge(0, Fitting) // most fail the first
 }
 
 func larger(a, b bars.Size) bars.Size {
