@@ -17,10 +17,10 @@ import (
 type Kind uint8
 
 const (
-	Sound    Kind = iota + 1 // of ordinary proportions and loads
+	Sound      Kind = iota + 1 // of ordinary proportions and loads
 	NoCapacity                 // loads far beyond the section
-	Outside                  // a scope rule is broken
-	Absurd                   // a field holds what no beam has
+	Outside                    // a scope rule is broken
+	Absurd                     // a field holds what no beam has
 )
 
 func (k Kind) String() string { return [...]string{"", "sound", "hopeless", "outside", "absurd"}[k] }

@@ -61,7 +61,7 @@ type judge struct {
 	stone              float64
 	cage               cage
 	cover, dst         float64
-	ownCover           bool // the caller's, and enough for the stirrups
+	ownCover           bool    // the caller's, and enough for the stirrups
 	beds               [2]*bed // bottom and top
 	zones              []zone
 	member             *member
@@ -642,10 +642,12 @@ func (j *judge) sides() {
 				heights = append(heights, row[0].y)
 			}
 		}
-		last := 0.0 // the highest bar at the bottom
+		last := j.beds[0].nearest // the highest layer at the bottom with bars at the legs
 		for _, row := range j.beds[0].layers {
 			for _, o := range row {
-				last = math.Max(last, o.y)
+				if len(row) > 1 {
+					last = math.Max(last, o.y)
+				}
 			}
 		}
 		for i := range j.l.Longitudinal {
