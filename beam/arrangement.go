@@ -37,6 +37,9 @@ func (a Arrangement) Describe(sys units.System) string {
 		b.WriteString(", one layer")
 	}
 	fmt.Fprintf(&b, ", %s, in %s stirrups", a.Face, a.With)
+	if a.Pressed.Count[0] > 0 {
+		fmt.Fprintf(&b, ", with %d %s relied on in compression", a.Pressed.Count[0], a.Pressed.Size[0])
+	}
 	return b.String()
 }
 

@@ -64,6 +64,9 @@ type Arrangement struct {
 	Depth  units.Length // overall depth of the section tried
 	Layers [MaxLayers]LayerBars
 	With   string // the stirrup size it was laid inside
+	// Pressed are bars at the opposite face that were relied on in
+	// compression; none where the count is zero.
+	Pressed LayerBars
 	// Stirrups, for arrangements of stirrups.
 	Bar     string
 	Legs    int

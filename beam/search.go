@@ -325,12 +325,23 @@ func (s *search) helped(tie bars.Size, face Face, b *barSet, others [][]barSet) 
 		if n == 0 {
 			continue
 		}
-		if s.presses(tie, face, b, &others[i][n-1]) && s.judge(face, Bending) {
+		o := &others[i][n-1]
+		if s.presses(tie, face, b, o) && s.judge(face, Bending) {
 			return true
 		}
-		tried++
+		if tried++; tried == 1 {
+			s.rejectPressed(tie, face, b, o)
+		}
 	}
 	return false
+}
+
+// rejectPressed logs a tension set with compression steel by the checks that
+// have just failed.
+func (s *search) rejectPressed(tie bars.Size, face Face, b, other *barSet) {
+	a := Arrangement{Face: face, Depth: s.p.Brief.Section.Depth, Layers: b.names(), With: tie.Name}
+	a.Pressed = other.names()[0]
+	s.reject(a)
 }
 
 // compress completes a tension set with bars of one size in compression. In
@@ -349,6 +360,7 @@ func (s *search) compress(tie bars.Size, face Face, b *barSet, of []barSet, ligh
 			return
 		}
 		if !s.relied(tie, face, b, o) {
+			s.rejectPressed(tie, face, b, o)
 			continue
 		}
 		bottom, top := b, o
@@ -370,7 +382,7 @@ func (s *search) presses(tie bars.Size, face Face, b, other *barSet) bool {
 
 // relied judges a tension set with compression steel opposite.
 func (s *search) relied(tie bars.Size, face Face, b, other *barSet) bool {
-	return s.presses(tie, face, b, other) && s.judge(0, Bending) && s.judge(0, Fitting) // most fail the first
+	return s.presses(tie, face, b, other) && s.judge(0, Bending, Fitting)
 }
 
 func larger(a, b bars.Size) bars.Size {
