@@ -9,8 +9,9 @@ import (
 // Supports and Loads describe a member to be analysed, or Demands carry
 // factored forces from the caller's own analysis.
 //
-// The zero value of an optional field asks for the code's own value, which is
-// then listed among the result's assumptions.
+// The zero value of an optional field asks for the code's own value. What only
+// the engineer can confirm is then listed among the result's assumptions; the
+// resolved brief is in Result.Problem.
 type Brief struct {
 	Reference     string // the caller's mark for the beam, echoed in the result
 	Section       Section

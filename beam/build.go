@@ -256,8 +256,8 @@ func (t *Trial) setZones(f *faults, l *Layout) bars.Size {
 			}
 			if need := stirrupCount(z); z.Count == 0 {
 				z.Count = need
-			} else if z.Count < need {
-				f.add(path+"/count", fmt.Sprintf("at least %d", need), "%d stirrups do not keep %s over the zone", z.Count, f.system.Format(z.Spacing.Amount()))
+			} else if z.Count < need || z.Count > need+1 {
+				f.add(path+"/count", fmt.Sprintf("%d, or %d", need, need+1), "%d stirrups at %s do not make up the zone", z.Count, f.system.Format(z.Spacing.Amount()))
 			}
 		} else if len(t.Zones) > 0 {
 			f.add(path, "one zone with demands", "more than one zone is given, and demands have no place along the beam")

@@ -15,7 +15,7 @@ type Result struct {
 	System    units.System
 
 	Verdict   Verdict
-	Governing *Check // the judged check with the largest utilization; nil when out of scope
+	Governing *Check // as Governing picks it; nil when out of scope
 
 	Reactions []Reaction // factored, of each support; none with demands given directly
 

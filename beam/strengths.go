@@ -10,7 +10,7 @@ type SectionQuery struct {
 	Layers   []SteelLayer
 	Stirrups *StirrupSteel // nil: none
 	Readings Readings
-	Demand   Demand // zero: nothing asked, verdicts are not applicable
+	Demand   Demand // zero: nothing asked, and no checks
 }
 
 // SteelLayer is longitudinal steel at one depth from the top face, whichever
@@ -26,7 +26,7 @@ type StirrupSteel struct {
 	Area     units.Area // all legs crossed by one shear crack at one stirrup
 	Spacing  units.Length
 	Yield    units.Stress
-	Cover    units.Length
+	Cover    units.Length // with Diameter, for a drawing: strength does not go by them
 	Diameter units.Length
 	Across   units.Length // greatest leg-to-leg distance across the web; zero: not known
 }

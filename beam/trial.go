@@ -42,8 +42,8 @@ type FaceSteel struct {
 	Fit  bars.Fit   // every bar by coordinates, with the gaps and spacings they leave
 	Area units.Area // catalogue areas, added as decimals
 	// Centroid, Nearest and Farthest are distances from this face to the
-	// centroid of all bars, to the centre of the nearest, and to that of the
-	// farthest that stands at a stirrup's leg: a layer of one bar has none.
+	// centroid of all bars, to the centre of the nearest, and to the highest
+	// layer of more than one bar, whose outer bars stand at the legs.
 	Centroid, Nearest, Farthest units.Length
 	Largest, Smallest           bars.Size
 	Count                       int
@@ -53,8 +53,7 @@ type FaceSteel struct {
 }
 
 // SideSteel is distributed steel along both side faces: Each bars a side at
-// Spacing, the first one spacing from the layer of TensionFace that is farthest
-// from it.
+// Spacing, the first one spacing from the Farthest of TensionFace.
 type SideSteel struct {
 	Size        bars.Size
 	Each        int

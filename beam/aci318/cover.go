@@ -55,20 +55,13 @@ func (c Code) Cover(p *beam.Problem, stirrup, bar bars.Size) units.Length {
 // noteOwnCover is said where the brief's own cover is less than the table's.
 const noteOwnCover = "the brief asks for less cover than the table: whether that is permitted is not judged"
 
-// ownCover reports whether the brief sets a cover below the table's for the
-// outermost steel: that is the engineer's decision, and no cover is judged. One
-// that only the bars behind the stirrup fall short of is no decision but a
-// choice of bars, and fails.
+// ownCover reports whether the brief sets a cover below the least that the
+// table has for its exposure, whatever the size of the bars: that is the
+// engineer's decision, and no cover is judged. One that only large bars fall
+// short of is no decision but a choice of bars, and fails.
 func (e *edition) ownCover(t *beam.Trial) bool {
-	outermost := &t.Stirrup
-	if t.Stirrup.Diameter.IsZero() {
-		outermost = &t.Bottom.Largest
-		if outermost.Diameter.Less(t.Top.Largest.Diameter) {
-			outermost = &t.Top.Largest
-		}
-	}
 	own := t.Brief.Cover
-	return !own.IsZero() && !e.leastCover(t.Brief.Exposure, outermost).AtMost(own)
+	return !own.IsZero() && !e.leastCover(t.Brief.Exposure, &bars.Size{}).AtMost(own)
 }
 
 // coverCheck compares a cover with the least.

@@ -402,6 +402,12 @@ func TestTiesOfCompressionBars(t *testing.T) {
 	addZone(inner, 3, 8, 6, 258)
 	require.Equal(t, beam.Pass, only(t, us19.judgeTies(nil, inner), "ties.held-bars").Outcome)
 
+	// A single bar of an inner layer stands in the middle, held by nothing.
+	inner = trialOf(t, p, "#3", []group{{5, "#8"}}, []group{{3, "#6"}, {1, "#6"}})
+	inner.Top.InCompression = true
+	addZone(inner, 3, 8, 6, 258)
+	require.Equal(t, beam.Fail, only(t, us19.judgeTies(nil, inner), "ties.held-bars").Outcome)
+
 	// Open stirrups do not tie, and a length without stirrups leaves bars untied.
 	tr := shearTrial(t, ACI31819(), nil)
 	tr.Top.InCompression = true
@@ -409,7 +415,15 @@ func TestTiesOfCompressionBars(t *testing.T) {
 	require.Equal(t, beam.Pass, only(t, us19.judgeTies(nil, tr), "ties.form").Outcome)
 	gap := only(t, us19.judgeTies(nil, tr), "ties.spacing")
 	require.Equal(t, beam.Fail, gap.Outcome)
-	require.InEpsilon(t, 28, valueIn(t, gap.Demand, "in"), 1e-9)
+	// 28 in. to the face, and half a spacing back to the last stirrup.
+	require.InEpsilon(t, 28+4, valueIn(t, gap.Demand, "in"), 1e-9)
+	// Across a gap between zones what counts is the distance of the stirrups.
+	tr = shearTrial(t, ACI31819(), nil)
+	tr.Top.InCompression = true
+	addZone(tr, 2, 8, 6, 126)
+	addZone(tr, 2, 8, 132.9, 258)
+	gap = only(t, us19.judgeTies(nil, tr), "ties.spacing")
+	require.InEpsilon(t, 4+6.9+4, valueIn(t, gap.Demand, "in"), 1e-9)
 	tr.Zones[0].Form = "open"
 	require.Equal(t, beam.Fail, only(t, us19.judgeTies(nil, tr), "ties.form").Outcome)
 }

@@ -117,17 +117,18 @@ func crossCheck(section mechanics.Section, law mechanics.Law, bending mechanics.
 }
 
 // tensionSide is the steel by which d, ρw and least steel go: the layers in
-// tension beyond mid-depth, or every layer in tension where none lies there. A
-// layer near the neutral axis that happens to be stretched is no tension
-// reinforcement; counted, it would pull d up and stand in for bars that are not
-// there.
+// tension farther than two-thirds of the depth from the compression face, which
+// the commentary to Table 22.5.5.1 sums, or every layer in tension where none
+// lies there. A layer nearer the neutral axis that happens to be stretched is no
+// tension reinforcement; counted, it would pull d up and stand in for bars that
+// are not there.
 func tensionSide(u *mechanics.Ultimate, section mechanics.Section) (units.Area, units.Length) {
-	middle := section.Depth().Scale(0.5)
+	near := section.Depth().Scale(2.0 / 3)
 	var area units.Area
 	moment := 0.0
 	for i := range u.Layers {
 		l := &u.Layers[i]
-		if l.Strain < 0 && middle.Less(l.Depth) {
+		if l.Strain < 0 && near.Less(l.Depth) {
 			a := section.Layers[i].Area
 			area = area.Add(a)
 			moment += a.In(units.SquareMetre) * l.Depth.In(units.Metre)

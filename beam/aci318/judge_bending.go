@@ -30,9 +30,9 @@ func (e *edition) judgeBending(dst []beam.Check, t *beam.Trial) []beam.Check {
 
 func notBent(s beam.Sense) string {
 	if s == beam.Negative {
-		return "no combination bends the beam with tension at the top between support faces"
+		return "nothing bends the beam with tension at the top between support faces"
 	}
-	return "no combination bends the beam with tension at the bottom between support faces"
+	return "nothing bends the beam with tension at the bottom between support faces"
 }
 
 // greatestAction is the action with the largest moment of a sense between

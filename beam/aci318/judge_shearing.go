@@ -174,12 +174,10 @@ func (s *shearSpan) cover(at units.Length) (end units.Length, covered bool) {
 	return next, false
 }
 
-// gap judges a length that no zone reaches. What counts is how far the stirrups
-// on either side of it are apart, or the first one from the face of the
-// support: up to a spacing, nothing is amiss; between two zones up to two
-// spacings are judged as the spacing that they are; anything else as bare.
-func (s *shearSpan) gap(dst []beam.Check, breaks []units.Length, at, end units.Length, note string) []beam.Check {
-	before, after := -1, -1
+// neighbours are the zones that end and begin where a length that no zone
+// reaches begins and ends; -1 where none does.
+func (s *shearSpan) neighbours(at, end units.Length) (before, after int) {
+	before, after = -1, -1
 	for k := range s.t.Zones {
 		if !s.stirrups(k) {
 			continue
@@ -191,31 +189,48 @@ func (s *shearSpan) gap(dst []beam.Check, breaks []units.Length, at, end units.L
 			after = k
 		}
 	}
-	one := max(before, after)
-	if one < 0 {
-		return s.judge(dst, breaks, -1, units.Length{}, at, end, note)
-	}
-	half := func(k int) units.Length { return s.t.Zones[k].Spacing.Scale(0.5) }
-	if before < 0 || after < 0 {
-		if end.Sub(at).AtMost(half(one)) {
-			return dst
+	return before, after
+}
+
+// apart is how far the stirrups on either side of a length that no zone reaches
+// are apart, or the nearest one from its far end.
+func (s *shearSpan) apart(at, end units.Length) units.Length {
+	d := end.Sub(at)
+	before, after := s.neighbours(at, end)
+	for _, k := range [2]int{before, after} {
+		if k >= 0 {
+			d = d.Add(s.t.Zones[k].Spacing.Scale(0.5))
 		}
+	}
+	return d
+}
+
+// gap judges a length that no zone reaches. What counts is how far the stirrups
+// on either side of it are apart, or the first one from the face of the
+// support: up to a spacing, nothing is amiss; between two zones up to two
+// spacings are judged as the spacing that they are; anything else as bare.
+func (s *shearSpan) gap(dst []beam.Check, breaks []units.Length, at, end units.Length, note string) []beam.Check {
+	before, after := s.neighbours(at, end)
+	if before < 0 && after < 0 {
 		return s.judge(dst, breaks, -1, units.Length{}, at, end, note)
 	}
-	apart := half(before).Add(end.Sub(at)).Add(half(after))
-	wider, weaker := before, before
-	if s.t.Zones[before].Spacing.Less(s.t.Zones[after].Spacing) {
-		wider = after
+	wider, weaker := max(before, after), max(before, after)
+	if before >= 0 && after >= 0 {
+		a, b := &s.t.Zones[before], &s.t.Zones[after]
+		wider, weaker = before, before
+		if a.Spacing.Less(b.Spacing) {
+			wider = after
+		}
+		if s.t.ZoneBar[after].Area.Scale(float64(b.Legs)).Less(s.t.ZoneBar[before].Area.Scale(float64(a.Legs))) {
+			weaker = after
+		}
 	}
-	switch spacing := s.t.Zones[wider].Spacing; {
+	spacing, apart := s.t.Zones[wider].Spacing, s.apart(at, end)
+	switch {
 	case apart.AtMost(spacing):
 		return dst
-	case !apart.AtMost(spacing.Scale(2)):
+	case before < 0 || after < 0 || !apart.AtMost(spacing.Scale(2)):
 		return s.judge(dst, breaks, -1, units.Length{}, at, end, note)
-	}
-	legs := func(k int) units.Area { return s.t.ZoneBar[k].Area.Scale(float64(s.t.Zones[k].Legs)) }
-	if legs(after).Less(legs(before)) {
-		weaker = after
 	}
 	return s.judge(dst, breaks, weaker, apart, at, end, noteBetween)
 }

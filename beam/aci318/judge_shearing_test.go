@@ -462,12 +462,12 @@ func TestWorstSectionAgreesWithASweep(t *testing.T) {
 		}
 		b.Loads = nil
 		for range rapid.IntRange(1, 4).Draw(r, "loads") {
-			from := draw(0, 800, "from")
+			from := draw(0, 600, "from")
 			b.Loads = append(b.Loads, beam.Load{
 				Case: beam.LoadCases()[rapid.IntRange(0, 6).Draw(r, "case")], Shape: beam.Partial,
 				Intensity:    units.KipPerFoot.Of(draw(-2000, 3000, "w")),
 				IntensityEnd: units.KipPerFoot.Of(draw(-2000, 3000, "w end")), Varies: true,
-				From: units.Foot.Of(span * from), To: units.Foot.Of(span * (from + 0.2)),
+				From: units.Foot.Of(span * from), To: units.Foot.Of(span * (from + 0.4)),
 			})
 		}
 		b.Loads = append(b.Loads, beam.Load{
@@ -492,4 +492,26 @@ func TestWorstSectionAgreesWithASweep(t *testing.T) {
 			require.LessOrEqual(r, got, want*1.02+1e-9) // what the sweep misses between its sections
 		}
 	})
+}
+
+// A distributed load that is heavy between the face and d, though too long for a
+// concentrated one, is not left out: the shear at the face governs.
+func TestHeavyLoadNearTheFaceCountsInFull(t *testing.T) {
+	near := func(to float64) *beam.Trial {
+		tr := shearTrial(t, ACI31819(), func(b *beam.Brief) {
+			b.NoSelfWeight = true
+			b.Loads = []beam.Load{{Case: beam.Live, Shape: beam.Partial, Intensity: units.KipPerFoot.Of(6), From: units.Inch.Of(6), To: units.Inch.Of(to)}}
+		})
+		addZone(tr, 2, 10, 6, 258)
+		return tr
+	}
+	// 1.6 × 6 kip/ft over 52 in. of 264: R = w c (1 - (6 + c/2)/264)
+	c := only(t, us19.judgeShearing(nil, near(58)), "shear.strength")
+	require.Equal(t, noteLoadInDepth, c.Reason)
+	require.InEpsilon(t, 0.8*52*(1-32.0/264), valueIn(t, c.Demand, "kip"), 1e-9)
+	// Over most of the span it is even enough for the shear at d; the right end
+	// governs, where the last 14 in. are bare.
+	c = only(t, us19.judgeShearing(nil, near(250)), "shear.strength")
+	require.Equal(t, noteAtDepth, c.Reason)
+	require.InEpsilon(t, 0.8*(244*128.0/264-(250-236.375)), valueIn(t, c.Demand, "kip"), 1e-9)
 }

@@ -268,7 +268,17 @@ func TestRefusals(t *testing.T) {
 		{"short load near the support", ACI31819(), strip(50, 74), "scope.load-within-2h", "44 in from the face of support 1"},
 		{"short load across the face", ACI31819(), strip(2, 10), "scope.load-within-2h", "0 in from the face of support 1"},
 		{"short load beyond 2h", ACI31819(), strip(54.01, 78), "", ""},
-		{"load longer than h near the support", ACI31819(), strip(50, 74.1), "", ""},
+		{"load over less than 2h near the support", ACI31819(), strip(50, 97.9), "scope.load-within-2h", "support 1"},
+		{"load over more than 2h near the support", ACI31819(), strip(50, 98.1), "", ""},
+		{"heavy end of a triangle near the support", ACI31819(), func(b *beam.Brief) {
+			b.Loads = append(b.Loads, beam.Load{Case: beam.Live, Shape: beam.Partial, Varies: true, Intensity: units.KipPerFoot.Of(20), From: units.Inch.Of(8), To: units.Inch.Of(80)})
+		}, "scope.load-within-2h", "support 1"},
+		{"an even load typed in pieces", ACI31819(), func(b *beam.Brief) {
+			for i := range 22 {
+				b.Loads = append(b.Loads, beam.Load{Case: beam.Live, Shape: beam.Partial, Intensity: units.KipPerFoot.Of(1.5), From: units.Foot.Of(float64(i)), To: units.Foot.Of(float64(i + 1))})
+			}
+		}, "", ""},
+		{"a load not worth a look", ACI31819(), point(30, func(l *beam.Load) { l.Force = units.PoundForce.Of(50) }), "", ""},
 		{"load hung from the soffit", ACI31819(), point(30, func(l *beam.Load) { l.Hung = true }), "", ""},
 		{"load of nothing", ACI31819(), point(30, func(l *beam.Load) { l.Force = units.Force{} }), "", ""},
 		{"support hung", ACI31819(), func(b *beam.Brief) { point(30)(b); b.Supports[0].Hung = true }, "", ""},

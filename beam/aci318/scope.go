@@ -25,7 +25,7 @@ var (
 // scopeWords is what every edition refuses, or leaves out, in words.
 var scopeWords = []string{
 	"deep beams: clear spans of at most 4h, cantilevers of at most 2h (9.9)",
-	"concentrated loads within 2h of the face of a support, among them loads spread over no more than h (9.9)",
+	"concentrated loads within 2h of the face of a support, among them distributed loads of which more than half lies within a length h (9.9)",
 	"axial compression of at least 0.10 f'c Ag, and axial tension (22.4)",
 	"torsion not below its threshold (22.7)",
 	"concrete below the least strength of 19.2.1.1",
@@ -78,12 +78,8 @@ func (e *edition) deepRefusals(p *beam.Problem, span int) []beam.Refusal {
 		})
 	}
 	left, right := p.Faces(span)
-	for i := range b.Loads {
-		l := &b.Loads[i]
-		a, z, ok := concentratedOver(l, h)
-		if !ok || l.Hung || l.Span != 0 && l.Span != span {
-			continue
-		}
+	for _, l := range concentratedLoads(p, span) {
+		a, z := l.from, l.to
 		// How far the load's near and far ends are from each face.
 		for end, reach := range [2][2]units.Length{{a.Sub(left), z.Sub(left)}, {right.Sub(z), right.Sub(a)}} {
 			s := &b.Supports[span-1+end]
@@ -94,26 +90,11 @@ func (e *edition) deepRefusals(p *beam.Problem, span int) []beam.Refusal {
 			out = append(out, beam.Refusal{
 				Rule: "scope.load-within-2h", Clause: "9.9.1.1(b)",
 				Detail: fmt.Sprintf("load %d acts %s from the face of support %d, which is within %g h = %s: that region is a deep beam, to be designed by 9.9 or chapter 23",
-					i+1, e.length.Format(from), span+end, r.deepLoad, e.length.Format(h.Scale(r.deepLoad))),
+					l.load, e.length.Format(from), span+end, r.deepLoad, e.length.Format(h.Scale(r.deepLoad))),
 			})
 		}
 	}
 	return out
-}
-
-// concentratedOver is the length over which a load acts as a concentrated one:
-// a point load, or a load spread over no more than the depth of the beam, which
-// spreads that far on its way to mid-depth anyway (a judgement: the standard
-// draws no line).
-func concentratedOver(l *beam.Load, h units.Length) (from, to units.Length, ok bool) {
-	switch l.Shape {
-	case beam.PointLoad:
-		return l.At, l.At, !l.Force.IsZero()
-	case beam.Partial:
-		nothing := l.Intensity.IsZero() && (!l.Varies || l.IntensityEnd.IsZero())
-		return l.From, l.To, !nothing && l.To.Sub(l.From).AtMost(h)
-	}
-	return from, to, false
 }
 
 // axialRefusals names an axial force that pure bending does not cover: 9.5.2.1

@@ -20,7 +20,7 @@ func (e *edition) settleCover(t *beam.Trial, note *beam.Register) {
 	if !e.ownCover(t) {
 		return
 	}
-	least := e.leastCover(t.Brief.Exposure, &t.Stirrup)
+	least := e.leastCover(t.Brief.Exposure, &bars.Size{})
 	note.Assume(beam.Assumption{
 		ID: "cover.below-table",
 		Assumed: fmt.Sprintf("a cover of %s is permitted here, though %s asks %s of %s exposure",

@@ -14,6 +14,8 @@ type shearEnd struct {
 	critical units.Length // d from the face, or the face itself
 	note     string       // what was decided
 	left     bool
+	uneven   bool         // the span carries loads that are not spread evenly
+	length   units.Length // of the span
 }
 
 // What is said of the critical section.
@@ -70,6 +72,7 @@ func (s *shearEnd) decide(t *beam.Trial, span int, support *beam.Support) {
 		return
 	}
 	s.critical, s.note = critical, noteAtDepth
+	s.uneven, s.length = uneven(&t.Brief, span), t.Brief.Spans[span-1]
 }
 
 // inward is the place at a distance from the face into the span.
@@ -118,7 +121,23 @@ func (s *shearEnd) start(f *beam.Forces, i, span int) (units.Length, string) {
 	if shear.Less(units.Force{}) {
 		return s.face, notePulled
 	}
+	if s.uneven && s.loadedNear(f, i, span, shear) {
+		return s.face, noteLoadInDepth
+	}
 	return s.critical, s.note
+}
+
+// loadedNear reports whether a combination loads the beam between the face and
+// the critical section so much more than evenly that 9.4.3.2(c) must be taken
+// to speak of it.
+func (s *shearEnd) loadedNear(f *beam.Forces, i, span int, atFace units.Force) bool {
+	inside := f.Action(i, span, s.critical, s.left).Shear
+	if !s.left {
+		inside = inside.Neg()
+	}
+	total := f.Action(i, span, units.Length{}, true).Shear.Sub(f.Action(i, span, s.length, false).Shear)
+	share := evenShare * s.critical.Sub(s.face).Abs().Ratio(s.length)
+	return total.Scale(share).Less(atFace.Sub(inside))
 }
 
 // hungLoads reports a load applied at or below the soffit of a span.
@@ -131,8 +150,9 @@ func hungLoads(b *beam.Brief, span int) bool {
 	return false
 }
 
-// concentrated reports a concentrated load or a couple on the span between two
-// places, the second of them included.
+// concentrated reports a point load or a couple on the span between two places,
+// the second of them included. What distributed loads do there is seen to
+// combination by combination.
 func concentrated(b *beam.Brief, span int, face, critical units.Length) bool {
 	reach := critical.Sub(face).Abs()
 	for i := range b.Loads {
@@ -140,18 +160,24 @@ func concentrated(b *beam.Brief, span int, face, critical units.Length) bool {
 		if l.Span != 0 && l.Span != span {
 			continue
 		}
-		a, z, ok := concentratedOver(l, b.Section.Depth)
-		if l.Shape == beam.Couple {
-			a, z, ok = l.At, l.At, !l.Moment.IsZero()
-		}
-		if !ok {
+		if l.Shape != beam.PointLoad && l.Shape != beam.Couple || l.Force.IsZero() && l.Moment.IsZero() {
 			continue
 		}
-		near, far := a.Sub(face), z.Sub(face)
+		from := l.At.Sub(face)
 		if critical.Less(face) {
-			near, far = far.Neg(), near.Neg()
+			from = from.Neg()
 		}
-		if !far.AtMost(units.Length{}) && near.AtMost(reach) {
+		if !from.AtMost(units.Length{}) && from.AtMost(reach) {
+			return true
+		}
+	}
+	return false
+}
+
+// uneven reports a load on the span that is not spread evenly over it.
+func uneven(b *beam.Brief, span int) bool {
+	for i := range b.Loads {
+		if l := &b.Loads[i]; l.Shape == beam.Partial && (l.Span == 0 || l.Span == span) {
 			return true
 		}
 	}

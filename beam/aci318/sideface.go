@@ -20,6 +20,7 @@ func (e *edition) appendSideFace(dst []beam.Check, t *beam.Trial) []beam.Check {
 	cc := barCover(t)
 	yield := t.Brief.Reinforcement.Yield
 	most := e.crackSpacing(e.crackStress(yield), cc)
+	judged := false
 	for _, sense := range [2]beam.Sense{beam.Positive, beam.Negative} {
 		face := sense.TensionFace()
 		steel := t.Steel(face)
@@ -39,6 +40,10 @@ func (e *edition) appendSideFace(dst []beam.Check, t *beam.Trial) []beam.Check {
 			c.Steps = out.steps
 		}
 		dst = append(dst, c)
+		judged = true
+	}
+	if !judged {
+		dst = append(dst, beam.NotJudgedCheck("side-face.spacing", clause, "the beam is deep enough to need bars along its sides, and no moment says which face is in tension"))
 	}
 	return dst
 }

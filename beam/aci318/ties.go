@@ -58,8 +58,8 @@ func (e *edition) appendTieSize(dst []beam.Check, t *beam.Trial, f *beam.FaceSte
 	return append(dst, c)
 }
 
-// appendTieSpacing compares the widest distance between stirrups, which is the
-// longest length without any where the zones leave one.
+// appendTieSpacing compares the widest distance between stirrups, across what
+// the zones leave out too.
 func (e *edition) appendTieSpacing(dst []beam.Check, t *beam.Trial, f *beam.FaceSteel) []beam.Check {
 	r := &e.ties
 	c := beam.Check{ID: "ties.spacing", Clause: "9.7.6.4.3", Face: f.Face}
@@ -75,10 +75,9 @@ func (e *edition) appendTieSpacing(dst []beam.Check, t *beam.Trial, f *beam.Face
 	if len(t.Zones) > 0 {
 		most = most.Min(tie.Scale(r.stirrups))
 	}
-	bare := longestBare(t)
-	if len(t.Zones) == 0 || widest.Less(bare) {
+	if bare := widestGap(t); len(t.Zones) == 0 || widest.Less(bare) {
 		widest = widest.Max(bare)
-		c.Reason = "bars relied on in compression are without stirrups over a length of the beam"
+		c.Reason = "the stirrups are furthest apart where no zone of the layout reaches"
 	}
 	c.Compare(widest.Amount(), most.Amount())
 	if len(t.Zones) == 0 {
@@ -98,20 +97,20 @@ func (e *edition) appendTieSpacing(dst []beam.Check, t *beam.Trial, f *beam.Face
 	return append(dst, c)
 }
 
-// longestBare is the longest length between the support faces of a span that
-// no zone reaches.
-func longestBare(t *beam.Trial) (longest units.Length) {
+// widestGap is the greatest distance of stirrups across a length between the
+// support faces of a span that no zone reaches.
+func widestGap(t *beam.Trial) (widest units.Length) {
 	for span := 1; span <= t.Forces.Spans(); span++ {
 		s := newShearSpan(t, span)
 		for at := s.left; s.clearlyLess(at, s.right); {
 			end, covered := s.cover(at)
 			if !covered {
-				longest = longest.Max(end.Sub(at))
+				widest = widest.Max(s.apart(at, end))
 			}
 			at = end
 		}
 	}
-	return longest
+	return widest
 }
 
 func (e *edition) appendTieForm(dst []beam.Check, t *beam.Trial, f *beam.FaceSteel) []beam.Check {
@@ -144,7 +143,7 @@ func (e *edition) appendHeldBars(dst []beam.Check, t *beam.Trial, f *beam.FaceSt
 	}
 	inner := outerBars(f) - 2
 	for i := 1; i < len(f.Fit.Layers); i++ {
-		if f.Fit.Layers[i].Count > 2 {
+		if n := f.Fit.Layers[i].Count; n > 2 || n == 1 {
 			c.Outcome, c.Utilization = beam.Fail, beam.NoCapacity
 			c.Reason = "bars of an inner layer, away from the legs, are held by no stirrup"
 			return append(dst, c)
