@@ -171,7 +171,7 @@ func onOtherDoors() map[string][]badInput {
 			{name: "one leg", replace: `"legs": 2`, with: `"legs": 1`, pointer: "/layout/transverse/0/legs", detail: "legs is 1", allowed: "a whole number from 2 to 12"},
 			{name: "zero spacing", replace: `"9 in"`, with: `"0 in"`, pointer: "/layout/transverse/0/spacing", detail: "spacing is 0", allowed: "above zero"},
 			{name: "zone beyond the span", replace: `"9 in"`, with: `"9 in", "to": "30 ft"`, pointer: "/layout/transverse/0/to", detail: "360 in"},
-			{name: "too few stirrups", replace: `"9 in"`, with: `"9 in", "count": 3`, pointer: "/layout/transverse/0/count", detail: "3 stirrups", allowed: "at least"},
+			{name: "too few stirrups", replace: `"9 in"`, with: `"9 in", "count": 3`, pointer: "/layout/transverse/0/count", detail: "3 stirrups", allowed: "36, or 37"},
 			{name: "missing layout", replace: `, "layout": ` + goodLayout, with: ``, pointer: "/layout", detail: "layout is missing", allowed: "an object with longitudinal, transverse"},
 		},
 		"/v1/strengths": {
