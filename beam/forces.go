@@ -46,9 +46,15 @@ type spanForces struct {
 	twists []twist
 	holds  [2]bool // whether each end holds against twist
 
-	// known keeps the extremes that every trial of a search asks for:
-	// between the support faces, and over one depth from each.
-	known [3]stretch
+	// known keeps the extremes that every trial of a search asks for: between
+	// the support faces, over one depth from each, and over the whole span.
+	known [4]stretch
+	// faces keeps the actions at the support faces, on the inner side of each,
+	// for the same reason.
+	faces [2]struct {
+		at      units.Length
+		actions []Action
+	}
 }
 
 // stretch is a length of a span with its extremes.
@@ -69,10 +75,11 @@ func (sp *spanForces) extremes(from, to units.Length) (statics.Extremes, error) 
 
 // keep fills known for a span between support faces.
 func (sp *spanForces) keep(left, right, depth units.Length) error {
-	known := [3]stretch{
+	known := [4]stretch{
 		{from: left, to: right},
 		{from: left, to: left.Add(depth).Min(sp.all.Length())},
 		{from: right.Sub(depth).Max(units.Length{}), to: right},
+		{to: sp.all.Length()},
 	}
 	for i := range known {
 		var err error
@@ -163,6 +170,11 @@ func (f *Forces) action(span int, at statics.Forces) Action {
 // and moment simultaneous; where a force jumps, right picks the side.
 func (f *Forces) Action(i, span int, at units.Length, right bool) Action {
 	sp := &f.spans[span-1]
+	for end := range sp.faces {
+		if face := &sp.faces[end]; right == (end == 0) && at == face.at && i < len(face.actions) {
+			return face.actions[i]
+		}
+	}
 	line := sp.lines[i]
 	before, after, err := line.At(at)
 	if err != nil {
@@ -288,6 +300,13 @@ func memberForces(b *Brief, selfWeight units.LineLoad, kept []Combination) (Forc
 		left, right := b.Supports[i].Width.Scale(0.5), b.Spans[i].Sub(b.Supports[i+1].Width.Scale(0.5))
 		if err := sp.keep(left, right, b.Section.Depth); err != nil {
 			return Forces{}, err
+		}
+		for end, at := range [2]units.Length{left, right} {
+			actions := make([]Action, len(sp.lines))
+			for k := range sp.lines {
+				actions[k] = f.Action(k, i+1, at, end == 0)
+			}
+			sp.faces[end].at, sp.faces[end].actions = at, actions
 		}
 	}
 	for i, s := range b.Supports {

@@ -40,6 +40,7 @@ type search struct {
 	groups  [2 * MaxLayers]bars.Group
 	zones   []Zone // scratch of the zone search
 	best    []Zone // scratch, the lightest zones of a pair so far
+	hint    int    // spacing steps that the last bars needed throughout
 	widest  int    // spacing steps that the code could accept for the current bars
 	member  bool   // spans are given, so zones have extents
 	from    units.Length
@@ -118,9 +119,10 @@ func (s *search) run(ctx context.Context) error {
 	if len(s.kept) > 0 {
 		return nil
 	}
-	for _, tie := range s.ties {
-		for _, face := range [2]Face{Bottom, Top} {
-			if err := s.compressed(ctx, tie, face); err != nil {
+	for _, face := range [2]Face{Bottom, Top} {
+		hopeless := make(map[[MaxLayers][2]barGroup]bool)
+		for _, tie := range s.ties {
+			if err := s.compressed(ctx, tie, face, hopeless); err != nil {
 				return err
 			}
 		}
@@ -193,7 +195,9 @@ func (s *search) singleLayerDepth(tie, size bars.Size) units.Length {
 // in s.failed; with a face given, only that face's and those of no face.
 func (s *search) judge(face Face, groups ...Group) (ok bool) {
 	s.checks, s.failed = s.checks[:0], s.failed[:0]
-	s.checks = s.t.appendGeometry(s.checks)
+	if groups[0] != Shearing { // stirrups that only move are seen to once, in eachStirrup
+		s.checks = s.t.appendGeometry(s.checks)
+	}
 	for _, g := range groups {
 		s.checks = s.p.Code.Judge(s.checks, g, &s.t)
 	}
@@ -286,7 +290,10 @@ func (s *search) pairs(ctx context.Context, tie bars.Size, bottoms, tops []barSe
 // compressed looks for tension sets at a face that pass once bars on the
 // other face are relied on in compression: of each size the fewest that do,
 // or more where the stirrups have legs to hold.
-func (s *search) compressed(ctx context.Context, tie bars.Size, face Face) error {
+//
+// Sets that are hopeless inside one stirrup are left out inside the thicker
+// ones that follow, which only move bars away from the face.
+func (s *search) compressed(ctx context.Context, tie bars.Size, face Face, hopeless map[[MaxLayers][2]barGroup]bool) error {
 	sense := tensionSense(face)
 	if !s.bent(sense) {
 		return nil
@@ -306,7 +313,11 @@ func (s *search) compressed(ctx context.Context, tie bars.Size, face Face) error
 			return err
 		}
 		b := &sets[i]
-		if !s.promising(b, &barSet{}, lightest) || !s.helped(tie, face, b, others) {
+		if hopeless[b.layers] || !s.promising(b, &barSet{}, lightest) {
+			continue
+		}
+		if !s.helped(tie, face, b, others) {
+			hopeless[b.layers] = true
 			continue
 		}
 		for _, of := range others {
@@ -315,6 +326,10 @@ func (s *search) compressed(ctx context.Context, tie bars.Size, face Face) error
 	}
 	return nil
 }
+
+// farOff is the utilization beyond which the most steel of another size, much
+// the same in amount and in depth, would not help either.
+const farOff = 1.5
 
 // helped reports whether the most steel of one of the largest sizes in
 // compression makes a tension set pass in its own sense. Less would not.
@@ -331,6 +346,9 @@ func (s *search) helped(tie bars.Size, face Face, b *barSet, others [][]barSet) 
 		}
 		if tried++; tried == 1 {
 			s.rejectPressed(tie, face, b, o)
+			if s.worst() > farOff {
+				return false
+			}
 		}
 	}
 	return false
@@ -353,7 +371,7 @@ func (s *search) compress(tie bars.Size, face Face, b *barSet, of []barSet, ligh
 	if n == 0 || !s.promising(b, &of[0], lightest) || !helps(&of[n-1]) {
 		return
 	}
-	first := n - 1 - s.last(0, n-1, func(fewer int) bool { return helps(&of[n-1-fewer]) })
+	first := n - 1 - last(0, n-1, func(fewer int) bool { return helps(&of[n-1-fewer]) })
 	for i := first; i < n; i++ {
 		o := &of[i]
 		if !s.promising(b, o, lightest) {

@@ -31,6 +31,9 @@ func (s *search) tensionDepth() units.Length {
 // that mass could be kept. More legs are tried only while they buy a wider
 // spacing. It reports whether any number of legs passes.
 func (s *search) eachStirrup(tie bars.Size, promising func(mass float64) bool, keep func(zones []Zone, mass float64)) (any bool) {
+	if !s.bendable(tie) {
+		return false
+	}
 	before := 0
 	for legs := 2; legs <= s.p.Brief.Preferences.MaxLegs; legs++ {
 		uniform, ok := s.uniform(tie, legs)
@@ -48,7 +51,7 @@ func (s *search) eachStirrup(tie bars.Size, promising func(mass float64) bool, k
 		}
 		s.setUniform(tie, legs, uniform)
 		s.best = append(s.best[:0], s.zones...)
-		if mass := s.threeZones(tie, legs, uniform, s.stirrupMass(tie)); promising(mass) {
+		if mass := s.threeZones(tie, legs, uniform, s.stirrupMass(tie), promising); promising(mass) {
 			keep(s.best, mass)
 		}
 		if uniform == s.widest {
@@ -56,6 +59,35 @@ func (s *search) eachStirrup(tie bars.Size, promising func(mass float64) bool, k
 		}
 	}
 	return any
+}
+
+// bendable reports whether stirrups of a size fit round the bars of the trial
+// at all; if not, it logs why.
+func (s *search) bendable(tie bars.Size) bool {
+	least := s.closestSteps(tie)
+	s.setUniform(tie, 2, least)
+	s.t.Zones, s.t.ZoneBar = s.zones, append(s.t.ZoneBar[:0], tie)
+	s.checks, s.failed = s.t.appendGeometry(s.checks[:0]), s.failed[:0]
+	for i := range s.checks {
+		if s.checks[i].Outcome == Fail {
+			s.failed = append(s.failed, s.checks[i])
+		}
+	}
+	if len(s.failed) == 0 {
+		return true
+	}
+	s.nearest(tie)
+	if !s.logs {
+		s.logStirrups(tie, 2, least, 1)
+	}
+	return false
+}
+
+// nearest remembers the pair of the trial if none failed by less.
+func (s *search) nearest(tie bars.Size) {
+	if worst := s.worst(); !s.near[0].ok || worst < s.near[0].worst {
+		s.near[0] = near{ok: true, worst: worst, pair: s.current(tie)}
+	}
 }
 
 // step is the spacing of k steps.
@@ -71,31 +103,57 @@ func (s *search) closestSteps(tie bars.Size) int {
 }
 
 // uniform is the widest passing spacing of one zone, in steps. A closer
-// spacing never fails where a wider one passes.
+// spacing never fails where a wider one passes. The bars tried one after the
+// other are much alike, so the search starts where the last one ended.
 func (s *search) uniform(tie bars.Size, legs int) (k int, ok bool) {
 	least, most := s.closestSteps(tie), s.widest
-	s.setUniform(tie, legs, most)
-	if s.try(tie, legs, most, 1) {
-		return most, true
-	}
-	s.setUniform(tie, legs, least)
-	if !s.try(tie, legs, least, 1) {
-		if worst := s.worst(); !s.near[0].ok || worst < s.near[0].worst {
-			s.near[0] = near{ok: true, worst: worst, pair: s.current(tie)}
-		}
-		if !s.logs {
-			s.logStirrups(tie, legs, least, 1)
-		}
-		return 0, false
-	}
-	return s.last(least, most-1, func(k int) bool {
+	passes := func(k int) bool {
 		s.setUniform(tie, legs, k)
 		return s.try(tie, legs, k, 1)
-	}), true
+	}
+	if passes(most) {
+		return most, true
+	}
+	k, ok = lastNear(min(max(s.hint, least), most-1), least, most-1, passes)
+	if ok {
+		s.hint = k
+		return k, true
+	}
+	s.nearest(tie)
+	if !s.logs {
+		s.logStirrups(tie, legs, least, 1)
+	}
+	return 0, false
+}
+
+// lastNear is the greatest k in [least, most] that passes, sought in growing
+// strides from a guess. Where none passes, least is the last one tried.
+func lastNear(guess, least, most int, passes func(int) bool) (k int, ok bool) {
+	if least > most {
+		return 0, least == most+1 && passes(least)
+	}
+	if passes(guess) {
+		for stride := 1; guess < most; stride *= 2 {
+			to := min(most, guess+stride)
+			if !passes(to) {
+				return last(guess, to-1, passes), true
+			}
+			guess = to
+		}
+		return guess, true
+	}
+	for stride := 1; guess > least; stride *= 2 {
+		to := max(least, guess-stride)
+		if passes(to) {
+			return last(to, guess-1, passes), true
+		}
+		guess = to
+	}
+	return 0, false
 }
 
 // last is the greatest k in [known, most] that passes, where known does.
-func (s *search) last(known, most int, passes func(int) bool) int {
+func last(known, most int, passes func(int) bool) int {
 	for known < most {
 		mid := (known + most + 1) / 2
 		if passes(mid) {
@@ -163,7 +221,7 @@ func stirrupCount(z Zone) int {
 // threeZones looks for lighter stirrups than those in s.best, of a given
 // mass, with close ends at a spacing and a wider middle. It returns the mass
 // of the lightest and leaves them in s.best.
-func (s *search) threeZones(tie bars.Size, legs, close int, mass float64) float64 {
+func (s *search) threeZones(tie bars.Size, legs, close int, mass float64, promising func(float64) bool) float64 {
 	if !s.member || s.p.Brief.Preferences.MaxZones < 3 {
 		return mass
 	}
@@ -182,18 +240,18 @@ func (s *search) threeZones(tie bars.Size, legs, close int, mass float64) float6
 	}
 	widest := s.widest
 	if !passes(widest, mostLeft, mostRight) {
-		widest = s.last(close, widest-1, func(k int) bool { return passes(k, mostLeft, mostRight) })
+		widest = last(close, widest-1, func(k int) bool { return passes(k, mostLeft, mostRight) })
 	}
 	// A longer end zone never fails where a shorter one passes, nor does a
 	// closer middle: each search starts from the one before.
 	left, right := mostLeft, mostRight
 	for wide := widest; wide > close; wide-- {
 		s.setUniform(tie, legs, wide)
-		if s.stirrupMass(tie) >= mass {
+		if m := s.stirrupMass(tie); m >= mass || !promising(m) {
 			break // with any close ends it would be heavier still
 		}
 		if wide == widest {
-			left = mostLeft - s.last(0, mostLeft, func(cut int) bool { return passes(wide, mostLeft-cut, mostRight) })
+			left = mostLeft - last(0, mostLeft, func(cut int) bool { return passes(wide, mostLeft-cut, mostRight) })
 			if left < mostRight && passes(wide, left, left) {
 				right = left
 			}
