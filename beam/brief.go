@@ -105,7 +105,7 @@ type Preferences struct {
 	Depths    []units.Length // overall depths to try besides Section.Depth
 	Prefer    Preference
 	SpacingBy units.Length // stirrup spacings are multiples of this; zero: 1/2 in or 10 mm by system
-	KeepBest  int          // alternatives kept; zero: 4; negative: none
+	KeepBest  int          // alternatives kept; zero: 3; negative: none
 	NoCures   bool         // do not look for changes that would make a failing brief pass
 }
 

@@ -149,7 +149,7 @@ func (p *Preferences) resolve(pr *Problem) {
 	setIfZero(&p.MaxLayers, 2)
 	setIfZero(&p.MaxLegs, 4)
 	setIfZero(&p.MaxZones, 3)
-	setIfZero(&p.KeepBest, 4)
+	setIfZero(&p.KeepBest, 3)
 	p.KeepBest = max(p.KeepBest, 0)
 	if p.Prefer == 0 {
 		p.Prefer = LeastSteel

@@ -142,14 +142,16 @@ func lastNear(guess, least, most int, passes func(int) bool) (k int, ok bool) {
 		}
 		return guess, true
 	}
-	for stride := 1; guess > least; stride *= 2 {
+	if guess == least || !passes(least) {
+		return 0, false
+	}
+	for stride := 1; ; stride *= 2 {
 		to := max(least, guess-stride)
-		if passes(to) {
+		if to == least || passes(to) {
 			return last(to, guess-1, passes), true
 		}
 		guess = to
 	}
-	return 0, false
 }
 
 // last is the greatest k in [known, most] that passes, where known does.

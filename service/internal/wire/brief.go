@@ -109,7 +109,7 @@ type Preferences struct {
 	Depths       []units.Length `json:"depths,omitzero" validate:"omitnil,min=1,max=20" doc:"Overall depths to try besides that of the section."`
 	Prefer       *string        `json:"prefer,omitzero" validate:"omitnil,oneof=least-steel fewest-bars one-size shallowest fewest-marks" doc:"What feasible layouts are ranked by. Default: least-steel."`
 	SpacingStep  *units.Length  `json:"spacing_step,omitzero" doc:"Stirrup spacings are multiples of this, 1 mm to 300 mm. Default: 1/2 in or 10 mm."`
-	Alternatives *int           `json:"alternatives,omitzero" validate:"omitnil,min=1,max=50" doc:"Alternatives kept. Default: 4."`
+	Alternatives *int           `json:"alternatives,omitzero" validate:"omitnil,min=1,max=50" doc:"Alternatives kept. Default: 3."`
 	Cures        *bool          `json:"cures,omitzero" doc:"false: where nothing fits, do not look for changes of the brief that would do. Default: true."`
 }
 
