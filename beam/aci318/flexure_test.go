@@ -190,7 +190,11 @@ func TestEditionsOfOneYearAgreeAcrossUnits(t *testing.T) {
 		}
 		near("Mn", f[0].Nominal.In(units.KipFoot), f[1].Nominal.In(units.KipFoot), 0.002)
 		near("As,min", f[0].MinimumSteel.In(units.SquareInch), f[1].MinimumSteel.In(units.SquareInch), 0.016)
-		near("c", f[0].NeutralAxis.In(units.Inch), f[1].NeutralAxis.In(units.Inch), 0.01)
+		// Where the block's edge lies on the bars' one side under one and on the
+		// other under the other, the displaced concrete makes c leap.
+		if inside := func(f *beam.FlexureStrength) bool { return in(2.5).AtMost(f.BlockDepth) }; inside(&f[0]) == inside(&f[1]) {
+			near("c", f[0].NeutralAxis.In(units.Inch), f[1].NeutralAxis.In(units.Inch), 0.01)
+		}
 		near("φ", f[0].Phi, f[1].Phi, 0.012)
 	})
 }
