@@ -73,6 +73,16 @@ func (t *Trial) appendGeometry(dst []Check) []Check {
 	return dst
 }
 
+// appendChecks appends everything that is judged of a finished trial: the
+// geometry, and every group of the code.
+func (t *Trial) appendChecks(dst []Check) []Check {
+	dst = t.appendGeometry(dst)
+	for _, g := range Groups() {
+		dst = t.Code.Judge(dst, g, t)
+	}
+	return dst
+}
+
 // appendSideGeometry sees whether side-face bars lie between the bars of top
 // and bottom, clear of both and of each other.
 func (t *Trial) appendSideGeometry(dst []Check) []Check {
@@ -93,10 +103,7 @@ func (t *Trial) appendSideGeometry(dst []Check) []Check {
 // layoutOf writes a found layout as a drawing would.
 func (s *search) layoutOf(f *found) Layout {
 	var l Layout
-	length := units.Length{} // full length; zero with demands
-	if s.member {
-		length = units.Metre.Of(s.length())
-	}
+	length := s.p.length()
 	l.appendRows(Bottom, &f.bottom, f.inCompress == Bottom, "B", length)
 	l.appendRows(Top, &f.top, f.inCompress == Top, "T", length)
 	marks := map[string]string{}
@@ -133,10 +140,7 @@ func (l *Layout) appendRows(face Face, b *barSet, inCompression bool, letter str
 func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
 	f := newFaults(p.System)
 	t := &Trial{Problem: p}
-	length := units.Length{}
-	for _, s := range p.Brief.Spans {
-		length = length.Add(s)
-	}
+	length := p.length()
 	var faces [2][]bars.Layer
 	var relied [2]bool
 	largest := bars.Size{}

@@ -100,8 +100,8 @@ func searchDepths(ctx context.Context, first *prepared) (*search, error) {
 			return nil, err
 		}
 		if len(s.kept) > 0 {
-			l := s.layoutOf(&s.kept[0])
-			s.whole = s.addSideBars(&l)
+			s.first = s.layoutOf(&s.kept[0])
+			s.whole = s.addSideBars(&s.first)
 		}
 		if best == nil || s.better(best) {
 			s.rejects.absorb(best)
@@ -141,14 +141,15 @@ func (s *search) better(t *search) bool {
 // result finishes the best layout of the search, or the closest one where
 // nothing passed.
 func (s *search) result() (*Result, error) {
-	chosen := s.closest()
+	var chosen *found
+	layout := s.first
 	if len(s.kept) > 0 {
 		chosen = &s.kept[0]
-	}
-	var layout Layout
-	if chosen != nil {
+	} else if chosen = s.closest(); chosen != nil {
 		layout = s.layoutOf(chosen)
 		s.addSideBars(&layout)
+	}
+	if chosen != nil {
 		s.assumeDepths(chosen)
 	}
 	r, err := s.p.finish(layout)
@@ -178,9 +179,7 @@ func (s *search) rejectClosest(f *found) {
 	if f == nil || len(s.rejects.list) > 0 {
 		return
 	}
-	s.t.enclose(f.stirrup, larger(f.bottom.largest(), f.top.largest()))
-	s.t.Zones, s.t.ZoneBar = nil, nil
-	if !s.put(Bottom, &f.bottom, f.inCompress == Bottom) || !s.put(Top, &f.top, f.inCompress == Top) {
+	if !s.layPair(f.stirrup, &f.bottom, &f.top, f.inCompress) {
 		return
 	}
 	for face, set := range [...]*barSet{Bottom: &f.bottom, Top: &f.top} {
@@ -195,8 +194,7 @@ func (s *search) rejectClosest(f *found) {
 // would say the same many times over.
 func (s *search) retrace(f *found) {
 	s.logs = true
-	s.t.enclose(f.stirrup, larger(f.bottom.largest(), f.top.largest()))
-	if s.put(Bottom, &f.bottom, f.inCompress == Bottom) && s.put(Top, &f.top, f.inCompress == Top) {
+	if s.layPair(f.stirrup, &f.bottom, &f.top, f.inCompress) {
 		s.leastStirrups(f.stirrup, s.tensionDepth())
 		s.eachStirrup(f.stirrup, func(float64) bool { return true }, func([]Zone, float64) {})
 	}
@@ -328,10 +326,7 @@ func (s *search) alternative(f *found) (a Alternative, ok bool) {
 	if len(faults) > 0 {
 		return a, false
 	}
-	s.checks = t.appendGeometry(s.checks[:0])
-	for _, g := range Groups() {
-		s.checks = s.p.Code.Judge(s.checks, g, t)
-	}
+	s.checks = t.appendChecks(s.checks[:0])
 	if g := Governing(s.checks); g != nil {
 		a.Governing, a.Utilization = g.ID, g.Utilization
 	}

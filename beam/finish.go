@@ -40,10 +40,7 @@ func (p *prepared) finish(layout Layout) (*Result, error) {
 	r.Layout = layout
 	r.Layout.Transverse = slices.Clone(t.Zones)
 	r.Cover = t.Cover
-	r.Checks = t.appendGeometry(nil)
-	for _, g := range Groups() {
-		r.Checks = p.Code.Judge(r.Checks, g, t)
-	}
+	r.Checks = t.appendChecks(nil)
 	register := p.register.clone()
 	p.settle(t, &register)
 	p.Code.Settle(t, r.Checks, &register)

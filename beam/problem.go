@@ -30,6 +30,14 @@ func (p *Problem) Faces(span int) (left, right units.Length) {
 	return p.Brief.Supports[span-1].Width.Scale(0.5), l.Sub(p.Brief.Supports[span].Width.Scale(0.5))
 }
 
+// length of the whole beam; zero with demands given directly.
+func (p *Problem) length() (sum units.Length) {
+	for _, l := range p.Brief.Spans {
+		sum = sum.Add(l)
+	}
+	return sum
+}
+
 // ClearSpan is the distance between the support faces of a span.
 func (p *Problem) ClearSpan(span int) units.Length {
 	left, right := p.Faces(span)

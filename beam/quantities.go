@@ -28,10 +28,7 @@ func (p *Problem) unitShare() float64 {
 // catalogue's printed mass per length, so that the schedule's lines add up
 // to the last digit.
 func (r *Result) takeOff(t *Trial) {
-	length := units.Length{}
-	for _, s := range t.Brief.Spans {
-		length = length.Add(s)
-	}
+	length := t.length()
 	q := &r.Quantities
 	q.PerLength = length.IsZero()
 	if q.PerLength {

@@ -46,7 +46,8 @@ type search struct {
 	from    units.Length
 	to      units.Length
 	kept    []found
-	whole   bool // the first of kept passes as a whole member too
+	first   Layout // of the first of kept, with the side bars it needs
+	whole   bool   // first passes as a whole member too
 	rejects rejectLog
 	logs    bool    // log every arrangement of stirrups that fails
 	near    [3]near // by face, and at 0 for whole pairs
@@ -191,8 +192,7 @@ func (s *search) singleLayerDepth(tie, size bars.Size) units.Length {
 	return s.p.Brief.Section.Depth.Sub(s.t.Cover).Sub(tie.Diameter).Sub(size.Diameter.Scale(0.5))
 }
 
-// judge puts the current trial to groups of checks and keeps those that fail
-// in s.failed; with a face given, only that face's and those of no face.
+// judge puts the current trial to groups of checks and sifts them.
 func (s *search) judge(face Face, groups ...Group) (ok bool) {
 	s.checks, s.failed = s.checks[:0], s.failed[:0]
 	if groups[0] != Shearing { // stirrups that only move are seen to once, in eachStirrup
@@ -201,6 +201,12 @@ func (s *search) judge(face Face, groups ...Group) (ok bool) {
 	for _, g := range groups {
 		s.checks = s.p.Code.Judge(s.checks, g, &s.t)
 	}
+	return s.sift(face)
+}
+
+// sift adds the checks of a judgement that fail to s.failed and reports whether
+// there are none; with a face given, only that face's and those of no face.
+func (s *search) sift(face Face) (ok bool) {
 	for i := range s.checks {
 		c := &s.checks[i]
 		if c.Outcome == Fail && (face == 0 || c.Face == 0 || c.Face == face) {
@@ -226,6 +232,13 @@ func (s *search) put(face Face, b *barSet, inCompression bool) bool {
 		return false
 	}
 	return true
+}
+
+// layPair lays the sets of both faces inside a stirrup size, without zones yet.
+func (s *search) layPair(tie bars.Size, bottom, top *barSet, inCompression Face) bool {
+	s.t.enclose(tie, larger(bottom.largest(), top.largest()))
+	s.t.Zones, s.t.ZoneBar = nil, nil
+	return s.put(Bottom, bottom, inCompression == Bottom) && s.put(Top, top, inCompression == Top)
 }
 
 // accepts judges a set on its own face, once.
@@ -393,9 +406,11 @@ func (s *search) compress(tie bars.Size, face Face, b *barSet, of []barSet, ligh
 
 // presses lays a tension set with compression steel opposite.
 func (s *search) presses(tie bars.Size, face Face, b, other *barSet) bool {
-	s.t.enclose(tie, larger(b.largest(), other.largest()))
-	s.t.Zones, s.t.ZoneBar = nil, nil
-	return s.put(face, b, false) && s.put(face.Opposite(), other, true)
+	bottom, top := b, other
+	if face == Top {
+		bottom, top = other, b
+	}
+	return s.layPair(tie, bottom, top, face.Opposite())
 }
 
 // relied judges a tension set with compression steel opposite.
@@ -415,9 +430,7 @@ func larger(a, b bars.Size) bars.Size {
 // a whole first.
 // It reports whether any stirrups do for the pair.
 func (s *search) shear(tie bars.Size, bottom, top *barSet, inCompression Face) (ok bool) {
-	s.t.enclose(tie, larger(bottom.largest(), top.largest()))
-	s.t.Zones, s.t.ZoneBar = nil, nil
-	if !s.put(Bottom, bottom, inCompression == Bottom) || !s.put(Top, top, inCompression == Top) {
+	if !s.layPair(tie, bottom, top, inCompression) {
 		return false
 	}
 	if moved := s.t.Cover != bottom.cover || s.t.Cover != top.cover; moved && inCompression == 0 && !s.judge(0, Fitting, Bending) {
@@ -450,11 +463,7 @@ func (s *search) length() float64 {
 	if !s.member {
 		return 1
 	}
-	sum := 0.0
-	for _, l := range s.p.Brief.Spans {
-		sum += l.In(units.Metre)
-	}
-	return sum
+	return s.p.length().In(units.Metre)
 }
 
 // key ranks a layout under the chosen preference; less is better, and every

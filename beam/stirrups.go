@@ -17,7 +17,13 @@ var leastSpacing = units.Millimetre.Of(50)
 // accept throughout. It sets that spacing as the widest tried.
 func (s *search) leastStirrups(tie bars.Size, depth units.Length) float64 {
 	s.widest = max(s.closestSteps(tie), int(s.p.Code.WidestSpacing(s.p.Problem, depth).Ratio(s.p.Brief.Preferences.SpacingBy)+1e-9))
-	s.setUniform(tie, 2, s.widest)
+	return s.uniformMass(tie, 2, s.widest)
+}
+
+// uniformMass is the mass of stirrups at one spacing from face to face, which
+// it leaves as the current zones.
+func (s *search) uniformMass(tie bars.Size, legs, k int) float64 {
+	s.setUniform(tie, legs, k)
 	return s.stirrupMass(tie)
 }
 
@@ -45,13 +51,12 @@ func (s *search) eachStirrup(tie bars.Size, promising func(mass float64) bool, k
 			break
 		}
 		before = uniform
-		s.setUniform(tie, legs, s.widest)
-		if !promising(s.stirrupMass(tie)) {
+		if !promising(s.uniformMass(tie, legs, s.widest)) {
 			continue
 		}
-		s.setUniform(tie, legs, uniform)
+		mass := s.uniformMass(tie, legs, uniform)
 		s.best = append(s.best[:0], s.zones...)
-		if mass := s.threeZones(tie, legs, uniform, s.stirrupMass(tie), promising); promising(mass) {
+		if mass = s.threeZones(tie, legs, uniform, mass, promising); promising(mass) {
 			keep(s.best, mass)
 		}
 		if uniform == s.widest {
@@ -68,23 +73,19 @@ func (s *search) bendable(tie bars.Size) bool {
 	s.setUniform(tie, 2, least)
 	s.t.Zones, s.t.ZoneBar = s.zones, append(s.t.ZoneBar[:0], tie)
 	s.checks, s.failed = s.t.appendGeometry(s.checks[:0]), s.failed[:0]
-	for i := range s.checks {
-		if s.checks[i].Outcome == Fail {
-			s.failed = append(s.failed, s.checks[i])
-		}
-	}
-	if len(s.failed) == 0 {
+	if s.sift(0) {
 		return true
 	}
-	s.nearest(tie)
-	if !s.logs {
-		s.logStirrups(tie, 2, least, 1)
-	}
+	s.giveUp(tie, 2, least)
 	return false
 }
 
-// nearest remembers the pair of the trial if none failed by less.
-func (s *search) nearest(tie bars.Size) {
+// giveUp logs the closest stirrups, which have just failed, and remembers the
+// pair of the trial if none failed by less.
+func (s *search) giveUp(tie bars.Size, legs, least int) {
+	if !s.logs { // then it is logged already
+		s.logStirrups(tie, legs, least, 1)
+	}
 	if worst := s.worst(); !s.near[0].ok || worst < s.near[0].worst {
 		s.near[0] = near{ok: true, worst: worst, pair: s.current(tie)}
 	}
@@ -119,10 +120,7 @@ func (s *search) uniform(tie bars.Size, legs int) (k int, ok bool) {
 		s.hint = k
 		return k, true
 	}
-	s.nearest(tie)
-	if !s.logs {
-		s.logStirrups(tie, legs, least, 1)
-	}
+	s.giveUp(tie, legs, least)
 	return 0, false
 }
 
@@ -248,8 +246,7 @@ func (s *search) threeZones(tie bars.Size, legs, close int, mass float64, promis
 	// closer middle: each search starts from the one before.
 	left, right := mostLeft, mostRight
 	for wide := widest; wide > close; wide-- {
-		s.setUniform(tie, legs, wide)
-		if m := s.stirrupMass(tie); m >= mass || !promising(m) {
+		if m := s.uniformMass(tie, legs, wide); m >= mass || !promising(m) {
 			break // with any close ends it would be heavier still
 		}
 		if wide == widest {

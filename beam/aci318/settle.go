@@ -64,19 +64,11 @@ func (e *edition) settleLeastStirrups(t *beam.Trial, note *beam.Register) {
 	}
 	holds, worst := true, 0.0
 	for i := range t.Zones {
-		z := &t.Zones[i]
-		s := shearSection{
-			strength: t.Brief.Concrete.Strength, lambda: e.lambda(&t.Brief.Concrete),
-			width: t.Brief.Section.Width, gross: t.Brief.Section.Depth, depth: t.EffectiveDepth(beam.Positive),
-			stirrups: stirrupSteel{
-				area:    bars.TotalArea(bars.Group{Size: t.ZoneBar[i], Count: z.Legs}),
-				spacing: z.Spacing, yield: t.Brief.Reinforcement.StirrupYield,
-			},
+		z := e.newWebZone(t, t.Zones[i].Span, i, t.Zones[i].Spacing)
+		w := &z.web[senseIndex(beam.Positive)]
+		if t.EffectiveDepth(beam.Positive).IsZero() {
+			w = &z.web[senseIndex(beam.Negative)]
 		}
-		if d := t.EffectiveDepth(beam.Negative); s.depth.IsZero() {
-			s.depth = d
-		}
-		w := e.newWebSteel(&s)
 		holds = holds && w.enough
 		if share := ratio(w.least, w.provided); share > worst {
 			worst = share
