@@ -9,21 +9,26 @@ import (
 	"soffit.example/units"
 )
 
-// stirrupLength is the cut length of one set of stirrups of a trial, with
-// its cross ties; zero where the section has no room for the bends, which
+// stirrupLength is the cut length of one set of stirrups of a zone, with its
+// cross ties; zero where the section has no room for the bends, which
 // appendGeometry reports.
-func (t *Trial) stirrupLength(size bars.Size, legs int) units.Length {
-	l, err := t.stirrupSet(size, legs).Lengths()
+func (t *Trial) stirrupLength(size bars.Size, z *Zone) units.Length {
+	cage := t.cage()
+	width, depth := cage.Outside()
+	l, err := bars.StirrupSet{Size: size, Form: z.form(), Width: width, Depth: depth, Legs: z.Legs}.Lengths()
 	if err != nil {
 		return units.Length{}
 	}
 	return l.Total
 }
 
-func (t *Trial) stirrupSet(size bars.Size, legs int) bars.StirrupSet {
-	cage := t.cage()
-	width, depth := cage.Outside()
-	return bars.StirrupSet{Size: size, Form: bars.ClosedForm, Width: width, Depth: depth, Legs: legs}
+// form is the zone's stirrups as package bars knows them; closed unless the
+// layout says otherwise.
+func (z *Zone) form() bars.StirrupForm {
+	if z.Form == bars.OpenForm.String() {
+		return bars.OpenForm
+	}
+	return bars.ClosedForm
 }
 
 // appendGeometry appends what no code is needed to see: whether the stirrups

@@ -424,3 +424,19 @@ func TestGeometryOfALayout(t *testing.T) {
 		})
 	}
 }
+
+// Open stirrups are scheduled as what they are: a leg shorter.
+func TestOpenStirrupsInTheSchedule(t *testing.T) {
+	closed := design(t, plain())
+	l := beam.Layout{Longitudinal: closed.Layout.Longitudinal, Transverse: slices.Clone(closed.Layout.Transverse)}
+	for i := range l.Transverse {
+		l.Transverse[i].Form = "open"
+	}
+	open, err := beam.CheckLayout(context.Background(), aci318.ACI31819(), plain(), l)
+	require.NoError(t, err)
+	a, b := closed.Schedule[len(closed.Schedule)-1], open.Schedule[len(open.Schedule)-1]
+	require.Contains(t, a.Shape, "closed")
+	require.Contains(t, b.Shape, "open")
+	require.True(t, b.Length.Less(a.Length))
+	require.True(t, b.Mass.LessThan(a.Mass))
+}

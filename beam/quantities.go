@@ -58,12 +58,13 @@ func (r *Result) takeOff(t *Trial) {
 		}
 		q.SteelMass = q.SteelMass.Add(line(row.Mark, row.Bar, "straight", count, length))
 	}
-	for i, z := range t.Zones {
+	for i := range t.Zones {
+		z := &t.Zones[i]
 		count := z.Count
 		if q.PerLength {
 			count = stirrupCount(Zone{To: length, Spacing: z.Spacing})
 		}
-		m := line(z.Mark, z.Bar, "closed stirrup, 135-degree hooks", count, t.stirrupLength(t.ZoneBar[i], z.Legs))
+		m := line(z.Mark, z.Bar, z.form().String()+" stirrup, 135-degree hooks", count, t.stirrupLength(t.ZoneBar[i], z))
 		q.StirrupMass, q.SteelMass = q.StirrupMass.Add(m), q.SteelMass.Add(m)
 	}
 	s := t.Brief.Section

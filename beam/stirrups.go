@@ -307,7 +307,7 @@ func (s *search) stirrupMass(tie bars.Size) float64 {
 	sum := 0.0
 	for i := range s.zones {
 		z := &s.zones[i]
-		one := tie.Mass(s.t.stirrupLength(tie, z.Legs)).In(units.Kilogram)
+		one := tie.Mass(s.t.stirrupLength(tie, z)).In(units.Kilogram)
 		if s.member {
 			sum += one * float64(z.Count)
 		} else {
