@@ -236,6 +236,9 @@ func (s Section) checkElastic(modularRatio float64) error {
 	if err := s.Validate(); err != nil {
 		return err
 	}
+	if err := s.refuseTapers(); err != nil {
+		return err
+	}
 	return checkNumber("modular ratio", modularRatio, 1, 1000)
 }
 

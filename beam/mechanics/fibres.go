@@ -36,6 +36,9 @@ func (s Section) Fibres(law Law, bending Bending) (FibreUltimate, error) {
 	if err := s.Validate(); err != nil {
 		return FibreUltimate{}, err
 	}
+	if err := s.refuseTapers(); err != nil {
+		return FibreUltimate{}, err
+	}
 	if bending.Sense > Hogging || bending.Displaced > Ignore {
 		return FibreUltimate{}, &InputError{Field: "bending", Value: fmt.Sprintf("%+v", bending), Allowed: "a known sense and a known rule for displaced concrete"}
 	}

@@ -7,11 +7,29 @@ import (
 	"soffit.example/units"
 )
 
-// A Part is a rectangle of concrete, its edges measured from the top face of the
-// section.
+// A Part is a rectangle or a trapezoid of concrete, its edges measured from the
+// top face of the section.
 type Part struct {
 	Top, Bottom units.Length
-	Width       units.Length
+	Width       units.Length // at the top edge
+	BottomWidth units.Length // at the bottom edge, with straight sides between; zero: as at the top
+}
+
+// Widths returns the width at the top edge and at the bottom edge.
+func (p Part) Widths() (top, bottom units.Length) {
+	if p.BottomWidth.IsZero() {
+		return p.Width, p.Width
+	}
+	return p.Width, p.BottomWidth
+}
+
+// widths returns both widths in m.
+func (p *Part) widths() (top, bottom float64) {
+	top = p.Width.In(units.Metre)
+	if p.BottomWidth.IsZero() {
+		return top, top
+	}
+	return top, p.BottomWidth.In(units.Metre)
 }
 
 // Steel is an elastic, perfectly plastic steel, the same in tension and in
@@ -118,7 +136,7 @@ func (s Section) validateParts() error {
 	for i := range s.Parts {
 		p := &s.Parts[i]
 		top, bottom, above := p.Top.In(units.Metre), p.Bottom.In(units.Metre), face.In(units.Metre)
-		width := p.Width.In(units.Metre)
+		width, below := p.widths()
 		switch {
 		case !joins(top, above):
 			return fault("parts", i, "top", p.Top, "where the part above it ends, "+face.String())
@@ -126,8 +144,20 @@ func (s Section) validateParts() error {
 			return fault("parts", i, "bottom", p.Bottom, "at least 0.1 mm below its top, "+face.String()+", and at most 10 km")
 		case !(width >= leastLength && width <= mostLength):
 			return fault("parts", i, "width", p.Width, "from 0.1 mm to 10 km")
+		case !(below >= leastLength && below <= mostLength):
+			return fault("parts", i, "bottomWidth", p.BottomWidth, "from 0.1 mm to 10 km, or zero for the width at the top")
 		}
 		face = p.Bottom
+	}
+	return nil
+}
+
+// refuseTapers reports the first part whose sides are not upright.
+func (s Section) refuseTapers() error {
+	for i := range s.Parts {
+		if top, bottom := s.Parts[i].widths(); top != bottom {
+			return fault("parts", i, "bottomWidth", s.Parts[i].BottomWidth, "the width at the top")
+		}
 	}
 	return nil
 }

@@ -139,6 +139,9 @@ func (s *Solver) load(section Section, law Law, bending Bending) error {
 	if err := section.Validate(); err != nil {
 		return err
 	}
+	if err := section.refuseTapers(); err != nil {
+		return err
+	}
 	if err := bending.check(); err != nil {
 		return err
 	}
