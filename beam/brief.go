@@ -33,19 +33,20 @@ type Brief struct {
 	Readings       Readings
 }
 
-// Section is the beam's concrete outline.
-type Section struct {
-	Shape Shape
-	Width units.Length
-	Depth units.Length // overall
-}
-
 // Concrete describes the concrete as specified.
 type Concrete struct {
 	Strength  units.Stress  // specified compressive strength
 	Density   units.Density // zero: the code's usual value for the Kind
 	Kind      ConcreteKind  // zero: normalweight
 	Aggregate units.Length  // nominal maximum size; zero: assumed and listed
+	// Splitting is the average splitting tensile strength of lightweight
+	// concrete, from tests, with Strength its compressive strength then; zero:
+	// not known. Codes that do not go by it say so.
+	Splitting units.Stress
+	// Normal is the share, by absolute volume, of normalweight aggregate in the
+	// fine part of a FineBlend or the coarse part of a CoarseBlend.
+	Normal float64
+	Fibres bool // steel fibres as the code asks for them to stand in for least stirrups
 }
 
 // Reinforcement names where bars come from and how strong they are.
@@ -77,6 +78,7 @@ type Load struct {
 	Moment       units.Moment // a couple, clockwise positive; a torque about the beam's axis
 	Hung         bool         // applied at or below the soffit
 	Sustained    float64      // share of the load that stays, 0 to 1; for deflection, which is not judged yet
+	Path         TorquePath   // of a torque; zero: equilibrium
 }
 
 // Demand is one set of factored forces from the caller's own analysis.
@@ -85,6 +87,7 @@ type Demand struct {
 	Moment units.Moment
 	Shear  units.Force
 	Torque units.Moment
+	Path   TorquePath  // of Torque; zero: equilibrium
 	Axial  units.Force // compression positive
 }
 
@@ -102,6 +105,7 @@ type Preferences struct {
 	MaxLegs   int            // stirrup legs; zero: 4
 	MaxZones  int            // stirrup zones in a span, 1 or 3; zero: 3
 	Mixed     bool           // allow two neighbouring sizes on one face
+	Bundles   int            // most bars in contact; zero or one: none
 	Depths    []units.Length // overall depths to try besides Section.Depth
 	Prefer    Preference
 	SpacingBy units.Length // stirrup spacings are multiples of this; zero: 1/2 in or 10 mm by system
@@ -117,4 +121,23 @@ type Readings struct {
 	ShearRow        ShearRow    // which of two permitted expressions for concrete shear
 	ShearMethod     ShearMethod // simplified or detailed
 	TuckedCorner    bool        // corner bars pushed into the stirrup's corner
+	CountSideBars   bool        // side bars count in bending, by strain compatibility, where no torque needs them
+	TorsionAngle    float64     // of the compression diagonals in the space truss, in degrees; zero: the code's usual one
+}
+
+// checkMix reports what is wrong with the aggregate and the tests of a concrete.
+func (c *Concrete) checkMix(f *faults) {
+	if !(c.Normal >= 0 && c.Normal <= 1) {
+		f.add("/concrete/normal_share", "0 to 1", "share of normalweight aggregate is %g", c.Normal)
+	}
+	if blend := c.Kind == FineBlend || c.Kind == CoarseBlend; !blend && c.Normal != 0 {
+		f.add("/concrete/normal_share", "a fine-blend or coarse-blend concrete", "a share of normalweight aggregate is given for %s concrete", c.Kind)
+	}
+	if c.Splitting.IsZero() {
+		return
+	}
+	f.within("/concrete/splitting", "splitting tensile strength", c.Splitting.Amount(), f.leastStrength.Scale(0.1).Amount(), f.mostStrength.Scale(0.2).Amount())
+	if c.Kind == 0 || c.Kind == Normalweight {
+		f.add("/concrete/splitting", "a lightweight concrete", "a splitting tensile strength is given for normalweight concrete")
+	}
 }

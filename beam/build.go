@@ -57,6 +57,7 @@ func (t *Trial) appendGeometry(dst []Check) []Check {
 		dst = append(dst, c)
 	}
 	dst = t.appendSideGeometry(dst)
+	dst = t.appendFlangeGeometry(dst)
 	for i := range t.Zones {
 		// Stirrups stand clear of each other as bars do.
 		c := Check{ID: "stirrup.clear", Clause: clause, Span: t.Zones[i].Span, At: t.Zones[i].From, Detailing: true}
@@ -105,6 +106,61 @@ func (t *Trial) appendSideGeometry(dst []Check) []Check {
 	return append(dst, clear, room)
 }
 
+// appendFlangeGeometry sees whether bars in a flange lie inside it, with the
+// cover of the stirrups to its edges and its other face, and whether the bars
+// of the web keep clear of the section's hollows.
+func (t *Trial) appendFlangeGeometry(dst []Check) []Check {
+	const clause = "geometry"
+	for _, face := range [2]Face{Bottom, Top} {
+		f := t.Steel(face)
+		if len(f.Flange) == 0 {
+			continue
+		}
+		left, right := t.Brief.Section.Overhangs(face)
+		width := t.Brief.Section.Width
+		c := Check{ID: "fit.flange", Clause: clause, Face: face, Detailing: true}
+		var worstNeed, worstRoom units.Length
+		for i := range f.Flange {
+			b := &f.Flange[i]
+			out, room := b.X.Neg(), left
+			if zero := (units.Length{}); zero.Less(b.X) {
+				out, room = b.X.Sub(width), right
+			}
+			need := out.Add(b.Size.Diameter.Scale(0.5)).Add(t.Cover)
+			if i == 0 || worstNeed.Sub(worstRoom).Less(need.Sub(room)) {
+				worstNeed, worstRoom = need, room
+			}
+		}
+		c.Compare(worstNeed.Amount(), worstRoom.Amount())
+		dst = append(dst, c)
+
+		c = Check{ID: "fit.flange-thickness", Clause: clause, Face: face, Detailing: true}
+		highest := units.Length{}
+		for i := range f.Flange {
+			highest = highest.Max(f.Flange[i].Y.Add(f.Flange[i].Size.Diameter.Scale(0.5)))
+		}
+		c.Compare(highest.Add(t.Cover).Amount(), t.Brief.Section.FlangeThickness.Amount())
+		dst = append(dst, c)
+	}
+	if g := &t.Geometry; g.Hollow {
+		c := Check{ID: "fit.hollow", Clause: clause, Detailing: true}
+		c.Compare(t.Cover.Add(t.Stirrup.Diameter).Add(t.Cover).Amount(), g.SideWall.Amount())
+		dst = append(dst, c)
+		for _, face := range [2]Face{Bottom, Top} {
+			wall := g.BottomWall
+			if face == Top {
+				wall = g.TopWall
+			}
+			if f := t.Steel(face); f.Count > 0 {
+				c := Check{ID: "fit.hollow", Clause: clause, Face: face, Detailing: true}
+				c.Compare(f.Fit.Height.Add(t.Cover).Amount(), wall.Amount())
+				dst = append(dst, c)
+			}
+		}
+	}
+	return dst
+}
+
 // layoutOf writes a found layout as a drawing would.
 func (s *search) layoutOf(f *found) Layout {
 	var l Layout
@@ -147,6 +203,7 @@ func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
 	t := &Trial{Problem: p}
 	length := p.length()
 	var faces [2][]bars.Layer
+	var flanges [2][]flangeRow
 	var relied [2]bool
 	largest := bars.Size{}
 	if len(l.Longitudinal) > maxRows || len(l.Transverse) > maxRows {
@@ -190,15 +247,34 @@ func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
 			f.add(path+"/face", "bottom, top, side", "face is missing or not known")
 			continue
 		}
-		if r.Layer < 1 || r.Layer > MaxLayers {
-			f.add(path+"/layer", fmt.Sprintf("1 to %d", MaxLayers), "layer is %d", r.Layer)
+		k := int(r.Face) - 1
+		if !r.Yield.IsZero() {
+			f.within(path+"/yield", "yield strength", r.Yield.Amount(), f.leastYield.Amount(), f.mostYield.Amount())
+		}
+		if r.Flange {
+			if row, ok := t.flangeRow(&f, path, r, size); ok {
+				flanges[k] = append(flanges[k], row)
+				t.yields = append(t.yields, rowYield{r.Face, 0, size.Name, r.yield(p)})
+				largest = larger(largest, size)
+			}
 			continue
 		}
-		k := int(r.Face) - 1
+		if r.Layer < 1 || r.Layer > mostLayers {
+			f.add(path+"/layer", fmt.Sprintf("1 to %d", mostLayers), "layer is %d", r.Layer)
+			continue
+		}
+		count := r.Count
+		if r.Bundled > 1 {
+			if size, count, err = bundle(size, r); err != nil {
+				f.add(path+"/bundled", "2 to 4, and a divisor of count", "%v", err)
+				continue
+			}
+		}
+		t.yields = append(t.yields, rowYield{r.Face, r.Layer, size.Name, r.yield(p)})
 		for len(faces[k]) < r.Layer {
 			faces[k] = append(faces[k], nil)
 		}
-		faces[k][r.Layer-1] = append(faces[k][r.Layer-1], bars.Group{Size: size, Count: r.Count})
+		faces[k][r.Layer-1] = append(faces[k][r.Layer-1], bars.Group{Size: size, Count: count})
 		relied[k] = relied[k] || r.InCompression
 		largest = larger(largest, size)
 	}
@@ -216,14 +292,110 @@ func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
 	if len(f.list) > 0 {
 		return nil, f.list
 	}
+	t.oneYield(&f)
+	t.setBent(&f, l)
 	t.enclose(stirrup, largest)
 	for k, layers := range faces {
-		if err := t.lay(Face(k+1), layers, relied[k]); err != nil {
+		if len(layers) == 0 && len(flanges[k]) > 0 {
+			f.add("/layout/longitudinal", "bars in the web beside those in the flange", "the %s has bars in the flange and none in the web", Face(k+1))
+			continue
+		}
+		if err := t.lay(Face(k+1), layers, flanges[k], relied[k]); err != nil {
 			f.add("/layout/longitudinal", "", "%v", err)
 		}
 	}
 	return t, f.list
 }
+
+// bundle is the unit that bars of a size make in contact, and how many units a
+// row has.
+func bundle(size bars.Size, r *Row) (bars.Size, int, error) {
+	if r.Count%r.Bundled != 0 {
+		return size, 0, fmt.Errorf("%d bars do not make up bundles of %d", r.Count, r.Bundled)
+	}
+	return size, 0, fmt.Errorf("bundles are not laid")
+}
+
+// yield is the row's own yield strength, or the brief's.
+func (r *Row) yield(p *Problem) units.Stress {
+	if r.Yield.IsZero() {
+		return p.Brief.Reinforcement.Yield
+	}
+	return r.Yield
+}
+
+// oneYield reports bars of one size in one layer with two yield strengths,
+// which nobody could tell apart on site either.
+func (t *Trial) oneYield(f *faults) {
+	for i := range t.yields {
+		a := &t.yields[i]
+		if y := t.yieldOf(a.face, a.layer, a.bar); y != a.yield {
+			f.add("/layout/longitudinal", "one yield strength for each size in a layer", "%s bars of one layer at the %s have two yield strengths", a.bar, a.face)
+			return
+		}
+	}
+}
+
+// flangeRow takes a row of bars in a flange.
+func (t *Trial) flangeRow(f *faults, path string, r *Row, size bars.Size) (row flangeRow, ok bool) {
+	n := len(f.list)
+	if left, right := t.Brief.Section.Overhangs(r.Face); left.IsZero() && right.IsZero() {
+		f.add(path+"/flange", "a face with a flange", "the section has no flange at the %s", r.Face)
+	}
+	if !(r.Spacing.Amount().SI() > 0) {
+		f.add(path+"/spacing", "above zero", "bars in a flange need the distance between them, and it is %s", t.System.Format(r.Spacing.Amount()))
+	}
+	if r.Layer > 1 || r.Bundled > 1 {
+		f.add(path, "single bars at the level of the first layer", "bars in a flange lie in layer %d, bundles of %d", r.Layer, r.Bundled)
+	}
+	return flangeRow{size: &size, count: r.Count, spacing: r.Spacing}, len(f.list) == n
+}
+
+// setBent takes the bent bars of a layout.
+func (t *Trial) setBent(f *faults, l *Layout) {
+	if len(l.Bent) > maxRows {
+		f.add("/layout/bent", fmt.Sprintf("at most %d", maxRows), "%d groups of bent bars given", len(l.Bent))
+		return
+	}
+	for i := range l.Bent {
+		b := l.Bent[i]
+		path := fmt.Sprintf("/layout/bent/%d", i)
+		size, err := t.Catalog.Size(b.Bar)
+		if err != nil {
+			f.add(path+"/bar", "a size of "+t.Catalog.ID(), "%v", err)
+			continue
+		}
+		if len(t.Brief.Spans) == 0 {
+			f.add(path, "a brief with spans", "bent bars have a place along a span, and demands have none")
+			continue
+		}
+		setIfZero(&b.Span, 1)
+		setIfZero(&b.Bends, 1)
+		f.count(path+"/count", "count", b.Count, 1, mostBars)
+		f.count(path+"/bends", "bends", b.Bends, 1, mostBars)
+		f.count(path+"/span", "span", b.Span, 1, len(t.Brief.Spans))
+		if !(b.Angle >= leastSlope && b.Angle <= 90) {
+			f.add(path+"/angle", fmt.Sprintf("%g to 90 degrees", leastSlope), "angle is %g", b.Angle)
+		}
+		if b.Rises != "left" && b.Rises != "right" {
+			f.add(path+"/rises", "left, right", "rises is %q", b.Rises)
+		}
+		if b.Bends > 1 && !(b.Spacing.Amount().SI() > 0) {
+			f.add(path+"/spacing", "above zero", "groups of bent bars need the distance between them, and it is %s", t.System.Format(b.Spacing.Amount()))
+		}
+		if b.Span >= 1 && b.Span <= len(t.Brief.Spans) {
+			f.within(path+"/at", "place", b.At.Amount(), units.Length{}.Amount(), t.Brief.Spans[b.Span-1].Amount())
+		}
+		t.Bent, t.BentBar = append(t.Bent, b), append(t.BentBar, size)
+	}
+}
+
+// leastSlope is the flattest that a bar or a stirrup may lie across the web, in
+// degrees; a code may ask for more.
+const leastSlope = 15.0
+
+// mostLayers is the most layers that a layout may have at a face.
+const mostLayers = 20
 
 const (
 	maxRows  = 500
@@ -249,6 +421,9 @@ func (t *Trial) setZones(f *faults, l *Layout) bars.Size {
 		if !(z.Spacing.Amount().SI() > 0) || f.mostSide.Less(z.Spacing) {
 			f.add(path+"/spacing", "above zero, to "+f.system.Format(f.mostSide.Amount()), "spacing is %s", f.system.Format(z.Spacing.Amount()))
 			continue
+		}
+		if z.Angle != 0 && !(z.Angle >= leastSlope && z.Angle <= 90) {
+			f.add(path+"/angle", fmt.Sprintf("%g to 90 degrees", leastSlope), "angle is %g", z.Angle)
 		}
 		if z.Form != "" && z.Form != "closed" && z.Form != "open" {
 			f.add(path+"/form", "closed, open", "form is %q", z.Form)

@@ -53,6 +53,14 @@ type Code interface {
 	// where none are required.
 	WidestSpacing(p *Problem, depth units.Length) units.Length
 
+	// Twists reports whether some torque must be designed for, so that closed
+	// stirrups and bars all round are needed.
+	Twists(p *Problem) bool
+
+	// Spread is the width, centred on the web, over which tension steel at a
+	// flanged face is to be spread; zero where all of it may lie in the web.
+	Spread(p *Problem, f Face) units.Length
+
 	// Judge appends to dst the checks of one group of limit states on a
 	// trial. A check that rests on the bars of one face carries that Face:
 	// in bending the tension face. It must not keep the trial. With t.Record it also writes the

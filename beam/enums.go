@@ -12,9 +12,12 @@ import (
 // Shape is the outline of a section.
 type Shape uint8
 
-// Shapes judged by this version.
 const (
 	Rectangular Shape = iota + 1
+	Tee               // a web with a flange at the top on both sides
+	Ell               // a web with a flange at the top on one side
+	InvertedTee       // a web with ledges at the bottom on both sides
+	Polygon           // any outline, with hollows or without
 )
 
 // What a support holds; the words of package statics, for convenience.
@@ -41,6 +44,8 @@ const (
 	Normalweight ConcreteKind = iota + 1
 	SandLightweight
 	AllLightweight
+	FineBlend   // lightweight coarse aggregate, fine aggregate in part normalweight
+	CoarseBlend // normalweight fine aggregate, coarse aggregate in part normalweight
 )
 
 // Coating of the bars.
@@ -80,6 +85,14 @@ const (
 	Couple
 	Torque
 	UniformTorque
+)
+
+// TorquePath says why a torque acts, which decides whether it may be shed.
+type TorquePath uint8
+
+const (
+	EquilibriumTorque   TorquePath = iota + 1 // needed for equilibrium: nothing else can carry it
+	CompatibilityTorque                       // from the twist that neighbours impose: they can carry the load without it
 )
 
 // Attachment says what the beam carries that deflection could harm.
@@ -173,12 +186,13 @@ const (
 )
 
 var (
-	shapeWords       = words{"rectangular"}
+	shapeWords       = words{"rectangular", "tee", "ell", "inverted-tee", "polygon"}
 	exposureWords    = words{"interior", "weather", "ground"}
-	kindWords        = words{"normalweight", "sand-lightweight", "all-lightweight"}
+	kindWords        = words{"normalweight", "sand-lightweight", "all-lightweight", "fine-blend", "coarse-blend"}
 	coatingWords     = words{"none", "epoxy", "galvanized"}
 	caseWords        = words{"dead", "live", "roof-live", "snow", "rain", "wind", "earthquake"}
 	loadShapeWords   = words{"uniform", "partial", "point", "couple", "torque", "uniform-torque"}
+	torquePathWords  = words{"equilibrium", "compatibility"}
 	attachmentWords  = words{"none", "robust", "fragile"}
 	preferenceWords  = words{"least-steel", "fewest-bars", "one-size", "shallowest", "fewest-marks"}
 	shearRowWords    = words{"larger", "a", "b"}

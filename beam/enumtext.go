@@ -181,3 +181,16 @@ func (o *Outcome) UnmarshalText(text []byte) error {
 	*o = Outcome(n)
 	return err
 }
+
+// String gives the word of the JSON door; empty when not stated.
+func (p TorquePath) String() string { return torquePathWords.text(uint8(p)) }
+
+// MarshalText gives the same word as String.
+func (p TorquePath) MarshalText() ([]byte, error) { return []byte(p.String()), nil }
+
+// UnmarshalText accepts exactly the words that String gives.
+func (p *TorquePath) UnmarshalText(text []byte) error {
+	n, err := torquePathWords.parse(string(text))
+	*p = TorquePath(n)
+	return err
+}

@@ -5,7 +5,6 @@ import (
 	"fmt"
 	"slices"
 
-	"soffit.example/beam/mechanics"
 	"soffit.example/units"
 )
 
@@ -84,8 +83,8 @@ func (r *Result) strengths(p *prepared, t *Trial) error {
 			continue // a check says so; there is no strength to give
 		}
 		q := SectionQuery{Section: b.Section, Concrete: b.Concrete, Bending: sense, Readings: b.Readings}
-		for _, l := range t.Layers(sense, mechanics.Steel{}) {
-			q.Layers = append(q.Layers, SteelLayer{Area: l.Area, Depth: l.Depth, Yield: b.Reinforcement.Yield})
+		for _, l := range t.Layers(sense, units.Stress{}) {
+			q.Layers = append(q.Layers, SteelLayer{Area: l.Area, Depth: l.Depth, Yield: l.Steel.Yield})
 		}
 		found, err := p.Code.Strengths(q)
 		switch {
@@ -101,7 +100,7 @@ func (r *Result) strengths(p *prepared, t *Trial) error {
 
 // inside reports whether the bars of a sense lie in the section at all.
 func (t *Trial) inside(sense Sense) bool {
-	for _, l := range t.Layers(sense, mechanics.Steel{}) {
+	for _, l := range t.Layers(sense, units.Stress{}) {
 		if l.Depth.Compare(units.Length{}) < 0 || t.Brief.Section.Depth.Less(l.Depth) {
 			return false
 		}
@@ -142,7 +141,7 @@ func (p *prepared) settle(t *Trial, register *Register) {
 func (t *Trial) positions(l *Layout) []BarAt {
 	mark := func(face Face, layer int, bar string) string {
 		for i := range l.Longitudinal {
-			if r := &l.Longitudinal[i]; r.Face == face && (r.Layer == layer || face == Side) && r.Bar == bar {
+			if r := &l.Longitudinal[i]; r.Face == face && !r.Flange && (r.Layer == layer || face == Side) && r.Bar == bar {
 				return r.Mark
 			}
 		}
@@ -150,14 +149,16 @@ func (t *Trial) positions(l *Layout) []BarAt {
 	}
 	var out []BarAt
 	depth, width := t.Brief.Section.Depth, t.Brief.Section.Width
+	web := t.Geometry.WebLeft
 	for _, face := range [2]Face{Bottom, Top} {
 		for _, b := range t.Steel(face).Fit.Bars {
 			y := b.Y
 			if face == Top {
 				y = depth.Sub(b.Y)
 			}
-			out = append(out, BarAt{Mark: mark(face, b.Layer, b.Size.Name), Bar: b.Size.Name, Diameter: b.Size.Diameter, X: b.X, Y: y, Face: face, Layer: b.Layer})
+			out = append(out, BarAt{Mark: mark(face, b.Layer, b.Size.Name), Bar: b.Size.Name, Diameter: b.Size.Diameter, X: b.X.Add(web), Y: y, Face: face, Layer: b.Layer})
 		}
+		out = t.appendFlangeBars(out, l, face)
 	}
 	if s := &t.Side; s.Each > 0 {
 		x := t.Cover.Add(t.Stirrup.Diameter).Add(s.Size.Diameter.Scale(0.5))
@@ -167,9 +168,29 @@ func (t *Trial) positions(l *Layout) []BarAt {
 				y = depth.Sub(t.Top.Farthest.Add(s.Spacing.Scale(float64(i))))
 			}
 			for _, at := range [2]units.Length{x, width.Sub(x)} {
-				out = append(out, BarAt{Mark: mark(Side, 0, s.Size.Name), Bar: s.Size.Name, Diameter: s.Size.Diameter, X: at, Y: y, Face: Side})
+				out = append(out, BarAt{Mark: mark(Side, 0, s.Size.Name), Bar: s.Size.Name, Diameter: s.Size.Diameter, X: at.Add(web), Y: y, Face: Side})
 			}
 		}
+	}
+	return out
+}
+
+// appendFlangeBars lists the bars in the flange at a face.
+func (t *Trial) appendFlangeBars(out []BarAt, l *Layout, face Face) []BarAt {
+	f := t.Steel(face)
+	var marks []string // of the flange rows, in order
+	for i := range l.Longitudinal {
+		if r := &l.Longitudinal[i]; r.Face == face && r.Flange {
+			marks = append(marks, r.Mark)
+		}
+	}
+	for i := range f.Flange {
+		b := &f.Flange[i]
+		y := b.Y
+		if face == Top {
+			y = t.Brief.Section.Depth.Sub(b.Y)
+		}
+		out = append(out, BarAt{Mark: marks[b.Row], Bar: b.Size.Name, Diameter: b.Size.Diameter, X: b.X.Add(t.Geometry.WebLeft), Y: y, Face: face, Layer: 1})
 	}
 	return out
 }

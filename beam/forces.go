@@ -15,7 +15,10 @@ type Action struct {
 	Moment      units.Moment
 	Shear       units.Force
 	Torque      units.Moment
-	Axial       units.Force
+	// Compatible is the part of Torque that compatibility imposes, which may be
+	// shed.
+	Compatible units.Moment
+	Axial      units.Force
 }
 
 // Forces are the factored forces of a problem: of every combination along
@@ -96,6 +99,7 @@ type twist struct {
 	at      float64 // m; meaningless if spread
 	torque  float64 // N-m, in all
 	spread  bool    // evenly over the span
+	path    TorquePath
 	factors []float64
 }
 
@@ -161,7 +165,7 @@ func (f *Forces) action(span int, at statics.Forces) Action {
 	sp := &f.spans[span-1]
 	if len(sp.twists) > 0 {
 		i := slices.IndexFunc(sp.lines, func(l *statics.Line) bool { return l.ID() == at.ID })
-		a.Torque = sp.torque(i, at.At, at.Side != statics.Left)
+		a.Torque, a.Compatible = sp.torque(i, at.At, at.Side != statics.Left)
 	}
 	return a
 }
@@ -185,7 +189,7 @@ func (f *Forces) Action(i, span int, at units.Length, right bool) Action {
 	}
 	a := Action{Combination: line.ID(), Span: span, At: at, Moment: before.Moment, Shear: before.Shear}
 	if len(sp.twists) > 0 {
-		a.Torque = sp.torque(i, at, right)
+		a.Torque, a.Compatible = sp.torque(i, at, right)
 	}
 	return a
 }
@@ -221,10 +225,11 @@ func (f *Forces) Breaks(dst []units.Length, span int) []units.Length {
 // Lines are the exact shear and moment of every combination along a span.
 func (f *Forces) Lines(span int) *statics.Lines { return f.spans[span-1].all }
 
-// torque is the internal torque under combination i. A prismatic span shares
-// a torque between the ends that hold in inverse proportion to distance.
-func (sp *spanForces) torque(i int, at units.Length, right bool) units.Moment {
-	x, sum := at.In(units.Metre), 0.0
+// torque is the internal torque under combination i, and the part of it that
+// compatibility imposes. A prismatic span shares a torque between the ends that
+// hold in inverse proportion to distance.
+func (sp *spanForces) torque(i int, at units.Length, right bool) (all, compatible units.Moment) {
+	x, sum, part := at.In(units.Metre), 0.0, 0.0
 	for _, w := range sp.twists {
 		t := w.torque * w.factors[i]
 		toLeft := 0.0 // share that the left end takes
@@ -245,8 +250,11 @@ func (sp *spanForces) torque(i int, at units.Length, right bool) units.Moment {
 			}
 		}
 		sum += t * (toLeft - passed)
+		if w.path == CompatibilityTorque {
+			part += t * (toLeft - passed)
+		}
 	}
-	return units.NewtonMetre.Of(sum)
+	return units.NewtonMetre.Of(sum), units.NewtonMetre.Of(part)
 }
 
 // demandForces are the forces of demands given directly.
@@ -254,6 +262,9 @@ func demandForces(demands []Demand) Forces {
 	f := Forces{demands: make([]Action, len(demands))}
 	for i, d := range demands {
 		f.demands[i] = Action{Combination: d.Name, Moment: d.Moment, Shear: d.Shear, Torque: d.Torque, Axial: d.Axial}
+		if d.Path == CompatibilityTorque {
+			f.demands[i].Compatible = d.Torque
+		}
 	}
 	return f
 }
@@ -340,7 +351,7 @@ func (sp *spanForces) addTwists(loads []Load, span int, kept []Combination) {
 		if l.Shape != Torque && l.Shape != UniformTorque || l.Span != 0 && l.Span != span {
 			continue
 		}
-		w := twist{at: l.At.In(units.Metre), torque: l.Moment.In(units.NewtonMetre), spread: l.Shape == UniformTorque}
+		w := twist{at: l.At.In(units.Metre), torque: l.Moment.In(units.NewtonMetre), spread: l.Shape == UniformTorque, path: l.Path}
 		for _, c := range kept {
 			factor := 0.0
 			for _, f := range c.Factors {

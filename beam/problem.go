@@ -20,6 +20,8 @@ type Problem struct {
 	Kept    []Combination
 	Dropped []DroppedCombination
 
+	Geometry   Geometry       // of the brief's section
+	Twisted    bool           // a torque must be designed for
 	SelfWeight units.LineLoad // of the brief's section; zero if the brief excludes it
 }
 
@@ -97,10 +99,15 @@ func prepare(code Code, given Brief) (*prepared, error) {
 		return nil, err
 	}
 	b.Preferences.resolve(p.Problem)
-	p.Brief = b
+	geometry, wrong := GeometryOf(&b.Section)
+	if f.list = append(f.list, wrong...); len(f.list) > 0 {
+		return nil, f.err()
+	}
+	p.Brief, p.Geometry = b, geometry
 	if err := p.analyse(); err != nil {
 		return nil, err
 	}
+	p.Twisted = code.Twists(p.Problem)
 	p.refusals = code.Scope(p.Problem)
 	return p, nil
 }
@@ -134,6 +141,7 @@ func (b Brief) clone() Brief {
 	b.Preferences.Bars = slices.Clone(b.Preferences.Bars)
 	b.Preferences.Stirrups = slices.Clone(b.Preferences.Stirrups)
 	b.Preferences.Depths = slices.Clone(b.Preferences.Depths)
+	b.Section = b.Section.clone()
 	return b
 }
 
@@ -185,10 +193,12 @@ func setIfZero(v *int, def int) {
 func (p *prepared) atDepth(d units.Length) (*prepared, error) {
 	q := *p.Problem
 	q.Brief.Section.Depth = d
+	q.Geometry, _ = GeometryOf(&q.Brief.Section)
 	n := &prepared{Problem: &q, register: p.register.clone(), assumedWeight: p.assumedWeight}
 	if err := n.analyse(); err != nil {
 		return nil, err
 	}
+	n.Twisted = q.Code.Twists(n.Problem)
 	n.refusals = q.Code.Scope(n.Problem)
 	return n, nil
 }
@@ -202,7 +212,7 @@ func (p *prepared) analyse() error {
 	}
 	p.SelfWeight = units.LineLoad{}
 	if !b.NoSelfWeight {
-		p.SelfWeight = b.Concrete.Density.Weight().MulArea(b.Section.Width.MulLength(b.Section.Depth))
+		p.SelfWeight = b.Concrete.Density.Weight().MulArea(p.Geometry.Gross)
 		p.assumeWeight()
 	}
 	p.Kept, p.Dropped = p.Code.Combinations(b)
@@ -273,6 +283,12 @@ func (p *prepared) assumeWeight() {
 // describeWeight says the self-weight and the section that it is of.
 func (p *Problem) describeWeight() string {
 	s := p.Brief.Section
-	return fmt.Sprintf("%s of self-weight, from a section of %s by %s",
-		p.System.Format(p.SelfWeight.Amount()), p.System.Format(s.Width.Amount()), p.System.Format(s.Depth.Amount()))
+	of := p.System.Format(s.Width.Amount()) + " by " + p.System.Format(s.Depth.Amount())
+	if s.Shape != Rectangular {
+		of = p.System.Format(p.Geometry.Gross.Amount())
+		if s.Flange() == Top {
+			of += ", the flange as far as it works with the web"
+		}
+	}
+	return fmt.Sprintf("%s of self-weight, from a section of %s", p.System.Format(p.SelfWeight.Amount()), of)
 }

@@ -67,8 +67,7 @@ func (r *Result) takeOff(t *Trial) {
 		m := line(z.Mark, z.Bar, z.form().String()+" stirrup, 135-degree hooks", count, t.stirrupLength(t.ZoneBar[i], z))
 		q.StirrupMass, q.SteelMass = q.StirrupMass.Add(m), q.SteelMass.Add(m)
 	}
-	s := t.Brief.Section
-	q.Concrete = s.Width.MulLength(s.Depth).MulLength(length)
-	q.Form = s.Width.Add(s.Depth.Scale(2)).MulLength(length)
+	q.Concrete = t.Geometry.Gross.MulLength(length)
+	q.Form = t.Geometry.Form.MulLength(length)
 	q.SteelPerConcrete = q.SteelMass.DivVolume(q.Concrete)
 }

@@ -38,11 +38,12 @@ type search struct {
 	failed  []Check // scratch
 	layers  []bars.Layer
 	groups  [2 * MaxLayers]bars.Group
-	zones   []Zone // scratch of the zone search
-	best    []Zone // scratch, the lightest zones of a pair so far
-	hint    int    // spacing steps that the last bars needed throughout
-	widest  int    // spacing steps that the code could accept for the current bars
-	member  bool   // spans are given, so zones have extents
+	flange  []flangeRow // scratch
+	zones   []Zone      // scratch of the zone search
+	best    []Zone      // scratch, the lightest zones of a pair so far
+	hint    int         // spacing steps that the last bars needed throughout
+	widest  int         // spacing steps that the code could accept for the current bars
+	member  bool        // spans are given, so zones have extents
 	from    units.Length
 	to      units.Length
 	kept    []found
@@ -227,7 +228,7 @@ func (s *search) put(face Face, b *barSet, inCompression bool) bool {
 		s.layers = b.appendLayers(s.layers, s.groups[:])
 	}
 	s.laid[face] = now
-	if s.t.lay(face, s.layers, inCompression) != nil {
+	if s.t.lay(face, s.layers, s.flange[:0], inCompression) != nil {
 		s.laid[face] = laid{}
 		return false
 	}

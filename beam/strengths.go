@@ -9,6 +9,7 @@ type SectionQuery struct {
 	Bending  Sense
 	Layers   []SteelLayer
 	Stirrups *StirrupSteel // nil: none
+	Bent     *BentSteel    // nil: none
 	Readings Readings
 	Demand   Demand // zero: nothing asked, and no checks
 }
@@ -29,6 +30,17 @@ type StirrupSteel struct {
 	Cover    units.Length // with Diameter, for a drawing: strength does not go by them
 	Diameter units.Length
 	Across   units.Length // greatest leg-to-leg distance across the web; zero: not known
+	Legs     int          // that Area is of; zero: 2
+	Angle    float64      // of the legs with the axis of the beam, in degrees; zero: 90
+	Open     bool         // not closed: no help in torsion
+}
+
+// BentSteel is longitudinal steel bent across the web at a section.
+type BentSteel struct {
+	Area    units.Area // of one group
+	Yield   units.Stress
+	Angle   float64      // with the axis of the beam, in degrees
+	Spacing units.Length // between groups; zero: a single one
 }
 
 // Strengths are a section's strengths under one code.
@@ -96,13 +108,37 @@ type ShearStrength struct {
 	Notes            []string
 }
 
-// TorsionStrength holds what is known of torsion before stirrups are
-// designed for it.
+// TorsionStrength is the strength in torsion, with every value on the way.
+// What stirrups decide is zero without them, and what a torque decides is zero
+// without one.
 type TorsionStrength struct {
-	Area           units.Area   // enclosed by the outside perimeter of the concrete
-	Perimeter      units.Length // that perimeter
-	Threshold      units.Moment // nominal
-	Cracking       units.Moment // nominal
-	Phi            float64
+	Area          units.Area   // enclosed by the outside perimeter of the concrete
+	Perimeter     units.Length // that perimeter
+	FlangeCounted bool         // overhanging flanges are part of both
+	Hollow        bool
+	Threshold     units.Moment // nominal
+	Cracking      units.Moment // nominal
+	Phi           float64
+
+	Torque         units.Moment // designed for: as given, or what is left once the rest is shed
+	Shed           units.Moment // the part of a compatibility torque that neighbours must take
 	MayBeNeglected bool
+
+	StirrupArea      units.Area   // enclosed by the centreline of the closed stirrup
+	StirrupPerimeter units.Length // of that centreline
+	FlowArea         units.Area   // enclosed by the shear flow
+	Angle            float64      // of the compression diagonals, in degrees
+	Section          units.Stress // what shear and torque ask of the section together
+	SectionLimit     units.Stress // and what it may bear
+
+	Transverse          units.AreaPerLength // that the torque needs of one leg
+	OuterLeg            units.AreaPerLength // that shear and torque need of each outer leg
+	OuterLegProvided    units.AreaPerLength
+	MinimumTransverse   units.AreaPerLength // of all legs, where torsion needs stirrups
+	GreatestSpacing     units.Length
+	Longitudinal        units.Area // that the torque needs, the minimum included
+	MinimumLongitudinal units.Area
+	Nominal             units.Moment // of the stirrups left over by shear, and of the longitudinal steel left over by bending
+	Design              units.Moment
+	Notes               []string
 }

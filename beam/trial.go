@@ -17,6 +17,8 @@ type Trial struct {
 	Side    SideSteel // zero: no side-face bars
 	Zones   []Zone
 	ZoneBar []bars.Size // the stirrup size of each zone, in step with Zones
+	Bent    []BentBars
+	BentBar []bars.Size // the size of each of Bent
 
 	// Record asks Judge for the working of each check.
 	Record bool
@@ -26,21 +28,25 @@ type Trial struct {
 	// all the same.
 	Focus int
 
-	// Solver, Law, Ultimate and Parts are working space for the code's
+	// Solver, Law and Ultimate are working space for the code's
 	// flexure kernel, so that a search allocates once.
 	Solver   mechanics.Solver
 	Law      mechanics.Law
 	Ultimate mechanics.Ultimate
-	Parts    []mechanics.Part
 	layers   []mechanics.Layer
+	yields   []rowYield
 }
 
 // FaceSteel is the steel of one face, by coordinates.
 type FaceSteel struct {
 	Face Face
 	Rows []RowSteel // by layer, nearest the face first; mixed sizes are rows of one layer
-	Fit  bars.Fit   // every bar by coordinates, with the gaps and spacings they leave
-	Area units.Area // catalogue areas, added as decimals
+	Fit  bars.Fit   // every bar inside the stirrups by coordinates, with the gaps and spacings they leave
+	// Flange are the bars in the flange beside the web, from left to right: X
+	// is measured as in Fit, from the left side of the web, and may lie
+	// outside it.
+	Flange []FlangeBar
+	Area   units.Area // catalogue areas, added as decimals
 	// Centroid, Nearest and Farthest are distances from this face to the
 	// centroid of all bars, to the centre of the nearest, and to the highest
 	// layer of more than one bar, whose outer bars stand at the legs.
@@ -50,6 +56,13 @@ type FaceSteel struct {
 	// InCompression says that the bars are relied on as compression steel
 	// under the moment that presses on this face.
 	InCompression bool
+}
+
+// FlangeBar is a bar in the flange beside the web.
+type FlangeBar struct {
+	Size bars.Size
+	X, Y units.Length // Y from the face at which the bars lie
+	Row  int          // counted from the web outward, from zero
 }
 
 // SideSteel is distributed steel along both side faces: Each bars a side at
@@ -68,6 +81,8 @@ type RowSteel struct {
 	Layer  int
 	Height units.Length // of the bars' centres from their face
 	Area   units.Area
+	Yield  units.Stress
+	Flange bool // beside the web
 }
 
 // Steel is the steel of a face.
@@ -97,10 +112,12 @@ func (t *Trial) ExtremeDepth(s Sense) units.Length {
 	return t.Brief.Section.Depth.Sub(f.Nearest)
 }
 
-// Layers gives the trial's longitudinal steel to the flexure kernel: the
-// tension face of sense s, and the other face if it is relied on in
-// compression. The slice is reused by the next call.
-func (t *Trial) Layers(s Sense, steel mechanics.Steel) []mechanics.Layer {
+// Layers gives the trial's longitudinal steel to the flexure kernel, each row
+// with its own yield strength: the tension face of sense s, the other face if
+// it is relied on in compression, but for the bars in a flange, which no
+// stirrup ties, and the side bars where the brief counts them. The slice is
+// reused by the next call.
+func (t *Trial) Layers(s Sense, modulus units.Stress) []mechanics.Layer {
 	t.layers = t.layers[:0]
 	for _, face := range [2]Face{s.TensionFace(), s.TensionFace().Opposite()} {
 		f := t.Steel(face)
@@ -108,12 +125,50 @@ func (t *Trial) Layers(s Sense, steel mechanics.Steel) []mechanics.Layer {
 			continue
 		}
 		for i := range f.Rows {
-			depth := f.Rows[i].Height
+			r := &f.Rows[i]
+			if r.Flange && face != s.TensionFace() {
+				continue
+			}
+			depth := r.Height
 			if face == Bottom {
 				depth = t.Brief.Section.Depth.Sub(depth)
 			}
-			t.layers = append(t.layers, mechanics.Layer{Depth: depth, Area: f.Rows[i].Area, Steel: steel})
+			t.layers = append(t.layers, mechanics.Layer{Depth: depth, Area: r.Area, Steel: mechanics.Steel{Modulus: modulus, Yield: r.Yield}})
+		}
+	}
+	if t.Brief.Readings.CountSideBars && !t.Twisted {
+		steel := mechanics.Steel{Modulus: modulus, Yield: t.Brief.Reinforcement.Yield}
+		for i := range t.Side.Each {
+			t.layers = append(t.layers, mechanics.Layer{Depth: t.sideDepth(i), Area: t.Side.Size.Area.Scale(2), Steel: steel})
 		}
 	}
 	return t.layers
+}
+
+// sideDepth is the depth of the i-th pair of side bars, from the top face.
+func (t *Trial) sideDepth(i int) units.Length {
+	s := &t.Side
+	from := t.Steel(s.TensionFace).Farthest.Add(s.Spacing.Scale(float64(i + 1)))
+	if s.TensionFace == Top {
+		return from
+	}
+	return t.Brief.Section.Depth.Sub(from)
+}
+
+// rowYield is the yield strength of bars that are not of the brief's own.
+type rowYield struct {
+	face  Face
+	layer int
+	bar   string
+	yield units.Stress
+}
+
+// yieldOf is the yield strength of the bars of a size in a layer.
+func (t *Trial) yieldOf(face Face, layer int, bar string) units.Stress {
+	for i := range t.yields {
+		if y := &t.yields[i]; y.face == face && y.layer == layer && y.bar == bar {
+			return y.yield
+		}
+	}
+	return t.Brief.Reinforcement.Yield
 }

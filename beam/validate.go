@@ -57,6 +57,7 @@ const (
 	mostDepths      = 50
 	mostAlternative = 50
 	mostLegs        = 12
+	mostBundled     = 4
 )
 
 // faults collects everything wrong with an input, in the units of system.
@@ -109,6 +110,16 @@ func (f *faults) positive(path, what string, v, most units.Amount) bool {
 	return false
 }
 
+// Angles of the diagonals of the space truss that any standard allows.
+const leastDiagonal, mostDiagonal = 10.0, 80.0
+
+// angle reports an angle in degrees outside [least, most].
+func (f *faults) angle(path string, a, least, most float64) {
+	if !(a >= least && a <= most) {
+		f.add(path, fmt.Sprintf("%g to %g degrees", least, most), "angle is %g degrees", a)
+	}
+}
+
 func (f *faults) count(path, what string, v, least, most int) {
 	if v < least || v > most {
 		f.add(path, fmt.Sprintf("%d to %d", least, most), "%s is %d", what, v)
@@ -131,16 +142,13 @@ func (f *faults) err() error {
 
 // check reports every fault of a brief that no code is needed to see.
 func (b *Brief) check(f *faults, catalog bars.Catalog) {
-	if b.Section.Shape != Rectangular {
-		f.add("/section/shape", "rectangular", "shape %q is not one that this version designs", b.Section.Shape.String())
-	}
-	f.within("/section/width", "width", b.Section.Width.Amount(), f.leastSide.Amount(), f.mostSide.Amount())
-	f.within("/section/depth", "depth", b.Section.Depth.Amount(), f.leastSide.Amount(), f.mostSide.Amount())
+	b.Section.check(f, len(b.Spans) > 0)
 	f.within("/concrete/strength", "concrete strength", b.Concrete.Strength.Amount(), f.leastStrength.Amount(), f.mostStrength.Amount())
 	if !b.Concrete.Density.IsZero() {
 		f.within("/concrete/density", "concrete density", b.Concrete.Density.Amount(), f.leastDensity.Amount(), f.mostDensity.Amount())
 	}
 	f.word("/concrete/kind", "concrete kind", b.Concrete.Kind.String(), b.Concrete.Kind == 0, kindWords)
+	b.Concrete.checkMix(f)
 	if !b.Concrete.Aggregate.IsZero() {
 		f.positive("/concrete/aggregate", "aggregate size", b.Concrete.Aggregate.Amount(), f.mostAggregate.Amount())
 	}
@@ -150,7 +158,7 @@ func (b *Brief) check(f *faults, catalog bars.Catalog) {
 	}
 	f.word("/reinforcement/coating", "coating", b.Reinforcement.Coating.String(), b.Reinforcement.Coating == 0, coatingWords)
 	f.word("/exposure", "exposure", b.Exposure.String(), b.Exposure == 0, exposureWords)
-	if !b.Cover.IsZero() && f.positive("/cover", "cover", b.Cover.Amount(), f.mostCover.Amount()) &&
+	if !b.Cover.IsZero() && f.positive("/cover", "cover", b.Cover.Amount(), f.mostCover.Amount()) && b.Section.Shape != Polygon &&
 		!b.Cover.Scale(2).Less(b.Section.Width.Min(b.Section.Depth)) {
 		f.add("/cover", "less than half the smaller side of the section", "cover is %s", f.system.Format(b.Cover.Amount()))
 	}
@@ -163,6 +171,9 @@ func (b *Brief) check(f *faults, catalog bars.Catalog) {
 	b.checkActions(f)
 	b.Preferences.check(f, catalog)
 	f.word("/shear_row", "shear row", b.Readings.ShearRow.String(), b.Readings.ShearRow == 0, shearRowWords)
+	if a := b.Readings.TorsionAngle; a != 0 {
+		f.angle("/torsion_angle", a, leastDiagonal, mostDiagonal)
+	}
 	f.word("/shear_method", "shear method", b.Readings.ShearMethod.String(), b.Readings.ShearMethod == 0, shearMethodWords)
 }
 
@@ -265,8 +276,10 @@ func (l *Load) check(f *faults, path string, span units.Length) {
 	case Torque:
 		moment("torque")
 		along("at", l.At)
+		f.word(path+"/path", "path of the torque", l.Path.String(), l.Path == 0, torquePathWords)
 	case UniformTorque:
 		moment("torque over the span")
+		f.word(path+"/path", "path of the torque", l.Path.String(), l.Path == 0, torquePathWords)
 	default:
 		f.add(path+"/shape", strings.Join(loadShapeWords, ", "), "load shape is missing or not known")
 	}
@@ -287,6 +300,7 @@ func (b *Brief) checkDemands(f *faults) {
 		f.within(path+"/moment", "moment", d.Moment.Amount(), f.mostMoment.Neg().Amount(), f.mostMoment.Amount())
 		f.within(path+"/shear", "shear", d.Shear.Amount(), f.mostForce.Neg().Amount(), f.mostForce.Amount())
 		f.within(path+"/torque", "torque", d.Torque.Amount(), f.mostMoment.Neg().Amount(), f.mostMoment.Amount())
+		f.word(path+"/path", "path of the torque", d.Path.String(), d.Path == 0, torquePathWords)
 		f.within(path+"/axial", "axial force", d.Axial.Amount(), f.mostForce.Neg().Amount(), f.mostForce.Amount())
 	}
 }
@@ -316,6 +330,7 @@ func (p *Preferences) check(f *faults, catalog bars.Catalog) {
 	if p.MaxZones != 0 && p.MaxZones != 1 && p.MaxZones != 3 {
 		f.add("/preferences/max_zones", "1, 3", "most stirrup zones is %d", p.MaxZones)
 	}
+	f.count("/preferences/bundles", "most bars in a bundle", p.Bundles, 0, mostBundled)
 	if len(p.Depths) > mostDepths {
 		f.add("/preferences/depths", fmt.Sprintf("at most %d", mostDepths), "%d depths given", len(p.Depths))
 	}

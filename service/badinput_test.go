@@ -103,7 +103,7 @@ func onBrief() []badInput {
 		{name: "unknown size", replace: `["#8", "#9"]`, with: `["#8", "#12"]`, pointer: "/preferences/bars/1", detail: `"#12"`},
 		{name: "size twice", replace: `["#8", "#9"]`, with: `["#8", "#8"]`, pointer: "/preferences/bars/1", detail: "twice", allowed: "each size once"},
 		{name: "size of another catalog", replace: `["#3"]`, with: `["N12"]`, pointer: "/preferences/stirrups/0", detail: `"N12"`},
-		{name: "unknown shape", replace: `"rectangular"`, with: `"circular"`, pointer: "/section/shape", detail: `shape is "circular"; it must be rectangular`, allowed: "rectangular"},
+		{name: "unknown shape", replace: `"rectangular"`, with: `"circular"`, pointer: "/section/shape", detail: `shape is "circular"; it must be one of rectangular, tee, ell, inverted-tee, polygon`, allowed: "rectangular, tee, ell, inverted-tee, polygon"},
 		{name: "word of another case", replace: `"interior"`, with: `"Interior"`, pointer: "/exposure", detail: `did you mean "interior"?`, allowed: "interior, weather, ground"},
 		{name: "empty word", replace: `"interior"`, with: `""`, pointer: "/exposure", detail: `exposure is ""`, allowed: "interior, weather, ground"},
 		{name: "unknown support", replace: `"kind": "pinned"`, with: `"kind": "hinge"`, pointer: "/supports/0/kind", detail: `kind is "hinge"`, allowed: "pinned, roller, fixed, free"},

@@ -68,7 +68,7 @@ func benchmarkTrial(t testing.TB) (*beam.Trial, func() (phi, design float64)) {
 	_, trial := checkUS(t, ACI31819(), []beam.Row{bottom(4, "#9"), second, relied}, nil, beam.Demand{Name: "1", Moment: units.KipFoot.Of(200)})
 	trial.Record = false
 	var depth, area, fy []float64
-	for _, l := range trial.Layers(beam.Positive, us19.barSteel(psi(60000))) {
+	for _, l := range trial.Layers(beam.Positive, us19.steelModulus()) {
 		depth, area, fy = append(depth, l.Depth.In(units.Inch)), append(area, l.Area.In(units.SquareInch)), append(fy, 60000)
 	}
 	return trial, func() (phi, design float64) {

@@ -73,9 +73,7 @@ func (e *edition) classify(u *mechanics.Ultimate, strength, yield units.Stress, 
 
 // trialSection is the section of a trial bent in a sense, for the kernel.
 func (e *edition) trialSection(t *beam.Trial, s beam.Sense) mechanics.Section {
-	b := &t.Brief
-	t.Parts = append(t.Parts[:0], mechanics.Part{Bottom: b.Section.Depth, Width: b.Section.Width})
-	return mechanics.Section{Parts: t.Parts, Layers: t.Layers(s, e.barSteel(b.Reinforcement.Yield))}
+	return mechanics.Section{Parts: t.Geometry.Parts, Layers: t.Layers(s, e.steelModulus())}
 }
 
 // trialFlexure is the strength of a trial in one sense. The equilibrium stays

@@ -106,3 +106,9 @@ func (t *torsionStrength) steps(e *edition) []beam.Step {
 	out.find("φTth", "torque below which torsion may be neglected", "9.5.4.1", "φ Tth", e.asMoment(t.phi*t.threshold))
 	return out.steps
 }
+
+// twists reports whether some torque of a problem may not be neglected.
+func (e *edition) twists(p *beam.Problem) bool {
+	a, t, ok := e.worstTorque(p)
+	return ok && !t.neglects(e, a.Torque)
+}

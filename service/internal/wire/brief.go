@@ -36,7 +36,7 @@ type Brief struct {
 
 // Section is a concrete outline.
 type Section struct {
-	Shape string       `json:"shape" validate:"oneof=rectangular" doc:"Shape of the outline."`
+	Shape string       `json:"shape" validate:"oneof=rectangular tee ell inverted-tee polygon" doc:"Shape of the outline."`
 	Width units.Length `json:"width" doc:"Width, 50 mm to 10 m."`
 	Depth units.Length `json:"depth" doc:"Overall depth, 50 mm to 10 m."`
 }
@@ -45,7 +45,7 @@ type Section struct {
 type Concrete struct {
 	Strength  units.Stress   `json:"strength" doc:"Specified compressive strength, 1 MPa to 250 MPa and within the code's own limits."`
 	Density   *units.Density `json:"density,omitzero" doc:"Density, 500 kg/m3 to 5000 kg/m3. Default: the code's usual value for the kind."`
-	Kind      *string        `json:"kind,omitzero" validate:"omitnil,oneof=normalweight sand-lightweight all-lightweight" doc:"Weight class. Default: normalweight."`
+	Kind      *string        `json:"kind,omitzero" validate:"omitnil,oneof=normalweight sand-lightweight all-lightweight fine-blend coarse-blend" doc:"Weight class. Default: normalweight."`
 	Aggregate *units.Length  `json:"aggregate,omitzero" doc:"Nominal maximum aggregate size, above zero, at most 200 mm. Default: assumed and listed."`
 }
 

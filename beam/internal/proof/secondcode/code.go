@@ -145,6 +145,12 @@ func (Code) Allows(use bars.Use, s bars.Size) bool {
 	return d >= 10 && d <= 32
 }
 
+// Twists is false: the code knows no torsion.
+func (Code) Twists(*beam.Problem) bool { return false }
+
+// Spread is nothing: the code knows no flanges.
+func (Code) Spread(*beam.Problem, beam.Face) units.Length { return units.Length{} }
+
 // WidestSpacing is the greatest spacing of rule V6.
 func (Code) WidestSpacing(_ *beam.Problem, depth units.Length) units.Length {
 	return depth.Scale(spacingShare).Min(units.Millimetre.Of(spacingMost))

@@ -63,9 +63,11 @@ func (c Code) bending(dst []beam.Check, t *beam.Trial, s beam.Sense) []beam.Chec
 	}
 	law, err := mechanics.RectangularBlock(units.Megapascal.Of(designStress(&t.Brief)), blockFactor, crushing)
 	if err == nil && steel.Count > 0 {
-		fy := units.Megapascal.Of(designYield(t.Brief.Reinforcement.Yield))
-		t.Parts = append(t.Parts[:0], mechanics.Part{Bottom: t.Brief.Section.Depth, Width: t.Brief.Section.Width})
-		section := mechanics.Section{Parts: t.Parts, Layers: t.Layers(s, mechanics.Steel{Modulus: units.Megapascal.Of(steelModulus), Yield: fy})}
+		section := mechanics.Section{Parts: t.Geometry.Parts, Layers: t.Layers(s, units.Megapascal.Of(steelModulus))}
+		for i := range section.Layers {
+			fy := &section.Layers[i].Steel.Yield
+			*fy = units.Megapascal.Of(designYield(*fy))
+		}
 		var bending mechanics.Bending
 		if s == beam.Negative {
 			bending.Sense = mechanics.Hogging
