@@ -72,7 +72,9 @@ type rule struct {
 }
 
 // Bend is the tightest standard bend of the size in a use, by its catalog's
-// code. The error is a *[NoRuleError] where the catalog has no rule.
+// code; bars of a bundle bend each as a single one. The error is a
+// *[NoRuleError] where the catalog has no rule; it has none for bundles as
+// stirrups.
 func (s Size) Bend(use Use) (Bend, error) {
 	if r := s.rule(use); r != nil {
 		return r.bend, nil
@@ -98,6 +100,9 @@ func (s Size) Hook(use Use, degrees int) (Hook, error) {
 
 func (s Size) rule(use Use) *rule {
 	if s.rec == nil || use == 0 || use >= uses || s.rec.rules[use].bend.Inside.IsZero() {
+		return nil
+	}
+	if s.bundled > 1 && use != Main {
 		return nil
 	}
 	return &s.rec.rules[use]

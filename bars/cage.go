@@ -89,7 +89,8 @@ type form struct {
 // gap is a Clearance in metres.
 type gap struct{ least, diameters float64 }
 
-// between is the clear distance required between bars of radii a and b.
+// between is the clear distance required between bars that count with radii
+// a and b.
 func (g gap) between(a, b float64) float64 {
 	return max(g.least, g.diameters*2*max(a, b))
 }
@@ -150,6 +151,9 @@ func (c *Cage) stirrup(f *form) error {
 		}
 		return nil
 	}
+	if c.Stirrup.Bundled() > 1 {
+		return &RangeError{Field: "stirrup", Value: c.Stirrup.Name, Allowed: "a single bar"}
+	}
 	d := c.Stirrup.Diameter.In(units.Metre)
 	if !(d > 0 && d <= maxDiameter) {
 		return outside("stirrup diameter", c.Stirrup.Diameter, "more than 0 m, at most 1 m")
@@ -172,13 +176,16 @@ func outside(field string, v units.Length, allowed string) error {
 }
 
 // seat is the horizontal distance from the side leg's inner face to the
-// centre of a seated bar of radius r: the tangent point of the bend, or the
-// leg itself if the bar is wider than the bend.
-func (f *form) seat(r float64) float64 { return max(f.radius, r) }
+// centre of a seated body: its outer bar stands at the tangent point of the
+// bend, or at the leg itself if it is wider than the bend.
+func (f *form) seat(b *body) float64 { return b.wide + max(f.radius, b.bar) }
 
-// tuck is the distance of a tucked bar's centre from the inner faces of both
+// tuck is the same for a tucked body.
+func (f *form) tuck(b *body) float64 { return b.wide + f.nook(b.bar) }
+
+// nook is the distance of a tucked bar's centre from the inner faces of both
 // legs.
-func (f *form) tuck(r float64) float64 {
+func (f *form) nook(r float64) float64 {
 	if r >= f.radius {
 		return r
 	}
@@ -197,46 +204,53 @@ func (f *form) wall(r, y float64) float64 {
 	return f.radius - math.Sqrt(max(0, rise))
 }
 
-// corner is where a corner bar of radius r lies, from the inner faces of the
-// side leg and of the horizontal leg.
-func (f *form) corner(r float64) (x, y float64) {
+// corner is where a body in the corner lies: from the inner face of the side
+// leg, and how far it is raised off the horizontal leg.
+func (f *form) corner(b *body) (x, raised float64) {
 	if f.tucked {
-		x = f.tuck(r)
-		return x, x
+		return f.tuck(b), f.nook(b.bar) - b.bar
 	}
-	return f.seat(r), r
+	return f.seat(b), 0
 }
 
-// pitch is the least horizontal distance between the centres of neighbours
-// of radii a and b that lie dy apart in height.
-func (f *form) pitch(a, b, dy float64) float64 {
-	centres := a + b + f.clear.between(a, b)
-	if centres <= math.Abs(dy) {
-		return 0
+// pitch is the least horizontal distance between the centres of neighbours a
+// and b, of which b lies to the right and dy higher. No bar of one may pass
+// over the centre of a bar of the other.
+func (f *form) pitch(a, b *body, dy float64) float64 {
+	least := a.wide + b.wide
+	centres := a.bar + b.bar + f.clear.between(a.counts, b.counts)
+	for i := range a.n {
+		xi, yi := a.at(i)
+		for j := range b.n {
+			xj, yj := b.at(j)
+			if rise := dy + yj - yi; math.Abs(rise) < centres {
+				least = max(least, math.Sqrt((centres-rise)*(centres+rise))-(xj-xi))
+			}
+		}
 	}
-	return math.Sqrt((centres - dy) * (centres + dy))
+	return least
 }
 
-// rowWidth is the least width of the form for n bars of radius r in the layer
-// nearest the face.
-func (f *form) rowWidth(n int, r float64) float64 {
-	least := 2 * (f.side + f.seat(r))
+// rowWidth is the least width of the form for n bodies in the layer nearest
+// the face.
+func (f *form) rowWidth(n int, b *body) float64 {
+	least := 2 * (f.side + f.seat(b))
 	if n == 1 {
 		return least
 	}
-	x, y := f.corner(r)
-	across := f.pitch(r, r, 0)
+	x, raised := f.corner(b)
+	across := f.pitch(b, b, 0)
 	if n > 2 {
 		// The bars beside the corners rest on the leg, past the tangent point.
-		end := max(f.pitch(r, r, y-r), f.seat(r)-x)
-		across = 2*end + float64(n-3)*f.pitch(r, r, 0)
+		end := max(f.pitch(b, b, -raised), f.seat(b)-x)
+		across = 2*end + float64(n-3)*f.pitch(b, b, 0)
 	}
 	return max(2*(f.side+f.radius), 2*(f.side+x)+across)
 }
 
-// MostInLayer is the largest number of bars of size s that fit in the layer
-// nearest the face, with the corner bars as c.Corner says; 0 if not even one
-// fits, at most [MaxBars]. Errors are those of [Cage.Fit].
+// MostInLayer is the largest number of bars or bundles of size s that fit in
+// the layer nearest the face, with the corner ones as c.Corner says; 0 if not
+// even one fits, at most [MaxBars]. Errors are those of [Cage.Fit].
 func (c *Cage) MostInLayer(s Size, need Clearance) (int, error) {
 	f, err := c.form(Clearances{InLayer: need})
 	if err != nil {
@@ -245,11 +259,11 @@ func (c *Cage) MostInLayer(s Size, need Clearance) (int, error) {
 	if err := s.Check(); err != nil {
 		return 0, err
 	}
-	r := s.Diameter.In(units.Metre) / 2
+	b := s.body()
 	n := 0
 	for step := MaxBars; step > 0; {
 		// rowWidth grows with n: feel the way up in halving steps.
-		if n+step <= MaxBars && units.AtMost(f.rowWidth(n+step, r), f.width) {
+		if n+step <= MaxBars && units.AtMost(f.rowWidth(n+step, &b), f.width) {
 			n += step
 		} else {
 			step /= 2
@@ -258,9 +272,9 @@ func (c *Cage) MostInLayer(s Size, need Clearance) (int, error) {
 	return n, nil
 }
 
-// LeastWidth is the least width of a form for one layer of n bars of size s
-// nearest the face, with the covers, stirrup and corners of c; its own width
-// does not matter, but must be valid. The count is 1 to [MaxBars].
+// LeastWidth is the least width of a form for one layer of n bars or bundles
+// of size s nearest the face, with the covers, stirrup and corners of c; its
+// own width does not matter, but must be valid. The count is 1 to [MaxBars].
 func (c *Cage) LeastWidth(s Size, n int, need Clearance) (units.Length, error) {
 	f, err := c.form(Clearances{InLayer: need})
 	if err != nil {
@@ -272,5 +286,6 @@ func (c *Cage) LeastWidth(s Size, n int, need Clearance) (units.Length, error) {
 	if n < 1 || n > MaxBars {
 		return units.Length{}, countError("count", n)
 	}
-	return units.Metre.Of(f.rowWidth(n, s.Diameter.In(units.Metre)/2)), nil
+	b := s.body()
+	return units.Metre.Of(f.rowWidth(n, &b)), nil
 }

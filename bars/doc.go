@@ -23,8 +23,11 @@
 //
 // A bar has its nominal diameter throughout; the ribs' extra is available as
 // [Size.Overall] but enters no distance. Inner legs of stirrups with more
-// than two legs are taken to run beside the bars and obstruct nothing;
-// bundles are not covered.
+// than two legs are taken to run beside the bars and obstruct nothing.
+//
+// A [Bundle] of two to four bars in contact counts as one bar of the same
+// area, but takes the room of its real bars: these touch the stirrup, and
+// clear distances are measured between them.
 //
 // # Lengths
 //

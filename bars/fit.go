@@ -12,10 +12,11 @@ import (
 // arranged with the larger ones outermost, symmetrically if the counts allow.
 type Layer []Group
 
-// Placed is a bar where it lies.
+// Placed is a bar or a bundle where it lies; [Placed.AppendSingles] takes a
+// bundle apart.
 type Placed struct {
 	Size  Size
-	X     units.Length // of its centre, from the left face
+	X     units.Length // of its centre of area, from the left face
 	Y     units.Length // of its centre, from the face at which the bars lie
 	Layer int          // 1 is nearest the face
 
@@ -25,8 +26,10 @@ type Placed struct {
 }
 
 // Gap is the clear distance between two bars of a fit, A and B by index in
-// Fit.Bars, with the distance required between those two. The zero Gap says
-// that there is no pair.
+// Fit.Bars, with the distance required between those two. Between bundles the
+// clear distance is that of their nearest bars, the required one follows from
+// the diameters that the bundles count with. The zero Gap says that there is
+// no pair.
 type Gap struct {
 	Clear, Required units.Length
 	A, B            int
@@ -54,8 +57,8 @@ type LayerFit struct {
 	// the pair with the layer below; of uniform bars they are the closest.
 	Beside, Below Gap
 	LeastClear    units.Length // between bars of the layer; zero with one bar
-	// Spacing is the largest distance between the centres of neighbours, as
-	// crack control asks for; zero with one bar.
+	// Spacing is the largest distance between the centres of neighbours,
+	// bundles as a whole, as crack control asks for; zero with one bar.
 	Spacing   units.Length
 	Symmetric bool // about the middle of the width
 	Aligned   bool // each bar directly above one of the layer below
@@ -221,11 +224,11 @@ func (f *Fit) total() {
 	for i := range f.Bars {
 		b := &f.Bars[i]
 		sum.add(&b.Size, 1)
-		_, y, r := b.metres()
+		_, y := b.metres()
 		a := b.Size.Area.In(units.SquareMetre)
 		area += a
 		moment += a * y
-		height = max(height, y+r)
+		height = max(height, y+b.Size.body().high)
 	}
 	f.Area = sum.area()
 	f.Centroid = units.Metre.Of(moment / area)
@@ -276,24 +279,24 @@ func (f *Fit) Vertical() Gap {
 	return least
 }
 
-// EdgeDistance is the distance from the centre of bar i to the nearest of the
-// two side faces and the face at which the bars lie. It panics if i is not an
-// index of f.Bars.
+// EdgeDistance is the distance from the centre of bar or bundle i to the
+// nearest of the two side faces and the face at which the bars lie. It panics
+// if i is not an index of f.Bars.
 func (f *Fit) EdgeDistance(i int) units.Length {
-	x, y, _ := f.Bars[i].metres()
+	x, y := f.Bars[i].metres()
 	return units.Metre.Of(min(x, f.width-x, y))
 }
 
-// NeighbourDistance is the distance between the centres of bar i and the bar
-// nearest to it in its own layer; zero if it has none. It panics if i is not
-// an index of f.Bars.
+// NeighbourDistance is the distance between the centres of bar or bundle i
+// and the one nearest to it in its own layer; zero if it has none. It panics
+// if i is not an index of f.Bars.
 func (f *Fit) NeighbourDistance(i int) units.Length {
-	x, y, _ := f.Bars[i].metres()
+	x, y := f.Bars[i].metres()
 	layer := &f.Layers[f.Bars[i].Layer-1]
 	nearest := math.Inf(1)
 	for j := layer.First; j < layer.First+layer.Count; j++ {
 		if j != i {
-			u, v, _ := f.Bars[j].metres()
+			u, v := f.Bars[j].metres()
 			nearest = min(nearest, math.Hypot(u-x, v-y))
 		}
 	}

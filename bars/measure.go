@@ -25,31 +25,34 @@ func measure(f *form, row, below []Placed, first int) LayerFit {
 	near := reach(row)
 	for i := range row {
 		b := &row[i]
-		x, y, r := b.metres()
+		x, y := b.metres()
+		right := b.Size.body()
 		a := b.Size.Area.In(units.SquareMetre)
 		area += a
 		moment += a * y
-		cover = min(cover, y-r)
+		cover = min(cover, y-right.low)
 		for j := range below {
-			u, v, s := below[j].metres()
-			g := newGap(math.Hypot(x-u, y-v), r, s, f.vertical)
+			u, v := below[j].metres()
+			lower := below[j].Size.body()
+			g := newGap(lower.centres(&right, x-u, y-v), &lower, &right, f.vertical)
 			g.A, g.B = first-len(below)+j, first+i
 			if g.tighter(on.Below) {
 				on.Below = g
 			}
 		}
 		for j := i - 1; j >= max(0, i-near); j-- {
-			u, v, s := row[j].metres()
-			centres := math.Hypot(x-u, y-v)
+			u, v := row[j].metres()
+			left := row[j].Size.body()
 			if j == i-1 {
-				on.Spacing = on.Spacing.Max(units.Metre.Of(centres))
+				on.Spacing = on.Spacing.Max(units.Metre.Of(math.Hypot(x-u, y-v)))
 			}
-			if x < u {
+			centres := left.centres(&right, x-u, y-v)
+			if x-u < (left.wide+right.wide)*(1-sameDistance) {
 				// The form is so narrow that the bars changed places: count the
 				// distance as negative, so that it grows with the width throughout.
 				centres = -centres
 			}
-			g := newGap(centres, r, s, f.clear)
+			g := newGap(centres, &left, &right, f.clear)
 			g.A, g.B = first+j, first+i
 			if g.tighter(on.Beside) {
 				on.Beside = g
@@ -65,33 +68,34 @@ func measure(f *form, row, below []Placed, first int) LayerFit {
 }
 
 // reach is how many bars further left can be the closest to a bar: only its
-// neighbour in a row of one diameter; in others all, as two large bars can
+// neighbour in a row of one kind; in others all, as two large bars can
 // meet over small ones between them.
 func reach(row []Placed) int {
 	for i := range row {
-		if row[i].Size.Diameter != row[0].Size.Diameter {
+		if !row[i].Size.sameKind(&row[0].Size) {
 			return len(row)
 		}
 	}
 	return 1
 }
 
-// newGap is the gap between bars of radii r and s with centres so far apart.
-func newGap(centres, r, s float64, need gap) Gap {
-	clear := centres - (r + s)
-	if math.Abs(clear) <= sameDistance*(r+s) {
+// newGap is the gap between a and b, whose nearest bars have centres so far
+// apart.
+func newGap(centres float64, a, b *body, need gap) Gap {
+	clear := centres - (a.bar + b.bar)
+	if math.Abs(clear) <= sameDistance*(a.bar+b.bar) {
 		clear = 0 // they touch; a limit of zero has no slack for rounding
 	}
-	return Gap{Clear: units.Metre.Of(clear), Required: units.Metre.Of(need.between(r, s))}
+	return Gap{Clear: units.Metre.Of(clear), Required: units.Metre.Of(need.between(a.counts, b.counts))}
 }
 
 // symmetric reports whether a row mirrors itself about the middle of the
-// width, in position and in diameter.
+// width, in position and in kind.
 func symmetric(row []Placed, width float64) bool {
 	for i, j := 0, len(row)-1; i <= j; i, j = i+1, j-1 {
-		xi, _, ri := row[i].metres()
-		xj, _, rj := row[j].metres()
-		if ri != rj || math.Abs(xi+xj-width) > sameDistance*width {
+		xi, _ := row[i].metres()
+		xj, _ := row[j].metres()
+		if !row[i].Size.sameKind(&row[j].Size) || math.Abs(xi+xj-width) > sameDistance*width {
 			return false
 		}
 	}
@@ -118,19 +122,29 @@ func aligned(row, below []Placed, width float64) bool {
 // margin is how far a bar's centre must keep from the inner faces of the side
 // legs where it lies.
 func (f *form) margin(p *Placed) float64 {
+	_, y := p.metres()
+	b := p.Size.body()
+	keep := 0.0
 	if p.Layer == 1 {
-		return f.edge(p)
+		keep = f.edge(p)
 	}
-	_, y, r := p.metres()
-	return f.wall(r, min(y-f.base, f.top-y))
+	for i := range b.n {
+		u, v := b.at(i)
+		height := f.top - (y + v) // over the nearer of the horizontal legs
+		if p.Layer > 1 {
+			height = min(height, y+v-f.base)
+		}
+		keep = max(keep, f.wall(b.bar, height)-u)
+	}
+	return keep
 }
 
 // holds reports whether every bar of a laid row lies inside the stirrup.
 func (f *form) holds(row []Placed) bool {
 	for i := range row {
-		x, y, r := row[i].metres()
+		x, y := row[i].metres()
 		keep := f.side + f.margin(&row[i])
-		if !units.AtMost(keep, x) || !units.AtMost(keep, f.width-x) || !units.AtMost(y+r, f.top) {
+		if !units.AtMost(keep, x) || !units.AtMost(keep, f.width-x) || !units.AtMost(y+row[i].Size.body().high, f.top) {
 			return false
 		}
 	}
@@ -144,7 +158,8 @@ func (f *form) leastWidth(row []Placed) float64 {
 	least, near := 0.0, reach(row)
 	for i := range row {
 		b := &row[i]
-		x, y, r := b.metres()
+		x, y := b.metres()
+		right := b.Size.body()
 		keep := f.side + f.margin(b)
 		if b.across > 0 {
 			least = max(least, f.width+(keep-x)/b.across)
@@ -154,8 +169,9 @@ func (f *form) leastWidth(row []Placed) float64 {
 		}
 		for j := i - 1; j >= max(0, i-near); j-- {
 			a := &row[j]
-			u, v, s := a.metres()
-			need := f.pitch(s, r, y-v)
+			u, v := a.metres()
+			left := a.Size.body()
+			need := f.pitch(&left, &right, y-v)
 			least = max(least, f.width+(need-(x-u))/(b.across-a.across))
 		}
 	}

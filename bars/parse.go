@@ -189,6 +189,7 @@ func (f *catalogFile) size(i int) (Size, error) {
 	if err := s.Check(); err != nil {
 		return Size{}, err
 	}
+	s.rec.bar = nominal{diameter: s.Diameter, overall: s.Overall, area: s.Area, mass: s.MassPerLength}
 	return s, s.plausible()
 }
 

@@ -2,12 +2,10 @@ package bars
 
 import "soffit.example/units"
 
-// metres is the position of a bar's centre and its radius.
-func (p *Placed) metres() (x, y, r float64) {
-	return p.X.In(units.Metre), p.Y.In(units.Metre), p.radius()
+// metres is the position of the centre of a bar or a bundle.
+func (p *Placed) metres() (x, y float64) {
+	return p.X.In(units.Metre), p.Y.In(units.Metre)
 }
-
-func (p *Placed) radius() float64 { return p.Size.Diameter.In(units.Metre) / 2 }
 
 func (p *Placed) put(x, y, across float64) {
 	p.X, p.Y, p.across = units.Metre.Of(x), units.Metre.Of(y), across
@@ -22,9 +20,10 @@ func (p *Placed) inCorner() bool { return p.Layer == 1 && (p.across == 0 || p.ac
 func (f *form) above(below []Placed, layer Layer) float64 {
 	top, largest := 0.0, 0.0
 	for i := range below {
-		_, y, r := below[i].metres()
-		top = max(top, y+r)
-		largest = max(largest, r)
+		_, y := below[i].metres()
+		b := below[i].Size.body()
+		top = max(top, y+b.high)
+		largest = max(largest, b.counts)
 	}
 	for i := range layer {
 		largest = max(largest, layer[i].Size.Diameter.In(units.Metre)/2)
@@ -38,16 +37,17 @@ func (f *form) above(below []Placed, layer Layer) float64 {
 func (f *form) spread(row []Placed, level float64) {
 	last := len(row) - 1
 	if last == 0 {
-		row[0].put(f.width/2, level+row[0].radius(), 0.5)
+		row[0].put(f.width/2, level+row[0].Size.body().low, 0.5)
 		return
 	}
 	for i := range row {
-		row[i].put(0, level+row[i].radius(), float64(i)/float64(last))
+		row[i].put(0, level+row[i].Size.body().low, float64(i)/float64(last))
 	}
 	left, right := f.edge(&row[0]), f.edge(&row[last])
 	for _, corner := range [...]*Placed{&row[0], &row[last]} {
 		if f.tucked && corner.inCorner() {
-			corner.Y = units.Metre.Of(level + f.tuck(corner.radius()))
+			b := corner.Size.body()
+			corner.Y = units.Metre.Of(level + f.nook(b.bar) + (b.low - b.bar))
 		}
 	}
 	x, end := f.side+left, f.width-f.side-right
@@ -67,27 +67,29 @@ func (f *form) spread(row []Placed, level float64) {
 // legs: a corner bar of a tucked cage by its own rule, others past the
 // tangent point.
 func (f *form) edge(p *Placed) float64 {
+	b := p.Size.body()
 	if f.tucked && p.inCorner() {
-		return f.tuck(p.radius())
+		return f.tuck(&b)
 	}
-	return f.seat(p.radius())
+	return f.seat(&b)
 }
 
 // step is the least horizontal distance between the centres of neighbours a
 // and b of a spread row, a on the left. Beside a tucked corner bar it also
 // keeps the neighbour, which rests on the leg, past the bend.
 func (f *form) step(a, b *Placed) float64 {
-	_, ya, ra := a.metres()
-	_, yb, rb := b.metres()
-	least := f.pitch(ra, rb, yb-ya)
+	_, ya := a.metres()
+	_, yb := b.metres()
+	left, right := a.Size.body(), b.Size.body()
+	least := f.pitch(&left, &right, yb-ya)
 	if !f.tucked {
 		return least
 	}
 	switch cornerA, cornerB := a.inCorner(), b.inCorner(); {
 	case cornerA && !cornerB:
-		least = max(least, f.seat(rb)-f.tuck(ra))
+		least = max(least, f.seat(&right)-f.tuck(&left))
 	case cornerB && !cornerA:
-		least = max(least, f.seat(ra)-f.tuck(rb))
+		least = max(least, f.seat(&left)-f.tuck(&right))
 	}
 	return least
 }
@@ -106,7 +108,7 @@ func (f *form) stack(row, below []Placed, level float64) {
 		case i >= m/2:
 			j = n - m + i
 		}
-		row[i].put(below[j].X.In(units.Metre), level+row[i].radius(), below[j].across)
+		row[i].put(below[j].X.In(units.Metre), level+row[i].Size.body().low, below[j].across)
 		switch keep := units.Metre.Of(f.side + f.margin(&row[i])); row[i].across {
 		case 0:
 			row[i].X = row[i].X.Max(keep)

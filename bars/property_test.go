@@ -49,10 +49,9 @@ func drawProblem(t *rapid.T) problem {
 	for range rapid.IntRange(1, 3).Draw(t, "layers") {
 		var l bars.Layer
 		for range rapid.IntRange(1, 3).Draw(t, "groups") {
-			l = append(l, bars.Group{
-				Size:  c.At(rapid.IntRange(0, c.Len()-1).Draw(t, "size")),
-				Count: rapid.IntRange(1, 6).Draw(t, "count"),
-			})
+			s, err := bars.Bundle(c.At(rapid.IntRange(0, c.Len()-1).Draw(t, "size")), max(1, rapid.IntRange(-2, bars.MaxBundle).Draw(t, "bundled")))
+			require.NoError(t, err)
+			l = append(l, bars.Group{Size: s, Count: rapid.IntRange(1, 6).Draw(t, "count")})
 		}
 		p.layers = append(p.layers, l)
 	}
@@ -87,7 +86,7 @@ func TestLeastWidthIsLeast(t *testing.T) {
 
 // Where Fits says yes, no two bars overlap and each lies inside the rounded
 // inner face of the stirrup: measured here from the coordinates by brute
-// force over all pairs.
+// force over all pairs of real bars.
 func TestBarsThatFitAreApartAndInside(t *testing.T) {
 	const slack = 1e-9 // m
 	rapid.Check(t, func(t *rapid.T) {
@@ -97,16 +96,26 @@ func TestBarsThatFitAreApartAndInside(t *testing.T) {
 		require.True(t, f.Fits())
 		side := p.cage.SideCover.Add(p.cage.Stirrup.Diameter).In(units.Metre)
 		base := p.cage.FaceCover.Add(p.cage.Stirrup.Diameter).In(units.Metre)
+		var all []bars.Placed
+		var of []int // the bar or bundle of f that each is part of
 		for i := range f.Bars {
-			xi, yi, ri := circle(f.Bars[i])
+			all = f.Bars[i].AppendSingles(all)
+			for len(of) < len(all) {
+				of = append(of, i)
+			}
+		}
+		require.Equal(t, all, f.AppendSingles(nil))
+		for i := range all {
+			xi, yi, ri := circle(all[i])
 			for j := range i {
-				xj, yj, rj := circle(f.Bars[j])
+				xj, yj, rj := circle(all[j])
 				clear := math.Hypot(xi-xj, yi-yj) - ri - rj
 				required := p.need.BetweenLayers.Least.In(units.Metre)
-				if f.Bars[i].Layer == f.Bars[j].Layer {
-					required = max(p.need.InLayer.Least.In(units.Metre), p.need.InLayer.Diameters*2*max(ri, rj))
+				if all[i].Layer == all[j].Layer {
+					thicker := f.Bars[of[i]].Size.Diameter.Max(f.Bars[of[j]].Size.Diameter)
+					required = max(p.need.InLayer.Least.In(units.Metre), p.need.InLayer.Diameters*thicker.In(units.Metre))
 				}
-				if f.Bars[i].Layer-f.Bars[j].Layer > 1 {
+				if of[i] == of[j] || all[i].Layer-all[j].Layer > 1 {
 					required = 0
 				}
 				require.GreaterOrEqual(t, clear, required-slack, "bars %d and %d", j, i)
@@ -171,6 +180,10 @@ func requireConsistent(t require.TestingT, f *bars.Fit, layers []bars.Layer) {
 	for i := range f.Bars {
 		x, y, r := circle(f.Bars[i])
 		require.False(t, math.IsNaN(x+y) || math.IsInf(x+y, 0))
+		if f.Bars[i].Size.Bundled() > 1 {
+			_, _, away := f.Bars[i].Size.Extent()
+			r = away.In(units.Metre)
+		}
 		require.False(t, f.Height.In(units.Metre) < y+r)
 		moment += y * f.Bars[i].Size.Area.In(units.SquareMetre)
 		require.True(t, f.EdgeDistance(i).IsFinite() && f.NeighbourDistance(i).IsFinite())
@@ -193,13 +206,14 @@ func requireConsistent(t require.TestingT, f *bars.Fit, layers []bars.Layer) {
 }
 
 func FuzzLay(f *testing.F) {
-	f.Add(0.4, 0.04, 0.04, 0.0, 0.0, 0.025, 1.0, 0.025, uint8(4), uint8(2), uint8(1), uint8(3), false)
-	f.Add(0.1, 0.05, 0.0, 0.7, 0.05, 0.0, 0.0, 0.0, uint8(1), uint8(7), uint8(0), uint8(10), true)
-	f.Add(math.Inf(1), math.NaN(), -1.0, 1e300, 1e-300, 0.0, 0.0, 0.0, uint8(0), uint8(0), uint8(0), uint8(0), true)
-	f.Add(5e-324, 0.0, 0.0, 0.0, 0.0, 10.0, 100.0, 10.0, uint8(200), uint8(200), uint8(10), uint8(0), true)
+	f.Add(0.4, 0.04, 0.04, 0.0, 0.0, 0.025, 1.0, 0.025, uint8(4), uint8(2), uint8(1), uint8(3), false, uint8(1))
+	f.Add(0.1, 0.05, 0.0, 0.7, 0.05, 0.0, 0.0, 0.0, uint8(1), uint8(7), uint8(0), uint8(10), true, uint8(2))
+	f.Add(math.Inf(1), math.NaN(), -1.0, 1e300, 1e-300, 0.0, 0.0, 0.0, uint8(0), uint8(0), uint8(0), uint8(0), true, uint8(3))
+	f.Add(0.5, 0.04, 0.04, 0.6, 0.0, 0.025, 1.0, 0.025, uint8(2), uint8(2), uint8(5), uint8(3), true, uint8(3))
+	f.Add(5e-324, 0.0, 0.0, 0.0, 0.0, 10.0, 100.0, 10.0, uint8(200), uint8(200), uint8(10), uint8(0), true, uint8(4))
 	catalog, err := bars.Lookup("astm-inch")
 	require.NoError(f, err)
-	f.Fuzz(func(t *testing.T, width, side, face, depth, bend, least, diameters, vertical float64, n1, n2, s1, s2 uint8, tucked bool) {
+	f.Fuzz(func(t *testing.T, width, side, face, depth, bend, least, diameters, vertical float64, n1, n2, s1, s2 uint8, tucked bool, bundled uint8) {
 		cage := bars.Cage{
 			Width: units.Metre.Of(width), Depth: units.Metre.Of(depth),
 			SideCover: units.Metre.Of(side), FaceCover: units.Metre.Of(face),
@@ -213,6 +227,12 @@ func FuzzLay(f *testing.F) {
 			BetweenLayers: bars.Clearance{Least: units.Metre.Of(vertical)},
 		}
 		big, small := catalog.At(int(s1)%catalog.Len()), catalog.At(int(s2)%catalog.Len())
+		big, err := bars.Bundle(big, int(bundled))
+		if bundled < 1 || bundled > bars.MaxBundle {
+			require.ErrorContains(t, err, "bars: bundle is ")
+			return
+		}
+		require.NoError(t, err)
 		layers := []bars.Layer{{{Size: small, Count: int(n1)}, {Size: big, Count: 2}}, {{Size: big, Count: int(n2)}}}
 		fit, err := cage.Fit(layers, need)
 		if err != nil {

@@ -25,14 +25,24 @@ type Size struct {
 	Area          units.Area // nominal: the design value, not pi d2/4
 	MassPerLength units.MassPerLength
 
-	rec *record
+	rec     *record
+	bundled uint8 // bars in contact that it stands for; 0: a single one
 }
 
-// record is what a catalog keeps of a size beyond its quantities.
+// record is what a catalog keeps of a size beyond its quantities. A bundle
+// has the record of its bar.
 type record struct {
+	bar                           nominal
 	diameter, area, mass, overall Printed
 	microArea                     int64 // area in millionths of a mm2, exact
 	rules                         [uses]rule
+}
+
+// nominal holds the quantities of a single bar.
+type nominal struct {
+	diameter, overall units.Length
+	area              units.Area
+	mass              units.MassPerLength
 }
 
 // Printed is a number as a standard prints it.
@@ -50,6 +60,16 @@ func (p Printed) String() string {
 	return p.Text + " " + p.Unit
 }
 
+// times is n times p, with its number of decimals.
+func (p Printed) times(n int) Printed {
+	if p.Text == "" || n == 1 {
+		return p
+	}
+	p.Value = p.Value.Mul(decimal.NewFromInt(int64(n)))
+	p.Text = p.Value.StringFixed(max(0, -p.Value.Exponent()))
+	return p
+}
+
 // IsZero reports whether s is the zero Size, no bar at all.
 func (s Size) IsZero() bool { return s == Size{} }
 
@@ -59,14 +79,17 @@ func (s Size) String() string { return s.Name }
 // Mass of a bar of this size and the given length.
 func (s Size) Mass(length units.Length) units.Mass { return s.MassPerLength.MulLength(length) }
 
-// PrintedDiameter is the nominal diameter as the standard prints it.
+// PrintedDiameter is the nominal diameter as the standard prints it; empty
+// for a bundle, whose diameter no standard prints.
 func (s Size) PrintedDiameter() Printed { return s.printed().diameter }
 
-// PrintedArea is the nominal area as the standard prints it.
-func (s Size) PrintedArea() Printed { return s.printed().area }
+// PrintedArea is the nominal area as the standard prints it, times the number
+// of bars of a bundle.
+func (s Size) PrintedArea() Printed { return s.printed().area.times(s.Bundled()) }
 
-// PrintedMass is the nominal mass per length as the standard prints it.
-func (s Size) PrintedMass() Printed { return s.printed().mass }
+// PrintedMass is the nominal mass per length as the standard prints it, times
+// the number of bars of a bundle.
+func (s Size) PrintedMass() Printed { return s.printed().mass.times(s.Bundled()) }
 
 // PrintedOverall is the diameter over the ribs as its source prints it; empty
 // where it is not known.
@@ -76,7 +99,11 @@ func (s Size) printed() record {
 	if s.rec == nil {
 		return record{}
 	}
-	return *s.rec
+	r := *s.rec
+	if s.bundled > 1 {
+		r.diameter, r.overall = Printed{}, Printed{}
+	}
+	return r
 }
 
 // Check reports what makes s unusable as a bar: a diameter outside
@@ -105,13 +132,7 @@ func (g Group) String() string { return fmt.Sprintf("%d %s", g.Count, g.Size.Nam
 // PrintedArea is count times the printed area, in the unit of the catalog and
 // with its number of decimals: 4 bars of 1.27 in2 are "5.08 in2".
 func (g Group) PrintedArea() Printed {
-	p := g.Size.PrintedArea()
-	if p.Text == "" {
-		return p
-	}
-	p.Value = p.Value.Mul(decimal.NewFromInt(int64(g.Count)))
-	p.Text = p.Value.StringFixed(max(0, -p.Value.Exponent()))
-	return p
+	return g.Size.PrintedArea().times(g.Count)
 }
 
 // TotalArea is the nominal area of all groups. Catalogue areas are added as
@@ -136,10 +157,10 @@ type areaSum struct {
 }
 
 func (a *areaSum) add(s *Size, count int) {
-	// No catalogue bar exceeds 1 m2, so a product stays below 2^60.
+	// No catalogue bar or bundle exceeds 1 m2, so a product stays below 2^60.
 	const most = 1_000_000
 	if s.rec != nil && count >= 0 && count <= most && a.micro < 1<<62 {
-		a.micro += int64(count) * s.rec.microArea
+		a.micro += int64(count*s.Bundled()) * s.rec.microArea
 		return
 	}
 	a.loose += float64(count) * s.Area.In(units.SquareMetre)
