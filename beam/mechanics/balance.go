@@ -23,12 +23,22 @@ import (
 // through the values of k at which anything changes, from great curvature to
 // none, that is from the least neutral-axis depth up, keeps the polynomial of
 // the present interval, and isolates its roots there.
+//
+// Where the width varies in straight lines, integration by parts once more gives
+// the force of the concrete as
+//
+//	(depth/k)·Σ(jump of width)·S(1 - k·x) + (depth/k²)·Σ(jump of slope)·T(1 - k·x)
+//
+// summed over the levels x at which the width or its slope jumps, T being the
+// integral of S. It becomes a polynomial times k², and all else is as before.
 
-// An edge is a level at which the width of the section changes. Its weight is
-// the width below less the width above, in m.
+// An edge is a level at which the width of the section, or the slope of its
+// sides, changes.
 type edge struct {
-	at, weight float64
-	piece      int // of the law at the edge's strain; -1 below the first
+	at           float64
+	weight, bend float64 // width and slope below it less those above, m and m over the depth
+	width, slope float64 // width and slope just below it
+	piece        int     // of the law at the edge's strain; -1 below the first
 }
 
 // A bar is a layer of steel.
@@ -129,7 +139,7 @@ func (s *Solver) listPieces(kind eventKind, index int, perAt float64) {
 // reports the first to dst.
 func (s *Solver) solve(dst *Ultimate) {
 	s.roots = s.roots[:0]
-	degree, block := max(2, s.law.degree+1), s.law.degree == 0
+	degree, block := max(2, s.law.degree+1)+s.power-1, s.law.degree == 0
 	g := s.balance()
 	hi := math.Min(g.rootBound(), 1e15)
 	if len(s.events) > 0 {
@@ -144,8 +154,11 @@ func (s *Solver) solve(dst *Ultimate) {
 		if lo < hi {
 			// Under a block the force rises with the neutral-axis depth
 			// between any two jumps, so that ends alike enclose no root.
-			end := g[0] + lo*(g[1]+lo*g[2])
-			if start := g[0] + hi*(g[1]+hi*g[2]); !block || !(start*end > 0) || start*before < 0 {
+			start, end := g[0]+hi*(g[1]+hi*g[2]), g[0]+lo*(g[1]+lo*g[2])
+			if s.power > 1 {
+				start, end = g.at(hi), g.at(lo)
+			}
+			if !block || !(start*end > 0) || start*before < 0 {
 				end = s.search(&g, degree, lo, hi, before)
 				if len(s.roots) > 0 && dst.NeutralAxis.IsZero() {
 					s.roots[0] = s.settle(dst, &g, lo == 0)
@@ -174,7 +187,7 @@ func (s *Solver) settle(dst *Ultimate, g *polynomial, divided bool) float64 {
 		}
 		slope := g.slope(k) * s.depth
 		if !divided {
-			slope /= k
+			slope /= s.powerOf(k)
 		}
 		next := k - residual/slope
 		if !(math.Abs(next-k) <= 1e-6*k) {
@@ -197,9 +210,9 @@ func (s *Solver) settle(dst *Ultimate, g *polynomial, divided bool) float64 {
 func (s *Solver) search(g *polynomial, degree int, lo, hi, before float64) float64 {
 	if lo == 0 {
 		// Every edge is on the same piece as the compression face, so that
-		// the constant terms cancel: what is left has the factor k.
-		g.divide()
-		before /= hi
+		// the lowest terms cancel: what is left has the factor k, or k².
+		s.divide(g)
+		before /= s.powerOf(hi)
 	}
 	b := g.bernstein(degree, lo, hi)
 	if s.crosses(g, hi, before, b[degree]) {
@@ -209,7 +222,7 @@ func (s *Solver) search(g *polynomial, degree int, lo, hi, before float64) float
 		// The running sum has gathered rounding: take it afresh.
 		*g = s.balance()
 		if lo == 0 {
-			g.divide()
+			s.divide(g)
 		}
 		b = g.bernstein(degree, lo, hi)
 		s.roots = g.appendRoots(s.roots, &b, degree, lo, hi)
@@ -218,6 +231,21 @@ func (s *Solver) search(g *polynomial, degree int, lo, hi, before float64) float
 		s.roots = append(s.roots, lo)
 	}
 	return b[0]
+}
+
+// powerOf returns the power of k that makes a balance of forces a polynomial.
+func (s *Solver) powerOf(k float64) float64 {
+	if s.power == 1 {
+		return k
+	}
+	return k * k
+}
+
+// divide takes that power out of g.
+func (s *Solver) divide(g *polynomial) {
+	for range s.power {
+		g.divide()
+	}
 }
 
 // crosses reports whether the balance passes through zero at the border k of two
@@ -233,10 +261,11 @@ func (s *Solver) crosses(g *polynomial, k, before, after float64) bool {
 }
 
 // balance returns the polynomial of the present pieces and branches: the sum of
-// forces, compression positive, times k over the depth of the section.
+// forces, compression positive, over the depth of the section and times k, or k²
+// where a part tapers.
 func (s *Solver) balance() polynomial {
 	var g polynomial
-	g[1] = -s.axial
+	g[s.power] = -s.axial
 	for i := range s.edges {
 		s.addEdge(&g, &s.edges[i], 1)
 	}
@@ -271,25 +300,28 @@ func (s *Solver) pass(g *polynomial, e event) {
 func (s *Solver) addEdge(g *polynomial, e *edge, sign float64) {
 	if e.piece >= 0 {
 		p := &s.law.pieces[e.piece]
-		g.addComposed(&p.integral, s.law.degree+1, 1-p.from, e.at, sign*e.weight, 0)
+		g.addComposed(&p.integral, s.law.degree+1, 1-p.from, e.at, sign*e.weight, s.power-1)
+		if e.bend != 0 {
+			g.addComposed(&p.second, s.law.degree+2, 1-p.from, e.at, sign*e.bend, 0)
+		}
 	}
 }
 
 func (s *Solver) addDisplaced(g *polynomial, b *bar, sign float64) {
 	if s.deduct && b.piece >= 0 {
 		p := &s.law.pieces[b.piece]
-		g.addComposed(&p.stress, s.law.degree, 1-p.from, b.at, -sign*b.area, 1)
+		g.addComposed(&p.stress, s.law.degree, 1-p.from, b.at, -sign*b.area, s.power)
 	}
 }
 
 func (s *Solver) addSteel(g *polynomial, b *bar, sign float64) {
 	switch b.branch {
 	case tensionYield:
-		g[1] -= sign * b.area * b.yield
+		g[s.power] -= sign * b.area * b.yield
 	case compressionYield:
-		g[1] += sign * b.area * b.yield
+		g[s.power] += sign * b.area * b.yield
 	default:
-		g[1] += sign * b.area * b.elastic
-		g[2] -= sign * b.area * b.elastic * b.at
+		g[s.power] += sign * b.area * b.elastic
+		g[s.power+1] -= sign * b.area * b.elastic * b.at
 	}
 }

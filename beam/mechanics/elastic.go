@@ -31,9 +31,9 @@ func (s Section) Uncracked(modularRatio float64) (Properties, error) {
 	}
 	var area, first float64
 	for i := range s.Parts {
-		top, bottom, width := s.rectangle(i)
-		area += width * (bottom - top)
-		first += width * (bottom - top) * (bottom + top) / 2
+		p := s.trapezoid(i)
+		area += p.area()
+		first += p.first(0)
 	}
 	for i := range s.Layers {
 		depth, a := s.layer(i)
@@ -43,8 +43,8 @@ func (s Section) Uncracked(modularRatio float64) (Properties, error) {
 	centroid := first / area
 	var second float64
 	for i := range s.Parts {
-		top, bottom, width := s.rectangle(i)
-		second += width * (cube(bottom-centroid) - cube(top-centroid)) / 3
+		p := s.trapezoid(i)
+		second += p.second(centroid)
 	}
 	for i := range s.Layers {
 		depth, a := s.layer(i)
@@ -128,12 +128,12 @@ type crackedModel struct {
 	height  float64
 }
 
-func (m *crackedModel) rectangle(i int) (top, bottom, width float64) {
-	top, bottom, width = m.section.rectangle(i)
+func (m *crackedModel) trapezoid(i int) trapezoid {
+	p := m.section.trapezoid(i)
 	if m.hogging {
-		top, bottom = m.height-bottom, m.height-top
+		p = trapezoid{m.height - p.bottom, m.height - p.top, p.below, p.above}
 	}
-	return top, bottom, width
+	return p
 }
 
 func (m *crackedModel) layer(i int) (depth, area float64) {
@@ -149,9 +149,9 @@ func (m *crackedModel) layer(i int) (depth, area float64) {
 func (m *crackedModel) first(x float64) float64 {
 	var q float64
 	for i := range m.section.Parts {
-		top, bottom, width := m.rectangle(i)
-		if bottom = min(bottom, x); top < bottom {
-			q += width * (bottom - top) * (x - (top+bottom)/2)
+		if p := m.trapezoid(i); p.top < x {
+			p = p.downTo(x)
+			q -= p.first(x)
 		}
 	}
 	for i := range m.section.Layers {
@@ -170,7 +170,8 @@ func (m *crackedModel) weight(depth, x float64) float64 {
 }
 
 // neutralAxis brackets the depth between two neighbouring levels of parts and
-// bars, where the first moment is a quadratic in x, and solves that.
+// bars, where the first moment is a quadratic in x, a cubic if the part tapers,
+// and solves that.
 func (m *crackedModel) neutralAxis() (x float64, ok bool) {
 	if !(m.first(0) < 0) {
 		return 0, false
@@ -187,24 +188,25 @@ func (m *crackedModel) neutralAxis() (x float64, ok bool) {
 		}
 	}
 	for i := range m.section.Parts {
-		_, bottom, _ := m.rectangle(i)
-		narrow(bottom)
+		narrow(m.trapezoid(i).bottom)
 	}
 	for i := range m.section.Layers {
 		depth, _ := m.layer(i)
 		narrow(depth)
 	}
-	// width/2·t² + area·t + first(lo) = 0, t from lo on.
-	var width, area float64
+	// slope/6·t³ + width/2·t² + area·t + first(lo) = 0, t from lo on.
+	var slope, width, area float64
 	mid := lo + (hi-lo)/2
 	for i := range m.section.Parts {
-		top, bottom, w := m.rectangle(i)
+		p := m.trapezoid(i)
 		switch {
-		case bottom <= mid:
-			area += w * (bottom - top)
-		case top < mid:
-			area += w * (lo - top)
-			width = w
+		case p.bottom <= mid:
+			area += p.area()
+		case p.top < mid:
+			slope = p.slope()
+			p = p.downTo(lo)
+			width = p.below
+			area += p.area()
 		}
 	}
 	for i := range m.section.Layers {
@@ -212,17 +214,30 @@ func (m *crackedModel) neutralAxis() (x float64, ok bool) {
 		area += m.weight(depth, mid) * a
 	}
 	constant := m.first(lo)
-	t := -2 * constant / (area + math.Sqrt(area*area-2*width*constant))
-	return lo + min(t, hi-lo), true
+	if slope == 0 {
+		t := -2 * constant / (area + math.Sqrt(area*area-2*width*constant))
+		return lo + min(t, hi-lo), true
+	}
+	// The first moment is convex, since widths are positive: from the far end
+	// Newton's steps come down to the root and never pass it.
+	t := hi - lo
+	for range 100 {
+		step := (constant + t*(area+t*(width/2+t*slope/6))) / (area + t*(width+t*slope/2))
+		if !(step > 0) {
+			break
+		}
+		t -= step
+	}
+	return lo + max(0, t), true
 }
 
 // second returns the second moment about x of all that acts.
 func (m *crackedModel) second(x float64) float64 {
 	var second float64
 	for i := range m.section.Parts {
-		top, bottom, width := m.rectangle(i)
-		if bottom = min(bottom, x); top < bottom {
-			second += width * (cube(x-top) - cube(x-bottom)) / 3
+		if p := m.trapezoid(i); p.top < x {
+			p = p.downTo(x)
+			second += p.second(x)
 		}
 	}
 	for i := range m.section.Layers {
@@ -236,19 +251,18 @@ func (s Section) checkElastic(modularRatio float64) error {
 	if err := s.Validate(); err != nil {
 		return err
 	}
-	if err := s.refuseTapers(); err != nil {
-		return err
-	}
 	return checkNumber("modular ratio", modularRatio, 1, 1000)
 }
 
-// rectangle returns part i in m from the top face. It ends where the next
+// trapezoid returns part i in m from the top face. It ends where the next
 // begins, whatever the last bits of their faces say.
-func (s Section) rectangle(i int) (top, bottom, width float64) {
+func (s Section) trapezoid(i int) trapezoid {
+	p := trapezoid{bottom: s.Parts[i].Bottom.In(units.Metre)}
 	if i > 0 {
-		top = s.Parts[i-1].Bottom.In(units.Metre)
+		p.top = s.Parts[i-1].Bottom.In(units.Metre)
 	}
-	return top, s.Parts[i].Bottom.In(units.Metre), s.Parts[i].Width.In(units.Metre)
+	p.above, p.below = s.Parts[i].widths()
+	return p
 }
 
 // layer returns layer i in m from the top face and m².
@@ -256,4 +270,31 @@ func (s Section) layer(i int) (depth, area float64) {
 	return s.Layers[i].Depth.In(units.Metre), s.Layers[i].Area.In(units.SquareMetre)
 }
 
-func cube(x float64) float64 { return x * x * x }
+// A trapezoid is a part of a section: levels of its edges and widths there.
+type trapezoid struct{ top, bottom, above, below float64 }
+
+func (p *trapezoid) area() float64 { return (p.above + p.below) / 2 * (p.bottom - p.top) }
+
+// slope returns how fast the width grows downwards.
+func (p *trapezoid) slope() float64 { return (p.below - p.above) / (p.bottom - p.top) }
+
+// first returns the first moment of area about the level x, positive below it.
+func (p *trapezoid) first(x float64) float64 {
+	u, v := p.top-x, p.bottom-x
+	return (v - u) / 6 * (p.above*(2*u+v) + p.below*(u+2*v))
+}
+
+// second returns the second moment of area about the level x.
+func (p *trapezoid) second(x float64) float64 {
+	u, v := p.top-x, p.bottom-x
+	return (v - u) / 12 * (p.above*(3*u*u+2*u*v+v*v) + p.below*(u*u+2*u*v+3*v*v))
+}
+
+// downTo returns what of p is above the level x, which is below its top.
+func (p trapezoid) downTo(x float64) trapezoid {
+	if x < p.bottom {
+		p.below = p.above + p.slope()*(x-p.top)
+		p.bottom = x
+	}
+	return p
+}

@@ -21,7 +21,7 @@ type FibreUltimate struct {
 }
 
 // Fibres finds the equilibrium of the section under a law by fibre integration:
-// concrete is cut into strips across the section, each strip carries two fibres
+// concrete is cut into strips across the section, each strip carries three fibres
 // at Gauss's points, each bar is a fibre, and the neutral axis is found by
 // scanning and halving. Strips end where a part ends and where the law
 // kinks, so that no strip straddles a break. Of the law it asks only the stress
@@ -34,9 +34,6 @@ func (s Section) Fibres(law Law, bending Bending) (FibreUltimate, error) {
 		return FibreUltimate{}, &InputError{Field: "law", Value: "the zero Law", Allowed: "a law with an ultimate strain"}
 	}
 	if err := s.Validate(); err != nil {
-		return FibreUltimate{}, err
-	}
-	if err := s.refuseTapers(); err != nil {
 		return FibreUltimate{}, err
 	}
 	if bending.Sense > Hogging || bending.Displaced > Ignore {
@@ -73,7 +70,7 @@ func (s Section) Fibres(law Law, bending Bending) (FibreUltimate, error) {
 
 // stripsOverDepth is the number of strips over the stressed depth of a
 // section, shared among the pieces into which parts and kinks divide it.
-const stripsOverDepth = 24
+const stripsOverDepth = 12
 
 // A fibreModel is a section in m, N and Pa, measured from the compression face.
 type fibreModel struct {
@@ -87,7 +84,7 @@ type fibreModel struct {
 	bars   []fibreBar
 }
 
-type fibreSlab struct{ top, bottom, width float64 }
+type fibreSlab struct{ top, bottom, topWidth, bottomWidth float64 }
 
 type fibreBar struct{ depth, area, modulus, yield float64 }
 
@@ -111,9 +108,16 @@ func newFibreModel(s Section, law Law, bending Bending) *fibreModel {
 	var area, moment, top float64
 	for _, p := range s.Parts {
 		bottom, width := p.Bottom.In(units.Metre), p.Width.In(units.Metre)
-		m.slabs = append(m.slabs, fibreSlab{top, bottom, width})
-		area += width * (bottom - top)
-		moment += width * (bottom - top) * (top + bottom) / 2
+		below := width
+		if !p.BottomWidth.IsZero() {
+			below = p.BottomWidth.In(units.Metre)
+		}
+		m.slabs = append(m.slabs, fibreSlab{top, bottom, width, below})
+		// Two triangles, a third of the height from either edge.
+		height := bottom - top
+		upper, lower := width*height/2, below*height/2
+		area += upper + lower
+		moment += upper*(top+height/3) + lower*(bottom-height/3)
 		top = bottom
 	}
 	m.middle = moment / area
@@ -127,7 +131,7 @@ func newFibreModel(s Section, law Law, bending Bending) *fibreModel {
 		m.middle = m.height - m.middle
 		slices.Reverse(m.slabs)
 		for i, p := range m.slabs {
-			m.slabs[i].top, m.slabs[i].bottom = m.height-p.bottom, m.height-p.top
+			m.slabs[i] = fibreSlab{m.height - p.bottom, m.height - p.top, p.bottomWidth, p.topWidth}
 		}
 		for i := range m.bars {
 			m.bars[i].depth = m.height - m.bars[i].depth
@@ -148,7 +152,7 @@ func (m *fibreModel) sum(c float64) fibreSum {
 		top := p.top
 		for _, kink := range m.kinks {
 			if level := c * (1 - kink/m.law.ultimate); level > top {
-				m.addStrips(&t, c, top, math.Min(level, p.bottom), p.width)
+				m.addStrips(&t, c, top, math.Min(level, p.bottom), p)
 				top = level
 			}
 			if top >= p.bottom {
@@ -174,16 +178,19 @@ func (m *fibreModel) sum(c float64) fibreSum {
 	return t
 }
 
-// addStrips cuts the concrete between two levels into strips and adds their
-// fibres to t.
-func (m *fibreModel) addStrips(t *fibreSum, c, top, bottom, width float64) {
+// addStrips cuts the concrete of a slab between two levels into strips and adds
+// their fibres to t.
+func (m *fibreModel) addStrips(t *fibreSum, c, top, bottom float64, p fibreSlab) {
+	taper := (p.bottomWidth - p.topWidth) / (p.bottom - p.top)
 	n := 1 + math.Floor(stripsOverDepth*(bottom-top)/math.Min(c, m.height))
 	strip := (bottom - top) / n
-	offset := strip / 2 / math.Sqrt(3)
+	offset := strip / 2 * math.Sqrt(0.6)
+	shares := [3]float64{5.0 / 18, 8.0 / 18, 5.0 / 18} // of the strip
 	for i := range int(n) {
 		mid := top + strip*(float64(i)+0.5)
-		for _, depth := range [2]float64{mid - offset, mid + offset} {
-			f := strip / 2 * width * m.law.Stress(m.law.ultimate*(1-depth/c)).In(units.Pascal)
+		for j, depth := range [3]float64{mid - offset, mid, mid + offset} {
+			width := p.topWidth + taper*(depth-p.top)
+			f := strip * shares[j] * width * m.law.Stress(m.law.ultimate*(1-depth/c)).In(units.Pascal)
 			t.concrete += f
 			t.moment += f * (m.middle - depth)
 			t.fibres++

@@ -27,6 +27,7 @@ type piece struct {
 	from     float64    // where the piece starts
 	stress   polynomial // Pa, in the distance from there
 	integral polynomial // of the stress over the fraction, from the law's first piece on
+	second   polynomial // the integral of that
 }
 
 // Strains and stresses that a law may have. They are no rule for concrete: they
@@ -164,6 +165,9 @@ func Curve(stress func(strain float64) units.Stress, ultimate float64, kinks ...
 	return newLaw(ultimate, pieces...), nil
 }
 
+// mostLawDegree is that of the pieces that fit makes.
+const mostLawDegree = 3
+
 // newLaw completes pieces that are in order and whose stresses are set.
 func newLaw(ultimate float64, pieces ...piece) Law {
 	law := Law{ultimate: ultimate, pieces: pieces}
@@ -171,13 +175,18 @@ func newLaw(ultimate float64, pieces ...piece) Law {
 		p := &pieces[i]
 		if i > 0 {
 			before := &pieces[i-1]
-			p.integral[0] = before.integral.at(p.from - before.from)
+			width := p.from - before.from
+			p.integral[0] = before.integral.at(width)
+			p.second[0] = before.second.at(width)
 		}
-		for j, c := range p.stress[:maxDegree] {
+		for j, c := range p.stress[:mostLawDegree+1] {
 			p.integral[j+1] = c / float64(j+1)
 			if c != 0 && j > law.degree {
 				law.degree = j
 			}
+		}
+		for j, c := range p.integral[:mostLawDegree+2] {
+			p.second[j+1] = c / float64(j+1)
 		}
 	}
 	return law
@@ -273,6 +282,21 @@ func (l Law) sum(i int, from, to float64) (force, moment float64) {
 	f1 := outer * half * p.stress.at(s1-p.from)
 	f2 := inner * half * p.stress.at(mid-p.from)
 	f3 := outer * half * p.stress.at(s3-p.from)
+	return f1 + f2 + f3, f1*(1-s1) + f2*(1-mid) + f3*(1-s3)
+}
+
+// taper integrates as sum does, with a width that varies in a straight line from
+// below at the lesser fraction to above at the greater one. Three points are
+// exact for it too: the integrands are of the fifth degree at most.
+func (l Law) taper(i int, from, to, below, above float64) (force, moment float64) {
+	p := &l.pieces[i]
+	half, mid := (to-from)/2, (to+from)/2
+	spread, width := (above-below)/2, (above+below)/2
+	const node, outer, inner = 0.7745966692414834, 5.0 / 9, 8.0 / 9
+	s1, s3 := mid-node*half, mid+node*half
+	f1 := outer * half * (width - node*spread) * p.stress.at(s1-p.from)
+	f2 := inner * half * width * p.stress.at(mid-p.from)
+	f3 := outer * half * (width + node*spread) * p.stress.at(s3-p.from)
 	return f1 + f2 + f3, f1*(1-s1) + f2*(1-mid) + f3*(1-s3)
 }
 

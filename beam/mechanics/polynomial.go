@@ -3,27 +3,27 @@ package mechanics
 import "math"
 
 // maxDegree bounds the polynomials of this package: a cubic law gives a balance
-// of the fourth degree.
-const maxDegree = 4
+// of the fourth degree for rectangles and of the fifth for trapezoids.
+const maxDegree = 5
 
 // A polynomial holds its coefficients from the constant term up.
 type polynomial [maxDegree + 1]float64
 
 // at returns the value of p at x.
 func (p *polynomial) at(x float64) float64 {
-	return p[0] + x*(p[1]+x*(p[2]+x*(p[3]+x*p[4])))
+	return p[0] + x*(p[1]+x*(p[2]+x*(p[3]+x*(p[4]+x*p[5]))))
 }
 
 // slope returns the first derivative of p at x.
 func (p *polynomial) slope(x float64) float64 {
-	return p[1] + x*(2*p[2]+x*(3*p[3]+x*4*p[4]))
+	return p[1] + x*(2*p[2]+x*(3*p[3]+x*(4*p[4]+x*5*p[5])))
 }
 
 // magnitude returns the sum of the sizes of the terms of p at x, the scale
 // against which rounding in at(x) is judged.
 func (p *polynomial) magnitude(x float64) float64 {
 	x = math.Abs(x)
-	return math.Abs(p[0]) + x*(math.Abs(p[1])+x*(math.Abs(p[2])+x*(math.Abs(p[3])+x*math.Abs(p[4]))))
+	return math.Abs(p[0]) + x*(math.Abs(p[1])+x*(math.Abs(p[2])+x*(math.Abs(p[3])+x*(math.Abs(p[4])+x*math.Abs(p[5])))))
 }
 
 // addComposed adds weight·k^power·q(a - x·k), a polynomial in k, to p. The degree
@@ -53,7 +53,7 @@ func (p *polynomial) addComposed(q *polynomial, degree int, a, x, weight float64
 
 // divide takes the variable out of p once, its constant term being zero but for
 // rounding.
-func (p *polynomial) divide() { *p = polynomial{p[1], p[2], p[3], p[4]} }
+func (p *polynomial) divide() { *p = polynomial{p[1], p[2], p[3], p[4], p[5]} }
 
 // rootBound returns a positive number above every positive root of p, or 0 where
 // p has no positive root at all (Cauchy's bound).
@@ -84,12 +84,23 @@ func (p *polynomial) bernstein(degree int, lo, hi float64) polynomial {
 	}
 	q0 := p.at(lo)
 	q1 := w * p.slope(lo)
-	q2 := w * w * (p[2] + lo*(3*p[3]+lo*6*p[4]))
-	q3 := w * w * w * (p[3] + lo*4*p[4])
+	q2 := w * w * (p[2] + lo*(3*p[3]+lo*(6*p[4]+lo*10*p[5])))
+	q3 := w * w * w * (p[3] + lo*(4*p[4]+lo*10*p[5]))
 	if degree == 3 {
 		return polynomial{q0, q0 + q1/3, q0 + 2*q1/3 + q2/3, q0 + q1 + q2 + q3}
 	}
-	q4 := w * w * w * w * p[4]
+	q4 := w * w * w * w * (p[4] + lo*5*p[5])
+	if degree == 5 {
+		q5 := w * w * w * w * w * p[5]
+		return polynomial{
+			q0,
+			q0 + q1/5,
+			q0 + 2*q1/5 + q2/10,
+			q0 + 3*q1/5 + 3*q2/10 + q3/10,
+			q0 + 4*q1/5 + 3*q2/5 + 2*q3/5 + q4/5,
+			q0 + q1 + q2 + q3 + q4 + q5,
+		}
+	}
 	return polynomial{
 		q0,
 		q0 + q1/4,
@@ -181,7 +192,9 @@ func (p *polynomial) refine(lo, hi float64, b *polynomial, degree int) float64 {
 	}
 	x := lo + (hi-lo)/2
 	if b[0] != b[degree] {
-		if guess := lo - b[0]*(hi-lo)/(b[degree]-b[0]); guess > lo && guess < hi {
+		// Not next to an end, which may be another root but for its last bits.
+		edge := (hi - lo) / 1024
+		if guess := lo - b[0]*(hi-lo)/(b[degree]-b[0]); guess > lo+edge && guess < hi-edge {
 			x = guess
 		}
 	}

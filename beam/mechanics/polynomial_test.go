@@ -105,6 +105,20 @@ func TestBernsteinAndComposition(t *testing.T) {
 	})
 }
 
+// A root at the middle of an interval, but for its last bits, is none of the
+// lower half: the search there finds the root that is.
+func TestRootNextToAnEndDoesNotHideAnother(t *testing.T) {
+	for _, tenths := range [][]float64{{5, 12, -31}, {84, 87, -2, -5}} {
+		var roots []float64
+		for _, r := range tenths {
+			roots = append(roots, r/10+0.05)
+		}
+		got := rootsOf(withRoots(1, roots...), len(roots), 0, 10)
+		slices.Sort(got)
+		require.InDeltaSlice(t, roots[:2], got, 1e-9)
+	}
+}
+
 func TestRootBound(t *testing.T) {
 	require.Zero(t, (&polynomial{3}).rootBound())
 	for _, p := range []polynomial{withRoots(1, 50, 2), withRoots(-2, 0.1, 900, 3), withRoots(4, 1, 2, 3, 77)} {

@@ -54,9 +54,10 @@ type Layer struct {
 	Steel Steel
 }
 
-// A Section is a stack of rectangles with no gap between them, listed from the
-// top face down, and layers of steel in any order. The first part starts at the
-// top face. A hollow section is a stack in which webs side by side are one part.
+// A Section is a stack of rectangles and trapezoids with no gap between them,
+// listed from the top face down, and layers of steel in any order. The first part
+// starts at the top face. Only widths count, so that webs side by side are one
+// part of their summed width: see [Box].
 type Section struct {
 	Parts  []Part
 	Layers []Layer
@@ -81,6 +82,22 @@ func InvertedTee(flangeWidth, flangeThickness, webWidth, depth units.Length) []P
 	return []Part{
 		{Bottom: web, Width: webWidth},
 		{Top: web, Bottom: depth, Width: flangeWidth},
+	}
+}
+
+// Trapezoid returns the one part of a section with straight sloping sides.
+func Trapezoid(topWidth, bottomWidth, depth units.Length) []Part {
+	return []Part{{Bottom: depth, Width: topWidth, BottomWidth: bottomWidth}}
+}
+
+// Box returns the parts of a hollow section. webWidth is the sum of the widths of
+// its webs.
+func Box(width, depth, topThickness, bottomThickness, webWidth units.Length) []Part {
+	floor := depth.Sub(bottomThickness)
+	return []Part{
+		{Bottom: topThickness, Width: width},
+		{Top: topThickness, Bottom: floor, Width: webWidth},
+		{Top: floor, Bottom: depth, Width: width},
 	}
 }
 
@@ -148,16 +165,6 @@ func (s Section) validateParts() error {
 			return fault("parts", i, "bottomWidth", p.BottomWidth, "from 0.1 mm to 10 km, or zero for the width at the top")
 		}
 		face = p.Bottom
-	}
-	return nil
-}
-
-// refuseTapers reports the first part whose sides are not upright.
-func (s Section) refuseTapers() error {
-	for i := range s.Parts {
-		if top, bottom := s.Parts[i].widths(); top != bottom {
-			return fault("parts", i, "bottomWidth", s.Parts[i].BottomWidth, "the width at the top")
-		}
 	}
 	return nil
 }

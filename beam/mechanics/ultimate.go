@@ -96,6 +96,7 @@ type Solver struct {
 	depth  float64 // of the section, m
 	axial  float64 // N over depth
 	deduct bool
+	power  int // of k in the balance: 1, or 2 where a part tapers
 
 	edges  []edge
 	bars   []bar
@@ -139,9 +140,6 @@ func (s *Solver) load(section Section, law Law, bending Bending) error {
 	if err := section.Validate(); err != nil {
 		return err
 	}
-	if err := section.refuseTapers(); err != nil {
-		return err
-	}
 	if err := bending.check(); err != nil {
 		return err
 	}
@@ -169,26 +167,34 @@ func (b Bending) check() error {
 
 func (s *Solver) loadEdges(parts []Part, hogging bool) {
 	s.edges = s.edges[:0]
-	last := len(s.law.pieces) - 1
-	above := 0.0
+	s.power = 1
+	piece := len(s.law.pieces) - 1
+	var at, above, slopeAbove float64
 	for i := range parts {
-		p, at := &parts[i], 0.0
+		p, end := &parts[i], 1.0
+		width, below := p.widths()
 		switch {
 		case hogging:
-			p = &parts[len(parts)-1-i]
-			at = 1 - p.Bottom.In(units.Metre)/s.depth
-		case i > 0:
-			at = parts[i-1].Bottom.In(units.Metre) / s.depth
+			j := len(parts) - 1 - i
+			p = &parts[j]
+			below, width = p.widths()
+			if j > 0 {
+				end = 1 - parts[j-1].Bottom.In(units.Metre)/s.depth
+			}
+		case i+1 < len(parts):
+			end = p.Bottom.In(units.Metre) / s.depth
 		}
-		width := p.Width.In(units.Metre)
-		if i == 0 {
-			s.edges = append(s.edges, edge{weight: width, piece: last})
-		} else if width != above {
-			s.edges = append(s.edges, edge{at: at, weight: width - above, piece: -1})
+		slope := 0.0
+		if below != width {
+			s.power = 2
+			slope = (below - width) / (end - at)
 		}
-		above = width
+		if i == 0 || width != above || slope != slopeAbove {
+			s.edges = append(s.edges, edge{at: at, weight: width - above, bend: slope - slopeAbove, width: width, slope: slope, piece: piece})
+		}
+		at, above, slopeAbove, piece = end, below, slope, -1
 	}
-	s.edges = append(s.edges, edge{at: 1, weight: -above, piece: -1})
+	s.edges = append(s.edges, edge{at: 1, weight: -above, bend: -slopeAbove, piece: -1})
 }
 
 // onFace is the fraction of the depth below which a bar lies on the compression
@@ -296,19 +302,31 @@ func (s *Solver) report(dst *Ultimate, k float64) (size float64) {
 // first moment about the compression face over the square of that depth, and
 // the centroid of the whole section as a fraction of its depth.
 func (s *Solver) concrete(k float64) (force, first, centroid float64) {
-	var width, area, areaFirst float64
+	var area, areaFirst float64
 	for i := range s.edges[:len(s.edges)-1] {
-		width += s.edges[i].weight
-		top, bottom := s.edges[i].at, s.edges[i+1].at
-		area += width * (bottom - top)
-		areaFirst += width * (bottom - top) * (bottom + top) / 2
+		e := &s.edges[i]
+		top, bottom, width := e.at, s.edges[i+1].at, e.width
+		a := width * (bottom - top)
+		area += a
+		areaFirst += a * (bottom + top) / 2
+		if e.slope != 0 { // the triangle beside the rectangle
+			a = e.slope * (bottom - top) * (bottom - top) / 2
+			area += a
+			areaFirst += a * (top + 2*bottom) / 3
+		}
 		high, low := 1-k*top, 1-k*bottom
 		for j := range s.law.pieces {
 			from, to := max(low, s.law.pieces[j].from), min(high, s.law.end(j))
-			if from < to {
+			switch {
+			case !(from < to):
+			case e.slope == 0:
 				f, m := s.law.sum(j, from, to)
 				force += width * f
 				first += width * m
+			default:
+				f, m := s.law.taper(j, from, to, width+e.slope*(high-from)/k, width+e.slope*(high-to)/k)
+				force += f
+				first += m
 			}
 		}
 	}
@@ -318,11 +336,11 @@ func (s *Solver) concrete(k float64) (force, first, centroid float64) {
 // axialLimits returns the axial forces, in N, that the section balances with the
 // neutral axis at its compression face, and with no curvature at all.
 func (s *Solver) axialLimits() (least, most float64) {
-	var width float64
 	crushed := s.law.at(1)
 	for i := range s.edges[:len(s.edges)-1] {
-		width += s.edges[i].weight
-		most += width * (s.edges[i+1].at - s.edges[i].at) * crushed
+		e := &s.edges[i]
+		height := s.edges[i+1].at - e.at
+		most += (e.width + e.slope*height/2) * height * crushed
 	}
 	if !s.deduct {
 		crushed = 0
