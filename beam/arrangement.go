@@ -36,6 +36,9 @@ func (a Arrangement) Describe(sys units.System) string {
 	if layers == 1 {
 		b.WriteString(", one layer")
 	}
+	if a.Beside.Count[0] > 0 {
+		fmt.Fprintf(&b, ", with %d %s in the flange", a.Beside.Count[0], a.Beside.Size[0])
+	}
 	fmt.Fprintf(&b, ", %s, in %s stirrups", a.Face, a.With)
 	if a.Pressed.Count[0] > 0 {
 		fmt.Fprintf(&b, ", with %d %s relied on in compression", a.Pressed.Count[0], a.Pressed.Size[0])

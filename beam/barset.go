@@ -2,6 +2,7 @@ package beam
 
 import (
 	"cmp"
+	"math"
 	"slices"
 
 	"soffit.example/bars"
@@ -9,17 +10,24 @@ import (
 )
 
 // barSet is a choice of longitudinal bars for one face: up to MaxLayers
-// layers of one size, or of two with the larger at the corners.
+// layers of one size, or of two with the larger at the corners, and bars of
+// one size in the flange beside the web.
 type barSet struct {
-	layers [MaxLayers][2]barGroup
-	used   int // layers
-	count  int
-	area   units.Area
-	mass   float64 // kg/m
-	sizes  int     // different sizes, 1 or 2
+	barPlan
+	used  int // layers
+	count int
+	area  units.Area
+	mass  float64 // kg/m
+	sizes int     // different sizes, 1 or 2
 
 	judged, passes bool
 	cover          units.Length // with which it was judged
+}
+
+// barPlan is what tells one set from another.
+type barPlan struct {
+	layers [MaxLayers][2]barGroup
+	flange flangeRow // none where its count is zero
 }
 
 // barGroup is some bars of one size. A search makes thousands of sets, so
@@ -45,6 +53,19 @@ func (b *barSet) add(layer int, size *bars.Size, count int) {
 	b.mass += size.MassPerLength.In(units.KilogramPerMetre) * float64(count)
 }
 
+// beside puts bars into the flange beside the web.
+func (b *barSet) beside(size *bars.Size, count int, spacing units.Length) {
+	b.flange = flangeRow{size, count, spacing}
+	b.count += count
+	b.area = b.area.Add(size.Area.Scale(float64(count)))
+	b.mass += size.MassPerLength.In(units.KilogramPerMetre) * float64(count)
+}
+
+// rows is the number of marks that the set needs.
+func (b *barSet) rows() int {
+	return b.used*b.sizes + min(b.flange.count, 1)
+}
+
 // largest is the largest bar of the set.
 func (b *barSet) largest() bars.Size {
 	if b.used == 0 {
@@ -58,11 +79,18 @@ func (b *barSet) largest() bars.Size {
 			}
 		}
 	}
+	if b.flange.count > 0 && s.Diameter.Less(b.flange.size.Diameter) {
+		s = b.flange.size
+	}
 	return *s
 }
 
-// names lists the set's layers for the reject log.
-func (b *barSet) names() (out [MaxLayers]LayerBars) {
+// names lists the set's bars for the reject log: its layers, and what lies
+// beside the web.
+func (b *barSet) names() (out [MaxLayers]LayerBars, beside LayerBars) {
+	if b.flange.count > 0 {
+		beside.Size[0], beside.Count[0] = b.flange.size.Name, b.flange.count
+	}
 	for i := range b.layers[:b.used] {
 		for j, g := range b.layers[i] {
 			if g.count > 0 {
@@ -70,7 +98,7 @@ func (b *barSet) names() (out [MaxLayers]LayerBars) {
 			}
 		}
 	}
-	return out
+	return out, beside
 }
 
 // appendLayers gives the set to package bars. The groups of the layers stand
@@ -180,4 +208,45 @@ func sortSets(sets []barSet) {
 	slices.SortStableFunc(sets, func(a, b barSet) int {
 		return cmp.Or(cmp.Compare(a.mass, b.mass), cmp.Compare(a.count, b.count), cmp.Compare(a.used, b.used))
 	})
+}
+
+// flangeRoom is the room for bars in the flange beside the web at a face.
+type flangeRoom struct {
+	sides int          // of the web that have a flange: 0 to 2
+	reach units.Length // on each side from the outermost bar of the web to the last that a flange bar may lie
+	least units.Length // between bars
+}
+
+// mostBeside is the most bars that the search puts into the flange on each side.
+const mostBeside = 12
+
+// withFlange replaces sets, all of one size, by sets with every number of bars
+// of a size in the flange beside the web, evenly over the room there is, at
+// spacings that are multiples of a step where that is not too coarse. Those
+// that come to less than an area, for want of more than one bar, are left out.
+func (r flangeRoom) withFlange(sets []barSet, size *bars.Size, least units.Area, step units.Length) []barSet {
+	if r.sides == 0 {
+		return sets
+	}
+	var out []barSet
+	for i := range sets {
+		for m := 1; m <= mostBeside; m++ {
+			spacing := r.reach.Scale(1 / float64(m))
+			if even := step.Scale(math.Floor(spacing.Ratio(step) + 1e-9)); !even.Less(step) && !even.Less(r.least) {
+				spacing = even
+			}
+			if !r.least.AtMost(spacing) {
+				break
+			}
+			b := sets[i]
+			b.beside(size, m*r.sides, spacing)
+			if !b.area.Add(size.Area.Scale(float64(r.sides))).Less(least) {
+				out = append(out, b)
+			}
+		}
+	}
+	if len(out) == 0 {
+		return sets
+	}
+	return out
 }

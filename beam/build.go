@@ -194,6 +194,12 @@ func (l *Layout) appendRows(face Face, b *barSet, inCompression bool, letter str
 			})
 		}
 	}
+	if r := &b.flange; r.count > 0 {
+		l.Longitudinal = append(l.Longitudinal, Row{
+			Mark: fmt.Sprintf("%s%d", letter, n+1), Bar: r.size.Name, Count: r.count, Face: face, Layer: 1,
+			Flange: true, Spacing: r.spacing, To: length, Start: "straight", End: "straight",
+		})
+	}
 }
 
 // trialOf lays a layout out as a trial. Faults name the fields of the layout

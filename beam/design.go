@@ -3,6 +3,7 @@ package beam
 import (
 	"context"
 	"fmt"
+	"math"
 	"slices"
 
 	"soffit.example/units"
@@ -184,7 +185,7 @@ func (s *search) rejectClosest(f *found) {
 	}
 	for face, set := range [...]*barSet{Bottom: &f.bottom, Top: &f.top} {
 		if set != nil && !s.judge(Face(face), Fitting, Bending) {
-			s.reject(Arrangement{Face: Face(face), Depth: s.p.Brief.Section.Depth, Layers: set.names(), With: f.stirrup.Name})
+			s.reject(s.arrangement(Face(face), set, f.stirrup.Name))
 		}
 	}
 }
@@ -273,32 +274,46 @@ const sideBarsMost = 30
 
 // addSideBars adds the fewest bars along the side faces with which no more
 // checks of the member as a whole fail than must: from the bottom bars to
-// mid-depth, or over the whole height of a beam that hogs. It reports whether
-// none fails.
+// mid-depth, or over the whole height of a beam that hogs or is twisted, whose
+// side bars may be of any size, the lightest that do. It reports whether none
+// fails.
 func (s *search) addSideBars(l *Layout) (passes bool) {
 	t, faults := trialOf(s.p.Problem, l)
 	if len(faults) > 0 || t.Bottom.Count == 0 || t.Top.Count == 0 {
 		return false
 	}
-	bare := s.wholeFails(t)
-	if bare == 0 {
+	fewest := s.wholeFails(t)
+	if fewest == 0 {
 		return true
 	}
+	sizes := s.main[:1]
 	reach := t.Brief.Section.Depth.Scale(0.5)
-	if s.bent(Negative) {
+	if s.bent(Negative) || t.Twisted {
 		reach = t.Brief.Section.Depth.Sub(t.Top.Farthest)
 	}
+	if t.Twisted {
+		sizes = s.main
+	}
 	reach = reach.Sub(t.Bottom.Farthest)
-	best, fewest := 0, bare
-	for n := 1; n <= sideBarsMost && fewest > 0; n++ {
-		t.Side = SideSteel{Size: s.main[0], Each: n, Spacing: reach.Scale(1 / float64(n+1)), TensionFace: Bottom}
-		if fails := s.wholeFails(t); fails < fewest {
-			best, fewest = n, fails
+	var best SideSteel
+	lightest := math.Inf(1)
+	for i := range sizes {
+		size := &sizes[i]
+		one := size.MassPerLength.In(units.KilogramPerMetre)
+		for n := 1; n <= sideBarsMost && (fewest > 0 || one*float64(n) < lightest); n++ {
+			t.Side = SideSteel{Size: *size, Each: n, Spacing: reach.Scale(1 / float64(n+1)), TensionFace: Bottom}
+			fails := s.wholeFails(t)
+			if fails < fewest || fails == fewest && best.Each > 0 && one*float64(n) < lightest {
+				best, fewest, lightest = t.Side, fails, one*float64(n)
+			}
+			if fails == 0 {
+				break
+			}
 		}
 	}
-	if best > 0 {
+	if best.Each > 0 {
 		l.Longitudinal = append(l.Longitudinal, Row{
-			Mark: "F1", Bar: s.main[0].Name, Count: best, Face: Side, Spacing: reach.Scale(1 / float64(best+1)),
+			Mark: "F1", Bar: best.Size.Name, Count: best.Each, Face: Side, Spacing: best.Spacing,
 			To: l.Longitudinal[0].To, Start: "straight", End: "straight",
 		})
 	}
@@ -307,7 +322,7 @@ func (s *search) addSideBars(l *Layout) (passes bool) {
 
 // wholeFails counts the failing checks of the member as a whole.
 func (s *search) wholeFails(t *Trial) (n int) {
-	s.checks = s.p.Code.Judge(s.checks[:0], Whole, t)
+	s.checks = s.p.Code.Judge(t.appendSideGeometry(s.checks[:0]), Whole, t)
 	for i := range s.checks {
 		if s.checks[i].Outcome == Fail {
 			n++
@@ -348,9 +363,9 @@ func (s *search) whyNotFirst(f *found) string {
 	}
 	what := "other bottom bars"
 	switch {
-	case f.bottom.layers == first.bottom.layers && f.top.layers == first.top.layers:
+	case f.bottom.barPlan == first.bottom.barPlan && f.top.barPlan == first.top.barPlan:
 		what = "other stirrups"
-	case f.bottom.layers == first.bottom.layers:
+	case f.bottom.barPlan == first.bottom.barPlan:
 		what = "other top bars"
 	}
 	more := units.Kilogram.Of(f.mass - first.mass)

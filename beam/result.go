@@ -63,7 +63,8 @@ type Arrangement struct {
 	Face   Face         // zero: stirrups
 	Depth  units.Length // overall depth of the section tried
 	Layers [MaxLayers]LayerBars
-	With   string // the stirrup size it was laid inside
+	Beside LayerBars // in the flange beside the web; none where the count is zero
+	With   string    // the stirrup size it was laid inside
 	// Pressed are bars at the opposite face that were relied on in
 	// compression; none where the count is zero.
 	Pressed LayerBars

@@ -13,8 +13,12 @@ import (
 //
 //   - longitudinal sets of one size (two neighbouring ones if asked), layers
 //     filled from the face, on each face;
+//   - where the code spreads the tension steel of a flange beyond the web, one
+//     to mostBeside bars a side beside it, of the same size (or of the smaller
+//     neighbour if asked), evenly over the room there is;
 //   - on a face that is never in tension, two to MaxLegs bars of the smallest
-//     size that is not smaller than the stirrup, to hold its legs;
+//     size that is not smaller than the stirrup, to hold its legs; under a
+//     torque that must be designed for, one layer of any size and number;
 //   - stirrups of each allowed size and 2 to MaxLegs legs, at multiples of
 //     the spacing step up to the code's widest, in one zone from face to face
 //     or in three, the outer ones at the widest spacing that would pass
@@ -38,12 +42,12 @@ type search struct {
 	failed  []Check // scratch
 	layers  []bars.Layer
 	groups  [2 * MaxLayers]bars.Group
-	flange  []flangeRow // scratch
-	zones   []Zone      // scratch of the zone search
-	best    []Zone      // scratch, the lightest zones of a pair so far
-	hint    int         // spacing steps that the last bars needed throughout
-	widest  int         // spacing steps that the code could accept for the current bars
-	member  bool        // spans are given, so zones have extents
+	flange  [1]flangeRow
+	zones   []Zone // scratch of the zone search
+	best    []Zone // scratch, the lightest zones of a pair so far
+	hint    int    // spacing steps that the last bars needed throughout
+	widest  int    // spacing steps that the code could accept for the current bars
+	member  bool   // spans are given, so zones have extents
 	from    units.Length
 	to      units.Length
 	kept    []found
@@ -122,7 +126,7 @@ func (s *search) run(ctx context.Context) error {
 		return nil
 	}
 	for _, face := range [2]Face{Bottom, Top} {
-		hopeless := make(map[[MaxLayers][2]barGroup]bool)
+		hopeless := make(map[barPlan]bool)
 		for _, tie := range s.ties {
 			if err := s.compressed(ctx, tie, face, hopeless); err != nil {
 				return err
@@ -152,6 +156,11 @@ func (s *search) sets(face Face, tie bars.Size) []barSet {
 	most := 0 // of a size in a layer; in turn, of the next smaller one
 	for i := range s.main {
 		size := &s.main[i]
+		if !bent && s.p.Twisted {
+			most, _, _ := s.bounds(sense, tie, size)
+			sets = uniformSets(sets, size, 2, most, 1)
+			continue
+		}
 		if !bent {
 			if len(sets) == 0 && (tie.Area.AtMost(size.Area) || i == len(s.main)-1) {
 				sets = uniformSets(sets, size, 2, s.p.Brief.Preferences.MaxLegs, 1)
@@ -165,13 +174,52 @@ func (s *search) sets(face Face, tie bars.Size) []barSet {
 			continue
 		}
 		fewest := int(math.Ceil(least.Ratio(size.Area)-1e-9)) - 1 // one too few is tried, for the record
-		sets = uniformSets(sets, size, fewest, most, s.p.Brief.Preferences.MaxLayers)
-		if s.p.Brief.Preferences.Mixed && i > 0 && s.main[i].Order == s.main[i-1].Order+1 {
+		room := s.flangeRoom(face, tie, size)
+		if room.sides > 0 {
+			fewest = 2
+		}
+		uniform := uniformSets(nil, size, fewest, most, s.p.Brief.Preferences.MaxLayers)
+		sets = append(sets, room.withFlange(uniform, size, least, s.p.Brief.Preferences.SpacingBy)...)
+		if s.p.Brief.Preferences.Mixed && i > 0 && room.sides > 0 {
+			small := s.flangeRoom(face, tie, &s.main[i-1])
+			sets = append(sets, small.withFlange(uniform, &s.main[i-1], least, s.p.Brief.Preferences.SpacingBy)...)
+		}
+		if room.sides == 0 && s.p.Brief.Preferences.Mixed && i > 0 && s.main[i].Order == s.main[i-1].Order+1 {
 			sets = mixedSets(sets, size, &s.main[i-1], least, most, smaller, s.p.Brief.Preferences.MaxLayers)
 		}
 	}
 	sortSets(sets)
 	return sets
+}
+
+// flangeRoom is the room beside the web for bars of a size at a face in tension
+// whose steel the code spreads over a flange. With the smaller of two sizes it
+// is right for the larger in the web, whose outermost bar stands further in.
+func (s *search) flangeRoom(face Face, tie bars.Size, size *bars.Size) (r flangeRoom) {
+	web := s.p.Brief.Section.Width
+	beyond := s.p.Code.Spread(s.p.Problem, face).Sub(web).Scale(0.5)
+	s.t.enclose(tie, *size)
+	radius := size.Diameter.Scale(0.5)
+	// A bar beside the web begins where the stirrup's cover ends.
+	edge := s.t.Cover.Add(radius)
+	left, right := s.p.Brief.Section.Overhangs(face)
+	r.reach = beyond
+	for _, over := range [2]units.Length{left, right} {
+		if !over.IsZero() {
+			r.sides++
+			r.reach = r.reach.Min(over.Sub(edge))
+		}
+	}
+	r.least = size.Diameter.Add(s.p.Code.Gaps(s.p.Problem).InLayer.Least.Max(size.Diameter.Scale(s.p.Code.Gaps(s.p.Problem).InLayer.Diameters)))
+	if !radius.Less(r.reach) {
+		return flangeRoom{}
+	}
+	inset := s.t.Cover.Add(tie.Diameter).Add(radius)
+	if bend, err := tie.Bend(bars.Stirrup); err == nil && !s.p.Brief.Readings.TuckedCorner {
+		inset = s.t.Cover.Add(tie.Diameter).Add(radius.Max(bend.Inside.Scale(0.5)))
+	}
+	r.reach = r.reach.Add(inset)
+	return r
 }
 
 // bounds are the most bars of a size in a layer, and the least tension steel
@@ -224,11 +272,15 @@ func (s *search) put(face Face, b *barSet, inCompression bool) bool {
 		return true
 	}
 	s.layers = s.layers[:0]
+	beside := s.flange[:0]
 	if b != nil {
 		s.layers = b.appendLayers(s.layers, s.groups[:])
+		if b.flange.count > 0 {
+			beside = append(beside, b.flange)
+		}
 	}
 	s.laid[face] = now
-	if s.t.lay(face, s.layers, s.flange[:0], inCompression) != nil {
+	if s.t.lay(face, s.layers, beside, inCompression) != nil {
 		s.laid[face] = laid{}
 		return false
 	}
@@ -259,9 +311,16 @@ func (s *search) accepts(face Face, tie bars.Size, b *barSet) bool {
 		s.near[face] = near{ok: true, worst: worst, set: *b}
 	}
 	if !b.passes {
-		s.reject(Arrangement{Face: face, Depth: s.p.Brief.Section.Depth, Layers: b.names(), With: tie.Name})
+		s.reject(s.arrangement(face, b, tie.Name))
 	}
 	return b.passes
+}
+
+// arrangement describes a set at a face inside a stirrup size.
+func (s *search) arrangement(face Face, b *barSet, tie string) Arrangement {
+	a := Arrangement{Face: face, Depth: s.p.Brief.Section.Depth, With: tie}
+	a.Layers, a.Beside = b.names()
+	return a
 }
 
 // worst is the largest utilization among the failed checks of the last
@@ -307,7 +366,7 @@ func (s *search) pairs(ctx context.Context, tie bars.Size, bottoms, tops []barSe
 //
 // Sets that are hopeless inside one stirrup are left out inside the thicker
 // ones that follow, which only move bars away from the face.
-func (s *search) compressed(ctx context.Context, tie bars.Size, face Face, hopeless map[[MaxLayers][2]barGroup]bool) error {
+func (s *search) compressed(ctx context.Context, tie bars.Size, face Face, hopeless map[barPlan]bool) error {
 	sense := tensionSense(face)
 	if !s.bent(sense) {
 		return nil
@@ -316,7 +375,8 @@ func (s *search) compressed(ctx context.Context, tie bars.Size, face Face, hopel
 	others := make([][]barSet, len(s.main)) // by size, fewest bars first
 	for i := range s.main {
 		most, _, _ := s.bounds(sense, tie, &s.main[i])
-		sets = uniformSets(sets, &s.main[i], 2, most, s.p.Brief.Preferences.MaxLayers)
+		uniform := uniformSets(nil, &s.main[i], 2, most, s.p.Brief.Preferences.MaxLayers)
+		sets = append(sets, s.flangeRoom(face, tie, &s.main[i]).withFlange(uniform, &s.main[i], units.Area{}, s.p.Brief.Preferences.SpacingBy)...)
 		others[i] = uniformSets(nil, &s.main[i], 2, most, 1)
 	}
 	sortSets(sets)
@@ -327,11 +387,11 @@ func (s *search) compressed(ctx context.Context, tie bars.Size, face Face, hopel
 			return err
 		}
 		b := &sets[i]
-		if hopeless[b.layers] || !s.promising(b, &barSet{}, lightest) {
+		if hopeless[b.barPlan] || !s.promising(b, &barSet{}, lightest) {
 			continue
 		}
 		if !s.helped(tie, face, b, others) {
-			hopeless[b.layers] = true
+			hopeless[b.barPlan] = true
 			continue
 		}
 		for _, of := range others {
@@ -371,8 +431,9 @@ func (s *search) helped(tie bars.Size, face Face, b *barSet, others [][]barSet) 
 // rejectPressed logs a tension set with compression steel by the checks that
 // have just failed.
 func (s *search) rejectPressed(tie bars.Size, face Face, b, other *barSet) {
-	a := Arrangement{Face: face, Depth: s.p.Brief.Section.Depth, Layers: b.names(), With: tie.Name}
-	a.Pressed = other.names()[0]
+	a := s.arrangement(face, b, tie.Name)
+	layers, _ := other.names()
+	a.Pressed = layers[0]
 	s.reject(a)
 }
 
@@ -477,7 +538,7 @@ func (s *search) key(bottom, top *barSet, mass float64, zones int) [2]float64 {
 	case OneSize:
 		return [2]float64{float64(differentSizes(bottom, top)), mass}
 	case FewestMarks:
-		return [2]float64{float64(bottom.used*bottom.sizes + top.used*top.sizes + zones), mass}
+		return [2]float64{float64(bottom.rows() + top.rows() + zones), mass}
 	case Shallowest:
 		return [2]float64{s.p.Brief.Section.Depth.In(units.Metre), mass}
 	}
@@ -493,6 +554,9 @@ func differentSizes(sets ...*barSet) int {
 					names = append(names, g.size.Name)
 				}
 			}
+		}
+		if b.flange.count > 0 && !slices.Contains(names, b.flange.size.Name) {
+			names = append(names, b.flange.size.Name)
 		}
 	}
 	return len(names)
@@ -513,7 +577,7 @@ func (s *search) ranks(key [2]float64) bool {
 // stirrup.
 func (s *search) keepBest(f found) {
 	same := slices.IndexFunc(s.kept, func(k found) bool {
-		return k.bottom.layers == f.bottom.layers && k.top.layers == f.top.layers && k.inCompress == f.inCompress
+		return k.bottom.barPlan == f.bottom.barPlan && k.top.barPlan == f.top.barPlan && k.inCompress == f.inCompress
 	})
 	if same >= 0 {
 		if slices.Compare(f.key[:], s.kept[same].key[:]) >= 0 {

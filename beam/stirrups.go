@@ -320,15 +320,14 @@ func (s *search) stirrupMass(tie bars.Size) float64 {
 // current is the trial as a layout that may not pass.
 func (s *search) current(tie bars.Size) found {
 	f := found{stirrup: tie, zones: append([]Zone(nil), s.zones...)}
+	if b := s.laid[Bottom].set; b != nil {
+		f.bottom = *b
+	}
+	if b := s.laid[Top].set; b != nil {
+		f.top = *b
+	}
 	for _, face := range [2]Face{Bottom, Top} {
-		b := &f.bottom
-		if face == Top {
-			b = &f.top
-		}
-		for _, r := range s.t.Steel(face).Rows {
-			b.add(r.Layer-1, &r.Size, r.Count)
-		}
-		if s.t.Steel(face).InCompression {
+		if s.laid[face].inCompression {
 			f.inCompress = face
 		}
 	}
