@@ -189,8 +189,8 @@ func (l *Layout) appendRows(face Face, b *barSet, inCompression bool, letter str
 			}
 			n++
 			l.Longitudinal = append(l.Longitudinal, Row{
-				Mark: fmt.Sprintf("%s%d", letter, n), Bar: g.size.Name, Count: g.count, Face: face, Layer: i + 1,
-				InCompression: inCompression, To: length, Start: "straight", End: "straight",
+				Mark: fmt.Sprintf("%s%d", letter, n), Bar: g.size.Single().Name, Count: g.count * g.size.Bundled(), Face: face, Layer: i + 1,
+				InCompression: inCompression, To: length, Start: "straight", End: "straight", Bundled: bundled(g.size),
 			})
 		}
 	}
@@ -200,6 +200,14 @@ func (l *Layout) appendRows(face Face, b *barSet, inCompression bool, letter str
 			Flange: true, Spacing: r.spacing, To: length, Start: "straight", End: "straight",
 		})
 	}
+}
+
+// bundled is what a row says of a size: nothing for single bars.
+func bundled(size *bars.Size) int {
+	if n := size.Bundled(); n > 1 {
+		return n
+	}
+	return 0
 }
 
 // trialOf lays a layout out as a trial. Faults name the fields of the layout
@@ -319,7 +327,8 @@ func bundle(size bars.Size, r *Row) (bars.Size, int, error) {
 	if r.Count%r.Bundled != 0 {
 		return size, 0, fmt.Errorf("%d bars do not make up bundles of %d", r.Count, r.Bundled)
 	}
-	return size, 0, fmt.Errorf("bundles are not laid")
+	unit, err := bars.Bundle(size, r.Bundled)
+	return unit, r.Count / r.Bundled, err
 }
 
 // yield is the row's own yield strength, or the brief's.

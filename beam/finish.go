@@ -5,6 +5,7 @@ import (
 	"fmt"
 	"slices"
 
+	"soffit.example/bars"
 	"soffit.example/units"
 )
 
@@ -139,9 +140,10 @@ func (p *prepared) settle(t *Trial, register *Register) {
 // positions lists every longitudinal bar of the top and bottom by
 // coordinates from the left and bottom faces, and the side bars.
 func (t *Trial) positions(l *Layout) []BarAt {
-	mark := func(face Face, layer int, bar string) string {
+	mark := func(face Face, layer int, size *bars.Size) string {
 		for i := range l.Longitudinal {
-			if r := &l.Longitudinal[i]; r.Face == face && !r.Flange && (r.Layer == layer || face == Side) && r.Bar == bar {
+			r := &l.Longitudinal[i]
+			if r.Face == face && !r.Flange && (r.Layer == layer || face == Side) && r.Bar == size.Single().Name && max(1, r.Bundled) == size.Bundled() {
 				return r.Mark
 			}
 		}
@@ -151,12 +153,18 @@ func (t *Trial) positions(l *Layout) []BarAt {
 	depth, width := t.Brief.Section.Depth, t.Brief.Section.Width
 	web := t.Geometry.WebLeft
 	for _, face := range [2]Face{Bottom, Top} {
-		for _, b := range t.Steel(face).Fit.Bars {
-			y := b.Y
-			if face == Top {
-				y = depth.Sub(b.Y)
+		var singles []bars.Placed
+		for i := range t.Steel(face).Fit.Bars {
+			unit := &t.Steel(face).Fit.Bars[i]
+			singles = unit.AppendSingles(singles[:0])
+			of := mark(face, unit.Layer, &unit.Size)
+			for _, b := range singles {
+				y := b.Y
+				if face == Top {
+					y = depth.Sub(b.Y)
+				}
+				out = append(out, BarAt{Mark: of, Bar: b.Size.Name, Diameter: b.Size.Diameter, X: b.X.Add(web), Y: y, Face: face, Layer: b.Layer})
 			}
-			out = append(out, BarAt{Mark: mark(face, b.Layer, b.Size.Name), Bar: b.Size.Name, Diameter: b.Size.Diameter, X: b.X.Add(web), Y: y, Face: face, Layer: b.Layer})
 		}
 		out = t.appendFlangeBars(out, l, face)
 	}
@@ -168,7 +176,7 @@ func (t *Trial) positions(l *Layout) []BarAt {
 				y = depth.Sub(t.Top.Farthest.Add(s.Spacing.Scale(float64(i))))
 			}
 			for _, at := range [2]units.Length{x, width.Sub(x)} {
-				out = append(out, BarAt{Mark: mark(Side, 0, s.Size.Name), Bar: s.Size.Name, Diameter: s.Size.Diameter, X: at.Add(web), Y: y, Face: Side})
+				out = append(out, BarAt{Mark: mark(Side, 0, &s.Size), Bar: s.Size.Name, Diameter: s.Size.Diameter, X: at.Add(web), Y: y, Face: Side})
 			}
 		}
 	}

@@ -16,6 +16,8 @@ import (
 //   - where the code spreads the tension steel of a flange beyond the web, one
 //     to mostBeside bars a side beside it, of the same size (or of the smaller
 //     neighbour if asked), evenly over the room there is;
+//   - where bundles are allowed, sets of bundles of one size and number too, but
+//     none beside the web;
 //   - on a face that is never in tension, two to MaxLegs bars of the smallest
 //     size that is not smaller than the stirrup, to hold its legs; under a
 //     torque that must be designed for, one layer of any size and number;
@@ -35,6 +37,7 @@ type search struct {
 	keep   int // layouts to keep, best first
 
 	main, ties []bars.Size
+	bundles    []bars.Size // of the sizes of main, as units
 
 	t       Trial
 	laid    [Top + 1]laid
@@ -104,6 +107,13 @@ func newSearch(p *prepared, keep int) *search {
 	}
 	byArea := func(a, b bars.Size) int { return a.Area.Compare(b.Area) }
 	slices.SortFunc(s.main, byArea)
+	for _, size := range s.main {
+		for n := 2; n <= b.Preferences.Bundles; n++ {
+			if unit, err := bars.Bundle(size, n); err == nil && p.Code.Allows(bars.Main, unit) {
+				s.bundles = append(s.bundles, unit)
+			}
+		}
+	}
 	slices.SortFunc(s.ties, byArea)
 	if s.member {
 		s.from, s.to = p.Faces(1)
@@ -188,7 +198,23 @@ func (s *search) sets(face Face, tie bars.Size) []barSet {
 			sets = mixedSets(sets, size, &s.main[i-1], least, most, smaller, s.p.Brief.Preferences.MaxLayers)
 		}
 	}
+	sets = s.bundled(sets, face, tie)
 	sortSets(sets)
+	return sets
+}
+
+// bundled appends sets of bundles, two to a layer or more, at a face that is
+// in tension.
+func (s *search) bundled(sets []barSet, face Face, tie bars.Size) []barSet {
+	if sense := tensionSense(face); len(s.bundles) > 0 && s.bent(sense) {
+		for i := range s.bundles {
+			unit := &s.bundles[i]
+			if most, least, ok := s.bounds(sense, tie, unit); ok && most >= 2 {
+				fewest := int(math.Ceil(least.Ratio(unit.Area)-1e-9)) - 1
+				sets = uniformSets(sets, unit, fewest, most, s.p.Brief.Preferences.MaxLayers)
+			}
+		}
+	}
 	return sets
 }
 
