@@ -110,8 +110,8 @@ func (e *edition) judgeMinimum(t *beam.Trial, s beam.Sense, a *beam.Action) beam
 	need := m.area
 	var req requiredTension
 	if !units.AtMost(need, e.areaIn(steel.Area)) {
-		r := e.rectangle(b.Concrete.Strength, b.Reinforcement.Yield, b.Section.Width, d, t.ExtremeDepth(s), b.Readings.RoundedYield)
-		req = r.tension(e.momentIn(a.Moment.Abs()))
+		z := e.trialSizing(t, s)
+		req = z.tension(e.momentIn(a.Moment.Abs()))
 		if waived := e.minimum.waiver * req.area; req.ok && waived < need {
 			need = waived
 			c.Clause, c.Reason = "9.6.1.3", waiverReason

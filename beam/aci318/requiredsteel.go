@@ -5,112 +5,11 @@ import (
 	"math"
 
 	"soffit.example/beam"
+	"soffit.example/beam/mechanics"
 	"soffit.example/units"
 )
 
-// requiredTension is the tension steel that a moment needs in a rectangle
-// without compression steel, in every step and in the units of the edition.
-// All of the steel is taken to yield, which the strain limit of 9.3.3.1
-// ensures for the extreme layer.
-type requiredTension struct {
-	block, axis float64 // a and c
-	strain      float64 // εt
-	phi         float64
-	area        float64
-	ok          bool // false: no amount of tension steel alone would do
-}
-
-// rectangle is what required steel depends on, in the units of the edition.
-type rectangle struct {
-	fc, fy, beta1 float64
-	width, depth  float64 // b and d
-	extreme       float64 // dt
-	yieldStrain   float64
-	reduction     *reductionRules
-}
-
-func (e *edition) rectangle(strength, yield units.Stress, width, depth, extreme units.Length, rounded bool) rectangle {
-	return rectangle{
-		fc: e.stressIn(strength), fy: e.stressIn(yield), beta1: e.blockFactor(strength),
-		width: e.lengthIn(width), depth: e.lengthIn(depth), extreme: e.lengthIn(extreme),
-		yieldStrain: e.yieldStrain(yield, rounded), reduction: &e.reduction,
-	}
-}
-
-// intensity is the force of the block over its depth.
-func (r *rectangle) intensity() float64 { return blockIntensity * r.fc * r.width }
-
-// axisAt is the depth of the neutral axis at which the extreme layer has a
-// strain.
-func (r *rectangle) axisAt(strain float64) float64 {
-	return r.extreme * crushing / (crushing + strain)
-}
-
-func (r *rectangle) strainAt(axis float64) float64 {
-	return crushing * (r.extreme - axis) / axis
-}
-
-// nominal is Mn with the neutral axis at a depth.
-func (r *rectangle) nominal(axis float64) float64 {
-	a := r.beta1 * axis
-	return r.intensity() * a * (r.depth - a/2)
-}
-
-// design is φMn with the neutral axis at a depth.
-func (r *rectangle) design(axis float64) float64 {
-	phi, _ := r.reduction.flexure(r.strainAt(axis), r.yieldStrain)
-	return phi * r.nominal(axis)
-}
-
-// axisFor is the neutral axis that gives a nominal moment; NaN where none
-// does: 0.85 f'c b a (d - a/2) = Mn.
-func (r *rectangle) axisFor(nominal float64) float64 {
-	q := nominal / (r.intensity() * r.depth * r.depth)
-	// The lesser root, in the form that does not subtract like numbers.
-	return 2 * q * r.depth / (1 + math.Sqrt(1-2*q)) / r.beta1
-}
-
-// tension is the least tension steel for a factored moment.
-func (r *rectangle) tension(moment float64) requiredTension {
-	full, limit := r.axisAt(r.reduction.tensionStrain(r.yieldStrain)), r.axisAt(r.reduction.leastStrain(r.yieldStrain))
-	axis := r.axisFor(moment / r.reduction.tension)
-	if !(units.AtMost(axis, full)) { // also where no axis gives the moment
-		if axis = r.axisBetween(full, limit, moment); math.IsNaN(axis) {
-			return requiredTension{}
-		}
-	}
-	strain := r.strainAt(axis)
-	phi, _ := r.reduction.flexure(strain, r.yieldStrain)
-	a := r.beta1 * axis
-	return requiredTension{block: a, axis: axis, strain: strain, phi: phi, area: r.intensity() * a / r.fy, ok: true}
-}
-
-// axisBetween is the least depth of the neutral axis in the transition, from
-// full to limit, that gives a factored moment; NaN where none does. φ falls
-// there as Mn grows, and their product may rise or fall.
-func (r *rectangle) axisBetween(full, limit, moment float64) float64 {
-	const steps = 64
-	low := full
-	for i := 1; i <= steps; i++ {
-		high := full + (limit-full)*float64(i)/steps
-		if r.design(high) < moment && !units.AtMost(moment, r.design(high)) {
-			low = high
-			continue
-		}
-		for range 60 {
-			mid := (low + high) / 2
-			if r.design(mid) < moment {
-				low = mid
-			} else {
-				high = mid
-			}
-		}
-		return high
-	}
-	return math.NaN()
-}
-
-// requiredBoth is the steel of a doubly reinforced rectangle for a moment that
+// requiredBoth is the steel of a doubly reinforced section for a moment that
 // tension steel alone cannot carry.
 type requiredBoth struct {
 	axis, block       float64
@@ -126,24 +25,25 @@ type requiredBoth struct {
 // leaves the rest of the moment to a couple of steel: tension steel against
 // compression steel at depth top. With ignore, the concrete that compression
 // steel displaces is not deducted.
-func (r *rectangle) both(moment, top float64, steelModulus float64, ignore bool) requiredBoth {
-	strain := math.Max(r.reduction.tensionStrain(r.yieldStrain), r.reduction.leastStrain(r.yieldStrain))
-	b := requiredBoth{axis: r.axisAt(strain), phi: r.reduction.tension}
-	b.block = r.beta1 * b.axis
-	b.alone = r.nominal(b.axis)
+func (z *sizing) both(moment, top float64, steelModulus float64, ignore bool) requiredBoth {
+	strain := math.Max(z.reduction.tensionStrain(z.yieldStrain), z.reduction.leastStrain(z.yieldStrain))
+	b := requiredBoth{axis: z.axisAt(strain), phi: z.reduction.tension}
+	b.block = z.beta1 * b.axis
+	b.alone = z.nominal(b.axis)
 	b.rest = moment/b.phi - b.alone
 	free := steelModulus * crushing * (b.axis - top) / b.axis
-	b.yields = units.AtMost(r.fy, free)
-	b.stress = math.Min(r.fy, free)
+	b.yields = units.AtMost(z.fy, free)
+	b.stress = math.Min(z.fy, free)
 	net := b.stress
 	if top <= b.block && !ignore {
-		net -= blockIntensity * r.fc
+		net -= blockIntensity * z.fc
 	}
 	if net <= 0 || b.rest <= 0 {
 		return b // compression steel that deep does not help, or is not needed
 	}
-	b.pressure = b.rest / (net * (r.depth - top))
-	b.tension = (r.intensity()*b.block + b.pressure*net) / r.fy
+	b.pressure = b.rest / (net * (z.depth - top))
+	concrete, _ := z.concrete(b.block)
+	b.tension = (z.intensity()*concrete + b.pressure*net) / z.fy
 	b.ok = true
 	return b
 }
@@ -187,7 +87,7 @@ func (c Code) RequiredSteel(q SteelQuery) (RequiredSteel, error) {
 	if err := q.check(e); err != nil {
 		return RequiredSteel{}, err
 	}
-	r := e.rectangle(q.Strength, q.Yield, q.Width, q.Depth, q.Extreme, q.Readings.RoundedYield)
+	r := e.sizing(mechanics.Rectangle(q.Width, q.Extreme), beam.Positive, q.Strength, q.Yield, q.Depth, q.Extreme, q.Readings.RoundedYield)
 	moment := e.momentIn(q.Moment)
 	if s := r.tension(moment); s.ok {
 		return RequiredSteel{
@@ -237,66 +137,4 @@ func (q *SteelQuery) check(e *edition) error {
 		return fmt.Errorf("aci318: %s (%s)", r.Detail, r.Clause)
 	}
 	return nil
-}
-
-// leastTension is a lower bound of the tension steel of a sense: see
-// beam.Code. It counts the least steel of 9.6.1 too.
-//
-// With bars no further from the compression face than depth, the centroid and
-// the extreme layer are no further either. The steel required for strength
-// falls as the centroid goes down, and the least steel of 9.6.1.2 grows, so
-// that the bound is the least over all centroids of
-// max(As,req, min(As,min, 4/3 As,req)).
-func (e *edition) leastTension(p *beam.Problem, s beam.Sense, depth units.Length) (area units.Area, ok bool) {
-	b := &p.Brief
-	moment, bent := greatestMoment(p, s)
-	if !bent {
-		return units.Area{}, true
-	}
-	mu := e.momentIn(moment)
-	r := e.rectangle(b.Concrete.Strength, b.Reinforcement.Yield, b.Section.Width, depth, depth, b.Readings.RoundedYield)
-	if !r.mayCarry(mu) {
-		return units.Area{}, false
-	}
-	perDepth := e.minimumSteel(b.Concrete.Strength, b.Reinforcement.Yield, b.Section.Width, depth).area / r.depth
-	// A shade less, so that rounding never makes the bound miss steel that just
-	// passes.
-	return e.areaOf(r.leastArea(mu, perDepth, e.minimum.waiver) * (1 - 2e-9)), true
-}
-
-// mayCarry reports whether some amount of tension steel could carry a factored
-// moment: false only if none does.
-func (r *rectangle) mayCarry(moment float64) bool {
-	limit := r.axisAt(r.reduction.leastStrain(r.yieldStrain))
-	return units.AtMost(moment, r.reduction.tension*r.nominal(limit))
-}
-
-// strengthArea is a lower bound of the steel for a factored moment with its
-// centroid at depth d: φ is at most that of a tension-controlled section and
-// no bar is beyond its yield strength. NaN where no axis gives the moment.
-func (r *rectangle) strengthArea(moment, d float64) float64 {
-	at := *r
-	at.depth = d
-	return at.intensity() * at.beta1 * at.axisFor(moment/r.reduction.tension) / r.fy
-}
-
-// leastArea is the bound of leastTension.
-func (r *rectangle) leastArea(moment, perDepth, waiver float64) float64 {
-	strength, least := r.strengthArea(moment, r.depth), perDepth*r.depth
-	if !(strength < least) {
-		return strength
-	}
-	bound := math.Min(least, waiver*strength)
-	// Where less depth makes the steel for strength equal the least steel,
-	// both are smaller than the least steel at full depth.
-	low, high := 0.0, r.depth
-	for range 60 {
-		mid := (low + high) / 2
-		if r.strengthArea(moment, mid) < perDepth*mid {
-			high = mid
-		} else {
-			low = mid // also where no axis gives the moment there
-		}
-	}
-	return math.Min(bound, perDepth*low)
 }

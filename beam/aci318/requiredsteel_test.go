@@ -119,7 +119,7 @@ func TestLeastAreaIsALowerBound(t *testing.T) {
 		e := rapid.SampledFrom(Editions()).Draw(t, "code").e
 		fc, fy := psi(rapid.Float64Range(2600, 9000).Draw(t, "fc")), psi(rapid.Float64Range(41000, 79000).Draw(t, "fy"))
 		width, depth := in(rapid.Float64Range(8, 30).Draw(t, "b")), in(rapid.Float64Range(10, 40).Draw(t, "d"))
-		r := e.rectangle(fc, fy, width, depth, depth, false)
+		r := e.sizing(mechanics.Rectangle(width, depth.Scale(1.1)), beam.Positive, fc, fy, depth, depth, false)
 		mu := e.momentIn(fc.MulArea(width.MulLength(depth)).MulLength(depth)) * rapid.Float64Range(0.0005, 0.2).Draw(t, "Rn")
 		if !r.mayCarry(mu) {
 			return

@@ -252,8 +252,9 @@ func (e *edition) queryMinimum(q *beam.SectionQuery, f *beam.FlexureStrength) (c
 	for _, l := range q.Layers {
 		yield = yield.Min(l.Yield)
 	}
-	r := e.rectangle(q.Concrete.Strength, yield, q.Section.Width, f.EffectiveDepth, f.ExtremeDepth, q.Readings.RoundedYield)
-	req := r.tension(math.Abs(e.momentIn(q.Demand.Moment)))
+	section := e.querySection(q)
+	z := e.sizing(section.Parts, q.Bending, q.Concrete.Strength, yield, f.EffectiveDepth, f.ExtremeDepth, q.Readings.RoundedYield)
+	req := z.tension(math.Abs(e.momentIn(q.Demand.Moment)))
 	if waived := e.areaOf(e.minimum.waiver * req.area); req.ok && waived.Less(f.MinimumSteel) {
 		return "9.6.1.3", waived, waiverReason
 	}
