@@ -98,6 +98,7 @@ func (p *Placed) AppendSingles(dst []Placed) []Placed {
 	b := p.Size.body()
 	x, y := p.metres()
 	single := Placed{Size: p.Size.Single(), Layer: p.Layer, across: p.across}
+	single.body = single.Size.body()
 	for i := range b.n {
 		u, v := b.at(i)
 		single.X, single.Y = units.Metre.Of(x+u), units.Metre.Of(y+v)

@@ -217,18 +217,28 @@ func (f *form) corner(b *body) (x, raised float64) {
 // and b, of which b lies to the right and dy higher. No bar of one may pass
 // over the centre of a bar of the other.
 func (f *form) pitch(a, b *body, dy float64) float64 {
-	least := a.wide + b.wide
 	centres := a.bar + b.bar + f.clear.between(a.counts, b.counts)
+	if a.n == 1 && b.n == 1 {
+		return run(centres, dy)
+	}
+	least := a.wide + b.wide
 	for i := range a.n {
 		xi, yi := a.at(i)
 		for j := range b.n {
 			xj, yj := b.at(j)
-			if rise := dy + yj - yi; math.Abs(rise) < centres {
-				least = max(least, math.Sqrt((centres-rise)*(centres+rise))-(xj-xi))
-			}
+			least = max(least, run(centres, dy+yj-yi)-(xj-xi))
 		}
 	}
 	return least
+}
+
+// run is the horizontal part of a distance whose vertical part is rise; zero
+// if that is all of it.
+func run(distance, rise float64) float64 {
+	if distance <= math.Abs(rise) {
+		return 0
+	}
+	return math.Sqrt((distance - rise) * (distance + rise))
 }
 
 // rowWidth is the least width of the form for n bodies in the layer nearest

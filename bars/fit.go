@@ -23,6 +23,7 @@ type Placed struct {
 	// across is how much of any extra width the bar moves to the right:
 	// 0 at the left corner, 1 at the right. Positions are linear in it.
 	across float64
+	body   body // of Size, while it is laid
 }
 
 // Gap is the clear distance between two bars of a fit, A and B by index in
@@ -200,6 +201,9 @@ func (f *Fit) arrange(layer Layer, number int) {
 		}
 		onLeft = !onLeft
 	}
+	for i := range row {
+		row[i].body = row[i].Size.body()
+	}
 }
 
 // nextLargest is the index of the group that follows group g in order of
@@ -228,7 +232,7 @@ func (f *Fit) total() {
 		a := b.Size.Area.In(units.SquareMetre)
 		area += a
 		moment += a * y
-		height = max(height, y+b.Size.body().high)
+		height = max(height, y+b.body.high)
 	}
 	f.Area = sum.area()
 	f.Centroid = units.Metre.Of(moment / area)

@@ -26,15 +26,14 @@ func measure(f *form, row, below []Placed, first int) LayerFit {
 	for i := range row {
 		b := &row[i]
 		x, y := b.metres()
-		right := b.Size.body()
 		a := b.Size.Area.In(units.SquareMetre)
 		area += a
 		moment += a * y
-		cover = min(cover, y-right.low)
+		cover = min(cover, y-b.body.low)
 		for j := range below {
 			u, v := below[j].metres()
-			lower := below[j].Size.body()
-			g := newGap(lower.centres(&right, x-u, y-v), &lower, &right, f.vertical)
+			lower := &below[j].body
+			g := newGap(lower.centres(&b.body, x-u, y-v), lower, &b.body, f.vertical)
 			g.A, g.B = first-len(below)+j, first+i
 			if g.tighter(on.Below) {
 				on.Below = g
@@ -42,17 +41,17 @@ func measure(f *form, row, below []Placed, first int) LayerFit {
 		}
 		for j := i - 1; j >= max(0, i-near); j-- {
 			u, v := row[j].metres()
-			left := row[j].Size.body()
+			left := &row[j].body
 			if j == i-1 {
 				on.Spacing = on.Spacing.Max(units.Metre.Of(math.Hypot(x-u, y-v)))
 			}
-			centres := left.centres(&right, x-u, y-v)
-			if x-u < (left.wide+right.wide)*(1-sameDistance) {
+			centres := left.centres(&b.body, x-u, y-v)
+			if x-u < (left.wide+b.body.wide)*(1-sameDistance) {
 				// The form is so narrow that the bars changed places: count the
 				// distance as negative, so that it grows with the width throughout.
 				centres = -centres
 			}
-			g := newGap(centres, &left, &right, f.clear)
+			g := newGap(centres, left, &b.body, f.clear)
 			g.A, g.B = first+j, first+i
 			if g.tighter(on.Beside) {
 				on.Beside = g
@@ -123,18 +122,17 @@ func aligned(row, below []Placed, width float64) bool {
 // legs where it lies.
 func (f *form) margin(p *Placed) float64 {
 	_, y := p.metres()
-	b := p.Size.body()
 	keep := 0.0
 	if p.Layer == 1 {
 		keep = f.edge(p)
 	}
-	for i := range b.n {
-		u, v := b.at(i)
+	for i := range p.body.n {
+		u, v := p.body.at(i)
 		height := f.top - (y + v) // over the nearer of the horizontal legs
 		if p.Layer > 1 {
 			height = min(height, y+v-f.base)
 		}
-		keep = max(keep, f.wall(b.bar, height)-u)
+		keep = max(keep, f.wall(p.body.bar, height)-u)
 	}
 	return keep
 }
@@ -144,7 +142,7 @@ func (f *form) holds(row []Placed) bool {
 	for i := range row {
 		x, y := row[i].metres()
 		keep := f.side + f.margin(&row[i])
-		if !units.AtMost(keep, x) || !units.AtMost(keep, f.width-x) || !units.AtMost(y+row[i].Size.body().high, f.top) {
+		if !units.AtMost(keep, x) || !units.AtMost(keep, f.width-x) || !units.AtMost(y+row[i].body.high, f.top) {
 			return false
 		}
 	}
@@ -159,7 +157,6 @@ func (f *form) leastWidth(row []Placed) float64 {
 	for i := range row {
 		b := &row[i]
 		x, y := b.metres()
-		right := b.Size.body()
 		keep := f.side + f.margin(b)
 		if b.across > 0 {
 			least = max(least, f.width+(keep-x)/b.across)
@@ -170,8 +167,7 @@ func (f *form) leastWidth(row []Placed) float64 {
 		for j := i - 1; j >= max(0, i-near); j-- {
 			a := &row[j]
 			u, v := a.metres()
-			left := a.Size.body()
-			need := f.pitch(&left, &right, y-v)
+			need := f.pitch(&a.body, &b.body, y-v)
 			least = max(least, f.width+(need-(x-u))/(b.across-a.across))
 		}
 	}

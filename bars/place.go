@@ -21,9 +21,8 @@ func (f *form) above(below []Placed, layer Layer) float64 {
 	top, largest := 0.0, 0.0
 	for i := range below {
 		_, y := below[i].metres()
-		b := below[i].Size.body()
-		top = max(top, y+b.high)
-		largest = max(largest, b.counts)
+		top = max(top, y+below[i].body.high)
+		largest = max(largest, below[i].body.counts)
 	}
 	for i := range layer {
 		largest = max(largest, layer[i].Size.Diameter.In(units.Metre)/2)
@@ -37,17 +36,16 @@ func (f *form) above(below []Placed, layer Layer) float64 {
 func (f *form) spread(row []Placed, level float64) {
 	last := len(row) - 1
 	if last == 0 {
-		row[0].put(f.width/2, level+row[0].Size.body().low, 0.5)
+		row[0].put(f.width/2, level+row[0].body.low, 0.5)
 		return
 	}
 	for i := range row {
-		row[i].put(0, level+row[i].Size.body().low, float64(i)/float64(last))
+		row[i].put(0, level+row[i].body.low, float64(i)/float64(last))
 	}
 	left, right := f.edge(&row[0]), f.edge(&row[last])
 	for _, corner := range [...]*Placed{&row[0], &row[last]} {
 		if f.tucked && corner.inCorner() {
-			b := corner.Size.body()
-			corner.Y = units.Metre.Of(level + f.nook(b.bar) + (b.low - b.bar))
+			corner.Y = units.Metre.Of(level + f.nook(corner.body.bar) + (corner.body.low - corner.body.bar))
 		}
 	}
 	x, end := f.side+left, f.width-f.side-right
@@ -67,11 +65,10 @@ func (f *form) spread(row []Placed, level float64) {
 // legs: a corner bar of a tucked cage by its own rule, others past the
 // tangent point.
 func (f *form) edge(p *Placed) float64 {
-	b := p.Size.body()
 	if f.tucked && p.inCorner() {
-		return f.tuck(&b)
+		return f.tuck(&p.body)
 	}
-	return f.seat(&b)
+	return f.seat(&p.body)
 }
 
 // step is the least horizontal distance between the centres of neighbours a
@@ -80,16 +77,15 @@ func (f *form) edge(p *Placed) float64 {
 func (f *form) step(a, b *Placed) float64 {
 	_, ya := a.metres()
 	_, yb := b.metres()
-	left, right := a.Size.body(), b.Size.body()
-	least := f.pitch(&left, &right, yb-ya)
+	least := f.pitch(&a.body, &b.body, yb-ya)
 	if !f.tucked {
 		return least
 	}
 	switch cornerA, cornerB := a.inCorner(), b.inCorner(); {
 	case cornerA && !cornerB:
-		least = max(least, f.seat(&right)-f.tuck(&left))
+		least = max(least, f.seat(&b.body)-f.tuck(&a.body))
 	case cornerB && !cornerA:
-		least = max(least, f.seat(&left)-f.tuck(&right))
+		least = max(least, f.seat(&a.body)-f.tuck(&b.body))
 	}
 	return least
 }
@@ -108,7 +104,7 @@ func (f *form) stack(row, below []Placed, level float64) {
 		case i >= m/2:
 			j = n - m + i
 		}
-		row[i].put(below[j].X.In(units.Metre), level+row[i].Size.body().low, below[j].across)
+		row[i].put(below[j].X.In(units.Metre), level+row[i].body.low, below[j].across)
 		switch keep := units.Metre.Of(f.side + f.margin(&row[i])); row[i].across {
 		case 0:
 			row[i].X = row[i].X.Max(keep)
