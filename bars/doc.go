@@ -29,10 +29,16 @@
 // area, but takes the room of its real bars: these touch the stirrup, and
 // clear distances are measured between them.
 //
+// A [Spread] lays further bars in a flange beside the web, in the same frame
+// of reference: x is negative left of the web. [Cage.AppendLegs] tells where
+// the legs of a stirrup stand, [Cage.Centreline] and [Cage.Enclosed] what a
+// closed one encloses.
+//
 // # Lengths
 //
 // [Closed], [Open] and [CrossTie] give cut lengths along the centre line of
-// the bar with its bends as arcs, from out-to-out dimensions.
+// the bar with its bends as arcs, from out-to-out dimensions; a [StirrupSet]
+// may also be inclined. [Incline] gives the length of a stretch bent up.
 //
 // Lengths are float64 metres inside. Limits met exactly are met: comparisons
 // have the 1e-9 relative tolerance of units.AtMost. All functions are safe for

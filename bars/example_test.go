@@ -122,3 +122,99 @@ func ExampleStirrupSet_Lengths() {
 	// Output:
 	// stirrup 77.78 in, 2 cross ties of 30.91 in, 7.77 lb in all
 }
+
+func ExampleBundle() {
+	catalog, err := bars.Lookup("astm-inch")
+	if err != nil {
+		log.Fatal(err)
+	}
+	four, err := catalog.Size("#4")
+	if err != nil {
+		log.Fatal(err)
+	}
+	three, err := catalog.Bundle("3x#8")
+	if err != nil {
+		log.Fatal(err)
+	}
+	fmt.Printf("%s: %d bars %s, counts as one of %.3f in and %s\n",
+		three, three.Bundled(), three.Single(), three.Diameter.In(units.Inch), three.PrintedArea())
+
+	cage := bars.Cage{Width: units.Inch.Of(14), SideCover: units.Inch.Of(1.5), FaceCover: units.Inch.Of(1.5), Stirrup: four}
+	need := bars.Clearances{InLayer: bars.Clearance{Least: units.Inch.Of(1), Diameters: 1}}
+	fit, err := cage.Fit([]bars.Layer{{{Size: three, Count: 2}}}, need)
+	if err != nil {
+		log.Fatal(err)
+	}
+	for _, b := range fit.AppendSingles(nil) {
+		fmt.Printf("%s  x %.3f  y %.3f in\n", b.Size, b.X.In(units.Inch), b.Y.In(units.Inch))
+	}
+	g := fit.Horizontal()
+	fmt.Printf("centroid %.3f in; clear %.3f in, required %.3f in\n", fit.Centroid.In(units.Inch), g.Clear.In(units.Inch), g.Required.In(units.Inch))
+	// Output:
+	// 3x#8: 3 bars #8, counts as one of 1.732 in and 2.37 in2
+	// #8  x 3.000  y 2.500 in
+	// #8  x 4.000  y 2.500 in
+	// #8  x 3.500  y 3.366 in
+	// #8  x 10.000  y 2.500 in
+	// #8  x 11.000  y 2.500 in
+	// #8  x 10.500  y 3.366 in
+	// centroid 2.789 in; clear 5.000 in, required 1.732 in
+}
+
+func ExampleSpread() {
+	catalog, err := bars.Lookup("astm-inch")
+	if err != nil {
+		log.Fatal(err)
+	}
+	five, err := catalog.Size("#5")
+	if err != nil {
+		log.Fatal(err)
+	}
+	in := units.Inch.Of
+	flange, err := bars.Spread{Size: five, From: in(3), To: in(9), Pitch: in(6), Left: 2, Right: 2, Y: in(2.3125)}.Append(nil)
+	if err != nil {
+		log.Fatal(err)
+	}
+	for _, b := range flange {
+		fmt.Printf("%s  x %.1f in\n", b.Size, b.X.In(units.Inch))
+	}
+	// Output:
+	// #5  x -9.0 in
+	// #5  x -3.0 in
+	// #5  x 15.0 in
+	// #5  x 21.0 in
+}
+
+func ExampleCage_AppendLegs() {
+	catalog, err := bars.Lookup("astm-inch")
+	if err != nil {
+		log.Fatal(err)
+	}
+	four, err := catalog.Size("#4")
+	if err != nil {
+		log.Fatal(err)
+	}
+	nine, err := catalog.Size("#9")
+	if err != nil {
+		log.Fatal(err)
+	}
+	cage := bars.Cage{Width: units.Inch.Of(24), SideCover: units.Inch.Of(1.5), FaceCover: units.Inch.Of(1.5), Stirrup: four}
+	fit, err := cage.Fit([]bars.Layer{{{Size: nine, Count: 6}}}, bars.Clearances{})
+	if err != nil {
+		log.Fatal(err)
+	}
+	legs, held, err := cage.AppendLegs(nil, 4, fit.Bars)
+	if err != nil {
+		log.Fatal(err)
+	}
+	for _, x := range legs {
+		fmt.Printf("%.3f in\n", x.In(units.Inch))
+	}
+	fmt.Printf("held: %t; widest apart: %.3f in\n", held, bars.WidestApart(legs).In(units.Inch))
+	// Output:
+	// 1.750 in
+	// 9.386 in
+	// 14.614 in
+	// 22.250 in
+	// held: true; widest apart: 7.636 in
+}

@@ -1,6 +1,7 @@
 package bars
 
 import (
+	"math"
 	"strconv"
 
 	"soffit.example/units"
@@ -40,6 +41,24 @@ func CrossTie(length units.Length, a, b Hook) (units.Length, error) {
 	return length.Add(a.Allowance()).Add(b.Allowance()), nil
 }
 
+// Incline is a straight stretch of bar that rises at an angle to the axis of
+// the beam, between centre lines: its length, rise / sin a, and its run along
+// the beam, rise / tan a. It serves bent-up bars and inclined stirrups. The
+// rise is 0 to 100 m, the angle 1 to 90 degrees; the error is a *[RangeError].
+func Incline(rise units.Length, degrees float64) (length, run units.Length, err error) {
+	if v := rise.In(units.Metre); !(v >= 0 && v <= maxWidth) {
+		return units.Length{}, units.Length{}, outside("rise", rise, "0 m to 100 m")
+	}
+	if !(degrees >= 1 && degrees <= 90) {
+		return units.Length{}, units.Length{}, &RangeError{Field: "angle", Value: formatFactor(degrees) + " degrees", Allowed: "1 to 90 degrees"}
+	}
+	if degrees == 90 {
+		return rise, units.Length{}, nil // sin and tan of pi/2 are not exact
+	}
+	sin, cos := math.Sincos(degrees * math.Pi / 180)
+	return rise.Scale(1 / sin), rise.Scale(cos / sin), nil
+}
+
 // sides checks that two sides have room for a bend at each end.
 func sides(b Bend, width, depth units.Length) error {
 	room := b.Setback().Scale(2)
@@ -77,8 +96,13 @@ func (f StirrupForm) String() string {
 type StirrupSet struct {
 	Size         Size
 	Form         StirrupForm
-	Width, Depth units.Length // out to out
+	Width, Depth units.Length // out to out, the depth upright
 	Legs         int          // 2 to 20
+	// Angle is that between the stirrup's plane and the axis of the beam in
+	// degrees, 1 to 90; zero means 90. The legs of an inclined stirrup are
+	// longer: the centre lines of its level sides stand as far apart upright
+	// as those of an upright one.
+	Angle float64
 	// HookAngle is that of the outer stirrup's hooks in degrees; zero means
 	// 135. Cross ties have a 135-degree hook at one end and a 90-degree hook
 	// at the other.
@@ -110,6 +134,9 @@ func (s StirrupSet) Lengths() (StirrupLengths, error) {
 	if err != nil {
 		return StirrupLengths{}, err
 	}
+	if s.Depth, err = s.slope(); err != nil {
+		return StirrupLengths{}, err
+	}
 	l := StirrupLengths{Ties: s.Legs - 2}
 	switch s.Form {
 	case ClosedForm:
@@ -129,6 +156,19 @@ func (s StirrupSet) Lengths() (StirrupLengths, error) {
 	}
 	l.Total = l.Outer.Add(l.Tie.Scale(float64(l.Ties)))
 	return l, nil
+}
+
+// slope is the depth out to out in the plane of the stirrup.
+func (s StirrupSet) slope() (units.Length, error) {
+	if s.Angle == 0 || s.Angle == 90 {
+		return s.Depth, nil
+	}
+	upright := s.Depth.Sub(s.Size.Diameter)
+	if v := upright.In(units.Metre); !(v > 0 && v <= maxWidth) {
+		return units.Length{}, outside("stirrup depth", s.Depth, "more than its bar, at most 100 m")
+	}
+	legs, _, err := Incline(upright, s.Angle)
+	return legs.Add(s.Size.Diameter), err
 }
 
 // tie is the length of one cross tie, as deep as the stirrup.

@@ -200,3 +200,91 @@ func TestStirrupRefuses(t *testing.T) {
 	_, err = bars.CrossTie(inches(2.9), h, h)
 	require.ErrorContains(t, err, "tie length is")
 }
+
+// Closed forms: at 30 degrees the length is twice the rise, at 45 degrees the
+// root of two times, and upright it is the rise.
+func TestIncline(t *testing.T) {
+	for _, row := range []struct{ degrees, length, run float64 }{
+		{90, 1, 0}, {60, 2 / math.Sqrt(3), 1 / math.Sqrt(3)}, {45, math.Sqrt2, 1}, {30, 2, math.Sqrt(3)},
+		{1, 57.298688498550185, 57.28996163075943}, // csc and cot of a degree, from a table
+	} {
+		length, run, err := bars.Incline(inches(20), row.degrees)
+		require.NoError(t, err)
+		require.InEpsilon(t, 20*row.length, length.In(units.Inch), 1e-14)
+		require.InDelta(t, 20*row.run, run.In(units.Inch), 1e-11)
+	}
+	length, run, err := bars.Incline(inches(20), 90)
+	require.NoError(t, err)
+	require.Equal(t, inches(20), length)
+	require.Zero(t, run)
+	length, _, err = bars.Incline(units.Length{}, 45)
+	require.NoError(t, err)
+	require.Zero(t, length)
+
+	nan := math.NaN()
+	for _, row := range []struct {
+		rise    units.Length
+		degrees float64
+		want    bars.RangeError
+	}{
+		{units.Metre.Of(-1), 45, bars.RangeError{Field: "rise", Value: "-1 m", Allowed: "0 m to 100 m"}},
+		{units.Metre.Of(101), 45, bars.RangeError{Field: "rise", Value: "101 m", Allowed: "0 m to 100 m"}},
+		{units.Metre.Of(nan), 45, bars.RangeError{Field: "rise", Value: units.Metre.Of(nan).String(), Allowed: "0 m to 100 m"}},
+		{units.Metre.Of(1), 0.5, bars.RangeError{Field: "angle", Value: "0.5 degrees", Allowed: "1 to 90 degrees"}},
+		{units.Metre.Of(1), 90.5, bars.RangeError{Field: "angle", Value: "90.5 degrees", Allowed: "1 to 90 degrees"}},
+		{units.Metre.Of(1), nan, bars.RangeError{Field: "angle", Value: "NaN degrees", Allowed: "1 to 90 degrees"}},
+	} {
+		length, run, err := bars.Incline(row.rise, row.degrees)
+		var got *bars.RangeError
+		require.ErrorAs(t, err, &got)
+		require.Equal(t, row.want, *got)
+		require.Zero(t, length)
+		require.Zero(t, run)
+	}
+}
+
+// Closed form: against an upright one, an inclined closed stirrup has two
+// legs, an open one two and a cross tie one that are longer by (1/sin a - 1)
+// times the upright distance between the centre lines of its level sides.
+func TestInclinedStirrups(t *testing.T) {
+	s := size(t, "astm-inch", "#4")
+	for _, form := range []bars.StirrupForm{bars.ClosedForm, bars.OpenForm} {
+		set := bars.StirrupSet{Size: s, Form: form, Width: inches(13), Depth: inches(23), Legs: 5}
+		upright, err := set.Lengths()
+		require.NoError(t, err)
+		set.Angle = 90
+		same, err := set.Lengths()
+		require.NoError(t, err)
+		require.Equal(t, upright, same)
+		for _, degrees := range []float64{45, 60, 89.999999} {
+			set.Angle = degrees
+			inclined, err := set.Lengths()
+			require.NoError(t, err)
+			longer := 22.5 * (1/math.Sin(degrees*math.Pi/180) - 1)
+			require.InDelta(t, 2*longer, inclined.Outer.Sub(upright.Outer).In(units.Inch), 1e-9)
+			require.InDelta(t, longer, inclined.Tie.Sub(upright.Tie).In(units.Inch), 1e-9)
+			require.InDelta(t, 5*longer, inclined.Total.Sub(upright.Total).In(units.Inch), 1e-9)
+		}
+	}
+	for _, row := range []struct {
+		name string
+		harm func(*bars.StirrupSet)
+		want bars.RangeError
+	}{
+		{"flat", func(s *bars.StirrupSet) { s.Angle = 0.9 }, bars.RangeError{Field: "angle", Value: "0.9 degrees", Allowed: "1 to 90 degrees"}},
+		{"leaning over", func(s *bars.StirrupSet) { s.Angle = 135 }, bars.RangeError{Field: "angle", Value: "135 degrees", Allowed: "1 to 90 degrees"}},
+		{"not a number", func(s *bars.StirrupSet) { s.Angle = math.NaN() }, bars.RangeError{Field: "angle", Value: "NaN degrees", Allowed: "1 to 90 degrees"}},
+		{"no depth", func(s *bars.StirrupSet) { s.Depth = inches(0.5) }, bars.RangeError{Field: "stirrup depth", Value: inches(0.5).String(), Allowed: "more than its bar, at most 100 m"}},
+		{"deep", func(s *bars.StirrupSet) { s.Depth = units.Metre.Of(101) }, bars.RangeError{Field: "stirrup depth", Value: "101 m", Allowed: "more than its bar, at most 100 m"}},
+	} {
+		t.Run(row.name, func(t *testing.T) {
+			set := bars.StirrupSet{Size: s, Form: bars.ClosedForm, Width: inches(13), Depth: inches(23), Legs: 2, Angle: 45}
+			row.harm(&set)
+			l, err := set.Lengths()
+			var got *bars.RangeError
+			require.ErrorAs(t, err, &got)
+			require.Equal(t, row.want, *got)
+			require.Zero(t, l)
+		})
+	}
+}
