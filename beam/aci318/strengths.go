@@ -220,4 +220,3 @@ func (e *edition) queryMinimum(q *beam.SectionQuery, f *beam.FlexureStrength) (c
 	}
 	return "9.6.1.2", f.MinimumSteel, ""
 }
-
