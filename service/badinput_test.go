@@ -2,6 +2,7 @@ package service_test
 
 import (
 	"net/http"
+	"slices"
 	"strings"
 	"testing"
 
@@ -69,11 +70,11 @@ func onBrief() []badInput {
 		{name: "span too long", replace: `"27 ft"`, with: `"2700 ft"`, pointer: "/spans/0", detail: "32400 in", allowed: "in to"},
 
 		// Members.
-		{name: "unknown member", replace: `"width": "16 in"`, with: `"widht": "16 in", "width": "16 in"`, pointer: "/section/widht", detail: `"widht" is not a member here; did you mean "width"?`, allowed: "shape, width, depth"},
+		{name: "unknown member", replace: `"width": "16 in"`, with: `"widht": "16 in", "width": "16 in"`, pointer: "/section/widht", detail: `"widht" is not a member here; did you mean "width"?`, allowed: "shape, width, web_width, depth"},
 		{name: "unknown member at the top", replace: `"exposure"`, with: `"exposures"`, pointer: "/exposures", detail: `did you mean "exposure"?`, allowed: "reference, code"},
 		{name: "member of another case", replace: `"exposure"`, with: `"Exposure"`, pointer: "/Exposure", detail: `did you mean "exposure"?`},
-		{name: "missing member", replace: `"width": "16 in", `, with: ``, pointer: "/section/width", detail: "width is missing", allowed: "a length in"},
-		{name: "missing section", replace: `"section": {"shape": "rectangular", "width": "16 in", "depth": "26 in"},`, with: ``, pointer: "/section", detail: "section is missing", allowed: "an object with shape, width, depth"},
+		{name: "missing member", replace: `"width": "16 in", `, with: ``, pointer: "/section/width", detail: "width is missing; a rectangular section needs it", allowed: "a length, e.g."},
+		{name: "missing section", replace: `"section": {"shape": "rectangular", "width": "16 in", "depth": "26 in"},`, with: ``, pointer: "/section", detail: "section is missing", allowed: "an object with shape, width, web_width, depth"},
 		{name: "missing code", replace: `"code": "ACI 318-19",`, with: ``, pointer: "/code", detail: "code is missing"},
 		{name: "null member", replace: `"16 in"`, with: `null`, pointer: "/section/width", detail: "width is null; leave out what is not known", allowed: "a length in"},
 		{name: "null object", replace: `{"attached": "fragile", "months": 60}`, with: `null`, pointer: "/serviceability", detail: "serviceability is null", allowed: "an object with attached, months"},
@@ -162,9 +163,9 @@ func onOtherDoors() map[string][]badInput {
 			{name: "unknown size", replace: `"bar": "#9"`, with: `"bar": "#12"`, pointer: "/layout/longitudinal/0/bar", detail: `"#12"`},
 			{name: "no bars", replace: `"count": 4`, with: `"count": 0`, pointer: "/layout/longitudinal/0/count", detail: "count is 0", allowed: "a whole number from 1 to 200"},
 			{name: "unknown face", replace: `"face": "top"`, with: `"face": "left"`, pointer: "/layout/longitudinal/1/face", detail: `face is "left"`, allowed: "bottom, top, side"},
-			{name: "layer on a side", replace: `"face": "bottom", "layer": 1`, with: `"face": "side", "layer": 1`, pointer: "/layout/longitudinal/0/layer", detail: "does not belong to side bars"},
+			{name: "layer on a side", replace: `"face": "bottom", "layer": 1`, with: `"face": "side", "layer": 1`, pointer: "/layout/longitudinal/0/layer", detail: "layer does not belong to a row of side bars, which has spacing"},
 			{name: "side bars without spacing", replace: `"face": "bottom", "layer": 1`, with: `"face": "side"`, pointer: "/layout/longitudinal/0/spacing", detail: "spacing is missing"},
-			{name: "spacing of bottom bars", replace: `"layer": 1`, with: `"spacing": "3 in"`, pointer: "/layout/longitudinal/0/spacing", detail: "belongs to side bars alone"},
+			{name: "spacing of bottom bars", replace: `"layer": 1`, with: `"spacing": "3 in"`, pointer: "/layout/longitudinal/0/spacing", detail: "spacing does not belong to a row in the web, which has flange, layer"},
 			{name: "from without to", replace: `"layer": 1`, with: `"from": "1 ft"`, pointer: "/layout/longitudinal/0/to", detail: "to is missing"},
 			{name: "cut-off", replace: `"layer": 1`, with: `"from": "3 ft", "to": "20 ft"`, pointer: "/layout/longitudinal/0/to", detail: "36 in to 240 in", allowed: "324 in"},
 			{name: "hooked end", replace: `"layer": 1`, with: `"end": "hook"`, pointer: "/layout/longitudinal/0/end", detail: `end is "hook"`, allowed: "straight"},
@@ -199,7 +200,9 @@ func onOtherDoors() map[string][]badInput {
 func TestBadInput(t *testing.T) {
 	s := newService(t)
 	doors := onOtherDoors()
-	doors["/v1/designs"] = onBrief()
+	doors["/v1/designs"] = slices.Concat(onBrief(), onSections(), onTorques())
+	doors["/v1/checks"] = append(doors["/v1/checks"], onLayouts()...)
+	doors["/v1/strengths"] = append(doors["/v1/strengths"], onBareSections()...)
 	kinds := 0
 	for path, list := range doors {
 		for _, tc := range list {
@@ -227,7 +230,7 @@ func TestBadInput(t *testing.T) {
 			})
 		}
 	}
-	require.GreaterOrEqual(t, kinds, 60)
+	require.GreaterOrEqual(t, kinds, 200)
 }
 
 func TestBadRequests(t *testing.T) {

@@ -3,6 +3,7 @@ package service_test
 import (
 	"encoding/json"
 	"net/http"
+	"slices"
 	"strings"
 	"testing"
 
@@ -14,15 +15,17 @@ import (
 // fuzzDoor sends whatever comes to a door: it must answer with a complete
 // JSON document, never with a fault of its own, and a problem must name what
 // is wrong.
-func fuzzDoor(f *testing.F, path string, seeds ...string) {
+func fuzzDoor(f *testing.F, path string, bad []badInput, seeds ...string) {
 	s := newService(f, func(o *service.Options) { o.Limits.Body = 16 << 10 })
 	for _, seed := range seeds {
 		f.Add(seed)
 	}
-	for _, tc := range append(onOtherDoors()[path], badInput{}) {
-		if len(seeds) > 0 && tc.replace != "" {
-			f.Add(strings.Replace(seeds[0], tc.replace, tc.with, 1))
+	for _, tc := range bad {
+		request := tc.request
+		if request == "" {
+			request = seeds[0]
 		}
+		f.Add(strings.Replace(request, tc.replace, tc.with, 1))
 	}
 	f.Fuzz(func(t *testing.T, body string) {
 		if dear(body) {
@@ -46,13 +49,16 @@ func fuzzDoor(f *testing.F, path string, seeds ...string) {
 func dear(body string) bool { return strings.Count(body, `"depths"`) > 0 || len(body) > 8<<10 }
 
 func FuzzDesigns(f *testing.F) {
-	seeds := []string{goodBrief, goodDemands}
-	for _, tc := range onBrief() {
-		seeds = append(seeds, strings.Replace(goodBrief, tc.replace, tc.with, 1))
-	}
-	fuzzDoor(f, "/v1/designs", seeds...)
+	fuzzDoor(f, "/v1/designs", slices.Concat(onBrief(), onSections(), onTorques()), goodBrief, goodDemands)
 }
 
-func FuzzChecks(f *testing.F)    { fuzzDoor(f, "/v1/checks", goodCheck) }
-func FuzzStrengths(f *testing.F) { fuzzDoor(f, "/v1/strengths", goodStrengths) }
-func FuzzFits(f *testing.F)      { fuzzDoor(f, "/v1/fits", goodFits) }
+func FuzzChecks(f *testing.F) {
+	fuzzDoor(f, "/v1/checks", append(onOtherDoors()["/v1/checks"], onLayouts()...), goodCheck)
+}
+
+func FuzzStrengths(f *testing.F) {
+	fuzzDoor(f, "/v1/strengths", append(onOtherDoors()["/v1/strengths"], onBareSections()...), goodStrengths,
+		of(goodStrengths, tee), of(goodStrengths, ledges), of(goodStrengths, box), strings.Replace(goodStrengths, `"0 kip-ft"`, `"30 kip-ft"`, 1))
+}
+
+func FuzzFits(f *testing.F) { fuzzDoor(f, "/v1/fits", onOtherDoors()["/v1/fits"], goodFits) }

@@ -72,7 +72,7 @@ func word[E any, P interface {
 func (in *intake) brief(w *wire.Brief, at string) beam.Brief {
 	b := beam.Brief{
 		Reference:     w.Reference,
-		Section:       in.section(&w.Section),
+		Section:       in.section(&w.Section, at+"/section"),
 		Concrete:      in.concrete(&w.Concrete, at+"/concrete"),
 		Reinforcement: in.reinforcement(&w.Reinforcement, at+"/reinforcement"),
 		Exposure:      word[beam.Exposure](w.Exposure),
@@ -82,6 +82,7 @@ func (in *intake) brief(w *wire.Brief, at string) beam.Brief {
 		Braced:        above(in, at+"/braced", w.Braced),
 		Readings:      readings(w.DisplacedConcrete, w.Grade60Yield, w.ShearRow, w.ShearMethod, w.Corner),
 	}
+	b.Readings.TorsionAngle, b.Readings.CountSideBars = value(w.TorsionAngle), value(w.CountSideBars)
 	for i := range w.Supports {
 		b.Supports = append(b.Supports, support(&w.Supports[i]))
 	}
@@ -100,16 +101,15 @@ func (in *intake) brief(w *wire.Brief, at string) beam.Brief {
 	return b
 }
 
-func (in *intake) section(w *wire.Section) beam.Section {
-	return beam.Section{Shape: word[beam.Shape](&w.Shape), Width: w.Width, Depth: w.Depth}
-}
-
 func (in *intake) concrete(w *wire.Concrete, at string) beam.Concrete {
 	return beam.Concrete{
 		Strength:  w.Strength,
 		Density:   above(in, at+"/density", w.Density),
 		Kind:      word[beam.ConcreteKind](w.Kind),
 		Aggregate: above(in, at+"/aggregate", w.Aggregate),
+		Splitting: above(in, at+"/splitting", w.Splitting),
+		Normal:    value(w.Normal),
+		Fibres:    value(w.Fibres),
 	}
 }
 
@@ -138,20 +138,37 @@ func support(w *wire.Support) beam.Support {
 	return s
 }
 
-// loadMembers are the members that place and size a load, with what they are.
-var loadMembers = [...]struct{ name, what string }{
-	{"from", `a length, e.g. "12 ft" or "3.5 m"`},
-	{"to", `a length, e.g. "12 ft" or "3.5 m"`},
-	{"at", `a length, e.g. "12 ft" or "3.5 m"`},
-	{"intensity", `a line load, e.g. "1.2 kip/ft" or "18 kN/m"`},
-	{"intensity_end", `a line load, e.g. "1.2 kip/ft" or "18 kN/m"`},
-	{"force", `a force, e.g. "20 kip" or "90 kN"`},
-	{"moment", `a moment, e.g. "50 kip-ft" or "70 kN-m"`},
+// member is a member that belongs to things of some kinds alone.
+type member struct {
+	name, what string // what: it is, with an example
+	given      bool
 }
 
-// belongs says which of loadMembers a load of a shape needs, and which it may
-// have.
-func belongs(shape beam.LoadShape) (needs, may string) {
+const (
+	aLength   = `a length, e.g. "12 ft" or "3.5 m"`
+	aSize     = `a length, e.g. "14 in" or "350 mm"`
+	aLineLoad = `a line load, e.g. "1.2 kip/ft" or "18 kN/m"`
+	aForce    = `a force, e.g. "20 kip" or "90 kN"`
+	aMoment   = `a moment, e.g. "50 kip-ft" or "70 kN-m"`
+)
+
+// belong notes which members a thing of a kind lacks of those that it needs,
+// and which are given that it does not have.
+func (in *intake) belong(at, thing string, members []member, needs, may string) {
+	for _, m := range members {
+		needed := hasWord(needs, m.name)
+		switch {
+		case needed && !m.given:
+			in.fault(at+"/"+m.name, m.what, "is missing; %s needs it", thing)
+		case m.given && !needed && !hasWord(may, m.name):
+			in.fault(at+"/"+m.name, "", "does not belong to %s, which has %s", thing, strings.Join(strings.Fields(needs+" "+may), ", "))
+		}
+	}
+}
+
+// loadMembers says which members that place and size a load a load of a shape
+// needs, and which it may have.
+func loadMembers(shape beam.LoadShape) (needs, may string) {
 	switch shape {
 	case beam.Uniform:
 		return "intensity", ""
@@ -159,12 +176,14 @@ func belongs(shape beam.LoadShape) (needs, may string) {
 		return "from to intensity", "intensity_end"
 	case beam.PointLoad:
 		return "at force", ""
-	case beam.Couple, beam.Torque:
+	case beam.Couple:
 		return "at moment", ""
+	case beam.Torque:
+		return "at moment", "path"
 	case beam.UniformTorque:
-		return "moment", ""
+		return "moment", "path"
 	}
-	return "", "from to at intensity intensity_end force moment" // the shape has a fault of its own
+	return "", "from to at intensity intensity_end force moment path" // the shape has a fault of its own
 }
 
 func (in *intake) load(w *wire.Load, at string) beam.Load {
@@ -173,6 +192,7 @@ func (in *intake) load(w *wire.Load, at string) beam.Load {
 		From: value(w.From), To: value(w.To), At: value(w.At),
 		Intensity: value(w.Intensity), IntensityEnd: value(w.IntensityEnd), Varies: w.IntensityEnd != nil,
 		Force: value(w.Force), Moment: value(w.Moment), Hung: value(w.Hung),
+		Path: word[beam.TorquePath](w.Path),
 	}
 	switch {
 	case w.Sustained != nil:
@@ -180,20 +200,17 @@ func (in *intake) load(w *wire.Load, at string) beam.Load {
 	case l.Case == beam.Dead:
 		l.Sustained = 1
 	}
-	given := map[string]bool{
-		"from": w.From != nil, "to": w.To != nil, "at": w.At != nil, "intensity": w.Intensity != nil,
-		"intensity_end": w.IntensityEnd != nil, "force": w.Force != nil, "moment": w.Moment != nil,
-	}
-	needs, may := belongs(l.Shape)
-	for _, m := range loadMembers {
-		needed := hasWord(needs, m.name)
-		switch {
-		case needed && !given[m.name]:
-			in.fault(at+"/"+m.name, m.what, "is missing; a %s load needs it", w.Shape)
-		case given[m.name] && !needed && !hasWord(may, m.name):
-			in.fault(at+"/"+m.name, "", "does not belong to a %s load, which has %s", w.Shape, strings.Join(strings.Fields(needs+" "+may), ", "))
-		}
-	}
+	needs, may := loadMembers(l.Shape)
+	in.belong(at, "a "+w.Shape+" load", []member{
+		{"from", aLength, w.From != nil},
+		{"to", aLength, w.To != nil},
+		{"at", aLength, w.At != nil},
+		{"intensity", aLineLoad, w.Intensity != nil},
+		{"intensity_end", aLineLoad, w.IntensityEnd != nil},
+		{"force", aForce, w.Force != nil},
+		{"moment", aMoment, w.Moment != nil},
+		{"path", "", w.Path != nil},
+	}, needs, may)
 	return l
 }
 
@@ -211,6 +228,10 @@ func (in *intake) demand(w *wire.Demand, i int, at string) beam.Demand {
 		in.fault(at, "at least one of moment, shear, torque, axial", "has no force")
 	}
 	d := beam.Demand{Name: w.Name, Moment: value(w.Moment), Shear: value(w.Shear), Torque: value(w.Torque), Axial: value(w.Axial)}
+	d.Path = word[beam.TorquePath](w.Path)
+	if w.Path != nil && w.Torque == nil {
+		in.fault(at+"/path", "", "belongs to a torque, and none is given")
+	}
 	if d.Name == "" {
 		d.Name = fmt.Sprintf("demand %d", i+1)
 	}
@@ -221,7 +242,7 @@ func (in *intake) preferences(w *wire.Preferences, at string) beam.Preferences {
 	return beam.Preferences{
 		Bars: w.Bars, Stirrups: w.Stirrups,
 		MaxLayers: value(w.MaxLayers), MaxLegs: value(w.MaxLegs), MaxZones: value(w.MaxZones),
-		Mixed: value(w.Mixed), Depths: w.Depths, Prefer: word[beam.Preference](w.Prefer),
+		Mixed: value(w.Mixed), Bundles: value(w.Bundles), Depths: w.Depths, Prefer: word[beam.Preference](w.Prefer),
 		SpacingBy: above(in, at+"/spacing_step", w.SpacingStep), KeepBest: value(w.Alternatives),
 		NoCures: w.Cures != nil && !*w.Cures,
 	}
@@ -235,65 +256,4 @@ func readings(displaced, yield, row, method, corner *string) beam.Readings {
 		ShearMethod:     word[beam.ShearMethod](method),
 		TuckedCorner:    value(corner) == "tucked",
 	}
-}
-
-// layout converts a layout; what is left out is taken from the brief.
-func (in *intake) layout(w *wire.Layout, b *beam.Brief, at string) beam.Layout {
-	var l beam.Layout
-	for i := range w.Longitudinal {
-		l.Longitudinal = append(l.Longitudinal, in.row(&w.Longitudinal[i], fmt.Sprintf("%s/longitudinal/%d", at, i)))
-	}
-	for i := range w.Transverse {
-		l.Transverse = append(l.Transverse, in.zone(&w.Transverse[i], b, fmt.Sprintf("%s/transverse/%d", at, i)))
-	}
-	return l
-}
-
-func (in *intake) row(w *wire.Row, at string) beam.Row {
-	r := beam.Row{
-		Mark: w.Mark, Bar: w.Bar, Count: w.Count, Face: word[beam.Face](&w.Face), Layer: value(w.Layer),
-		Spacing: value(w.Spacing), InCompression: value(w.InCompression),
-		From: value(w.From), To: value(w.To), Start: "straight", End: "straight",
-	}
-	side := r.Face == beam.Side
-	if w.Layer == nil && !side {
-		r.Layer = 1
-	}
-	switch {
-	case side && w.Layer != nil:
-		in.fault(at+"/layer", "", "does not belong to side bars")
-	case side && w.InCompression != nil:
-		in.fault(at+"/in_compression", "", "does not belong to side bars")
-	case side && w.Spacing == nil:
-		in.fault(at+"/spacing", `a length, e.g. "5 in" or "120 mm"`, "is missing; side bars need it")
-	case !side && w.Spacing != nil:
-		in.fault(at+"/spacing", "", "belongs to side bars alone")
-	}
-	if w.From != nil && w.To == nil {
-		in.fault(at+"/to", `a length, e.g. "12 ft" or "3.5 m"`, "is missing, and from is given")
-	}
-	return r
-}
-
-func (in *intake) zone(w *wire.Zone, b *beam.Brief, at string) beam.Zone {
-	z := beam.Zone{
-		Mark: w.Mark, Span: value(w.Span), Bar: w.Bar, Legs: w.Legs, Spacing: w.Spacing,
-		Count: value(w.Count), From: value(w.From), To: value(w.To), Form: "closed",
-	}
-	if w.Form != nil {
-		z.Form = *w.Form
-	}
-	if len(b.Demands) > 0 {
-		if w.From != nil || w.To != nil || w.Count != nil || w.Span != nil {
-			in.fault(at, "", "has a place along a span, and the brief has demands in place of spans")
-		}
-		return z
-	}
-	if w.Span == nil {
-		z.Span = 1
-	}
-	if w.To == nil && z.Span >= 1 && z.Span <= len(b.Spans) {
-		z.To = b.Spans[z.Span-1]
-	}
-	return z
 }

@@ -65,9 +65,11 @@ func (o *outlet) design(r *beam.Result, inputHash string) wire.Design {
 		d.Governing = &wire.Governing{Check: g.ID, Utilization: g.Utilization}
 	}
 	if r.Section.Shape != 0 {
-		d.Section = &wire.SectionReply{
-			Shape: r.Section.Shape.String(), Width: express(o, r.Section.Width), Depth: express(o, r.Section.Depth),
+		var measured beam.Geometry
+		if r.Problem != nil {
+			measured = r.Problem.Geometry
 		}
+		d.Section = o.section(&r.Section, &measured)
 	}
 	d.Bars = make([]wire.BarAt, len(r.Bars))
 	for i, b := range r.Bars {
@@ -128,31 +130,6 @@ func orEmpty(list []string) []string {
 		return []string{}
 	}
 	return list
-}
-
-func (o *outlet) layout(l *beam.Layout) wire.LayoutReply {
-	w := wire.LayoutReply{
-		Longitudinal: make([]wire.RowReply, len(l.Longitudinal)),
-		Transverse:   make([]wire.ZoneReply, len(l.Transverse)),
-	}
-	for i, r := range l.Longitudinal {
-		row := wire.RowReply{
-			Mark: r.Mark, Bar: r.Bar, Count: r.Count, Face: r.Face.String(), Layer: r.Layer,
-			Spacing: optional(o, r.Spacing), InCompression: r.InCompression, Start: r.Start, End: r.End,
-		}
-		if !r.To.IsZero() {
-			row.From, row.To = o.place(r.From), o.place(r.To)
-		}
-		w.Longitudinal[i] = row
-	}
-	for i, z := range l.Transverse {
-		zone := wire.ZoneReply{Mark: z.Mark, Span: z.Span, Bar: z.Bar, Legs: z.Legs, Spacing: express(o, z.Spacing), Count: z.Count, Form: z.Form}
-		if !z.To.IsZero() {
-			zone.From, zone.To = o.place(z.From), o.place(z.To)
-		}
-		w.Transverse[i] = zone
-	}
-	return w
 }
 
 func (o *outlet) checks(list []beam.Check) []wire.Check {

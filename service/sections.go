@@ -48,6 +48,11 @@ func (s *Service) strengths(w http.ResponseWriter, r *http.Request) error {
 	}
 	out := outlet{system: reportIn(request.ReportIn, code.Edition().System), full: request.Detail != nil}
 	answer := out.strengths(&found)
+	if answer.Flexure != nil {
+		section := query.Section
+		measured, _ := beam.GeometryOf(&section) // a section with faults has no strengths
+		answer.Section = out.section(&section, &measured)
+	}
 	answer.Engine, answer.Code, answer.ReportIn, answer.InputHash = thisEngine(), request.Code, out.system, sum
 	answer.Cautions = orEmpty(code.Cautions())
 	return reply(w, http.StatusOK, answer)
@@ -57,10 +62,14 @@ func thisEngine() wire.Engine { return wire.Engine{Name: "soffit", Version: beam
 
 func (in *intake) query(w *wire.StrengthsRequest) beam.SectionQuery {
 	q := beam.SectionQuery{
-		Section:  in.section(&w.Section),
+		Section:  in.section(&w.Section, "/section"),
 		Concrete: in.concrete(&w.Concrete, "/concrete"),
 		Bending:  beam.Positive,
 		Readings: readings(w.DisplacedConcrete, w.Grade60Yield, w.ShearRow, w.ShearMethod, nil),
+	}
+	q.Readings.TorsionAngle = value(w.TorsionAngle)
+	if w.Section.Slab != nil {
+		in.fault("/section/slab", "a flange_width", "does not belong to a bare section: the width that works with the web follows from the clear span too")
 	}
 	if w.Bending != nil {
 		q.Bending = word[beam.Sense](w.Bending)
@@ -81,6 +90,17 @@ func (in *intake) query(w *wire.StrengthsRequest) beam.SectionQuery {
 			Cover:    above(in, "/stirrups/cover", v.Cover),
 			Diameter: above(in, "/stirrups/diameter", v.Diameter),
 			Across:   above(in, "/stirrups/across", v.Across),
+			Legs:     value(v.Legs),
+			Angle:    value(v.Angle),
+			Open:     value(v.Form) == "open",
+		}
+	}
+	if v := w.Bent; v != nil {
+		q.Bent = &beam.BentSteel{
+			Area:    above(in, "/bent/area", &v.Area),
+			Yield:   above(in, "/bent/yield", &v.Yield),
+			Angle:   v.Angle,
+			Spacing: above(in, "/bent/spacing", v.Spacing),
 		}
 	}
 	if w.Demand != nil {
@@ -117,12 +137,23 @@ func (o *outlet) strengths(s *beam.Strengths) wire.Strengths {
 		GreatestSpacing: express(o, v.GreatestSpacing), GreatestAcross: optional(o, v.GreatestAcross),
 		Notes: orEmpty(v.Notes), Verdict: verdictOf(s.Checks, "shear"),
 	}
-	t := &s.Torsion
-	w.Torsion = &wire.Torsion{
-		Area: express(o, t.Area), Perimeter: express(o, t.Perimeter), Threshold: express(o, t.Threshold), Cracking: express(o, t.Cracking),
-		Phi: t.Phi, MayBeNeglected: t.MayBeNeglected, Verdict: verdictOf(s.Checks, "torsion"),
-	}
+	w.Torsion = o.torsion(&s.Torsion)
+	w.Torsion.Verdict = verdictOf(s.Checks, "torsion")
 	return w
+}
+
+func (o *outlet) torsion(t *beam.TorsionStrength) *wire.Torsion {
+	return &wire.Torsion{
+		Area: express(o, t.Area), Perimeter: express(o, t.Perimeter), FlangeCounted: t.FlangeCounted, Hollow: t.Hollow,
+		Threshold: express(o, t.Threshold), Cracking: express(o, t.Cracking), Phi: t.Phi, MayBeNeglected: t.MayBeNeglected,
+		Torque: optional(o, t.Torque), Shed: optional(o, t.Shed),
+		StirrupArea: optional(o, t.StirrupArea), StirrupPerimeter: optional(o, t.StirrupPerimeter), FlowArea: optional(o, t.FlowArea), Angle: t.Angle,
+		Stress: optional(o, t.Section), StressLimit: optional(o, t.SectionLimit),
+		Transverse: optional(o, t.Transverse), OuterLeg: optional(o, t.OuterLeg), OuterLegProvided: optional(o, t.OuterLegProvided),
+		MinimumPerLength: optional(o, t.MinimumTransverse), GreatestSpacing: optional(o, t.GreatestSpacing),
+		Longitudinal: optional(o, t.Longitudinal), MinimumLongitudinal: optional(o, t.MinimumLongitudinal),
+		Nominal: optional(o, t.Nominal), Design: optional(o, t.Design), Notes: orEmpty(t.Notes),
+	}
 }
 
 // verdictOf is the verdict of the checks whose id begins with a word: failed

@@ -60,6 +60,8 @@ func TestTheDoorAdmitsTheWordsOfTheModel(t *testing.T) {
 		{wire.Brief{}, "shear_method", enumeration[beam.ShearMethod]()},
 		{wire.StrengthsRequest{}, "bending", enumeration[beam.Sense]()},
 		{wire.Row{}, "face", enumeration[beam.Face]()},
+		{wire.Load{}, "path", enumeration[beam.TorquePath]()},
+		{wire.Demand{}, "path", enumeration[beam.TorquePath]()},
 	} {
 		require.Equal(t, tc.want, wordsOf(t, tc.zero, tc.member), tc.member)
 	}
@@ -84,4 +86,5 @@ func TestLayoutsGoRound(t *testing.T) {
 	require.Equal(t, members(wire.Layout{}), members(wire.LayoutReply{}))
 	require.Equal(t, members(wire.Row{}), members(wire.RowReply{}))
 	require.Equal(t, members(wire.Zone{}), members(wire.ZoneReply{}))
+	require.Equal(t, members(wire.Bent{}), members(wire.BentReply{}))
 }

@@ -32,13 +32,40 @@ type Brief struct {
 	ShearRow          *string `json:"shear_row,omitzero" validate:"omitnil,oneof=larger a b" doc:"Which of two permitted expressions for the concrete's shear strength is used. Default: larger."`
 	ShearMethod       *string `json:"shear_method,omitzero" validate:"omitnil,oneof=simplified detailed" doc:"Expression for the concrete's shear strength in editions that have both. Default: simplified."`
 	Corner            *string `json:"corner,omitzero" validate:"omitnil,oneof=seated tucked" doc:"Whether a corner bar sits on the stirrup's leg at the bend's tangent point or is pushed into the bend. Default: seated."`
+
+	TorsionAngle  *float64 `json:"torsion_angle,omitzero" validate:"omitnil,min=10,max=80" doc:"Angle of the compression diagonals that carry torsion with the axis of the beam, in degrees, and within the code's own limits. Default: the code's usual one."`
+	CountSideBars *bool    `json:"count_side_bars,omitzero" doc:"true: side-face bars count in bending by strain compatibility, where no torque needs them. Default: false."`
 }
 
-// Section is a concrete outline.
+// Section is a concrete outline. Which members belong to it depends on shape:
+// rectangular (width, depth), tee and ell (web_width, depth, flange_thickness,
+// and either flange_width or slab; a tee may be isolated), inverted-tee
+// (web_width, depth, flange_thickness, flange_width), polygon (outline, and
+// voids if it is hollow).
 type Section struct {
-	Shape string       `json:"shape" validate:"oneof=rectangular tee ell inverted-tee polygon" doc:"Shape of the outline."`
-	Width units.Length `json:"width" doc:"Width, 50 mm to 10 m."`
-	Depth units.Length `json:"depth" doc:"Overall depth, 50 mm to 10 m."`
+	Shape           string        `json:"shape" validate:"oneof=rectangular tee ell inverted-tee polygon" doc:"Shape of the outline. tee and ell have their flange at the top, an inverted-tee its ledges at the bottom."`
+	Width           *units.Length `json:"width,omitzero" doc:"Width of a rectangle, 50 mm to 10 m."`
+	WebWidth        *units.Length `json:"web_width,omitzero" doc:"Width of the web of a flanged section, 50 mm to 10 m."`
+	Depth           *units.Length `json:"depth,omitzero" doc:"Overall depth, 50 mm to 10 m; of a polygon it follows from the outline."`
+	FlangeThickness *units.Length `json:"flange_thickness,omitzero" doc:"Thickness of the flange, or of the ledges of an inverted-tee; at least 50 mm, less than depth."`
+	FlangeWidth     *units.Length `json:"flange_width,omitzero" doc:"Overall width of the flange, web included, as far as it works with the web: half of the rest on each side, of an ell all of it on the right. At most 10 m."`
+	Slab            *Slab         `json:"slab,omitzero" doc:"The floor that a tee or an ell is cast with, from which the code finds the width that works with the web, in place of flange_width. Needs a span."`
+	Isolated        *bool         `json:"isolated,omitzero" doc:"true: a tee of its own, whose flange gives it compression area only. Default: false, part of a floor."`
+	Joist           *bool         `json:"joist,omitzero" doc:"true: a rib of a one-way joist floor. Default: false."`
+	Outline         []Point       `json:"outline,omitzero" validate:"omitnil,min=3,max=200,dive" doc:"Corners of a polygon in order, either way round. Every level must cut it in one piece, and an upright strip in which the stirrups stand must run through from top to bottom."`
+	Voids           [][]Point     `json:"voids,omitzero" validate:"omitnil,min=1,max=20,dive,min=3,max=200,dive" doc:"Hollows of a polygon: the corners of each in order, inside the outline and clear of it and of each other."`
+}
+
+// Slab is the floor that a beam is cast with.
+type Slab struct {
+	ClearLeft  *units.Length `json:"clear_left,omitzero" doc:"Clear distance to the next web on the left, above zero. Default: no slab there, as at the edge of a floor."`
+	ClearRight *units.Length `json:"clear_right,omitzero" doc:"Clear distance to the next web on the right, above zero. Default: no slab there."`
+}
+
+// Point is a corner of an outline.
+type Point struct {
+	X units.Length `json:"x" doc:"To the right, from any origin that the section keeps to; within 100 m."`
+	Y units.Length `json:"y" doc:"Upward, from the same origin; within 100 m."`
 }
 
 // Concrete is concrete as specified.
@@ -47,6 +74,9 @@ type Concrete struct {
 	Density   *units.Density `json:"density,omitzero" doc:"Density, 500 kg/m3 to 5000 kg/m3. Default: the code's usual value for the kind."`
 	Kind      *string        `json:"kind,omitzero" validate:"omitnil,oneof=normalweight sand-lightweight all-lightweight fine-blend coarse-blend" doc:"Weight class. Default: normalweight."`
 	Aggregate *units.Length  `json:"aggregate,omitzero" doc:"Nominal maximum aggregate size, above zero, at most 200 mm. Default: assumed and listed."`
+	Splitting *units.Stress  `json:"splitting,omitzero" doc:"Average splitting tensile strength of a lightweight concrete, from tests, above zero. Default: not known. Codes that do not go by it say so."`
+	Normal    *float64       `json:"normal_share,omitzero" validate:"omitnil,min=0,max=1" doc:"Share of normalweight aggregate, by absolute volume, in the fine part of a fine-blend or the coarse part of a coarse-blend concrete."`
+	Fibres    *bool          `json:"fibres,omitzero" doc:"true: steel fibres as the code asks for them to stand in for least stirrups. Default: false."`
 }
 
 // Reinforcement says where bars come from.
@@ -66,8 +96,8 @@ type Support struct {
 
 // Load is one load of one case. Which members belong to it depends on shape:
 // uniform (intensity), partial (intensity, from, to, and intensity_end if it
-// varies), point (force, at), couple and torque (moment, at), uniform-torque
-// (moment, over the span).
+// varies), point (force, at), couple (moment, at), torque (moment, at, and
+// path), uniform-torque (moment, over the span, and path).
 type Load struct {
 	Case         string          `json:"case" validate:"oneof=dead live roof-live snow rain wind earthquake" doc:"Origin of the load."`
 	Shape        string          `json:"shape" validate:"oneof=uniform partial point couple torque uniform-torque" doc:"How the load is spread."`
@@ -81,6 +111,7 @@ type Load struct {
 	Moment       *units.Moment   `json:"moment,omitzero" doc:"Moment of a couple, clockwise positive, or of a torque about the beam's axis."`
 	Sustained    *float64        `json:"sustained,omitzero" validate:"omitnil,min=0,max=1" doc:"Share of the load that stays. Default: 1 for dead loads, otherwise 0."`
 	Hung         *bool           `json:"hung,omitzero" doc:"true: the load acts at or below the soffit."`
+	Path         *string         `json:"path,omitzero" validate:"omitnil,oneof=equilibrium compatibility" doc:"Why a torque acts. equilibrium: nothing else can carry it. compatibility: it comes from the twist that neighbours impose, and part of it may be shed to them. Default: equilibrium."`
 }
 
 // Demand is one set of factored forces.
@@ -89,6 +120,7 @@ type Demand struct {
 	Moment *units.Moment `json:"moment,omitzero" doc:"Bending moment, sagging positive."`
 	Shear  *units.Force  `json:"shear,omitzero" doc:"Shear force."`
 	Torque *units.Moment `json:"torque,omitzero" doc:"Torsional moment."`
+	Path   *string       `json:"path,omitzero" validate:"omitnil,oneof=equilibrium compatibility" doc:"Why the torque acts. equilibrium: nothing else can carry it. compatibility: part of it may be shed to neighbours. Default: equilibrium."`
 	Axial  *units.Force  `json:"axial,omitzero" doc:"Axial force, compression positive."`
 }
 
@@ -106,6 +138,7 @@ type Preferences struct {
 	MaxLegs      *int           `json:"max_legs,omitzero" validate:"omitnil,min=2,max=12" doc:"Most stirrup legs. Default: 4."`
 	MaxZones     *int           `json:"max_zones,omitzero" validate:"omitnil,min=1,max=3" doc:"Most stirrup zones in a span, 1 or 3. Default: 3."`
 	Mixed        *bool          `json:"mixed,omitzero" doc:"true: allow two neighbouring sizes on one face."`
+	Bundles      *int           `json:"bundles,omitzero" validate:"omitnil,min=1,max=4" doc:"Most bars in contact in a bundle; 1: none. Default: 1."`
 	Depths       []units.Length `json:"depths,omitzero" validate:"omitnil,min=1,max=20" doc:"Overall depths to try besides that of the section."`
 	Prefer       *string        `json:"prefer,omitzero" validate:"omitnil,oneof=least-steel fewest-bars one-size shallowest fewest-marks" doc:"What feasible layouts are ranked by. Default: least-steel."`
 	SpacingStep  *units.Length  `json:"spacing_step,omitzero" doc:"Stirrup spacings are multiples of this, 1 mm to 300 mm. Default: 1/2 in or 10 mm."`
@@ -123,6 +156,7 @@ type CheckRequest struct {
 type Layout struct {
 	Longitudinal []Row  `json:"longitudinal" validate:"max=40,dive" doc:"Groups of like bars."`
 	Transverse   []Zone `json:"transverse" validate:"max=40,dive" doc:"Runs of like stirrups."`
+	Bent         []Bent `json:"bent,omitzero" validate:"max=40,dive" doc:"Bars bent across the web to carry shear. Default: none."`
 }
 
 // Row is a group of like bars in one layer of one face.
@@ -131,8 +165,11 @@ type Row struct {
 	Bar           string        `json:"bar" validate:"min=1,max=20" doc:"Size, as the brief's catalog names it."`
 	Count         int           `json:"count" validate:"min=1,max=200" doc:"Number of bars; of side bars, on each side face."`
 	Face          string        `json:"face" validate:"oneof=bottom top side" doc:"Face at which the bars lie."`
-	Layer         *int          `json:"layer,omitzero" validate:"omitnil,min=1,max=4" doc:"Layer of the face, 1 nearest to it. Default: 1. Side bars have none."`
-	Spacing       *units.Length `json:"spacing,omitzero" doc:"Vertical spacing of side bars, counted up from the highest layer at the bottom with more than one bar."`
+	Layer         *int          `json:"layer,omitzero" validate:"omitnil,min=1,max=20" doc:"Layer of the face, 1 nearest to it. Default: 1. Side bars have none."`
+	Flange        *bool         `json:"flange,omitzero" doc:"true: the bars lie in the flange beside the web, at the level of the first layer, half of them on each side (an odd one more on the left), of an ell all on its one side."`
+	Spacing       *units.Length `json:"spacing,omitzero" doc:"Of side bars, their vertical spacing, counted up from the highest layer at the bottom with more than one bar. Of bars in a flange, their spacing outward from the outermost bar of the web, or from the row listed before."`
+	Bundled       *int          `json:"bundled,omitzero" validate:"omitnil,min=1,max=4" doc:"Bars in contact in each bundle; count is a multiple of it. Default: 1, single bars."`
+	Yield         *units.Stress `json:"yield,omitzero" doc:"Yield strength of these bars. Default: that of the brief."`
 	InCompression *bool         `json:"in_compression,omitzero" doc:"true: the bars are relied on as compression steel. Default: false, they hold stirrups."`
 	From          *units.Length `json:"from,omitzero" doc:"Start along the beam. Default: the whole length."`
 	To            *units.Length `json:"to,omitzero" doc:"End along the beam. Default: the whole length."`
@@ -151,4 +188,19 @@ type Zone struct {
 	From    *units.Length `json:"from,omitzero" doc:"Start of the zone, from the span's left end. Default: the whole span."`
 	To      *units.Length `json:"to,omitzero" doc:"End of the zone, from the span's left end. Default: the whole span."`
 	Form    *string       `json:"form,omitzero" validate:"omitnil,oneof=closed open" doc:"Whether the stirrup is closed. Default: closed."`
+	Angle   *float64      `json:"angle,omitzero" validate:"omitnil,min=15,max=90" doc:"Angle of the legs with the axis of the beam, in degrees, leaning against the shear, and within the code's own limits. Default: 90."`
+}
+
+// Bent is longitudinal bars bent across the web to carry shear there, where
+// they count for shear alone.
+type Bent struct {
+	Mark    string        `json:"mark,omitzero" validate:"max=40" doc:"Mark of the bars."`
+	Bar     string        `json:"bar" validate:"min=1,max=20" doc:"Size, as the brief's catalog names it."`
+	Count   int           `json:"count" validate:"min=1,max=200" doc:"Bars bent at one place."`
+	Span    *int          `json:"span,omitzero" validate:"omitnil,min=1,max=20" doc:"Number of the span from the left, from 1. Default: 1."`
+	At      units.Length  `json:"at" doc:"Where the first slope crosses mid-depth, from the span's left end."`
+	Angle   float64       `json:"angle" validate:"min=15,max=90" doc:"Angle of the slope with the axis of the beam, in degrees, and within the code's own limits."`
+	Rises   string        `json:"rises" validate:"oneof=left right" doc:"End of the span towards which the bars rise."`
+	Bends   *int          `json:"bends,omitzero" validate:"omitnil,min=1,max=200" doc:"Places, one spacing apart to the right, at which as many bars are bent. Default: 1."`
+	Spacing *units.Length `json:"spacing,omitzero" doc:"Distance between those places; needed where there is more than one."`
 }

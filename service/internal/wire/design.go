@@ -54,17 +54,44 @@ type Governing struct {
 	Utilization float64 `json:"utilization" doc:"Demand over capacity; 1e9 stands for no capacity at all."`
 }
 
-// SectionReply is a section in a reply.
+// SectionReply is a section in a reply, with its flange as resolved.
 type SectionReply struct {
-	Shape string        `json:"shape" doc:"Shape of the outline."`
-	Width units.Measure `json:"width" doc:"Width."`
-	Depth units.Measure `json:"depth" doc:"Overall depth."`
+	Shape           string         `json:"shape" doc:"Shape of the outline."`
+	Width           *units.Measure `json:"width,omitzero" doc:"Width of a rectangle."`
+	WebWidth        *units.Measure `json:"web_width,omitzero" doc:"Width of the web of a flanged section; of a polygon, of the upright strip in which the stirrups stand."`
+	Depth           units.Measure  `json:"depth" doc:"Overall depth."`
+	FlangeThickness *units.Measure `json:"flange_thickness,omitzero" doc:"Thickness of the flange or of the ledges."`
+	FlangeWidth     *units.Measure `json:"flange_width,omitzero" doc:"Width of the flange that works with the web: as given, or as the code finds it from the slab."`
+	OverhangLeft    *units.Measure `json:"overhang_left,omitzero" doc:"Flange on the left of the web. Absent: none."`
+	OverhangRight   *units.Measure `json:"overhang_right,omitzero" doc:"Flange on the right of the web. Absent: none."`
+	Measured        *Measured      `json:"measured,omitzero" doc:"What the section measures. Absent where its flange is not resolved."`
+}
+
+// Measured is what a section measures.
+type Measured struct {
+	Gross       units.Measure `json:"gross" doc:"Area of the concrete, net of hollows."`
+	Enclosed    units.Measure `json:"enclosed" doc:"Area inside the outside perimeter, hollows included."`
+	Perimeter   units.Measure `json:"perimeter" doc:"Outside perimeter."`
+	Least       units.Measure `json:"least_width" doc:"Least width of concrete at any level within the strip in which the stirrups stand: the web of shear."`
+	Overall     units.Measure `json:"overall_width" doc:"Width between the ends."`
+	TopWidth    units.Measure `json:"top_width" doc:"Width of the top face."`
+	BottomWidth units.Measure `json:"bottom_width" doc:"Width of the bottom face."`
+	Walls       *Walls        `json:"walls,omitzero" doc:"Of a hollow section: its least walls."`
+}
+
+// Walls are the least thicknesses of concrete between the hollows of a section
+// and the outside of the strip in which the stirrups stand.
+type Walls struct {
+	Side   units.Measure `json:"side" doc:"At the sides."`
+	Top    units.Measure `json:"top" doc:"At the top."`
+	Bottom units.Measure `json:"bottom" doc:"At the bottom."`
 }
 
 // LayoutReply is a layout in a reply; it can be sent to /v1/checks as it is.
 type LayoutReply struct {
 	Longitudinal []RowReply  `json:"longitudinal" doc:"Groups of like bars."`
 	Transverse   []ZoneReply `json:"transverse" doc:"Runs of like stirrups."`
+	Bent         []BentReply `json:"bent" doc:"Bars bent across the web to carry shear."`
 }
 
 // RowReply is a [Row] in a reply.
@@ -74,7 +101,10 @@ type RowReply struct {
 	Count         int            `json:"count" doc:"Number of bars; of side bars, on each side face."`
 	Face          string         `json:"face" enum:"bottom top side" doc:"Face at which the bars lie."`
 	Layer         int            `json:"layer,omitzero" doc:"Layer of the face, 1 nearest to it. Side bars have none."`
-	Spacing       *units.Measure `json:"spacing,omitzero" doc:"Vertical spacing of side bars."`
+	Flange        bool           `json:"flange,omitzero" doc:"true: the bars lie in the flange beside the web."`
+	Spacing       *units.Measure `json:"spacing,omitzero" doc:"Vertical spacing of side bars, or spacing across of bars in a flange."`
+	Bundled       int            `json:"bundled,omitzero" doc:"Bars in contact in each bundle. Absent: single bars."`
+	Yield         *units.Measure `json:"yield,omitzero" doc:"Yield strength of these bars. Absent: that of the brief."`
 	InCompression bool           `json:"in_compression,omitzero" doc:"true: the bars are relied on as compression steel."`
 	From          *units.Measure `json:"from,omitzero" doc:"Start along the beam. Absent with demands given directly."`
 	To            *units.Measure `json:"to,omitzero" doc:"End along the beam. Absent with demands given directly."`
@@ -93,14 +123,29 @@ type ZoneReply struct {
 	From    *units.Measure `json:"from,omitzero" doc:"Start of the zone, from the span's left end. Absent with demands given directly."`
 	To      *units.Measure `json:"to,omitzero" doc:"End of the zone, from the span's left end. Absent with demands given directly."`
 	Form    string         `json:"form,omitzero" doc:"Whether the stirrup is closed."`
+	Angle   float64        `json:"angle,omitzero" doc:"Angle of the legs with the axis of the beam, in degrees. Absent: 90."`
 }
 
-// BarAt is a bar by coordinates: x from the left face, y from the bottom.
+// BentReply is a [Bent] in a reply.
+type BentReply struct {
+	Mark    string         `json:"mark,omitzero" doc:"Mark of the bars."`
+	Bar     string         `json:"bar" doc:"Size, as the catalog names it."`
+	Count   int            `json:"count" doc:"Bars bent at one place."`
+	Span    int            `json:"span,omitzero" doc:"Number of the span."`
+	At      units.Measure  `json:"at" doc:"Where the first slope crosses mid-depth, from the span's left end."`
+	Angle   float64        `json:"angle" doc:"Angle of the slope with the axis of the beam, in degrees."`
+	Rises   string         `json:"rises" enum:"left right" doc:"End of the span towards which the bars rise."`
+	Bends   int            `json:"bends,omitzero" doc:"Places, one spacing apart, at which as many bars are bent."`
+	Spacing *units.Measure `json:"spacing,omitzero" doc:"Distance between those places. Absent with one."`
+}
+
+// BarAt is a bar by coordinates: x from the left end of the whole section, y
+// from its bottom.
 type BarAt struct {
 	Mark     string        `json:"mark" doc:"Mark of the bar."`
 	Bar      string        `json:"bar" doc:"Size, as the catalog names it."`
 	Diameter units.Measure `json:"diameter" doc:"Nominal diameter."`
-	X        units.Measure `json:"x" doc:"From the left face to the centre."`
+	X        units.Measure `json:"x" doc:"From the left end of the whole section to the centre."`
 	Y        units.Measure `json:"y" doc:"From the bottom face to the centre."`
 	Face     string        `json:"face" enum:"bottom top side" doc:"Face at which the bar lies."`
 	Layer    int           `json:"layer,omitzero" doc:"Layer of the face. Side bars have none."`

@@ -12,12 +12,14 @@ type StrengthsRequest struct {
 	Bending  *string          `json:"bending,omitzero" validate:"omitnil,oneof=positive negative" doc:"Sense of bending; positive has tension at the bottom. Default: positive."`
 	Layers   []SteelLayer     `json:"layers" validate:"min=1,max=40,dive" doc:"Longitudinal steel by layer."`
 	Stirrups *SectionStirrups `json:"stirrups,omitzero" doc:"Transverse steel. Default: none."`
+	Bent     *SectionBent     `json:"bent,omitzero" doc:"Longitudinal steel bent across the web. Default: none."`
 	Demand   *Demand          `json:"demand,omitzero" doc:"Factored forces to be judged. Default: none, and verdicts are not-applicable."`
 
-	DisplacedConcrete *string `json:"displaced_concrete,omitzero" validate:"omitnil,oneof=deduct ignore" doc:"Whether the concrete that compression bars displace is deducted. Default: deduct."`
-	Grade60Yield      *string `json:"grade60_yield_strain,omitzero" validate:"omitnil,oneof=exact rounded" doc:"Yield strain fy/Es, or rounded where the code permits it. Default: exact."`
-	ShearRow          *string `json:"shear_row,omitzero" validate:"omitnil,oneof=larger a b" doc:"Which of two permitted expressions for the concrete's shear strength is used. Default: larger."`
-	ShearMethod       *string `json:"shear_method,omitzero" validate:"omitnil,oneof=simplified detailed" doc:"Expression for the concrete's shear strength in editions that have both. Default: simplified."`
+	DisplacedConcrete *string  `json:"displaced_concrete,omitzero" validate:"omitnil,oneof=deduct ignore" doc:"Whether the concrete that compression bars displace is deducted. Default: deduct."`
+	Grade60Yield      *string  `json:"grade60_yield_strain,omitzero" validate:"omitnil,oneof=exact rounded" doc:"Yield strain fy/Es, or rounded where the code permits it. Default: exact."`
+	ShearRow          *string  `json:"shear_row,omitzero" validate:"omitnil,oneof=larger a b" doc:"Which of two permitted expressions for the concrete's shear strength is used. Default: larger."`
+	ShearMethod       *string  `json:"shear_method,omitzero" validate:"omitnil,oneof=simplified detailed" doc:"Expression for the concrete's shear strength in editions that have both. Default: simplified."`
+	TorsionAngle      *float64 `json:"torsion_angle,omitzero" validate:"omitnil,min=10,max=80" doc:"Angle of the compression diagonals that carry torsion with the axis of the beam, in degrees, and within the code's own limits. Default: the code's usual one."`
 }
 
 // SteelLayer is longitudinal steel at one depth.
@@ -32,9 +34,20 @@ type SectionStirrups struct {
 	Area     units.Area    `json:"area" doc:"Area of all legs that cross one shear crack at one stirrup."`
 	Spacing  units.Length  `json:"spacing" doc:"Spacing along the span."`
 	Yield    units.Stress  `json:"yield" doc:"Yield strength."`
-	Cover    *units.Length `json:"cover,omitzero" doc:"Clear cover to the stirrup."`
+	Cover    *units.Length `json:"cover,omitzero" doc:"Clear cover to the stirrup; torsion goes by it and by diameter."`
 	Diameter *units.Length `json:"diameter,omitzero" doc:"Diameter of the stirrup bar."`
 	Across   *units.Length `json:"across,omitzero" doc:"Greatest distance between legs across the web. Default: not known, and not judged."`
+	Legs     *int          `json:"legs,omitzero" validate:"omitnil,min=2,max=12" doc:"Legs that area is of. Default: 2."`
+	Angle    *float64      `json:"angle,omitzero" validate:"omitnil,min=15,max=90" doc:"Angle of the legs with the axis of the beam, in degrees, leaning against the shear, and within the code's own limits. Default: 90."`
+	Form     *string       `json:"form,omitzero" validate:"omitnil,oneof=closed open" doc:"Whether the stirrup is closed; torsion counts closed ones alone. Default: closed."`
+}
+
+// SectionBent is longitudinal steel bent across the web at a section.
+type SectionBent struct {
+	Area    units.Area    `json:"area" doc:"Area of the bars bent at one place."`
+	Yield   units.Stress  `json:"yield" doc:"Yield strength."`
+	Angle   float64       `json:"angle" validate:"min=15,max=90" doc:"Angle of the slope with the axis of the beam, in degrees, and within the code's own limits."`
+	Spacing *units.Length `json:"spacing,omitzero" doc:"Distance between places where as many bars are bent. Default: a single place."`
 }
 
 // FitsRequest asks how bars lie in a stirrup.
