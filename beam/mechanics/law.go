@@ -238,6 +238,63 @@ func (l Law) Kinks() []float64 {
 	return kinks
 }
 
+// leastTruncation is the least strain, over the ultimate strain, at which a law
+// may be cut off.
+const leastTruncation = 1e-4
+
+// Truncated returns the law cut off at a strain, which becomes its ultimate
+// strain: of a section under it the equilibrium is that at which the compression
+// face reaches this strain. The strain is from 1e-4 of the ultimate strain up to
+// the ultimate strain, and the law has some stress below it.
+func (l Law) Truncated(strain float64) (Law, error) {
+	if err := l.checkTruncation("strain", strain); err != nil {
+		return Law{}, err
+	}
+	t := l.truncated(nil, strain)
+	if err := t.checkStressed("strain"); err != nil {
+		return Law{}, err
+	}
+	return t, nil
+}
+
+func (l Law) checkTruncation(field string, strain float64) error {
+	if err := l.check(); err != nil {
+		return err
+	}
+	return checkNumber(field, strain, leastTruncation*l.ultimate, l.ultimate)
+}
+
+// checkStressed reports a truncated law that no stress is left of.
+func (l Law) checkStressed(field string) error {
+	if mean, _ := l.resultant(); mean < leastStress {
+		return &InputError{Field: field, Value: fmt.Sprint(l.ultimate), Allowed: "beyond where the law's stress begins"}
+	}
+	return nil
+}
+
+// truncated cuts the law off at a strain above zero. It keeps its pieces in
+// those given, so that none need be allocated.
+func (l Law) truncated(pieces []piece, strain float64) Law {
+	share := strain / l.ultimate
+	pieces = pieces[:0]
+	for i := range l.pieces {
+		p := &l.pieces[i]
+		if share-p.from <= 1e-9*share {
+			break // a piece thinner than this drowns in rounding
+		}
+		q, scale := piece{from: p.from / share}, 1.0
+		for j, c := range p.stress {
+			q.stress[j] = c * scale
+			scale *= share
+		}
+		pieces = append(pieces, q)
+	}
+	if len(pieces) == 0 {
+		pieces = append(pieces, piece{from: 1})
+	}
+	return newLaw(strain, pieces...)
+}
+
 // Resultant returns the mean stress over the neutral-axis depth of a rectangle
 // whose compression face is at the ultimate strain, and the depth of the
 // resultant from that face as a fraction of the neutral-axis depth: for a block

@@ -29,18 +29,26 @@ func RequiredTension(width, depth units.Length, law Law, steel Steel, moment uni
 	if err != nil {
 		return units.Area{}, err
 	}
-	// moment = mean·width·c·(d - lever·c), whose lesser root is wanted.
 	b, d := width.In(units.Metre), depth.In(units.Metre)
 	force, first := law.resultant()
-	lever := first / force
-	root := 1 - 4*lever*m/(force*b*d*d)
-	c := 2 * m / (force * b * d * (1 + math.Sqrt(math.Max(0, root))))
-	if root < 0 || c >= d {
+	c, ok := axisFor(force*b, first/force, d, m)
+	if !ok || c >= d {
 		// Steel at the depth of the neutral axis has no stress.
-		return units.Area{}, &UnreachableError{Moment: moment, Greatest: units.NewtonMetre.Of(force * b * d * d * (1 - lever))}
+		return units.Area{}, &UnreachableError{Moment: moment, Greatest: units.NewtonMetre.Of(d * d * (force - first) * b)}
 	}
 	tension := steel.Stress(law.ultimate * (d - c) / c)
 	return units.Newton.Of(force * b * c).DivStress(tension), nil
+}
+
+// axisFor returns the lesser root c of moment = force·c·(d - lever·c): the depth
+// of the neutral axis at which concrete with a force in proportion to it, acting
+// at lever times the depth, has the moment about steel at d.
+func axisFor(force, lever, d, moment float64) (c float64, ok bool) {
+	root := 1 - 4*lever*moment/(force*d*d)
+	if root < 0 {
+		return 0, false
+	}
+	return 2 * moment / (force * d * (1 + math.Sqrt(root))), true
 }
 
 // RequiredArea returns the least area of one layer of the section, the other

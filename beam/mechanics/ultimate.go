@@ -103,8 +103,9 @@ type Solver struct {
 	events []event
 	roots  []float64
 
-	layers []Layer // for RequiredArea
+	layers []Layer // for required areas
 	trial  Ultimate
+	pieces []piece // of a truncated law
 }
 
 // Ultimate finds the equilibrium of the section under the law and writes it to
