@@ -15,6 +15,7 @@ import (
 // A draft is a section in plain numbers, so that tests can rescale and turn it.
 type draft struct {
 	heights, widths  []float64 // of the parts, from the top, mm
+	belows           []float64 // their widths at the bottom, mm
 	depths, areas    []float64 // of the layers, mm and mm2
 	yields           []float64 // MPa
 	intensity, beta1 float64   // of the block, MPa
@@ -29,7 +30,13 @@ func draftOf(t *rapid.T) draft {
 	}
 	for range rapid.IntRange(1, 4).Draw(t, "parts") {
 		d.heights = append(d.heights, rapid.Float64Range(50, 400).Draw(t, "height"))
-		d.widths = append(d.widths, rapid.Float64Range(120, 1200).Draw(t, "width"))
+		width := rapid.Float64Range(120, 1200)
+		d.widths = append(d.widths, width.Draw(t, "width"))
+		below := d.widths[len(d.widths)-1]
+		if rapid.Bool().Draw(t, "tapers") {
+			below = width.Draw(t, "width below")
+		}
+		d.belows = append(d.belows, below)
 	}
 	for range rapid.IntRange(1, 6).Draw(t, "layers") {
 		d.depths = append(d.depths, d.depth()*rapid.Float64Range(0.03, 0.97).Draw(t, "depth"))
@@ -52,7 +59,10 @@ func (d draft) section() mechanics.Section {
 	stress := d.force / (d.length * d.length)
 	var top float64
 	for i, h := range d.heights {
-		s.Parts = append(s.Parts, mechanics.Part{Top: mm(d.length * top), Bottom: mm(d.length * (top + h)), Width: mm(d.length * d.widths[i])})
+		s.Parts = append(s.Parts, mechanics.Part{
+			Top: mm(d.length * top), Bottom: mm(d.length * (top + h)),
+			Width: mm(d.length * d.widths[i]), BottomWidth: mm(d.length * d.belows[i]),
+		})
 		top += h
 	}
 	for i := range d.depths {
@@ -67,9 +77,11 @@ func (d draft) section() mechanics.Section {
 // upsideDown turns the section over.
 func (d draft) upsideDown() draft {
 	h := d.depth()
-	d.heights, d.widths, d.depths = slices.Clone(d.heights), slices.Clone(d.widths), slices.Clone(d.depths)
+	d.heights, d.depths = slices.Clone(d.heights), slices.Clone(d.depths)
+	d.widths, d.belows = slices.Clone(d.belows), slices.Clone(d.widths)
 	slices.Reverse(d.heights)
 	slices.Reverse(d.widths)
+	slices.Reverse(d.belows)
 	for i := range d.depths {
 		d.depths[i] = h - d.depths[i]
 	}
@@ -124,7 +136,9 @@ func TestDescriptionDoesNotMatter(t *testing.T) {
 		share := rapid.Float64Range(0.1, 0.9).Draw(t, "share")
 		e.heights = slices.Insert(slices.Clone(d.heights), i, share*d.heights[i])
 		e.heights[i+1] *= 1 - share
-		e.widths = slices.Insert(slices.Clone(d.widths), i, d.widths[i])
+		cut := d.widths[i] + share*(d.belows[i]-d.widths[i])
+		e.widths = slices.Insert(slices.Clone(d.widths), i+1, cut)
+		e.belows = slices.Insert(slices.Clone(d.belows), i, cut)
 		j := rapid.IntRange(0, len(d.depths)-1).Draw(t, "layer")
 		e.depths = append(slices.Clone(d.depths), d.depths[j])
 		e.areas = append(slices.Clone(d.areas), share*d.areas[j])
@@ -136,6 +150,57 @@ func TestDescriptionDoesNotMatter(t *testing.T) {
 		v := e.ultimate(t, mechanics.Bending{})
 		require.InEpsilon(t, u.Nominal.In(units.NewtonMetre), v.Nominal.In(units.NewtonMetre), 1e-9)
 		require.Equal(t, u.Equilibria, v.Equilibria)
+	})
+}
+
+// Sections side by side are one section of their summed widths and layers: of a
+// section and a copy of it with every width and area scaled, the strength is the
+// sum, at the same neutral axis.
+func TestSectionsSideBySideAddUp(t *testing.T) {
+	rapid.Check(t, func(t *rapid.T) {
+		d := draftOf(t)
+		share := rapid.Float64Range(0.1, 5).Draw(t, "share")
+		axial := units.Kilonewton.Of(rapid.Float64Range(0, 200).Draw(t, "axial"))
+		both := d
+		both.widths, both.belows = slices.Clone(d.widths), slices.Clone(d.belows)
+		for i := range both.widths {
+			both.widths[i] *= 1 + share
+			both.belows[i] *= 1 + share
+		}
+		for i := range d.areas {
+			both.depths = append(both.depths, d.depths[i])
+			both.areas = append(both.areas, share*d.areas[i])
+			both.yields = append(both.yields, d.yields[i])
+		}
+		u := d.ultimate(t, mechanics.Bending{Axial: axial})
+		v := both.ultimate(t, mechanics.Bending{Axial: axial.Scale(1 + share)})
+		require.InEpsilon(t, u.NeutralAxis.In(units.Metre), v.NeutralAxis.In(units.Metre), 1e-9)
+		require.InDelta(t, 1+share, v.Nominal.Ratio(u.Nominal), 1e-8*(1+share))
+		require.InEpsilon(t, 1+share, v.Concrete.Ratio(u.Concrete), 1e-9)
+		require.Equal(t, u.Equilibria, v.Equilibria)
+	})
+}
+
+// Wider concrete at the compression face never lowers the strength, where the
+// tension steel yields and no concrete is deducted.
+func TestWiderCompressionFaceNeverWeakens(t *testing.T) {
+	rapid.Check(t, func(t *rapid.T) {
+		d := draftOf(t)
+		wider := d
+		wider.widths = slices.Clone(d.widths)
+		wider.widths[0] *= rapid.Float64Range(1, 2).Draw(t, "wider")
+		bending := mechanics.Bending{Displaced: mechanics.Ignore}
+		u, v := d.ultimate(t, bending), wider.ultimate(t, bending)
+		require.LessOrEqual(t, v.NeutralAxis.In(units.Metre), u.NeutralAxis.In(units.Metre)*(1+1e-12))
+		for _, l := range u.Layers {
+			if l.Strain < 0 && l.Strain > -0.0035 {
+				return // does not yield
+			}
+		}
+		if v.CompressionDepth.In(units.Millimetre) > d.heights[0] {
+			return // narrower below: the lever arm may not gain
+		}
+		require.GreaterOrEqual(t, v.Nominal.In(units.NewtonMetre), u.Nominal.In(units.NewtonMetre)*(1-1e-12))
 	})
 }
 
@@ -169,7 +234,7 @@ func TestReportedStateIsInEquilibrium(t *testing.T) {
 		// At most half of what the concrete alone carries: every section can.
 		concrete := 0.0 // N
 		for i := range d.heights {
-			concrete += d.intensity * d.heights[i] * d.widths[i]
+			concrete += d.intensity * d.heights[i] * (d.widths[i] + d.belows[i]) / 2
 		}
 		axial := units.Newton.Of(concrete * rapid.Float64Range(0, 0.5).Draw(t, "axial"))
 		u := d.ultimate(t, mechanics.Bending{Axial: axial})
@@ -235,9 +300,11 @@ func TestCrackedNeutralAxis(t *testing.T) {
 		x := c.NeutralAxis.In(units.Millimetre)
 		var first, size, top float64
 		for i, h := range d.heights {
-			bottom := math.Min(top+h, x)
-			if bottom > top {
-				first += d.widths[i] * (bottom - top) * (x - (top+bottom)/2)
+			if bottom := math.Min(top+h, x); bottom > top {
+				// A rectangle as wide as the top edge, and the triangle beside it.
+				tall := bottom - top
+				beside := (d.belows[i] - d.widths[i]) / h * tall
+				first += d.widths[i]*tall*(x-top-tall/2) + beside*tall/2*(x-top-2*tall/3)
 			}
 			top += h
 		}

@@ -9,13 +9,14 @@ import (
 	"soffit.example/units"
 )
 
-// The hand-written twin of the kernel, for the benchmarks: a rectangle, the
-// rectangular block and plain float64, for sagging without axial force, and
+// The hand-written twin of the kernel, for the benchmarks: a rectangle or a tee,
+// the rectangular block and plain float64, for sagging without axial force, and
 // nothing else. It does the same work: layers of any number, displaced concrete
 // deducted inside the block, the least of the equilibria, what each layer does,
 // and the moment.
 type twin struct {
 	width, intensity, factor, ultimate float64
+	overhangs, flange, middle          float64 // of a tee: both widths, thickness; centroid
 	layers                             []twinLayer
 }
 
@@ -27,7 +28,7 @@ type twinLayer struct {
 // balance returns compression less tension with the neutral axis at c.
 func (t *twin) balance(c float64) float64 {
 	a := t.factor * c
-	sum := t.intensity * t.width * a
+	sum := t.intensity * (t.width*a + t.overhangs*min(a, t.flange))
 	for i := range t.layers {
 		l := &t.layers[i]
 		f := l.modulus * t.ultimate * (c - l.depth) / c
@@ -67,7 +68,11 @@ func (t *twin) solve(height float64) (c, moment float64) {
 	}
 	c = (lo + hi) / 2
 	a := t.factor * c
-	moment = t.intensity * t.width * a * (height/2 - a/2)
+	moment = t.intensity * t.width * a * (t.middle - a/2)
+	if t.overhangs > 0 {
+		over := min(a, t.flange)
+		moment += t.intensity * t.overhangs * over * (t.middle - over/2)
+	}
 	for i := range t.layers {
 		l := &t.layers[i]
 		l.strain = t.ultimate * (c - l.depth) / c
@@ -77,7 +82,7 @@ func (t *twin) solve(height float64) (c, moment float64) {
 			l.displaced = t.intensity
 		}
 		l.force = l.area * (l.stress - l.displaced)
-		moment += l.force * (height/2 - l.depth)
+		moment += l.force * (t.middle - l.depth)
 	}
 	return c, moment
 }
@@ -89,7 +94,7 @@ func beamOf(tb testing.TB, n int) (Section, Law, twin) {
 	require.NoError(tb, err)
 	steel := Steel{Modulus: units.Megapascal.Of(200000), Yield: units.Megapascal.Of(420)}
 	s := Section{Parts: Rectangle(units.Millimetre.Of(350), units.Millimetre.Of(700))}
-	t := twin{width: 350, intensity: 25.5, factor: 0.85, ultimate: 0.003}
+	t := twin{width: 350, middle: 350, intensity: 25.5, factor: 0.85, ultimate: 0.003}
 	for i := range n {
 		depth := 640 - 580*float64(i)/float64(max(1, n-1))
 		area := 3000 / float64(1+i*i)
@@ -99,9 +104,24 @@ func beamOf(tb testing.TB, n int) (Section, Law, twin) {
 	return s, law, t
 }
 
+// teeOf returns such a beam with a flange.
+func teeOf(tb testing.TB, n int) (Section, Law, twin) {
+	tb.Helper()
+	s, law, t := beamOf(tb, n)
+	mm := units.Millimetre.Of
+	s.Parts = Tee(mm(900), mm(120), mm(350), mm(700))
+	t.overhangs, t.flange = 550, 120
+	t.middle = (550*120*60 + 350*700*350) / (550*120 + 350*700.0)
+	return s, law, t
+}
+
 func TestTwinAgrees(t *testing.T) {
-	for n := 1; n <= 30; n++ {
-		s, law, tw := beamOf(t, n)
+	for n := 1; n <= 60; n++ {
+		beam := beamOf
+		if n > 30 {
+			beam = func(tb testing.TB, n int) (Section, Law, twin) { return teeOf(tb, n-30) }
+		}
+		s, law, tw := beam(t, n)
 		u, err := s.Ultimate(law, Bending{})
 		require.NoError(t, err)
 		c, moment := tw.solve(700)
@@ -128,6 +148,21 @@ func TestSolverAllocatesNothing(t *testing.T) {
 		})
 		require.Zero(t, allocations, "cracked, %d layers", n)
 	}
+	// The same of a tee, and of one whose web tapers.
+	s, law, _ := teeOf(t, 6)
+	for _, below := range []float64{0, 300} {
+		s.Parts[1].BottomWidth = units.Millimetre.Of(below)
+		var solver Solver
+		var u Ultimate
+		require.Zero(t, testing.AllocsPerRun(100, func() {
+			if err := solver.Ultimate(&u, s, law, Bending{Sense: Hogging}); err != nil {
+				t.Fatal(err)
+			}
+			if _, err := s.Cracked(8, Sagging); err != nil {
+				t.Fatal(err)
+			}
+		}))
+	}
 }
 
 // BenchmarkUltimate times the kernel beside its twin; the ratio of the two is
@@ -150,6 +185,47 @@ func BenchmarkUltimate(b *testing.B) {
 				tw.solve(700)
 			}
 		})
+	}
+}
+
+// BenchmarkTee times a tee of six layers beside its twin, and what a tapering web
+// costs.
+func BenchmarkTee(b *testing.B) {
+	s, law, tw := teeOf(b, 6)
+	for _, below := range []float64{350, 300} {
+		s.Parts[1].BottomWidth = units.Millimetre.Of(below)
+		b.Run(fmt.Sprintf("below=%v/solver", below), func(b *testing.B) {
+			var solver Solver
+			var u Ultimate
+			b.ReportAllocs()
+			for b.Loop() {
+				if err := solver.Ultimate(&u, s, law, Bending{}); err != nil {
+					b.Fatal(err)
+				}
+			}
+		})
+	}
+	b.Run("twin", func(b *testing.B) {
+		for b.Loop() {
+			tw.solve(700)
+		}
+	})
+}
+
+func BenchmarkCurvature(b *testing.B) {
+	s, _, _ := teeOf(b, 6)
+	law, err := ParabolaRectangle(units.Megapascal.Of(30), 0.002, 0.0035, 2)
+	require.NoError(b, err)
+	var strains []float64
+	for i := range 35 {
+		strains = append(strains, float64(i+1)*0.0001)
+	}
+	var solver Solver
+	var points []CurvaturePoint
+	for b.Loop() {
+		if points, err = solver.MomentCurvature(points[:0], s, law, Bending{}, strains, 0); err != nil {
+			b.Fatal(err)
+		}
 	}
 }
 
