@@ -134,3 +134,60 @@ func ExampleSection_Cracked() {
 	// neutral axis 5.77 in, second moment 3770 in4
 	// steel stress 22.3 ksi
 }
+
+// The way of a beam to its strength: cracked and elastic at first, then with
+// yielding steel.
+func ExampleSolver_MomentCurvature() {
+	law, err := mechanics.ParabolaRectangle(units.Megapascal.Of(30), 0.002, 0.0035, 2)
+	if err != nil {
+		fmt.Println(err)
+		return
+	}
+	steel := mechanics.Steel{Modulus: units.Gigapascal.Of(200), Yield: units.Megapascal.Of(500)}
+	section := mechanics.Section{
+		Parts:  mechanics.Rectangle(units.Millimetre.Of(300), units.Millimetre.Of(600)),
+		Layers: []mechanics.Layer{{Depth: units.Millimetre.Of(540), Area: units.SquareMillimetre.Of(1500), Steel: steel}},
+	}
+	var solver mechanics.Solver
+	points, err := solver.MomentCurvature(nil, section, law, mechanics.Bending{}, []float64{0.0003, 0.0006, 0.0015, 0.0035}, 0)
+	if err != nil {
+		fmt.Println(err)
+		return
+	}
+	for _, p := range points {
+		fmt.Printf("%.4f: %6.2f /km, %3.0f kN-m, steel at %.4f\n",
+			p.Strain, 1000*p.Curvature.In(units.PerMetre), p.Moment.In(units.KilonewtonMetre), p.ExtremeStrain)
+	}
+	// Output:
+	// 0.0003:   1.84 /km, 101 kN-m, steel at 0.0007
+	// 0.0006:   3.61 /km, 195 kN-m, steel at 0.0013
+	// 0.0015:  10.12 /km, 365 kN-m, steel at 0.0040
+	// 0.0035:  34.00 /km, 373 kN-m, steel at 0.0149
+}
+
+// The steel of a tee with a web that tapers, for a moment that the concrete alone
+// cannot balance while the tension steel is strained by 0.005.
+func ExampleSolver_RequiredBoth() {
+	block, err := mechanics.RectangularBlock(units.Megapascal.Of(25.5), 0.85, 0.003)
+	if err != nil {
+		fmt.Println(err)
+		return
+	}
+	mm := units.Millimetre.Of
+	parts := mechanics.Tee(mm(400), mm(100), mm(300), mm(600))
+	parts[1].BottomWidth = mm(250)
+	steel := mechanics.Steel{Modulus: units.Gigapascal.Of(200), Yield: units.Megapascal.Of(420)}
+	tension, compression := mechanics.Layer{Depth: mm(540), Steel: steel}, mechanics.Layer{Depth: mm(60), Steel: steel}
+	var solver mechanics.Solver
+	for _, moment := range []float64{500, 900} {
+		below, above, err := solver.RequiredBoth(parts, block, mechanics.Bending{}, tension, compression, 0.005, units.KilonewtonMetre.Of(moment))
+		if err != nil {
+			fmt.Println(err)
+			return
+		}
+		fmt.Printf("%.0f kN-m: %.0f mm2 below, %.0f mm2 above\n", moment, below.In(units.SquareMillimetre), above.In(units.SquareMillimetre))
+	}
+	// Output:
+	// 500 kN-m: 2430 mm2 below, 0 mm2 above
+	// 900 kN-m: 4619 mm2 below, 950 mm2 above
+}

@@ -118,10 +118,12 @@ func FuzzUltimate(f *testing.F) {
 	}
 	seed(25.5, 0.85, 0.003, 120, 700, 900, 300, 640, 2000, 420, 60, 800, 420, 580, 100, 500, 0)
 	seed(20, 0.8, 0.0035, 100, 200, 300, 300, 0, 1, 400, 200, 1, 400, 100, 1e6, 1e4, 1e3)
+	seed(25.5, 0.85, 0.003, 120, 700, 900, 300, 640, 2000, 420, 60, 800, 420, 580, 100, 500, 0, 200, 350)
+	seed(30, 0.2, 0.002, 0.2, 500, 9000, 0.2, 400, 1000, 400, 100, 1, 400, 100, 1e6, 1e4, 100, 0.2, 5000)
 	seed(math.NaN(), 1, 0.1, 1e-300, 1e300, math.Inf(1), -1, 0, 0, 0, 0, 0, 0, 0, 0, 0, 0)
 	seed(1e-6, 0.01, 1e-5, 0.1, 1e7, 0.1, 1e7, 1e-9, 1e14, 1e-3, 1e7, 1e-6, 2e5, 5e6, 1, 1, -1e-9)
 	f.Fuzz(func(t *testing.T, kind uint8, data []byte) {
-		v := make([]float64, 17)
+		v := make([]float64, 19)
 		for i := range v {
 			if len(data) < 8*(i+1) {
 				break
@@ -144,6 +146,7 @@ func FuzzUltimate(f *testing.F) {
 			return
 		}
 		s := mechanics.Section{Parts: mechanics.Tee(mm(v[5]), mm(v[3]), mm(v[6]), mm(v[4]))}
+		s.Parts[0].BottomWidth, s.Parts[1].BottomWidth = mm(v[17]), mm(v[18])
 		for i := 7; i < 16; i += 3 {
 			s.Layers = append(s.Layers, layerSI(v[i], v[i+1], v[i+2]))
 		}
@@ -175,6 +178,19 @@ func FuzzUltimate(f *testing.F) {
 		require.LessOrEqual(t, u.Residual.Abs().Ratio(size), 1e-6)
 		if f, err := s.Fibres(law, bending); err == nil {
 			requireFinite(t, f.NeutralAxis.In(units.Metre), f.Nominal.In(units.NewtonMetre), f.Concrete.In(units.Newton))
+		}
+		var solver mechanics.Solver
+		if p, err := solver.AtCurvature(s, law, bending, u.Curvature.Scale(0.5)); err == nil {
+			requireFinite(t, p.NeutralAxis.In(units.Metre), p.Moment.In(units.NewtonMetre), p.ExtremeStrain)
+			require.Positive(t, p.Strain)
+		}
+		if area, err := solver.RequiredTension(s.Parts, law, bending, s.Layers[0], u.Nominal); err == nil {
+			requireFinite(t, area.In(units.SquareMetre))
+			require.GreaterOrEqual(t, area.In(units.SquareMetre), 0.0)
+		}
+		if area, added, err := solver.RequiredBoth(s.Parts, law, bending, s.Layers[0], s.Layers[1], law.Ultimate(), u.Nominal); err == nil {
+			requireFinite(t, area.In(units.SquareMetre), added.In(units.SquareMetre))
+			require.GreaterOrEqual(t, added.In(units.SquareMetre), 0.0)
 		}
 		if c, err := s.Cracked(8, bending.Sense); err == nil {
 			requireFinite(t, c.NeutralAxis.In(units.Metre), c.SecondMoment.In(units.Metre4))
