@@ -55,7 +55,7 @@ func (e *edition) tableDepth(p *beam.Problem, span int) tableDepth {
 	}
 	d.yield = e.stressIn(b.Reinforcement.Yield)
 	d.byYield = r.yieldBase + d.yield/r.yieldPer
-	if k := b.Concrete.Kind; k == beam.SandLightweight || k == beam.AllLightweight {
+	if isLight(b.Concrete.Kind) {
 		d.density = b.Concrete.Density.In(e.materials.density)
 		if units.AtMost(r.lightLow, d.density) && units.AtMost(d.density, r.lightHigh) {
 			d.byWeight = max(r.lightBase-r.lightPer*d.density, r.lightLeast)

@@ -1,6 +1,8 @@
 package aci318
 
 import (
+	"slices"
+
 	"soffit.example/beam"
 	"soffit.example/units"
 )
@@ -31,6 +33,10 @@ func (e *edition) judgeSpanShear(dst []beam.Check, t *beam.Trial, span int) []be
 	s := newShearSpan(t, span)
 	s.e, s.ends = e, shearEnds(t, span)
 	breaks := t.Forces.Breaks(room[:0], span)
+	if places := e.addPlaces(breaks, t, span); len(places) > len(breaks) {
+		breaks = places
+		slices.SortFunc(breaks, units.Length.Compare)
+	}
 	length := t.Brief.Spans[span-1]
 	_, s.bends[0] = t.Forces.Moment(beam.Positive, span, units.Length{}, length)
 	_, s.bends[1] = t.Forces.Moment(beam.Negative, span, units.Length{}, length)
@@ -60,6 +66,7 @@ func (e *edition) judgeSpanShear(dst []beam.Check, t *beam.Trial, span int) []be
 		}
 		at = end
 	}
+	dst = e.appendBent(dst, t, span, s.heavy)
 	return appendLimit(dst, e, t, span, &s.limit, &s.limitWeb)
 }
 
@@ -79,11 +86,12 @@ func (e *edition) judgeDemandShear(dst []beam.Check, t *beam.Trial) []beam.Check
 		z := e.newWebZone(t, 0, k, spacing)
 		z.note, z.local = note, true
 		z.bends = demandSenses(t)
+		z.leanAgainst(greatestDemand(t))
 		for i := range t.Forces.Demands() {
 			z.point(t.Forces.Demands()[i])
 		}
 		if z.limit.found && (!limit.found || z.limit.utilization > limit.utilization) {
-			limit, limitWeb = z.limit, z.web[senseIndex(z.limit.sense)]
+			limit, limitWeb = z.limit, *z.webFor(z.limit.sense, z.limit.action.Shear)
 		}
 		dst = z.appendChecks(dst)
 		if k >= 0 {
@@ -91,6 +99,16 @@ func (e *edition) judgeDemandShear(dst []beam.Check, t *beam.Trial) []beam.Check
 		}
 	}
 	return appendLimit(dst, e, t, 0, &limit, &limitWeb)
+}
+
+// greatestDemand is the greatest shear among the demands.
+func greatestDemand(t *beam.Trial) (shear units.Force) {
+	for i := range t.Forces.Demands() {
+		if v := t.Forces.Demands()[i].Shear; shear.Abs().Less(v.Abs()) {
+			shear = v
+		}
+	}
+	return shear
 }
 
 // demandSenses are the senses that a demand without a moment may belong to:
@@ -118,6 +136,7 @@ type shearSpan struct {
 	ends  [2]shearEnd
 	bends [2]bool // senses that bend it at all
 
+	heavy    bool         // spacings are halved somewhere
 	limit    worstSection // of the section limit, over all zones
 	limitWeb webSteel
 }
@@ -242,6 +261,9 @@ func (s *shearSpan) judge(dst []beam.Check, breaks []units.Length, k int, spacin
 	z := s.e.newWebZone(s.t, s.span, k, spacing)
 	z.note, z.bends = note, s.bends
 	f := &s.t.Forces
+	if z.leaning {
+		z.leanAgainst(s.greatest(breaks, from, to))
+	}
 	for i := range f.Combinations() {
 		z.from, z.near = s.ends[0].start(f, i, s.span)
 		z.to, z.far = s.ends[1].start(f, i, s.span)
@@ -261,7 +283,31 @@ func (s *shearSpan) judge(dst []beam.Check, breaks []units.Length, k int, spacin
 	}
 	z.settle()
 	if z.limit.found && (!s.limit.found || z.limit.utilization > s.limit.utilization) {
-		s.limit, s.limitWeb = z.limit, z.web[senseIndex(z.limit.sense)]
+		s.limit, s.limitWeb = z.limit, *z.webFor(z.limit.sense, z.limit.action.Shear)
 	}
+	s.heavy = s.heavy || z.heavy
 	return z.appendChecks(dst)
+}
+
+// greatest is the greatest shear between two places, by the ends of the loads
+// there.
+func (s *shearSpan) greatest(breaks []units.Length, from, to units.Length) (shear units.Force) {
+	f := &s.t.Forces
+	meet := func(at units.Length) {
+		for i := range f.Combinations() {
+			for _, right := range [2]bool{false, true} {
+				if v := f.Action(i, s.span, at, right).Shear; shear.Abs().Less(v.Abs()) {
+					shear = v
+				}
+			}
+		}
+	}
+	meet(from)
+	for _, b := range breaks {
+		if from.Less(b) && b.Less(to) {
+			meet(b)
+		}
+	}
+	meet(to)
+	return shear
 }

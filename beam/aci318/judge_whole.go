@@ -8,12 +8,11 @@ func (e *edition) judgeWhole(dst []beam.Check, t *beam.Trial) []beam.Check {
 	dst = e.appendDepth(dst, t)
 	dst = e.appendSideFace(dst, t)
 	dst = e.appendBracing(dst, t)
+	dst = e.appendJoist(dst, t)
 	if t.Forces.Spans() == 0 {
 		dst = append(dst, notJudgedDepth)
 	}
-	if hangs(&t.Brief) {
-		dst = append(dst, notJudgedHanger)
-	}
+	dst = appendHung(dst, &t.Brief)
 	return append(dst, notJudged[:]...)
 }
 
@@ -32,26 +31,8 @@ func (e *edition) appendBracing(dst []beam.Check, t *beam.Trial) []beam.Check {
 	return append(dst, c)
 }
 
-// hangs reports a load or a support that pulls on the lower part of the beam.
-func hangs(b *beam.Brief) bool {
-	for i := range b.Supports {
-		if b.Supports[i].Hung {
-			return true
-		}
-	}
-	for i := range b.Loads {
-		if b.Loads[i].Hung {
-			return true
-		}
-	}
-	return false
-}
-
 var notJudgedDepth = beam.NotJudgedCheck("scope.deep-beam", "9.9.1.1",
 	"the demands come without a beam: whether it is deep, or loaded close to a support, is the caller's to see")
-
-var notJudgedHanger = beam.NotJudgedCheck("shear.hanger-steel", "R9.4.3.2",
-	"a load or a support hangs on the beam: the steel that lifts it to the top of the beam is not designed by this version")
 
 // notJudged are limit states of the standard that this version leaves open.
 var notJudged = [...]beam.Check{

@@ -27,7 +27,8 @@ type materialRules struct {
 	rupture                  float64 // 7.5 or 0.62 of 19.2.3.1
 	usualDensity             float64 // of normalweight concrete with its bars; common practice
 	usualAggregate           float64 // nominal maximum size; common practice
-	lightweightByComposition bool    // λ from the concrete's composition, 19.2.4.2 of 318-14
+	lightweightByComposition bool    // λ of every kind from its composition, 19.2.4.2 of 318-14
+	splitting                float64 // 6.7 or 0.56 of √fcm, 19.2.4.3 of 318-14; zero: no such route
 	lambdaLow, lambdaHigh    float64 // densities between which λ is lambdaSlope times density, 19.2.4.1 of 318-19
 	lambdaSlope              float64
 
@@ -38,8 +39,10 @@ type materialRules struct {
 	mostShearYield   float64 // for stirrups, Table 20.2.2.4
 	mostTorsionYield float64 // for either direction, Table 20.2.2.4
 
-	// Clauses that the editions number differently.
-	lambdaClause, yieldClause string
+	// Clauses that the editions number differently: of λ as such, by density, by
+	// composition and by splitting strength.
+	lambdaClause, densityClause, mixClause, splittingClause string
+	yieldClause                                             string
 }
 
 const (
@@ -50,8 +53,10 @@ const (
 	blockLeast     = 0.65
 	roundedYield   = 0.002 // 21.2.2.1, for Grade 60
 
-	lambdaSand = 0.85 // Table 19.2.4.2 of 318-14
-	lambdaAll  = 0.75
+	// Table 19.2.4.2 of 318-14, Table 19.2.4.1(b) of 318-19.
+	lambdaNormal = 1.0
+	lambdaSand   = 0.85
+	lambdaAll    = 0.75
 )
 
 var materials14US = materialRules{
@@ -59,9 +64,9 @@ var materials14US = materialRules{
 	blockFull: 4000, blockLeast: 8000, blockStep: 1000,
 	concreteByDensity: 33, concreteByStrength: 57000, lightest: 90, heaviest: 160, lightLimit: 115, normalLeast: 135,
 	rupture: 7.5, usualDensity: 150, usualAggregate: 0.75,
-	lightweightByComposition: true,
-	steelModulus:             29e6, grade60: 60000, leastYield: 40000, mostYield: 80000, mostShearYield: 60000, mostTorsionYield: 60000,
-	lambdaClause: "19.2.4.2", yieldClause: "Table 20.2.2.4a",
+	lightweightByComposition: true, splitting: 6.7,
+	steelModulus: 29e6, grade60: 60000, leastYield: 40000, mostYield: 80000, mostShearYield: 60000, mostTorsionYield: 60000,
+	lambdaClause: "19.2.4.2", mixClause: "Table 19.2.4.2", splittingClause: "19.2.4.3", yieldClause: "Table 20.2.2.4a",
 }
 
 var materials14SI = materialRules{
@@ -69,9 +74,9 @@ var materials14SI = materialRules{
 	blockFull: 28, blockLeast: 55, blockStep: 7,
 	concreteByDensity: 0.043, concreteByStrength: 4700, lightest: 1440, heaviest: 2560, lightLimit: 1840, normalLeast: 2160,
 	rupture: 0.62, usualDensity: 2450, usualAggregate: 20,
-	lightweightByComposition: true,
-	steelModulus:             200000, grade60: 420, leastYield: 280, mostYield: 550, mostShearYield: 420, mostTorsionYield: 420,
-	lambdaClause: "19.2.4.2", yieldClause: "Table 20.2.2.4a",
+	lightweightByComposition: true, splitting: 0.56,
+	steelModulus: 200000, grade60: 420, leastYield: 280, mostYield: 550, mostShearYield: 420, mostTorsionYield: 420,
+	lambdaClause: "19.2.4.2", mixClause: "Table 19.2.4.2", splittingClause: "19.2.4.3", yieldClause: "Table 20.2.2.4a",
 }
 
 var materials19US = materialRules{
@@ -81,7 +86,7 @@ var materials19US = materialRules{
 	rupture: 7.5, usualDensity: 150, usualAggregate: 0.75,
 	lambdaLow: 100, lambdaHigh: 135, lambdaSlope: 0.0075,
 	steelModulus: 29e6, grade60: 60000, leastYield: 40000, mostYield: 100000, mostShearYield: 60000, mostTorsionYield: 60000,
-	lambdaClause: "19.2.4.1", yieldClause: "Table 20.2.2.4(a)",
+	lambdaClause: "19.2.4.1", densityClause: "Table 19.2.4.1(a)", mixClause: "Table 19.2.4.1(b)", yieldClause: "Table 20.2.2.4(a)",
 }
 
 var materials19SI = materialRules{
@@ -91,7 +96,7 @@ var materials19SI = materialRules{
 	rupture: 0.62, usualDensity: 2450, usualAggregate: 20,
 	lambdaLow: 1600, lambdaHigh: 2160, lambdaSlope: 0.00047,
 	steelModulus: 200000, grade60: 420, leastYield: 280, mostYield: 690, mostShearYield: 420, mostTorsionYield: 420,
-	lambdaClause: "19.2.4.1", yieldClause: "Table 20.2.2.4(a)",
+	lambdaClause: "19.2.4.1", densityClause: "Table 19.2.4.1(a)", mixClause: "Table 19.2.4.1(b)", yieldClause: "Table 20.2.2.4(a)",
 }
 
 // blockFactor is β1, the depth of the stress block over that of the neutral
@@ -107,33 +112,69 @@ func (e *edition) blockFactor(strength units.Stress) float64 {
 	return blockMost - blockLess*(fc-m.blockFull)/m.blockStep
 }
 
-// lambda is the factor for lightweight concrete (19.2.4): 1 for normalweight;
-// else by composition in 318-14, by equilibrium density in 318-19.
-func (e *edition) lambda(c *beam.Concrete) float64 {
+// isLight reports whether a kind of concrete holds lightweight aggregate.
+func isLight(k beam.ConcreteKind) bool { return k > beam.Normalweight }
+
+// lightness is the factor for lightweight concrete, λ, with where it is from.
+type lightness struct {
+	factor float64
+	clause string
+	route  string // how it was found; empty for normalweight concrete
+}
+
+// What is said of the route to λ.
+const (
+	routeMix       = "by the composition of the aggregate"
+	routeDensity   = "by the equilibrium density"
+	routeSplitting = "by the splitting tensile strength"
+)
+
+// lambda is the factor for lightweight concrete (19.2.4).
+func (e *edition) lambda(c *beam.Concrete) float64 { return e.lightness(c).factor }
+
+// lightness finds λ: 1 for normalweight concrete. In 318-14 it follows from the
+// splitting tensile strength where that is given, else from the composition; in
+// 318-19, which leaves the choice, from the composition of blends, whose mix is
+// stated, and from the equilibrium density of the other kinds.
+func (e *edition) lightness(c *beam.Concrete) lightness {
 	m := &e.materials
 	switch {
-	case c.Kind != beam.SandLightweight && c.Kind != beam.AllLightweight:
-		return 1
-	case m.lightweightByComposition && c.Kind == beam.SandLightweight:
-		return lambdaSand
-	case m.lightweightByComposition:
-		return lambdaAll
+	case !isLight(c.Kind):
+		return lightness{factor: lambdaNormal, clause: m.lambdaClause}
+	case m.splitting > 0 && !c.Splitting.IsZero():
+		return lightness{min(e.stressIn(c.Splitting)/(m.splitting*e.sqrtStrength(c.Strength)), lambdaNormal), m.splittingClause, routeSplitting}
+	case m.lightweightByComposition || c.Kind == beam.FineBlend || c.Kind == beam.CoarseBlend:
+		return lightness{lambdaOfMix(c), m.mixClause, routeMix}
 	}
-	wc := c.Density.In(m.density)
-	switch {
+	l := lightness{lambdaNormal, m.densityClause, routeDensity}
+	switch wc := c.Density.In(m.density); {
 	case units.AtMost(wc, m.lambdaLow):
-		return lambdaAll
+		l.factor = lambdaAll
 	case units.AtMost(wc, m.lambdaHigh):
-		return min(m.lambdaSlope*wc, 1)
+		l.factor = min(m.lambdaSlope*wc, lambdaNormal)
 	}
-	return 1
+	return l
+}
+
+// lambdaOfMix is λ by composition: of blends in a straight line between the
+// mixes without and with normalweight aggregate only, by absolute volume.
+func lambdaOfMix(c *beam.Concrete) float64 {
+	switch c.Kind {
+	case beam.SandLightweight:
+		return lambdaSand
+	case beam.FineBlend:
+		return lambdaAll + (lambdaSand-lambdaAll)*c.Normal
+	case beam.CoarseBlend:
+		return lambdaSand + (lambdaNormal-lambdaSand)*c.Normal
+	}
+	return lambdaAll
 }
 
 // elasticModulus is Ec of 19.2.2.1 and the expression used: (b) for
 // normalweight concrete, (a) for lightweight.
 func (e *edition) elasticModulus(c *beam.Concrete) (modulus units.Stress, expression string) {
 	m, root := &e.materials, e.sqrtStrength(c.Strength)
-	if c.Kind == beam.SandLightweight || c.Kind == beam.AllLightweight {
+	if isLight(c.Kind) {
 		wc := c.Density.In(m.density)
 		return e.stressOf(m.concreteByDensity * wc * math.Sqrt(wc) * root), "19.2.2.1.a"
 	}
@@ -208,10 +249,13 @@ func (e *edition) steelRefusals(yield units.Stress) []beam.Refusal {
 // is missing where lightweight concrete needs it.
 func (e *edition) densityFault(c *beam.Concrete) (fault beam.Fault, wrong bool) {
 	m := &e.materials
-	light := c.Kind == beam.SandLightweight || c.Kind == beam.AllLightweight
+	light := isLight(c.Kind)
 	least, most := m.density.Of(m.normalLeast), m.density.Of(m.heaviest)
 	if light {
 		least, most = m.density.Of(m.lightest), m.density.Of(m.lightLimit)
+	}
+	if c.Kind == beam.CoarseBlend { // it leads over to normalweight concrete
+		most = m.density.Of(m.normalLeast)
 	}
 	fault = beam.Fault{Path: "/concrete/density", Allowed: m.density.Format(least) + " to " + m.density.Format(most)}
 	switch {

@@ -26,11 +26,11 @@ var (
 var scopeWords = []string{
 	"deep beams: clear spans of at most 4h, cantilevers of at most 2h (9.9)",
 	"concentrated loads within 2h of the face of a support, among them distributed loads of which more than half lies within a length h (9.9)",
-	"axial compression of at least 0.10 f'c Ag, and axial tension (22.4)",
+	"axial compression of at least 0.10 f'c Ag (22.4)",
 	"torsion not below its threshold (22.7)",
 	"concrete below the least strength of 19.2.1.1",
 	"bars that are not of ASTM sizes (20.2.1.3), or stronger than Table 20.2.2.4 allows",
-	"flanged and hollow sections, openings, prestress, shotcrete and steel fibres",
+	"openings, prestress and shotcrete",
 	"seismic detailing (chapter 18), and strut-and-tie design (chapter 23)",
 }
 
@@ -43,7 +43,7 @@ func (e *edition) scopeOf(p *beam.Problem) []beam.Refusal {
 		out = append(out, e.deepRefusals(p, span)...)
 	}
 	for _, d := range p.Forces.Demands() {
-		out = append(out, e.axialRefusals(b.Section, &b.Concrete, d.Axial, d.Combination)...)
+		out = append(out, e.axialRefusals(p.Geometry.Gross, &b.Concrete, d.Axial, d.Combination)...)
 	}
 	return append(out, e.torsionRefusals(p)...)
 }
@@ -97,24 +97,17 @@ func (e *edition) deepRefusals(p *beam.Problem, span int) []beam.Refusal {
 	return out
 }
 
-// axialRefusals names an axial force that pure bending does not cover: 9.5.2.1
-// lets compression below 0.10 f'c Ag be left out of flexure, and says nothing
-// of tension, which it would not be safe to leave out.
-func (e *edition) axialRefusals(s beam.Section, c *beam.Concrete, axial units.Force, name string) []beam.Refusal {
-	limit := c.Strength.MulArea(s.Width.MulLength(s.Depth)).Scale(e.scope.axial)
-	switch {
-	case axial.Less(units.Force{}):
-		return []beam.Refusal{{
-			Rule: "scope.axial", Clause: "9.5.2.1",
-			Detail: "axial tension of " + e.force.Format(axial.Neg()) + named(name) + ": flexure is judged as pure bending, which tension weakens; 22.4 applies",
-		}}
-	case !axial.IsZero() && limit.AtMost(axial):
-		return []beam.Refusal{{
-			Rule: "scope.axial", Clause: "9.5.2.2",
-			Detail: "axial compression of " + e.force.Format(axial) + named(name) + " is not below 0.10 f'c Ag = " + e.force.Format(limit) + ": 22.4 applies",
-		}}
+// axialRefusals names axial compression that makes a column of a beam (9.5.2.2).
+// Less of it, and tension, count in bending and in shear.
+func (e *edition) axialRefusals(gross units.Area, c *beam.Concrete, axial units.Force, name string) []beam.Refusal {
+	limit := c.Strength.MulArea(gross).Scale(e.scope.axial)
+	if !(units.Force{}).Less(axial) || !limit.AtMost(axial) {
+		return nil
 	}
-	return nil
+	return []beam.Refusal{{
+		Rule: "scope.axial", Clause: "9.5.2.2",
+		Detail: "axial compression of " + e.force.Format(axial) + named(name) + " is not below 0.10 f'c Ag = " + e.force.Format(limit) + ": 22.4 applies",
+	}}
 }
 
 // named puts the name of a demand or combination after a value.

@@ -120,22 +120,44 @@ func (r concreteRow) clause() string {
 // of it belongs to one sense of bending: depth is that of the centroid of the
 // steel in flexural tension, area the area of that steel.
 type shearSection struct {
-	strength     units.Stress
-	lambda       float64
-	width, gross units.Length // bw and the overall depth h
-	depth        units.Length // d
-	area         units.Area   // As
-	stirrups     stirrupSteel
-	row          beam.ShearRow
-	method       beam.ShearMethod
+	strength units.Stress
+	light    lightness
+	width    units.Length // bw, the least width of the web net of hollows
+	height   units.Length // h, overall
+	gross    units.Area   // Ag, net of hollows
+	depth    units.Length // d
+	area     units.Area   // As
+	stirrups stirrupSteel
+	row      beam.ShearRow
+	method   beam.ShearMethod
+
+	// What the exemptions of Table 9.6.3.1 go by, and 9.8.1.5.
+	slab   units.Length // thickness of the slab it is cast with; zero: none
+	fibres bool         // steel-fibre normalweight concrete
+	joist  bool         // a rib of a joist floor within the limits of 9.8.1
 }
 
-// shearForces act together on a section. Signs of shear and moment do not
-// matter; axial compression is positive.
+// shearSection is a section but for what the sense of bending and the stirrups
+// decide.
+func (e *edition) shearSection(s *beam.Section, g *beam.Geometry, c *beam.Concrete, r *beam.Readings) shearSection {
+	out := shearSection{
+		strength: c.Strength, light: e.lightness(c),
+		width: g.Web, height: s.Depth, gross: g.Gross, row: r.ShearRow, method: r.ShearMethod,
+		fibres: c.Fibres && !isLight(c.Kind), joist: s.Joist && e.joistRib(s, g).sound(e),
+	}
+	if castWithSlab(s) {
+		out.slab = s.FlangeThickness
+	}
+	return out
+}
+
+// shearForces act together on a section, with what bent bars carry there.
+// Signs of shear and moment do not matter; axial compression is positive.
 type shearForces struct {
 	shear  units.Force
 	moment units.Moment
 	axial  units.Force
+	bent   bentShare
 }
 
 // webShear is a section made ready for any forces: everything in 22.5 that
@@ -143,7 +165,7 @@ type shearForces struct {
 type webShear struct {
 	shearSection
 	fc, bw, h, d, as float64
-	gross            float64 // Ag
+	ag               float64
 	root, rootUsed   float64 // √f'c, and as 22.5.3.1 lets Vc use it
 	ratio            float64 // ρw
 	cube             float64 // ρw^(1/3)
@@ -157,12 +179,12 @@ func (e *edition) newWebShear(s *shearSection) webShear {
 	w := webShear{
 		shearSection: *s,
 		fc:           e.stressIn(s.strength),
-		bw:           e.lengthIn(s.width), h: e.lengthIn(s.gross), d: e.lengthIn(s.depth),
-		as: e.areaIn(s.area),
+		bw:           e.lengthIn(s.width), h: e.lengthIn(s.height), d: e.lengthIn(s.depth),
+		as: e.areaIn(s.area), ag: e.areaIn(s.gross),
 	}
 	w.root = math.Sqrt(w.fc)
 	w.rootUsed = min(w.root, e.materials.rootCap)
-	w.gross, w.web = w.bw*w.h, w.bw*w.d
+	w.web = w.bw * w.d
 	if w.web > 0 {
 		w.ratio = w.as / w.web
 	}
@@ -184,6 +206,7 @@ type concreteShear struct {
 	axialCapped bool
 	a, b, c     float64 // by the rows of Table 22.5.5.1
 	most        float64 // 318-19: the cap of 22.5.5.1.1
+	ordinary    float64 // Vc but for the 1.1 of joists, 9.8.1.5
 	strength    float64 // Vc
 }
 
@@ -196,15 +219,19 @@ func (w *webShear) concrete(e *edition, shear, moment, axial float64, enough boo
 	} else {
 		w.byMethod(e, &c, math.Abs(shear), math.Abs(moment))
 	}
+	c.ordinary = c.strength
+	if w.joist {
+		c.strength *= joistShear
+	}
 	return c
 }
 
 // byRows is Table 22.5.5.1 of 318-19.
 func (w *webShear) byRows(e *edition, c *concreteShear, enough bool) {
 	r := &e.shear
-	v := w.lambda * w.rootUsed
+	v := w.light.factor * w.rootUsed
 	if c.axial != 0 {
-		c.axialTerm = c.axial / (r.axial * w.gross)
+		c.axialTerm = c.axial / (r.axial * w.ag)
 		if most := r.axialMost * w.fc; c.axialTerm > most {
 			c.axialTerm, c.axialCapped = most, true
 		}
@@ -233,13 +260,13 @@ func (w *webShear) byRows(e *edition, c *concreteShear, enough bool) {
 // simplified expressions are used whichever method was asked for.
 func (w *webShear) byMethod(e *edition, c *concreteShear, shear, moment float64) {
 	r := &e.shear
-	v := w.lambda * w.rootUsed
+	v := w.light.factor * w.rootUsed
 	switch {
 	case c.axial > 0:
-		c.axialTerm = 1 + c.axial/(r.compression*w.gross)
+		c.axialTerm = 1 + c.axial/(r.compression*w.ag)
 		c.row, c.strength = rowCompression, r.plain*c.axialTerm*v*w.web
 	case c.axial < 0:
-		c.axialTerm = 1 + c.axial/(r.tension*w.gross)
+		c.axialTerm = 1 + c.axial/(r.tension*w.ag)
 		c.row, c.strength = rowTension, r.plain*c.axialTerm*v*w.web
 		if c.strength < 0 {
 			c.row, c.strength = rowNone, 0

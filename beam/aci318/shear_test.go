@@ -21,7 +21,7 @@ type shearCase struct {
 
 func (c shearCase) evaluate(e *edition) (webSteel, sectionShear) {
 	w := e.newWebSteel(&shearSection{
-		strength: e.stressOf(c.fc), lambda: c.lambda, width: e.lengthOf(c.bw), gross: e.lengthOf(c.h),
+		strength: e.stressOf(c.fc), light: lightness{factor: c.lambda}, width: e.lengthOf(c.bw), height: e.lengthOf(c.h), gross: e.areaOf(c.bw * c.h),
 		depth: e.lengthOf(c.d), area: e.areaOf(c.as), row: c.row, method: c.method,
 		stirrups: stirrupSteel{area: e.areaOf(c.av), spacing: e.lengthOf(c.s), yield: e.stressOf(c.fyt)},
 	})
@@ -184,7 +184,7 @@ func TestMetricCompanionsAgreeWithinTheirCoefficients(t *testing.T) {
 	for _, pair := range [][2]*edition{{&us14, &si14}, {&us19, &si19}} {
 		for _, stirrups := range []bool{false, true} {
 			c := shearSection{
-				strength: units.PSI.Of(4500), lambda: 1, width: units.Inch.Of(15), gross: units.Inch.Of(26),
+				strength: units.PSI.Of(4500), light: lightness{factor: 1}, width: units.Inch.Of(15), height: units.Inch.Of(26),
 				depth: units.Inch.Of(22.4), area: units.SquareInch.Of(3.16),
 			}
 			c.stirrups.yield = units.KSI.Of(60)

@@ -23,6 +23,7 @@ func (z *webZone) appendChecks(dst []beam.Check) []beam.Check {
 	}
 	dst = z.appendStrength(dst)
 	dst = z.appendLeast(dst)
+	dst = z.appendHanger(dst)
 	if z.zone < 0 {
 		return dst
 	}
@@ -34,11 +35,17 @@ func (z *webZone) appendStrength(dst []beam.Check) []beam.Check {
 	c := beam.Check{ID: "shear.strength", Clause: "22.5.1.1", Reason: w.note}
 	w.at(&c, z.span)
 	c.Compare(e.forceOf(w.values.shear).Amount(), e.forceOf(w.values.design).Amount())
-	if z.web[senseIndex(w.sense)].wide && c.Outcome == beam.Fail {
+	web := z.webFor(w.sense, w.action.Shear)
+	switch {
+	case c.Outcome == beam.Fail && web.wide:
 		c.Reason = noteTooWide
+	case c.Outcome == beam.Fail && web.flat:
+		c.Reason = noteFlat
+	case z.leaning && web.av == 0:
+		c.Reason = noteWayward
 	}
 	if z.t.Record {
-		c.Steps = z.web[senseIndex(w.sense)].strengthSteps(e, &w.values)
+		c.Steps = web.strengthSteps(e, &w.values, z.bentGroups(w))
 	}
 	return append(dst, c)
 }
@@ -48,7 +55,7 @@ func (z *webZone) appendStrength(dst []beam.Check) []beam.Check {
 // they are enough where they are called for.
 func (z *webZone) appendLeast(dst []beam.Check) []beam.Check {
 	e, w := z.e, &z.trigger
-	web := &z.web[senseIndex(w.sense)]
+	web := z.webFor(w.sense, w.action.Shear)
 	c := beam.Check{ID: "shear.minimum-stirrups", Clause: "9.6.3.1"}
 	w.at(&c, z.span)
 	switch {
@@ -62,6 +69,9 @@ func (z *webZone) appendLeast(dst []beam.Check) []beam.Check {
 		}
 	default:
 		c.Clause = e.stirrups.leastClause
+		if z.leaning && web.av == 0 {
+			c.Reason = noteWayward
+		}
 		c.Compare(e.steelOf(web.least).Amount(), e.steelOf(web.provided).Amount())
 	}
 	if z.t.Record {
@@ -78,21 +88,38 @@ func (z *webZone) appendSpacing(dst []beam.Check) []beam.Check {
 		along.Outcome, along.Reason = beam.NotApplicable, noteNotRequired
 		across.Outcome, across.Reason = beam.NotApplicable, noteNotRequired
 	} else {
-		web := &z.web[senseIndex(z.along.sense)]
+		web := z.webFor(z.along.sense, z.along.action.Shear)
 		z.along.at(&along, z.span)
 		along.Compare(e.lengthOf(web.s).Amount(), e.lengthOf(z.along.values.along).Amount())
 		z.across.at(&across, z.span)
 		across.Compare(z.legs.Amount(), e.lengthOf(z.across.values.across).Amount())
 		if z.t.Record {
 			along.Steps = web.spacingSteps(e, &z.along.values)
-			across.Steps = z.web[senseIndex(z.across.sense)].spacingSteps(e, &z.across.values)
+			across.Steps = z.webFor(z.across.sense, z.across.action.Shear).spacingSteps(e, &z.across.values)
 		}
 	}
 	dst = append(dst, along)
 	if e.stirrups.across {
 		dst = append(dst, across)
 	}
+	if z.leaning {
+		dst = z.appendSlope(dst)
+	}
 	return dst
+}
+
+// appendSlope appends what is asked of stirrups that lean.
+func (z *webZone) appendSlope(dst []beam.Check) []beam.Check {
+	e, web := z.e, &z.web[senseIndex(z.strength.sense)]
+	c := beam.Check{ID: "shear.stirrup-angle", Clause: e.stirrups.slopeClause, Span: z.span, Reason: noteFlat}
+	c.Compare(units.Plain(leastSlope), units.Plain(web.slope.degrees))
+	dst = append(dst, c)
+	c.ID, c.Clause, c.Reason = "shear.spacing-inclined", "9.7.6.2.3", noteInclined
+	c.Compare(e.lengthOf(web.s).Amount(), e.lengthOf(web.mostInclined(z.heavy)).Amount())
+	if z.t.Record {
+		c.Steps = web.inclinedSteps(e, z.heavy)
+	}
+	return append(dst, c)
 }
 
 // appendLimit appends the section limit of 22.5.1.2, once for a span.
@@ -168,7 +195,8 @@ func barNumber(diameter units.Length) int {
 // (25.7.1.3(b)), in the units of the edition.
 type stirrupHook struct {
 	diameter, fyt     float64
-	root, lambda      float64
+	root              float64
+	light             lightness
 	depth, cover      float64
 	needed            float64
 	available         float64
@@ -180,13 +208,13 @@ func (e *edition) stirrupHook(t *beam.Trial, diameter units.Length) stirrupHook 
 	yield, capped := e.shearYield(b.Reinforcement.StirrupYield)
 	h := stirrupHook{
 		diameter: e.lengthIn(diameter), fyt: e.stressIn(yield), fytCapped: capped,
-		root: e.sqrtStrength(b.Concrete.Strength), lambda: e.lambda(&b.Concrete),
+		root: e.sqrtStrength(b.Concrete.Strength), light: e.lightness(&b.Concrete),
 		depth: e.lengthIn(b.Section.Depth), cover: e.lengthIn(t.Cover),
 	}
 	if h.root > e.materials.rootCap {
 		h.root, h.capped = e.materials.rootCap, true
 	}
-	h.needed = e.stirrups.embedment * h.diameter * h.fyt / (h.lambda * h.root)
+	h.needed = e.stirrups.embedment * h.diameter * h.fyt / (h.light.factor * h.root)
 	h.available = h.depth/2 - h.cover
 	return h
 }
@@ -195,7 +223,8 @@ func (h *stirrupHook) steps(e *edition) []beam.Step {
 	var out working
 	out.given("db", "stirrup diameter", "", e.asLength(h.diameter))
 	out.given("fyt", "stirrup yield strength as used in shear", e.materials.yieldClause, e.asStress(h.fyt))
-	out.given("λ", "factor for lightweight concrete", e.materials.lambdaClause, asPlain(h.lambda))
+	out.given("λ", "factor for lightweight concrete", h.light.clause, asPlain(h.light.factor))
+	out.note(h.light.route)
 	out.given("r", "root of the concrete strength", "25.4.1.4", e.asStress(h.root))
 	if h.capped {
 		out.note("capped")

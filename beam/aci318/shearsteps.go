@@ -13,7 +13,8 @@ func number(v float64) string { return strconv.FormatFloat(v, 'g', -1, 64) }
 // sectionSteps gives what every working on shear begins with.
 func (w *webShear) sectionSteps(e *edition, out *working) {
 	out.given("f'c", "specified concrete strength", "", e.asStress(w.fc))
-	out.given("λ", "factor for lightweight concrete", e.materials.lambdaClause, asPlain(w.lambda))
+	out.given("λ", "factor for lightweight concrete", w.light.clause, asPlain(w.light.factor))
+	out.note(w.light.route)
 	out.given("bw", "web width", "", e.asLength(w.bw))
 	out.given("d", "depth to the centroid of the steel in flexural tension", "", e.asLength(w.d))
 }
@@ -33,14 +34,25 @@ func (w *webShear) steps(e *edition, out *working, c *concreteShear, s *sectionS
 	}
 	if c.axial != 0 {
 		out.given("Nu", "factored axial force, compression positive", "", e.asForce(c.axial))
-		out.given("h", "overall depth", "", e.asLength(w.h))
-		out.find("Ag", "gross area", "", "bw h", e.asArea(w.gross))
+		out.given("Ag", "gross area, net of hollows", "", e.asArea(w.ag))
 	}
 	if e.shear.rowsByStirrups {
 		w.rowSteps(e, out, c, enough)
-		return
+	} else {
+		w.methodSteps(e, out, c, s)
 	}
-	w.methodSteps(e, out, c, s)
+	if w.joist {
+		out.find("Vc", "concrete shear strength of a joist", "9.8.1.5", number(joistShear)+" Vc,0", e.asForce(c.strength))
+	}
+}
+
+// concreteSymbol is what the rows call their result: Vc, unless it is increased
+// afterwards.
+func (w *webShear) concreteSymbol() string {
+	if w.joist {
+		return "Vc,0"
+	}
+	return "Vc"
 }
 
 // rowSteps is the working of Table 22.5.5.1 of 318-19.
@@ -85,7 +97,7 @@ func (w *webShear) rowSteps(e *edition, out *working, c *concreteShear, enough b
 		out.note("row (c): there are no stirrups, fewer than the least of 9.6.3.4, or they are too far apart to count")
 	}
 	out.find("Vc,max", "greatest concrete shear strength", "22.5.5.1.1", number(r.most)+" λ r bw d", e.asForce(c.most))
-	out.find("Vc", "concrete shear strength", c.row.clause(), "max(min("+choice+", Vc,max), 0)", e.asForce(c.strength))
+	out.find(w.concreteSymbol(), "concrete shear strength", c.row.clause(), "max(min("+choice+", Vc,max), 0)", e.asForce(c.ordinary))
 	out.note(c.row.note())
 }
 
@@ -114,6 +126,7 @@ func (r concreteRow) note() string {
 func (w *webShear) methodSteps(e *edition, out *working, c *concreteShear, s *sectionShear) {
 	r := &e.shear
 	const meaning = "concrete shear strength"
+	symbol := w.concreteSymbol()
 	switch {
 	case c.axial != 0:
 		per, clause := r.compression, rowCompression.clause()
@@ -121,10 +134,10 @@ func (w *webShear) methodSteps(e *edition, out *working, c *concreteShear, s *se
 			per, clause = r.tension, rowTension.clause()
 		}
 		out.find("k", "factor for the axial force", clause, "1 + Nu / ("+number(per)+" Ag)", asPlain(c.axialTerm))
-		out.find("Vc", meaning, clause, "max("+number(r.plain)+" k λ r bw d, 0)", e.asForce(c.strength))
+		out.find(symbol, meaning, clause, "max("+number(r.plain)+" k λ r bw d, 0)", e.asForce(c.ordinary))
 		out.note(c.row.note())
 	case c.row == rowSimplified:
-		out.find("Vc", meaning, c.row.clause(), number(r.plain)+" λ r bw d", e.asForce(c.strength))
+		out.find(symbol, meaning, c.row.clause(), number(r.plain)+" λ r bw d", e.asForce(c.ordinary))
 	default:
 		out.given("As", "steel on the flexural tension side", "", e.asArea(w.as))
 		out.find("ρw", "ratio of that steel to the web", "22.5.5.1", "As / (bw d)", asPlain(w.ratio))
@@ -141,7 +154,7 @@ func (w *webShear) methodSteps(e *edition, out *working, c *concreteShear, s *se
 			out.note("Vu d is at least Mu, so that row (a) is no less than this")
 		}
 		out.find("Vc,c", meaning+" by row (c)", rowDetailedC.clause(), number(r.greatest)+" λ r bw d", e.asForce(c.c))
-		out.find("Vc", meaning, c.row.clause(), least, e.asForce(c.strength))
+		out.find(symbol, meaning, c.row.clause(), least, e.asForce(c.ordinary))
 		out.note(c.row.note())
 	}
 }
@@ -154,6 +167,31 @@ func (w *webSteel) stirrupSteps(e *edition, out *working) {
 	}
 	out.given("Av", "area of all legs", "", e.asArea(w.av))
 	out.given("s", "spacing along the beam", "", e.asLength(w.s))
+	if !w.slope.upright() {
+		w.slopeSteps(out)
+	}
+}
+
+// slopeSteps gives the angle of legs that lean.
+func (w *webSteel) slopeSteps(out *working) {
+	out.given("sinα", "sine of the angle of the legs with the axis of the beam, "+number(w.slope.degrees)+" degrees", "", asPlain(w.slope.sin))
+	out.given("cosα", "its cosine", "", asPlain(w.slope.cos))
+}
+
+// inclinedSteps is the working of the greatest spacing of legs that lean.
+func (w *webSteel) inclinedSteps(e *edition, heavy bool) []beam.Step {
+	var out working
+	out.given("d", "depth to the centroid of the steel in flexural tension", "", e.asLength(w.bare.d))
+	w.slopeSteps(&out)
+	expression := "d / 2 (1 + cosα / sinα)"
+	if heavy {
+		expression += " / 2"
+	}
+	out.find("s,max", "greatest spacing along the beam", "9.7.6.2.3", expression, e.asLength(w.mostInclined(heavy)))
+	if heavy {
+		out.note("the required Vs is above the limit of Table 9.7.6.2.2: halved like the spacings there")
+	}
+	return out.steps
 }
 
 // concreteSteps is the working down to Vc as it counts, after Vu and φ.
@@ -164,20 +202,36 @@ func (w *webSteel) concreteSteps(e *edition, out *working, s *sectionShear) {
 	w.counted.steps(e, out, &s.concrete, s, w.enough)
 }
 
-// strengthSteps is the working of φVn.
-func (w *webSteel) strengthSteps(e *edition, s *sectionShear) []beam.Step {
+// strengthSteps is the working of φVn, with the bent bars that carry shear.
+func (w *webSteel) strengthSteps(e *edition, s *sectionShear, bent []bentGroup) []beam.Step {
 	var out working
 	w.concreteSteps(e, &out, s)
-	if w.steel == 0 {
+	sum, clause := "Vc", "22.5.1.1"
+	if w.steel > 0 {
+		w.stirrupSteps(e, &out)
+		clause, expression := e.stirrups.strengthClause, "Av fyt d / s"
+		if !w.slope.upright() {
+			clause, expression = e.stirrups.inclinedClause, "Av fyt (sinα + cosα) d / s"
+		}
+		out.find("Vs", "shear carried by stirrups", clause, expression, e.asForce(w.steel))
+		sum += " + Vs"
+	}
+	if len(bent) > 0 {
+		bentSteps(e, &out, w, bent, s.bent)
+		sum += " + Vb"
+		clause = e.stirrups.sumClause
+	}
+	if sum == "Vc" {
 		out.find("φVn", "design shear strength, of the concrete alone", "9.5.1.1", "φ Vc", e.asForce(s.design))
 		if w.wide {
 			out.note("the stirrups are further apart than the greatest spacing of Table 9.7.6.2.2: none is sure to cross a crack, and they do not count")
 		}
+		if w.flat {
+			out.note(noteFlat)
+		}
 		return out.steps
 	}
-	w.stirrupSteps(e, &out)
-	out.find("Vs", "shear carried by stirrups", e.stirrups.strengthClause, "Av fyt d / s", e.asForce(w.steel))
-	out.find("Vn", "nominal shear strength", "22.5.1.1", "Vc + Vs", e.asForce(s.nominal))
+	out.find("Vn", "nominal shear strength", clause, sum, e.asForce(s.nominal))
 	out.find("φVn", "design shear strength", "9.5.1.1", "φ Vn", e.asForce(s.design))
 	return out.steps
 }
@@ -201,10 +255,14 @@ func (w *webSteel) leastSteps(e *edition, s *sectionShear) []beam.Step {
 	w.bare.sectionSteps(e, &out)
 	const meaning = "shear above which stirrups are required"
 	switch {
-	case w.exempt:
+	case w.exempt != 0:
 		w.bare.steps(e, &out, &s.bare, s, false)
-		out.find("Vu,0", meaning, "Table 9.6.3.1", "φ Vc", e.asForce(s.trigger))
-		out.note("exempt: the beam is no deeper than " + e.length.Format(e.lengthOf(r.shallow)))
+		expression := "φ Vc"
+		if w.exempt == exemptFibres {
+			expression = "min(φ Vc, φ " + number(r.fibreShear) + " √f'c bw d)"
+		}
+		out.find("Vu,0", meaning, "Table 9.6.3.1", expression, e.asForce(s.trigger))
+		out.note(w.exempt.note(e))
 	case r.lambdaRoot > 0:
 		root := "√f'c"
 		if w.bare.rootUsed < w.bare.root {

@@ -97,7 +97,7 @@ func TestWorkingOfEveryRow(t *testing.T) {
 									seen[s.concrete.row] = true
 									require.NotEmpty(t, s.concrete.row.String())
 									require.NotEmpty(t, s.concrete.row.clause())
-									for _, steps := range [][]beam.Step{w.strengthSteps(e, &s), w.limitSteps(e, &s), w.leastSteps(e, &s), w.spacingSteps(e, &s)} {
+									for _, steps := range [][]beam.Step{w.strengthSteps(e, &s, nil), w.limitSteps(e, &s), w.leastSteps(e, &s), w.spacingSteps(e, &s)} {
 										requireEvaluable(t, &beam.Check{ID: e.id, Steps: steps})
 									}
 								}

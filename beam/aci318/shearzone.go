@@ -43,6 +43,21 @@ type webZone struct {
 	// greatest shear of a sense need not be its worst section.
 	local bool
 
+	// Stirrups that lean count against the shear of one sign, that of the
+	// greatest shear of the stretch; for the other the loose webs hold.
+	leaning bool
+	against int // risesLeft or risesRight
+	loose   [2]webSteel
+
+	bentBars bool         // the span has bent bars,
+	bent     [2]bentShare // which carry this at the sections being met, by their rise,
+	bentAt   units.Length // of which this is one
+	heavy    bool         // spacings are halved somewhere
+
+	hangs  bool // loads hang on the span
+	hanger worstSection
+	lifted hangerSteel // at hanger
+
 	// The first and last section of the span that are designed for their own
 	// shear under the combination being followed, and what was decided there.
 	from, to  units.Length
@@ -67,38 +82,77 @@ type peakShear struct {
 func (e *edition) newWebZone(t *beam.Trial, span, zone int, spacing units.Length) webZone {
 	z := webZone{e: e, t: t, span: span, zone: zone}
 	b := &t.Brief
-	z.local = !e.shear.rowsByStirrups && b.Readings.ShearMethod == beam.DetailedShear
-	s := shearSection{
-		strength: b.Concrete.Strength, lambda: e.lambda(&b.Concrete),
-		width: b.Section.Width, gross: b.Section.Depth,
-		row: b.Readings.ShearRow, method: b.Readings.ShearMethod,
-	}
+	s := e.shearSection(&b.Section, &t.Geometry, &b.Concrete, &b.Readings)
 	s.stirrups.yield = b.Reinforcement.StirrupYield
 	if zone >= 0 {
 		s.stirrups.area = bars.TotalArea(bars.Group{Size: t.ZoneBar[zone], Count: t.Zones[zone].Legs})
 		s.stirrups.spacing = spacing
+		s.stirrups.angle = t.Zones[zone].Angle
+		z.leaning = s.stirrups.angle != 0 && s.stirrups.angle != 90
 		z.legs = legSpacing(b.Section.Width, t.Cover, t.ZoneBar[zone].Diameter, t.Zones[zone].Legs)
 	}
 	for i, sense := range [2]beam.Sense{beam.Positive, beam.Negative} {
 		s.depth = t.EffectiveDepth(sense)
 		s.area = t.Steel(sense.TensionFace()).Area
 		z.web[i] = e.newWebSteel(&s)
+		if z.leaning {
+			without := s
+			without.stirrups = stirrupSteel{yield: s.stirrups.yield, angle: s.stirrups.angle}
+			z.loose[i] = e.newWebSteel(&without)
+		}
 	}
+	z.bentBars, z.hangs = hasBent(t, span), span > 0 && hungLoads(b, span)
+	z.local = !e.shear.rowsByStirrups && b.Readings.ShearMethod == beam.DetailedShear || z.leaning || z.bentBars || z.hangs
 	return z
+}
+
+// webFor is the web under a shear: with the stirrups, unless they lean the
+// wrong way.
+func (z *webZone) webFor(sense beam.Sense, shear units.Force) *webSteel {
+	if z.leaning && !shear.IsZero() && against(shear) != z.against {
+		return &z.loose[senseIndex(sense)]
+	}
+	return &z.web[senseIndex(sense)]
 }
 
 func senseIndex(s beam.Sense) int { return int(s) - 1 }
 
+// leanAgainst says which shear leaning stirrups stand against.
+func (z *webZone) leanAgainst(shear units.Force) { z.against = against(shear) }
+
+// bentGroups are the bent bars that carry shear at a section.
+func (z *webZone) bentGroups(w *worstSection) (groups []bentGroup) {
+	d := z.e.bentDepth(z.t)
+	for i := range z.t.Bent {
+		if rises(&z.t.Bent[i]) != against(w.action.Shear) || !z.e.bentCounts(z.t, i, z.span, w.values.bentAt) {
+			continue
+		}
+		if g := z.e.bentGroup(z.t, i); g.share(d) != (bentShare{}) {
+			groups = append(groups, g)
+		}
+	}
+	return groups
+}
+
 // offer evaluates a section and keeps it where it is the worst.
 func (z *webZone) offer(sense beam.Sense, a *beam.Action, note string) {
-	web := &z.web[senseIndex(sense)]
-	s := web.at(z.e, shearForces{shear: a.Shear, moment: a.Moment, axial: a.Axial})
+	web := z.webFor(sense, a.Shear)
+	f := shearForces{shear: a.Shear, moment: a.Moment, axial: a.Axial}
+	if z.bentBars {
+		f.bent = z.bent[against(a.Shear)]
+	}
+	s := web.at(z.e, f)
+	s.bentAt = z.bentAt
 	z.strength.take(ratio(s.shear, s.design), sense, a, &s, note)
 	z.limit.take(ratio(s.shear, s.limit), sense, a, &s, note)
 	z.trigger.take(ratio(s.shear, s.trigger), sense, a, &s, note)
 	if s.required && z.zone >= 0 {
 		z.along.take(ratio(web.s, s.along), sense, a, &s, note)
 		z.across.take(ratio(z.e.lengthIn(z.legs), s.across), sense, a, &s, note)
+	}
+	z.heavy = z.heavy || s.heavy
+	if z.hangs {
+		z.lift(sense, web, a, &s, note)
 	}
 }
 
@@ -149,6 +203,20 @@ func (z *webZone) exceeds(sense beam.Sense, shear float64) bool {
 // point meets a single section, whose sense follows from its moment; without
 // one, every sense that bends the span.
 func (z *webZone) point(a beam.Action) {
+	z.seekBent(a.At)
+	z.meets(a)
+}
+
+// seekBent finds what bent bars carry at the sections about to be met, by one
+// of them that lies within no end of their reach.
+func (z *webZone) seekBent(at units.Length) {
+	if z.bentBars {
+		z.bent, z.bentAt = z.e.bentAt(z.t, z.span, at), at
+	}
+}
+
+// meets is point with the bent bars known.
+func (z *webZone) meets(a beam.Action) {
 	m := a.Moment.In(units.NewtonMetre)
 	if m >= 0 && (m > 0 || z.bends[0]) {
 		z.meet(beam.Positive, &a)
@@ -182,6 +250,7 @@ func (z *webZone) stretch(i int, from, to units.Length) {
 		z.point(b)
 		return
 	}
+	z.seekBent(from.Add(to).Scale(0.5))
 	s := loadedStretch{i: i, from: from, to: to, shearStretch: newShearStretch(length,
 		a.Moment.In(units.NewtonMetre), a.Shear.In(units.Newton), b.Moment.In(units.NewtonMetre), b.Shear.In(units.Newton))}
 	parts, n := s.parts()

@@ -68,11 +68,11 @@ func TestShallowBeamsAreExempt(t *testing.T) {
 		{"14M", &si14, shearCase{fc: 25, lambda: 1, bw: 300, h: 250, d: 200, as: 700, fyt: 420}, 0.75 * 0.17 * 5 * 60000},
 	} {
 		w, s := c.c.evaluate(c.e)
-		require.True(t, w.exempt, c.name)
+		require.Equal(t, exemptShallow, w.exempt, c.name)
 		require.InEpsilon(t, c.trigger, s.trigger, 1e-12, c.name)
 		c.c.h += c.c.h * 1e-6
 		w, s = c.c.evaluate(c.e)
-		require.False(t, w.exempt, c.name)
+		require.Zero(t, w.exempt, c.name)
 		require.Less(t, s.trigger, c.trigger, c.name)
 	}
 }

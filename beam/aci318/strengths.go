@@ -46,8 +46,8 @@ func (c Code) Strengths(q beam.SectionQuery) (beam.Strengths, error) {
 		out.Notes = append(out.Notes, "with the displaced concrete deducted more than one depth of the neutral axis balances; the least was taken")
 	}
 	web := e.queryWeb(&q, &out.Flexure)
-	shear := web.at(e, shearForces{shear: q.Demand.Shear, moment: q.Demand.Moment, axial: q.Demand.Axial})
-	out.Shear = e.shearStrength(&web, &shear)
+	shear := web.at(e, e.queryForces(&q, &web))
+	out.Shear = e.shearStrength(&q, &web, &shear)
 	torsion := e.torsionStrength(q.Section, &q.Concrete, q.Demand.Axial)
 	out.Torsion = e.torsionAnswer(&torsion, q.Demand.Torque)
 	out.Checks = e.queryChecks(&q, &out, &web, &shear, &torsion)
@@ -88,6 +88,7 @@ func (e *edition) queryFaults(q *beam.SectionQuery) []beam.Fault {
 		f.within("/stirrups/diameter", "diameter", s.Diameter.Amount(), units.Length{}.Amount(), mostSide.Amount())
 		f.within("/stirrups/across", "distance between legs", s.Across.Amount(), units.Length{}.Amount(), mostSide.Amount())
 	}
+	f.faultShear(q)
 	d := &q.Demand
 	f.within("/demand/moment", "moment", d.Moment.Amount(), mostMoment.Neg().Amount(), mostMoment.Amount())
 	f.within("/demand/shear", "shear", d.Shear.Amount(), mostForce.Neg().Amount(), mostForce.Amount())
@@ -146,7 +147,7 @@ func (e *edition) queryRefusals(q *beam.SectionQuery) []beam.Refusal {
 			out = append(out, e.steelRefusals(fy)...)
 		}
 	}
-	out = append(out, e.axialRefusals(q.Section, &q.Concrete, q.Demand.Axial, q.Demand.Name)...)
+	out = append(out, e.axialRefusals(queryGross(q), &q.Concrete, q.Demand.Axial, q.Demand.Name)...)
 	t := e.torsionStrength(q.Section, &q.Concrete, q.Demand.Axial)
 	if !q.Demand.Torque.IsZero() && !t.neglects(e, q.Demand.Torque) {
 		out = append(out, beam.Refusal{

@@ -36,7 +36,7 @@ func TestPublishedShear(t *testing.T) {
 func publishedConcrete(t *testing.T, c *vectors.Case, e *edition) map[string]units.Amount {
 	t.Helper()
 	s := shearSection{
-		strength: c.Stress("fc"), lambda: c.Number("lambda"), width: c.Length("b"), gross: c.Length("d").Scale(1.1),
+		strength: c.Stress("fc"), light: lightness{factor: c.Number("lambda")}, width: c.Length("b"), height: c.Length("d").Scale(1.1),
 		depth: c.Length("d"), area: c.Area("As"),
 	}
 	s.stirrups.yield = e.stressOf(e.materials.grade60)
@@ -73,7 +73,7 @@ func publishedStirrups(t *testing.T, c *vectors.Case, e *edition) map[string]uni
 		found["Vu_at_d"] = shear.Amount()
 	}
 	s := shearSection{
-		strength: c.Stress("fc"), lambda: 1, width: c.Length("b"), gross: c.Length("h"), depth: c.Length("d"), area: c.Area("As"),
+		strength: c.Stress("fc"), light: lightness{factor: 1}, width: c.Length("b"), height: c.Length("h"), depth: c.Length("d"), area: c.Area("As"),
 	}
 	s.stirrups = stirrupSteel{area: c.Area("Av"), yield: c.Stress("fyt"), spacing: c.Length("d").Scale(0.5)}
 	w := e.newWebSteel(&s)
