@@ -85,10 +85,10 @@ func indexed(err error, i int) error {
 }
 
 // AtCurvature returns the equilibrium of the section at a curvature, from 1e-6 of
-// that of [Solver.Ultimate] up to it. Where the least depth of the neutral axis
-// leaps as the strain of the compression face rises, as it does where the edge of
-// a block passes a bar, curvatures are leapt over too: the point is then the one
-// beyond the leap, with the curvature that it has.
+// that of [Solver.Ultimate] up to it. Where the edge of a block passes a bar the
+// least depth of the neutral axis can leap as the strain of the compression face
+// rises: the line doubles back, and one of its points of that curvature is
+// returned, or leaps over the curvature, and the point beyond the leap is.
 //
 // Its errors are [*InputError] and [*NoEquilibriumError].
 func (s *Solver) AtCurvature(section Section, law Law, bending Bending, curvature units.Curvature) (CurvaturePoint, error) {

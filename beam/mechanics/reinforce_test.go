@@ -100,6 +100,27 @@ func TestRequiredTensionPutBackInAnyShape(t *testing.T) {
 	require.Greater(t, reached, 3000)
 }
 
+// The general search of one layer comes to the same area.
+func TestRequiredAreaOfATaperingWeb(t *testing.T) {
+	law := whitney(t, mpa(30), 0.85)
+	var solver mechanics.Solver
+	for _, sense := range []mechanics.Sense{mechanics.Sagging, mechanics.Hogging} {
+		parts := mechanics.Tee(mm(900), mm(120), mm(350), mm(700))
+		parts[1].BottomWidth = mm(250)
+		layer := layerSI(640, 1, 420)
+		if sense == mechanics.Hogging {
+			layer.Depth = mm(60)
+		}
+		bending, moment := mechanics.Bending{Sense: sense}, units.KilonewtonMetre.Of(700)
+		want, err := solver.RequiredTension(parts, law, bending, layer, moment)
+		require.NoError(t, err)
+		s := mechanics.Section{Parts: parts, Layers: []mechanics.Layer{layer}}
+		got, err := solver.RequiredArea(s, 0, law, bending, moment)
+		require.NoError(t, err)
+		require.InEpsilon(t, want.In(units.SquareMetre), got.In(units.SquareMetre), 1e-9)
+	}
+}
+
 // With enough axial force the section has the moment without any steel.
 func TestRequiredTensionUnderAxialForce(t *testing.T) {
 	law := whitney(t, ksi(4), 0.85)
