@@ -92,9 +92,6 @@ func (s Size) Extent() (halfWidth, towards, away units.Length) {
 // AppendSingles appends the real bars of p to dst, those of a bundle from the
 // face and then from left to right; a single bar is appended as it is.
 func (p *Placed) AppendSingles(dst []Placed) []Placed {
-	if p.Size.bundled < 2 {
-		return append(dst, *p)
-	}
 	b := p.Size.body()
 	x, y := p.metres()
 	single := Placed{Size: p.Size.Single(), Layer: p.Layer, across: p.across}
@@ -153,11 +150,7 @@ func (s *Size) body() body {
 		return body{n: 1, bar: r, counts: r, low: r, high: r}
 	}
 	b := body{n: int(s.bundled), counts: r}
-	if s.rec != nil {
-		b.bar = s.rec.bar.diameter.In(units.Metre) / 2
-	} else {
-		b.bar = r / math.Sqrt(float64(b.n))
-	}
+	b.bar = r / math.Sqrt(float64(b.n))
 	b.wide = b.bar
 	_, first := b.at(0)
 	_, last := b.at(b.n - 1)

@@ -141,6 +141,53 @@ func TestLegsNeedRoom(t *testing.T) {
 	}
 }
 
+// A leg takes no bar that its mirror image, or the legs between, need: though
+// the middle bar is nearer to its even place, each leg of a pair keeps to the
+// bars of its own side.
+func TestLegsLeaveBarsForOthers(t *testing.T) {
+	eight := size(t, "astm-inch", "#8")
+	for _, row := range []struct {
+		width   float64
+		x, want []float64 // of the bars, and of the inner legs
+	}{
+		{16, []float64{3, 4.6, 8, 11.4, 13}, []float64{3.85, 12.15}},
+		{16, []float64{3, 4.6, 7, 9, 11.4, 13}, []float64{6.25, 9.75}},
+		{16, []float64{3, 4.6, 7, 9, 11.4, 13}, []float64{3.85, 6.25, 12.15}},
+		{16, []float64{3, 4.6, 6.2, 7.8, 9.4, 11.4, 13}, []float64{3.85, 5.45, 10.15, 12.15}},
+		{28, []float64{3, 7.5, 12.5, 15.5, 20.5, 25}, []float64{11.75, 16.25}},
+		{34, []float64{3, 8.6, 10.2, 14.7, 19.3, 23.8, 25.4, 31}, []float64{7.85, 13.95, 20.05, 26.15}},
+	} {
+		cage := inchCage(t, row.width, "#4")
+		var bottom []bars.Placed
+		for _, x := range row.x {
+			bottom = append(bottom, bars.Placed{Size: eight, X: inches(x), Y: inches(2.5), Layer: 1})
+		}
+		legs, held, err := cage.AppendLegs(nil, len(row.want)+2, bottom)
+		require.NoError(t, err)
+		require.True(t, held)
+		for i, x := range row.want {
+			require.InEpsilon(t, x, legs[i+1].In(units.Inch), 1e-12)
+		}
+	}
+}
+
+// One leg of a pair without room lets go of both.
+func TestLegsHeldAllOrNone(t *testing.T) {
+	eight := size(t, "astm-inch", "#8")
+	cage := inchCage(t, 16, "#4")
+	for _, x := range [][]float64{{3, 6, 11.6, 13}, {3, 4.4, 10, 13}} {
+		var bottom []bars.Placed
+		for _, x := range x {
+			bottom = append(bottom, bars.Placed{Size: eight, X: inches(x), Y: inches(2.5), Layer: 1})
+		}
+		legs, held, err := cage.AppendLegs(nil, 4, bottom)
+		require.NoError(t, err)
+		require.False(t, held)
+		require.InEpsilon(t, 1.75+12.5/3, legs[1].In(units.Inch), 1e-12)
+		require.InEpsilon(t, 1.75+25/3.0, legs[2].In(units.Inch), 1e-12)
+	}
+}
+
 func TestLegsRefuse(t *testing.T) {
 	for _, row := range []struct {
 		name string
