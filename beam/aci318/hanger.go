@@ -98,6 +98,12 @@ func (w *webSteel) lifting(e *edition, s *sectionShear, load float64) hangerStee
 	return h
 }
 
+// hangerSection is the section found worst where a load hangs.
+type hangerSection struct {
+	worstSection
+	steel hangerSteel
+}
+
 // lift judges the stirrups of a section where a load hangs.
 func (z *webZone) lift(sense beam.Sense, web *webSteel, a *beam.Action, s *sectionShear, note string) {
 	load := hungLoad(z.t.Problem, z.span, a.Combination, a.At)
@@ -107,7 +113,7 @@ func (z *webZone) lift(sense beam.Sense, web *webSteel, a *beam.Action, s *secti
 	h := web.lifting(z.e, s, load)
 	if u := ratio(h.lift+h.shear, h.provided); !z.hanger.found || u > z.hanger.utilization {
 		z.hanger.take(u, sense, a, s, note)
-		z.lifted = h
+		z.hanger.steel = h
 	}
 }
 
@@ -115,13 +121,13 @@ const noteHanger = "the stirrups lift what hangs here beside carrying the shear;
 
 // appendHanger appends whether the stirrups of a stretch lift what hangs there.
 func (z *webZone) appendHanger(dst []beam.Check) []beam.Check {
-	if !z.hanger.found {
+	if z.hanger == nil || !z.hanger.found {
 		return dst
 	}
-	e := z.e
+	e, h := z.e, &z.hanger.steel
 	c := beam.Check{ID: "hanger.stirrups", Clause: "R9.4.3.2", Reason: noteHanger}
 	z.hanger.at(&c, z.span)
-	c.Compare(e.steelOf(z.lifted.lift+z.lifted.shear).Amount(), e.steelOf(z.lifted.provided).Amount())
+	c.Compare(e.steelOf(h.lift+h.shear).Amount(), e.steelOf(h.provided).Amount())
 	if z.t.Record {
 		c.Steps = z.hangerSteps()
 	}
@@ -130,7 +136,7 @@ func (z *webZone) appendHanger(dst []beam.Check) []beam.Check {
 
 // hangerSteps is the working of the stirrups that lift a load.
 func (z *webZone) hangerSteps() []beam.Step {
-	e, h, w := z.e, &z.lifted, &z.hanger
+	e, h, w := z.e, &z.hanger.steel, &z.hanger.worstSection
 	web := z.webFor(w.sense, w.action.Shear)
 	var out working
 	web.concreteSteps(e, &out, &w.values)

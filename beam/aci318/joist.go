@@ -31,11 +31,19 @@ type joistRib struct {
 	height float64 // h
 	slab   float64 // thickness; zero: not known
 	depth  float64 // h less the slab
-	clear  float64 // the greater clear distance to the next rib; zero: not known
+	// clear is the greater clear distance to the next rib, if measured. If not,
+	// it is at least this: a flange works with its web no further than half way
+	// to the next one (6.3.2.1).
+	clear    float64
+	measured bool
 }
 
 func (e *edition) joistRib(s *beam.Section, g *beam.Geometry) joistRib {
-	r := joistRib{width: e.lengthIn(g.Web), height: e.lengthIn(s.Depth), clear: e.lengthIn(s.Slab.ClearLeft.Max(s.Slab.ClearRight))}
+	left, right := s.Overhangs(beam.Top)
+	r := joistRib{width: e.lengthIn(g.Web), height: e.lengthIn(s.Depth), clear: 2 * e.lengthIn(left.Max(right))}
+	if !s.Slab.IsZero() {
+		r.clear, r.measured = e.lengthIn(s.Slab.ClearLeft.Max(s.Slab.ClearRight)), true
+	}
 	if s.Flange() == beam.Top {
 		r.slab = e.lengthIn(s.FlangeThickness)
 	}
@@ -80,7 +88,7 @@ func (e *edition) appendJoist(dst []beam.Check, t *beam.Trial) []beam.Check {
 	}
 	dst = compare(dst, "joist.rib-width", "9.8.1.2", e.joist.leastRib, r.width)
 	dst = compare(dst, "joist.rib-depth", "9.8.1.3", r.depth, joistSlender*r.width)
-	if r.clear > 0 {
+	if r.measured || !units.AtMost(r.clear, e.joist.mostClear) {
 		dst = compare(dst, "joist.spacing", "9.8.1.4", r.clear, e.joist.mostClear)
 	} else {
 		dst = append(dst, beam.NotJudgedCheck("joist.spacing", "9.8.1.4", noteJoistClear))
@@ -88,11 +96,19 @@ func (e *edition) appendJoist(dst []beam.Check, t *beam.Trial) []beam.Check {
 	switch least := r.leastSlab(e); {
 	case r.slab == 0:
 		return append(dst, beam.NotJudgedCheck("joist.slab", "9.8.3.1", noteJoistNoSlab))
-	case r.clear == 0 && units.AtMost(least, r.slab):
+	case !r.measured && units.AtMost(least, r.slab):
 		return append(dst, beam.NotJudgedCheck("joist.slab", "9.8.3.1", noteJoistClear))
 	default:
 		return compare(dst, "joist.slab", "9.8.3.1", least, r.slab)
 	}
+}
+
+// unmeasured says where a clear distance that was not given is from.
+func (r *joistRib) unmeasured() string {
+	if r.measured {
+		return ""
+	}
+	return "at least: the flange reaches no further than half way to the next rib"
 }
 
 // steps gives the working of one of the checks.
@@ -109,8 +125,10 @@ func (r *joistRib) steps(e *edition, id string) []beam.Step {
 		out.find("hr,max", "greatest depth of the rib", "9.8.1.3", number(joistSlender)+" bw", e.asLength(joistSlender*r.width))
 	case "joist.spacing":
 		out.given("sc", "clear distance between ribs", "", e.asLength(r.clear))
+		out.note(r.unmeasured())
 	case "joist.slab":
 		out.given("sc", "clear distance between ribs", "", e.asLength(r.clear))
+		out.note(r.unmeasured())
 		out.find("hf,min", "least thickness of the slab", "9.8.3.1",
 			"max(sc / "+number(joistSlabShare)+", "+number(e.joist.leastSlab)+")", e.asLength(r.leastSlab(e)))
 	}

@@ -27,6 +27,7 @@ func (c Code) Resolve(b *beam.Brief, note *beam.Register) []beam.Fault {
 	r.surroundings()
 	r.actions()
 	r.readings()
+	r.shearReadings()
 	r.method()
 	return r.faults
 }
@@ -174,7 +175,7 @@ func (r *resolution) actions() {
 		}
 	}
 	if !hung {
-		r.confirm("shear.direct-support", "supports press on the soffit and loads act at or near the top (9.4.3.2), as none is said to hang", shearChecks...)
+		r.confirm("shear.direct-support", directSupport(b), shearChecks...)
 	}
 	if r.usesLiveFactor() {
 		r.assume("loads.live-factor", "the live-load factor of 5.3.1(c) to (e) stays 1.0; the 0.5 of 5.3.3 is not used", "flexure.positive", "flexure.negative", "shear.strength")
@@ -226,7 +227,8 @@ func (r *resolution) readings() {
 		r.assume("reading.shear-row", "with at least the least stirrups Vc is by "+words[g.ShearRow]+" of Table 22.5.5.1; without them by row (c)", shearChecks...)
 	} else {
 		words := map[beam.ShearMethod]string{
-			beam.SimplifiedShear: "the simplified expression of 22.5.5.1", beam.DetailedShear: "the detailed expressions of Table 22.5.5.1",
+			beam.SimplifiedShear: "the simplified expression of 22.5.5.1",
+			beam.DetailedShear:   "the detailed expressions of Table 22.5.5.1; under an axial force by the simplified ones of 22.5.6.1 and 22.5.7.1",
 		}
 		r.assume("reading.shear-method", "Vc is by "+words[g.ShearMethod], shearChecks...)
 	}

@@ -12,6 +12,7 @@ import (
 func (c Code) Settle(t *beam.Trial, checks []beam.Check, note *beam.Register) {
 	c.e.settleTensionControl(t, note)
 	c.e.settleLeastStirrups(t, note)
+	c.e.settleSlopes(t, note)
 	c.e.settleCover(t, note)
 }
 

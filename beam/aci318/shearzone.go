@@ -47,16 +47,14 @@ type webZone struct {
 	// greatest shear of the stretch; for the other the loose webs hold.
 	leaning bool
 	against int // risesLeft or risesRight
-	loose   [2]webSteel
+	loose   *[2]webSteel
 
 	bentBars bool         // the span has bent bars,
 	bent     [2]bentShare // which carry this at the sections being met, by their rise,
 	bentAt   units.Length // of which this is one
 	heavy    bool         // spacings are halved somewhere
 
-	hangs  bool // loads hang on the span
-	hanger worstSection
-	lifted hangerSteel // at hanger
+	hanger *hangerSection // nil: nothing hangs on the span
 
 	// The first and last section of the span that are designed for their own
 	// shear under the combination being followed, and what was decided there.
@@ -91,6 +89,9 @@ func (e *edition) newWebZone(t *beam.Trial, span, zone int, spacing units.Length
 		z.leaning = s.stirrups.angle != 0 && s.stirrups.angle != 90
 		z.legs = legSpacing(b.Section.Width, t.Cover, t.ZoneBar[zone].Diameter, t.Zones[zone].Legs)
 	}
+	if z.leaning {
+		z.loose = new([2]webSteel)
+	}
 	for i, sense := range [2]beam.Sense{beam.Positive, beam.Negative} {
 		s.depth = t.EffectiveDepth(sense)
 		s.area = t.Steel(sense.TensionFace()).Area
@@ -101,8 +102,11 @@ func (e *edition) newWebZone(t *beam.Trial, span, zone int, spacing units.Length
 			z.loose[i] = e.newWebSteel(&without)
 		}
 	}
-	z.bentBars, z.hangs = hasBent(t, span), span > 0 && hungLoads(b, span)
-	z.local = !e.shear.rowsByStirrups && b.Readings.ShearMethod == beam.DetailedShear || z.leaning || z.bentBars || z.hangs
+	z.bentBars = hasBent(t, span)
+	if span > 0 && hungLoads(b, span) {
+		z.hanger = new(hangerSection)
+	}
+	z.local = !e.shear.rowsByStirrups && b.Readings.ShearMethod == beam.DetailedShear || z.leaning || z.bentBars || z.hanger != nil
 	return z
 }
 
@@ -151,7 +155,7 @@ func (z *webZone) offer(sense beam.Sense, a *beam.Action, note string) {
 		z.across.take(ratio(z.e.lengthIn(z.legs), s.across), sense, a, &s, note)
 	}
 	z.heavy = z.heavy || s.heavy
-	if z.hangs {
+	if z.hanger != nil {
 		z.lift(sense, web, a, &s, note)
 	}
 }
