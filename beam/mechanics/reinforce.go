@@ -1,10 +1,6 @@
 package mechanics
 
-import (
-	"math"
-
-	"soffit.example/units"
-)
+import "soffit.example/units"
 
 // RequiredTension returns the least area of one layer of tension steel, at the
 // depth and of the steel that tension gives, with which a stack of parts and no
@@ -15,9 +11,9 @@ import (
 // The moment of the concrete about the steel fixes the neutral axis, and the
 // balance of forces the area. Where the stressed concrete lies within one
 // rectangle at the compression face the neutral axis is the root of a quadratic,
-// as for the function [RequiredTension]; elsewhere it is refined to the last bits
-// between the levels at which anything changes. Under a law that softens the
-// moment can rise and fall between those, and is sampled there.
+// as for the function [RequiredTension]; elsewhere it is halved down to the last
+// bits from the first of 32 depths with moment enough. That is the least where the
+// moment rises with the depth, as it does unless the law softens.
 //
 // Its errors are [*InputError], in which the layer is layers[0], and where no
 // area gives the moment [*UnreachableError].
@@ -31,7 +27,7 @@ func (s *Solver) RequiredTension(parts []Part, law Law, bending Bending, tension
 	if err := s.load(Section{Parts: parts, Layers: s.layers}, law, bending); err != nil {
 		return units.Area{}, err
 	}
-	if err := s.checkPull(m, bending); err != nil {
+	if err := s.checkTension(m, bending, tension.Depth); err != nil {
 		return units.Area{}, err
 	}
 	k, ok := s.axisForMoment(m, 1)
@@ -75,12 +71,12 @@ func (s *Solver) RequiredBoth(parts []Part, law Law, bending Bending, tension, c
 	if err := s.load(Section{Parts: parts, Layers: s.layers}, law, bending); err != nil {
 		return units.Area{}, units.Area{}, err
 	}
+	if err := s.checkTension(m, bending, tension.Depth); err != nil {
+		return units.Area{}, units.Area{}, err
+	}
 	d, upper := s.bars[0].at, &s.bars[1]
 	if upper.at >= d {
 		return units.Area{}, units.Area{}, fault("layers", 1, "depth", compression.Depth, "nearer the compression face than the tension steel, at "+tension.Depth.String())
-	}
-	if err := s.checkPull(m, bending); err != nil {
-		return units.Area{}, units.Area{}, err
 	}
 	share := law.ultimate / (law.ultimate + strain) // of d, of the neutral axis
 	limit := 1 / (share * d)
@@ -118,13 +114,17 @@ func (s *Solver) axialAboutSteel() float64 {
 	return s.axial * s.depth * (s.bars[0].at - centroid) * s.depth
 }
 
-// checkPull refuses an axial tension for which the moment leaves no compression:
-// it pulls between the centroid and the steel.
-func (s *Solver) checkPull(moment float64, bending Bending) error {
-	if moment+s.axialAboutSteel() > 0 {
-		return nil
+// checkTension refuses tension steel at the compression face, and an axial force
+// that with the moment leaves no compression: a tension between the centroid and
+// the steel.
+func (s *Solver) checkTension(moment float64, bending Bending, depth units.Length) error {
+	switch {
+	case s.bars[0].at == 0:
+		return fault("layers", 0, "depth", depth, "away from the compression face")
+	case !(moment+s.axialAboutSteel() > 0):
+		return &InputError{Field: "axial", Value: bending.Axial.String(), Allowed: "a force with which the moment about the tension steel is above 0"}
 	}
-	return &InputError{Field: "axial", Value: bending.Axial.String(), Allowed: "a force with which the moment about the tension steel is above 0"}
+	return nil
 }
 
 // tensionArea returns the area of the first bar that balances a compression of
@@ -140,16 +140,12 @@ func (b *bar) elasticPlastic(strain float64) float64 {
 	return max(-b.yield, min(b.yield, b.elastic*strain))
 }
 
-// unreachable reports a moment that the section has with no steel, the greatest
-// being with the neutral axis at k.
+// unreachable reports a moment that no steel gives the section, the greatest being
+// with the neutral axis at k.
 func (s *Solver) unreachable(moment units.Moment, k float64) error {
 	_, most := s.aboutSteel(k)
 	return &UnreachableError{Moment: moment, Greatest: units.NewtonMetre.Of(most - s.axialAboutSteel())}
 }
-
-// panels is the number of parts in which the moment of the concrete is sampled
-// between two levels at which anything changes.
-const panels = 8
 
 // axisForMoment returns the greatest k at which the concrete, with the axial
 // force, has a nominal moment in N-m with tension at the first bar, the neutral
@@ -157,35 +153,24 @@ const panels = 8
 // it returns the k of the greatest moment.
 func (s *Solver) axisForMoment(moment, share float64) (k float64, ok bool) {
 	want := moment + s.axialAboutSteel()
-	d := s.bars[0].at
-	deepest := 1 / (share * d)
-	if k, ok := s.axisInRectangle(want); ok && k >= deepest {
+	deepest := share * s.bars[0].at
+	if k, ok := s.axisInRectangle(want); ok && k*deepest >= 1 {
 		return k, true
 	}
-	// The levels are the events, from the least depth of the neutral axis on.
-	var last, greatest, bestMoment = math.Inf(1), deepest, math.Inf(-1)
-	for i := 0; i <= len(s.events) && last > deepest; i++ {
-		next := deepest
-		if i < len(s.events) {
-			next = max(deepest, s.events[i].k)
+	const samples = 32
+	var before, best, greatest float64
+	for i := range samples {
+		depth := deepest * float64(i+1) / samples
+		_, m := s.aboutSteel(1 / depth)
+		if m >= want {
+			return s.refineAxis(want, before, depth), true
 		}
-		if next >= last {
-			continue
+		if m > greatest {
+			best, greatest = depth, m
 		}
-		from := 1 / last
-		for j := range panels {
-			k := 1 / (from + (1/next-from)*float64(j+1)/panels)
-			_, m := s.aboutSteel(k)
-			if m >= want {
-				return s.refineAxis(want, k, last), true
-			}
-			if m > bestMoment {
-				greatest, bestMoment = k, m
-			}
-			last = k
-		}
+		before = depth
 	}
-	return greatest, false
+	return 1 / best, false
 }
 
 // axisInRectangle returns the k at which stressed concrete that all lies within
@@ -202,10 +187,9 @@ func (s *Solver) axisInRectangle(want float64) (k float64, ok bool) {
 	return s.depth / c, true
 }
 
-// refineAxis halves the depths of the neutral axis between those of shallow,
-// with too small a moment, and deep.
-func (s *Solver) refineAxis(want, deep, shallow float64) float64 {
-	low, high := 1/shallow, 1/deep
+// refineAxis halves the depths of the neutral axis between low, with too small a
+// moment, and high.
+func (s *Solver) refineAxis(want, low, high float64) (k float64) {
 	for range 100 {
 		mid := low + (high-low)/2
 		if mid <= low || mid >= high {

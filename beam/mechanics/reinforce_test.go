@@ -3,6 +3,7 @@ package mechanics_test
 import (
 	"math"
 	"math/rand/v2"
+	"strings"
 	"testing"
 
 	"github.com/stretchr/testify/require"
@@ -199,13 +200,19 @@ func TestRequiredTensionOfAShapeRefuses(t *testing.T) {
 			_, err := solver.RequiredTension(parts, law, mechanics.Bending{Sense: 2}, layer, moment)
 			return err
 		},
+		"layers[0].depth away from": func() error {
+			_, err := solver.RequiredTension(parts, law, mechanics.Bending{}, mechanics.Layer{Steel: grade60}, moment)
+			return err
+		},
 		"layers[0].depth": func() error {
 			_, err := solver.RequiredTension(parts, law, mechanics.Bending{}, mechanics.Layer{Depth: in(25), Steel: grade60}, moment)
 			return err
 		},
 	} {
 		require.ErrorAs(t, call(), &input)
-		require.Equal(t, field, input.Field)
+		name, allowed, _ := strings.Cut(field, " ")
+		require.Equal(t, name, input.Field)
+		require.Contains(t, input.Allowed, allowed)
 	}
 }
 
@@ -368,6 +375,7 @@ func TestRequiredBothRefuses(t *testing.T) {
 		{"strain", "from 1e-06 to 1", call(tension, compression, 0, moment)},
 		{"strain", "from 1e-06 to 1", call(tension, compression, math.NaN(), moment)},
 		{"layers[0].depth", "0.6096 m", call(mechanics.Layer{Depth: in(-1), Steel: grade60}, compression, 0.005, moment)},
+		{"layers[0].depth", "away from the compression face", call(mechanics.Layer{Steel: grade60}, compression, 0.005, moment)},
 		{"layers[1].steel.yield", "MPa", call(tension, mechanics.Layer{Depth: in(2), Steel: mechanics.Steel{Modulus: ksi(29000)}}, 0.005, moment)},
 		{"layers[1].depth", "nearer the compression face", call(tension, tension, 0.005, moment)},
 		{"layers[1].depth", in(21.5).String(), call(tension, mechanics.Layer{Depth: in(23), Steel: grade60}, 0.005, moment)},
