@@ -29,11 +29,14 @@ func (e *edition) leastTension(p *beam.Problem, s beam.Sense, depth units.Length
 		return units.Area{}, true
 	}
 	mu := e.momentIn(moment)
+	if deep := !units.AtMost(e.lengthIn(b.Section.Depth), e.crack.deep); deep && b.Readings.CountSideBars && !p.Twisted {
+		return units.Area{}, true // bars along the sides may carry a part of the moment
+	}
 	z := e.sizing(p.Geometry.Parts, s, b.Concrete.Strength, b.Reinforcement.Yield, depth, depth, b.Readings.RoundedYield)
 	if !z.mayCarry(mu) {
 		return units.Area{}, false
 	}
-	perDepth := e.minimumSteel(b.Concrete.Strength, b.Reinforcement.Yield, b.Section.Width, depth).area / z.depth
+	perDepth := e.minimumSteel(b.Concrete.Strength, b.Reinforcement.Yield, e.problemWidth(p, s), depth).area / z.depth
 	// A shade less, so that rounding never makes the bound miss steel that just
 	// passes.
 	return e.areaOf(z.leastArea(mu, perDepth, e.minimum.waiver) * (1 - 2e-9)), true

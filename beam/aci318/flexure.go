@@ -89,10 +89,11 @@ func (e *edition) trialFlexure(t *beam.Trial, s beam.Sense) (f flexure, ok bool)
 		return flexure{}, false
 	}
 	t.Law = law
-	if err := t.Solver.Ultimate(&t.Ultimate, e.trialSection(t, s), law, bendingOf(s, &b.Readings)); err != nil {
+	section := e.trialSection(t, s)
+	if err := t.Solver.Ultimate(&t.Ultimate, section, law, bendingOf(s, &b.Readings)); err != nil {
 		return flexure{}, false
 	}
-	return e.classify(&t.Ultimate, b.Concrete.Strength, b.Reinforcement.Yield, &b.Readings), true
+	return e.classify(&t.Ultimate, b.Concrete.Strength, extremeYield(section, s), &b.Readings), true
 }
 
 // crossCheckTolerance is the relative difference that two routes to the same
@@ -162,7 +163,7 @@ func (e *edition) flexureStrength(section mechanics.Section, strength units.Stre
 	for i, l := range u.Layers {
 		out.Layers[i] = beam.LayerState{Strain: -l.Strain, Stress: l.Stress.Neg(), Force: l.Force.Neg()}
 	}
-	m := e.minimumSteel(strength, extremeYield(section, s), webWidth(section), depth)
+	m := e.minimumSteel(strength, leastYield(section), e.minimumWidth(webWidth(section), tensionWidth(section, s), true), depth)
 	out.MinimumSteel = e.areaOf(m.area)
 	if out.CrossCheck, err = crossCheck(section, law, bending, u.Nominal); err != nil {
 		return beam.FlexureStrength{}, fmt.Errorf("second route to the strength in bending: %w", err)
@@ -185,17 +186,23 @@ func (e *DisagreementError) Error() string {
 }
 
 // extremeYield is the yield strength of the layer farthest from the
-// compression face.
+// compression face; of several there, the greatest, whose yield strain asks for
+// most.
 func extremeYield(section mechanics.Section, s beam.Sense) units.Stress {
 	var fy units.Stress
 	var farthest units.Length
-	for i, l := range section.Layers {
+	depth := section.Depth()
+	for i := range section.Layers {
+		l := &section.Layers[i]
 		d := l.Depth
 		if s == beam.Negative {
-			d = section.Depth().Sub(d)
+			d = depth.Sub(d)
 		}
-		if i == 0 || farthest.Less(d) {
+		switch {
+		case i == 0 || !d.AtMost(farthest):
 			fy, farthest = l.Steel.Yield, d
+		case farthest.AtMost(d):
+			fy, farthest = fy.Max(l.Steel.Yield), farthest.Max(d)
 		}
 	}
 	return fy
@@ -203,11 +210,31 @@ func extremeYield(section mechanics.Section, s beam.Sense) units.Stress {
 
 // webWidth is the least width of the section, by which least steel is measured.
 func webWidth(section mechanics.Section) units.Length {
-	bw := section.Parts[0].Width
-	for _, p := range section.Parts[1:] {
-		bw = bw.Min(p.Width)
+	least := section.Parts[0].Width
+	for _, p := range section.Parts {
+		top, bottom := p.Widths()
+		least = least.Min(top).Min(bottom)
 	}
-	return bw
+	return least
+}
+
+// tensionWidth is the width of the tension face.
+func tensionWidth(section mechanics.Section, s beam.Sense) units.Length {
+	if s == beam.Negative {
+		top, _ := section.Parts[0].Widths()
+		return top
+	}
+	_, bottom := section.Parts[len(section.Parts)-1].Widths()
+	return bottom
+}
+
+// leastYield is the least yield strength of the layers.
+func leastYield(section mechanics.Section) units.Stress {
+	least := section.Layers[0].Steel.Yield
+	for _, l := range section.Layers {
+		least = least.Min(l.Steel.Yield)
+	}
+	return least
 }
 
 // noEquilibrium reports whether an error says that nothing balances the

@@ -106,7 +106,7 @@ func (e *edition) judgeMinimum(t *beam.Trial, s beam.Sense, a *beam.Action) beam
 	b, steel := &t.Brief, t.Steel(s.TensionFace())
 	d := t.EffectiveDepth(s)
 	c := checkAt(bendingIDs[s].minimum, "9.6.1.2", s, a)
-	m := e.minimumSteel(b.Concrete.Strength, b.Reinforcement.Yield, b.Section.Width, d)
+	m := e.minimumSteel(b.Concrete.Strength, faceYield(t, s), e.problemWidth(t.Problem, s), d)
 	need := m.area
 	var req requiredTension
 	if !units.AtMost(need, e.areaIn(steel.Area)) {

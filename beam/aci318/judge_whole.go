@@ -1,6 +1,9 @@
 package aci318
 
-import "soffit.example/beam"
+import (
+	"soffit.example/beam"
+	"soffit.example/units"
+)
 
 // judgeWhole appends the limits of the member as such, and names what belongs
 // to the job and is not judged.
@@ -9,6 +12,7 @@ func (e *edition) judgeWhole(dst []beam.Check, t *beam.Trial) []beam.Check {
 	dst = e.appendSideFace(dst, t)
 	dst = e.appendBracing(dst, t)
 	dst = e.appendJoist(dst, t)
+	dst = e.appendFlange(dst, t)
 	if t.Forces.Spans() == 0 {
 		dst = append(dst, notJudgedDepth)
 	}
@@ -27,8 +31,22 @@ func (e *edition) appendBracing(dst []beam.Check, t *beam.Trial) []beam.Check {
 			"the spacing of lateral bracing of the compression face is not given; the beam is taken as braced"))
 	}
 	c := beam.Check{ID: "bracing.spacing", Clause: "9.2.3.1"}
-	c.Compare(b.Braced.Amount(), b.Section.Width.Scale(bracedWidths).Amount())
+	c.Compare(b.Braced.Amount(), compressionWidth(t).Scale(bracedWidths).Amount())
 	return append(dst, c)
+}
+
+// compressionWidth is the least width of the faces that some moment presses on;
+// of both where none does.
+func compressionWidth(t *beam.Trial) units.Length {
+	g := &t.Geometry
+	pressed := [2]bool{bendsAnywhere(t, beam.Positive), bendsAnywhere(t, beam.Negative)}
+	switch pressed {
+	case [2]bool{true, false}:
+		return g.TopWidth
+	case [2]bool{false, true}:
+		return g.BottomWidth
+	}
+	return g.TopWidth.Min(g.BottomWidth)
 }
 
 var notJudgedDepth = beam.NotJudgedCheck("scope.deep-beam", "9.9.1.1",

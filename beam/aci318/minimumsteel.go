@@ -3,6 +3,7 @@ package aci318
 import (
 	"math"
 
+	"soffit.example/beam"
 	"soffit.example/units"
 )
 
@@ -24,19 +25,59 @@ var (
 
 // minimumSteel is As,min of 9.6.1.2 in every step, in the units of the edition.
 type minimumSteel struct {
-	root, fy, width, depth float64
-	capped                 bool    // fy is the cap, not the bars' own
-	byRoot, byFloor        float64 // expressions (a) and (b)
-	area                   float64 // the greater
+	root, fy, depth float64
+	minimumWidth
+	capped          bool    // fy is the cap, not the bars' own
+	byRoot, byFloor float64 // expressions (a) and (b)
+	area            float64 // the greater
 }
 
-// minimumSteel evaluates 9.6.1.2 for a rectangle, or a web that is as wide as
-// its tension face.
-func (e *edition) minimumSteel(strength, yield units.Stress, width, depth units.Length) minimumSteel {
+// minimumWidth is the width that stands for bw in 9.6.1.2, in the units of the
+// edition: that of the web; but of a statically determinate beam with its flange
+// in tension the lesser of bf and 2bw.
+type minimumWidth struct {
+	web, face float64 // bw, and the width of the tension face
+	flanged   bool    // the second case
+	width     float64
+}
+
+// minimumWidth takes the face in tension for a flange wherever it is wider than
+// the web, of a polygon than the strip that runs through it.
+func (e *edition) minimumWidth(web, face units.Length, determinate bool) minimumWidth {
+	w := minimumWidth{web: e.lengthIn(web), face: e.lengthIn(face)}
+	w.width = w.web
+	if determinate && !units.AtMost(w.face, w.web) {
+		w.flanged, w.width = true, math.Min(w.face, 2*w.web)
+	}
+	return w
+}
+
+// problemWidth is the minimumWidth of a problem for one sense of bending.
+func (e *edition) problemWidth(p *beam.Problem, s beam.Sense) minimumWidth {
+	return e.minimumWidth(p.Brief.Section.Width, p.Geometry.FaceWidth(s.TensionFace()), determinate(&p.Brief))
+}
+
+// steps writes how the width comes about.
+func (m *minimumWidth) steps(e *edition, w *working) {
+	if !m.flanged {
+		w.given("b", "width of the web", "9.6.1.2", e.asLength(m.web))
+		if !units.AtMost(m.face, m.web) {
+			w.note("the flange is in tension, of a statically indeterminate beam")
+		}
+		return
+	}
+	w.given("bw", "width of the web", "", e.asLength(m.web))
+	w.given("bf", "width of the flange", "", e.asLength(m.face))
+	w.find("b", "width by which least steel goes", "9.6.1.2", "min(bf, 2 bw)", e.asLength(m.width))
+	w.note("the flange is in tension, of a statically determinate beam")
+}
+
+// minimumSteel evaluates 9.6.1.2.
+func (e *edition) minimumSteel(strength, yield units.Stress, width minimumWidth, depth units.Length) minimumSteel {
 	r := &e.minimum
 	m := minimumSteel{
 		root: e.sqrtStrength(strength), fy: e.stressIn(yield),
-		width: e.lengthIn(width), depth: e.lengthIn(depth),
+		minimumWidth: width, depth: e.lengthIn(depth),
 	}
 	if r.mostYield > 0 && !units.AtMost(m.fy, r.mostYield) {
 		m.fy, m.capped = r.mostYield, true
@@ -47,8 +88,8 @@ func (e *edition) minimumSteel(strength, yield units.Stress, width, depth units.
 	return m
 }
 
-// steps writes the working; f'c, fy, b and d are given before.
-func (m *minimumSteel) steps(e *edition, w *working) {
+// steelSteps writes the working; f'c, fy, b and d are given before.
+func (m *minimumSteel) steelSteps(e *edition, w *working) {
 	fy := "fy"
 	if m.capped {
 		fy = "fy,min"

@@ -32,7 +32,7 @@ func TestMinimumSteel(t *testing.T) {
 	} {
 		t.Run(tc.name, func(t *testing.T) {
 			width, depth := in(14), in(21)
-			m := tc.code.e.minimumSteel(tc.strength, tc.yield, width, depth)
+			m := tc.code.e.minimumSteel(tc.strength, tc.yield, tc.code.e.minimumWidth(width, width, true), depth)
 			require.InEpsilon(t, tc.ratio, tc.code.e.areaOf(m.area).Ratio(width.MulLength(depth)), 1e-12)
 			require.Equal(t, tc.capped, m.capped)
 		})

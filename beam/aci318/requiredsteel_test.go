@@ -124,7 +124,7 @@ func TestLeastAreaIsALowerBound(t *testing.T) {
 		if !r.mayCarry(mu) {
 			return
 		}
-		perDepth := e.minimumSteel(fc, fy, width, depth).area / r.depth
+		perDepth := e.minimumSteel(fc, fy, e.minimumWidth(width, width, true), depth).area / r.depth
 		bound := r.leastArea(mu, perDepth, e.minimum.waiver)
 		least := math.Inf(1)
 		for i := 1; i <= 400; i++ {

@@ -24,6 +24,7 @@ func (c Code) Resolve(b *beam.Brief, note *beam.Register) []beam.Fault {
 	r := resolution{edition: c.e, b: b, note: note}
 	r.concrete()
 	r.reinforcement()
+	r.flange()
 	r.surroundings()
 	r.actions()
 	r.readings()
@@ -237,6 +238,9 @@ func (r *resolution) readings() {
 		corner = "a corner bar is pushed into the stirrup's bend"
 	}
 	r.assume("reading.corner", corner, "spacing.clear", "flexure.positive", "flexure.negative")
+	if g.CountSideBars {
+		r.assume("reading.side-bars", "bars along the side faces count in bending, by the strains they have (9.7.2.3), where no torque needs them", flexureChecks...)
+	}
 }
 
 // method lists what the expressions rest on, to be held against the finished

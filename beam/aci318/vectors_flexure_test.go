@@ -33,10 +33,29 @@ func TestPublishedFlexure(t *testing.T) {
 			c.Meet(publishedStrength(t, c, e))
 		case "required":
 			c.Meet(publishedRequired(t, c, e))
+		case "effective-flange":
+			c.Meet(publishedFlange(t, c, e))
 		default:
 			require.Fail(t, "unknown kind of case", c.Asks)
 		}
 	})
+}
+
+// publishedFlange is an interior beam of a floor with webs at one spacing.
+func publishedFlange(t *testing.T, c *vectors.Case, e *edition) map[string]units.Amount {
+	t.Helper()
+	h, bw, spacing := c.Length("h"), c.Length("bw"), c.Length("spacing")
+	clear := spacing.Sub(bw)
+	b := usBrief()
+	b.Section = beam.Section{Shape: beam.Tee, Width: bw, Depth: units.Inch.Of(20), FlangeThickness: h, Slab: beam.Slab{ClearLeft: clear, ClearRight: clear}}
+	b.Spans = []units.Length{c.Length("ln")}
+	b.Supports[0].Width, b.Supports[1].Width = units.Length{}, units.Length{}
+	b, _ = resolved(t, Code{e}, b)
+	o := overhangOf(true, h, clear, b.Spans[0])
+	both := func(side units.Length) units.Amount { return bw.Add(side.Scale(2)).Amount() }
+	return map[string]units.Amount{
+		"be": b.Section.FlangeWidth.Amount(), "by_thickness": both(o.byThickness), "by_spacing": both(o.byWeb),
+	}
 }
 
 // publishedStrength takes layers As1 at d1, As2 at d2 ... from the compression
@@ -84,7 +103,7 @@ func publishedRequired(t *testing.T, c *vectors.Case, e *edition) map[string]uni
 	q := SteelQuery{Width: c.Length("b"), Depth: c.Length("d1"), Strength: c.Stress("fc"), Yield: c.Stress("fy"), Moment: c.Moment("Mu")}
 	s, err := Code{e}.RequiredSteel(q)
 	require.NoError(t, err)
-	m := e.minimumSteel(q.Strength, q.Yield, q.Width, q.Depth)
+	m := e.minimumSteel(q.Strength, q.Yield, e.minimumWidth(q.Width, q.Width, true), q.Depth)
 	return map[string]units.Amount{
 		"As": s.Tension.Amount(), "strain": units.Plain(s.Strain), "As_min": e.areaOf(m.area).Amount(),
 	}

@@ -268,10 +268,10 @@ func (e *edition) minimumSteps(t *beam.Trial, s beam.Sense, m *minimumSteel, req
 	w := new(working)
 	b := &t.Brief
 	w.given("f'c", "specified concrete strength", "19.2.1", e.asStress(e.stressIn(b.Concrete.Strength)))
-	w.given("fy", "yield strength of the bars", "20.2.2.4", e.asStress(e.stressIn(b.Reinforcement.Yield)))
-	w.given("b", "width of the web", "", e.asLength(m.width))
+	w.given("fy", "yield strength of the bars", "20.2.2.4", e.asStress(e.stressIn(faceYield(t, s))))
+	m.minimumWidth.steps(e, w)
 	w.given("d", "depth to the centroid of the tension steel", "", e.asLength(m.depth))
-	m.steps(e, w)
+	m.steelSteps(e, w)
 	if req.ok && req.phi == e.reduction.tension {
 		w.given("Mu", "factored moment", momentClause(t), e.asMoment(e.momentIn(moment)))
 		w.find("φ", "strength reduction factor", "Table 21.2.2", number(req.phi), asPlain(req.phi))
