@@ -83,7 +83,7 @@ func (r *Result) strengths(p *prepared, t *Trial) error {
 		if !t.inside(sense) {
 			continue // a check says so; there is no strength to give
 		}
-		q := SectionQuery{Section: b.Section, Concrete: b.Concrete, Bending: sense, Readings: b.Readings}
+		q := SectionQuery{Section: b.Section.bare(), Concrete: b.Concrete, Bending: sense, Readings: b.Readings}
 		for _, l := range t.Layers(sense, units.Stress{}) {
 			q.Layers = append(q.Layers, SteelLayer{Area: l.Area, Depth: l.Depth, Yield: l.Steel.Yield})
 		}

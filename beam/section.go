@@ -94,6 +94,26 @@ func (s Section) clone() Section {
 	return s
 }
 
+// bare is a resolved section as a query gives it.
+func (s Section) bare() Section {
+	if s.Shape == Polygon {
+		s.Width, s.Depth = units.Length{}, units.Length{}
+	}
+	s.Slab = Slab{}
+	return s
+}
+
+// MeasureSection measures a section that is given by itself, without a beam, and
+// reports its faults, with values in the units of a system. It fills the
+// overhangs of a flange, and the width and depth of a polygon.
+func MeasureSection(system units.System, s *Section) (Geometry, []Fault) {
+	f := newFaults(system)
+	if s.check(&f, false); len(f.list) > 0 {
+		return Geometry{}, f.list
+	}
+	return GeometryOf(s)
+}
+
 // check reports the faults of a section that no code is needed to see. Those of
 // a polygon's corners are seen to when it is measured.
 func (s *Section) check(f *faults, member bool) {

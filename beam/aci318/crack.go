@@ -13,11 +13,24 @@ type crackRules struct {
 	share    float64 // of fy, the stress that may be taken for fs, 24.3.2.1
 
 	deep float64 // h above which side-face bars are needed, 9.7.2.3
+
+	// Steel against shrinkage and temperature, 24.4.3.2: in 318-14 by the grade,
+	// with shrinkageWeak below Grade 60 and no less than shrinkageLeast above.
+	shrinkage, shrinkageWeak, shrinkageLeast float64
+	shrinkageByYield                         bool
 }
 
 var (
-	crackUS = crackRules{most: 15, upper: 12, stress: 40000, perCover: 2.5, share: 2.0 / 3, deep: 36}
-	crackSI = crackRules{most: 380, upper: 300, stress: 280, perCover: 2.5, share: 2.0 / 3, deep: 900}
+	crack14US = crackRules{
+		most: 15, upper: 12, stress: 40000, perCover: 2.5, share: 2.0 / 3, deep: 36,
+		shrinkage: 0.0018, shrinkageWeak: 0.0020, shrinkageLeast: 0.0014, shrinkageByYield: true,
+	}
+	crack14SI = crackRules{
+		most: 380, upper: 300, stress: 280, perCover: 2.5, share: 2.0 / 3, deep: 900,
+		shrinkage: 0.0018, shrinkageWeak: 0.0020, shrinkageLeast: 0.0014, shrinkageByYield: true,
+	}
+	crack19US = crackRules{most: 15, upper: 12, stress: 40000, perCover: 2.5, share: 2.0 / 3, deep: 36, shrinkage: 0.0018}
+	crack19SI = crackRules{most: 380, upper: 300, stress: 280, perCover: 2.5, share: 2.0 / 3, deep: 900, shrinkage: 0.0018}
 )
 
 // crackStress is fs of 24.3.2.1 where it is not computed: a share of fy.

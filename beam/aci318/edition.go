@@ -65,7 +65,7 @@ var us14 = edition{
 	stress: units.PSI, length: units.Inch, area: units.SquareInch, force: units.PoundForce, moment: units.PoundInch, steel: units.SquareInchPerInch,
 	materials: materials14US, loads: loadsUS, reduction: reduction14, minimum: minimum14US,
 	shear: shear14US, stirrups: stirrups14US, torsion: torsionUS, cover: cover14US, spacing: spacingUS,
-	crack: crackUS, depth: depthUS, ties: tiesUS, joist: joistUS, scope: scopeUS,
+	crack: crack14US, depth: depthUS, ties: tiesUS, joist: joistUS, scope: scopeUS,
 }
 
 var si14 = edition{
@@ -73,7 +73,7 @@ var si14 = edition{
 	stress: units.Megapascal, length: units.Millimetre, area: units.SquareMillimetre, force: units.Newton, moment: units.NewtonMillimetre, steel: units.SquareMillimetrePerMillimetre,
 	materials: materials14SI, loads: loadsSI, reduction: reduction14, minimum: minimum14SI,
 	shear: shear14SI, stirrups: stirrups14SI, torsion: torsionSI, cover: cover14SI, spacing: spacingSI,
-	crack: crackSI, depth: depthSI, ties: tiesSI, joist: joistSI, scope: scopeSI,
+	crack: crack14SI, depth: depthSI, ties: tiesSI, joist: joistSI, scope: scopeSI,
 }
 
 var us19 = edition{
@@ -81,7 +81,7 @@ var us19 = edition{
 	stress: units.PSI, length: units.Inch, area: units.SquareInch, force: units.PoundForce, moment: units.PoundInch, steel: units.SquareInchPerInch,
 	materials: materials19US, loads: loadsUS, reduction: reduction19, minimum: minimum19US,
 	shear: shear19US, stirrups: stirrups19US, torsion: torsionUS, cover: cover19US, spacing: spacingUS,
-	crack: crackUS, depth: depthUS, ties: tiesUS, joist: joistUS, scope: scopeUS,
+	crack: crack19US, depth: depthUS, ties: tiesUS, joist: joistUS, scope: scopeUS,
 }
 
 var si19 = edition{
@@ -89,7 +89,7 @@ var si19 = edition{
 	stress: units.Megapascal, length: units.Millimetre, area: units.SquareMillimetre, force: units.Newton, moment: units.NewtonMillimetre, steel: units.SquareMillimetrePerMillimetre,
 	materials: materials19SI, loads: loadsSI, reduction: reduction19, minimum: minimum19SI,
 	shear: shear19SI, stirrups: stirrups19SI, torsion: torsionSI, cover: cover19SI, spacing: spacingSI,
-	crack: crackSI, depth: depthSI, ties: tiesSI, joist: joistSI, scope: scopeSI,
+	crack: crack19SI, depth: depthSI, ties: tiesSI, joist: joistSI, scope: scopeSI,
 }
 
 // Edition names the code.

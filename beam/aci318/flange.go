@@ -166,24 +166,22 @@ func (e *edition) flangeSpread(p *beam.Problem, f beam.Face) units.Length {
 	return width
 }
 
-// isolatedLimits are the two limits of 6.3.2.2, each as demand and capacity.
-func isolatedLimits(s *beam.Section) (thickness, width [2]units.Length) {
-	return [2]units.Length{s.Width.Scale(isolatedThickness), s.FlangeThickness},
-		[2]units.Length{s.FlangeWidth, s.Width.Scale(isolatedWidth)}
+// isolatedCheck is the worse of the two limits of 6.3.2.2.
+func isolatedCheck(s *beam.Section) beam.Check {
+	thin := beam.Check{ID: "flange.isolated", Clause: "6.3.2.2(a)", Reason: "least thickness of the flange of an isolated tee, and its thickness"}
+	thin.Compare(s.Width.Scale(isolatedThickness).Amount(), s.FlangeThickness.Amount())
+	wide := beam.Check{ID: "flange.isolated", Clause: "6.3.2.2(b)", Reason: "width of the flange of an isolated tee, and the greatest"}
+	if wide.Compare(s.FlangeWidth.Amount(), s.Width.Scale(isolatedWidth).Amount()); thin.Utilization < wide.Utilization {
+		return wide
+	}
+	return thin
 }
 
 // appendFlange appends what the standard asks of a flange as such.
 func (e *edition) appendFlange(dst []beam.Check, t *beam.Trial) []beam.Check {
 	s := &t.Brief.Section
 	if s.Isolated {
-		c := beam.Check{ID: "flange.isolated", Clause: "6.3.2.2(a)", Reason: "least thickness of the flange of an isolated tee, and its thickness"}
-		thickness, width := isolatedLimits(s)
-		c.Compare(thickness[0].Amount(), thickness[1].Amount())
-		wide := beam.Check{ID: "flange.isolated", Clause: "6.3.2.2(b)", Reason: "width of the flange of an isolated tee, and the greatest"}
-		if wide.Compare(width[0].Amount(), width[1].Amount()); c.Utilization < wide.Utilization {
-			c = wide
-		}
-		dst = append(dst, c)
+		dst = append(dst, isolatedCheck(s))
 	}
 	switch s.Flange() {
 	case beam.Top:

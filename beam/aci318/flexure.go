@@ -22,6 +22,9 @@ type flexure struct {
 	class       string
 	nominal     units.Moment // Mn
 	design      units.Moment // φMn
+
+	axis  units.Length // c, of which strain comes
+	axial units.Force  // Pn that acts too, compression positive
 }
 
 // block is the rectangular stress block of 22.2.2.4 as a stress law.
@@ -64,6 +67,7 @@ func (e *edition) classify(u *mechanics.Ultimate, strength, yield units.Stress, 
 		yieldStrain: e.yieldStrain(yield, r.RoundedYield),
 		strain:      u.ExtremeStrain,
 		nominal:     u.Nominal,
+		axis:        u.NeutralAxis,
 	}
 	f.leastStrain = e.reduction.leastStrain(f.yieldStrain)
 	f.phi, f.class = e.reduction.flexure(f.strain, f.yieldStrain)
@@ -71,15 +75,25 @@ func (e *edition) classify(u *mechanics.Ultimate, strength, yield units.Stress, 
 	return f
 }
 
-// trialSection is the section of a trial bent in a sense, for the kernel.
+// trialSection is the section of a trial bent in a sense, for the kernel: of the
+// bars beside the web only those over which 24.3.4 spreads the tension steel.
 func (e *edition) trialSection(t *beam.Trial, s beam.Sense) mechanics.Section {
-	return mechanics.Section{Parts: t.Geometry.Parts, Layers: t.Layers(s, e.steelModulus())}
+	layers := t.Layers(s, e.steelModulus())
+	if len(t.Steel(s.TensionFace()).Flange) > 0 {
+		layers = e.withinSpread(t, s.TensionFace(), layers)
+	}
+	return mechanics.Section{Parts: t.Geometry.Parts, Layers: layers}
 }
 
 // trialFlexure is the strength of a trial in one sense. The equilibrium stays
 // in t.Ultimate. ok is false where the section has no equilibrium: there is
 // no steel to pull.
 func (e *edition) trialFlexure(t *beam.Trial, s beam.Sense) (f flexure, ok bool) {
+	return e.trialUnder(t, s, units.Force{})
+}
+
+// trialUnder is trialFlexure with a factored axial force acting too.
+func (e *edition) trialUnder(t *beam.Trial, s beam.Sense, axial units.Force) (f flexure, ok bool) {
 	b := &t.Brief
 	if t.Steel(s.TensionFace()).Count == 0 {
 		return flexure{}, false
@@ -90,10 +104,37 @@ func (e *edition) trialFlexure(t *beam.Trial, s beam.Sense) (f flexure, ok bool)
 	}
 	t.Law = law
 	section := e.trialSection(t, s)
-	if err := t.Solver.Ultimate(&t.Ultimate, section, law, bendingOf(s, &b.Readings)); err != nil {
-		return flexure{}, false
+	f, err = e.solveUnder(&t.Solver, &t.Ultimate, section, law, bendingOf(s, &b.Readings), b.Concrete.Strength, &b.Readings, axial)
+	return f, err == nil
+}
+
+// mostRounds bounds the search for φ under an axial force, which settles by a
+// digit or more a round.
+const mostRounds = 40
+
+// solveUnder finds the equilibrium under a factored axial force: the section
+// carries Pn = Pu/φ, with the φ of its own strain (21.2.2).
+func (e *edition) solveUnder(solver *mechanics.Solver, u *mechanics.Ultimate, section mechanics.Section, law mechanics.Law,
+	bending mechanics.Bending, strength units.Stress, r *beam.Readings, axial units.Force) (flexure, error) {
+	sense := beam.Positive
+	if bending.Sense == mechanics.Hogging {
+		sense = beam.Negative
 	}
-	return e.classify(&t.Ultimate, b.Concrete.Strength, extremeYield(section, s), &b.Readings), true
+	yield, phi := extremeYield(section, sense), e.reduction.tension
+	var f flexure
+	for range mostRounds {
+		bending.Axial = axial.Scale(1 / phi)
+		if err := solver.Ultimate(u, section, law, bending); err != nil {
+			return flexure{}, err
+		}
+		f = e.classify(u, strength, yield, r)
+		f.axial = bending.Axial
+		if axial.IsZero() || math.Abs(f.phi-phi) <= 1e-13 {
+			break
+		}
+		phi = f.phi
+	}
+	return f, nil
 }
 
 // crossCheckTolerance is the relative difference that two routes to the same
@@ -142,16 +183,33 @@ func tensionSide(u *mechanics.Ultimate, section mechanics.Section) (units.Area, 
 // flexureStrength is the full account of a section's strength in bending.
 // Layers are measured from the top face, whichever the sense.
 func (e *edition) flexureStrength(section mechanics.Section, strength units.Stress, s beam.Sense, r *beam.Readings) (beam.FlexureStrength, error) {
+	return e.flexureUnder(section, strength, s, r, units.Force{})
+}
+
+// flexureUnder is flexureStrength with a factored axial force acting too: the
+// lesser strength of those with and without it, with its own strain.
+func (e *edition) flexureUnder(section mechanics.Section, strength units.Stress, s beam.Sense, r *beam.Readings, axial units.Force) (beam.FlexureStrength, error) {
 	law, err := e.block(strength)
 	if err != nil {
 		return beam.FlexureStrength{}, err
 	}
 	bending := bendingOf(s, r)
-	u, err := section.Ultimate(law, bending)
+	var solver mechanics.Solver
+	var u mechanics.Ultimate
+	f, err := e.solveUnder(&solver, &u, section, law, bending, strength, r, units.Force{})
 	if err != nil {
 		return beam.FlexureStrength{}, err
 	}
-	f := e.classify(&u, strength, extremeYield(section, s), r)
+	if !axial.IsZero() {
+		var under mechanics.Ultimate
+		with, err := e.solveUnder(&solver, &under, section, law, bending, strength, r, axial)
+		if err != nil {
+			return beam.FlexureStrength{}, err
+		}
+		if with.design.Less(f.design) {
+			u, f, bending.Axial = under, with, with.axial
+		}
+	}
 	area, depth := tensionSide(&u, section)
 	out := beam.FlexureStrength{
 		Sense: s, NeutralAxis: u.NeutralAxis, BlockDepth: u.NeutralAxis.Scale(f.blockFactor), BlockFactor: f.blockFactor,

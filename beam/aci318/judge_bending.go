@@ -25,7 +25,7 @@ func (e *edition) judgeBending(dst []beam.Check, t *beam.Trial) []beam.Check {
 		}
 		dst = e.judgeSense(dst, t, s, &a)
 	}
-	return dst
+	return e.judgeTension(dst, t)
 }
 
 func notBent(s beam.Sense) string {
@@ -71,45 +71,112 @@ func checkAt(id, clause string, s beam.Sense, a *beam.Action) beam.Check {
 	}
 }
 
-func (e *edition) judgeSense(dst []beam.Check, t *beam.Trial, s beam.Sense, a *beam.Action) []beam.Check {
+// usage is the action that uses a sense of bending most, and the strength that
+// it meets.
+type usage struct {
+	beam.Action
+	flexure
+	ok bool // false: nothing balances the section under the action
+
+	// The least strain of all actions, and the axial force that gives it.
+	least      flexure
+	leastUnder beam.Action
+	pulled     bool // an axial tension acts in this sense
+	tried      bool // an axial force was tried, so that the trial holds another equilibrium
+}
+
+// use finds the worst action of a sense. An axial force takes from the strength
+// and from the strain what it does, and adds nothing (9.5.2.1).
+func (e *edition) use(t *beam.Trial, s beam.Sense, greatest beam.Action) (w usage) {
+	w.Action = greatest
+	w.flexure, w.ok = e.trialFlexure(t, s)
+	w.least, w.leastUnder = w.flexure, greatest
+	if !w.ok {
+		return w
+	}
+	worst := ratio(greatest.Moment.Abs().In(units.NewtonMetre), w.design.In(units.NewtonMetre))
+	for _, d := range t.Forces.Demands() {
+		if d.Axial.IsZero() || d.Moment.IsZero() || (s == beam.Positive) != (d.Moment.Compare(units.Moment{}) > 0) {
+			continue
+		}
+		w.pulled = w.pulled || d.Axial.Compare(units.Force{}) < 0
+		f, ok := e.trialUnder(t, s, d.Axial)
+		w.tried = true
+		if !ok {
+			w.Action, w.ok = d, false
+			return w
+		}
+		if f.strain < w.least.strain {
+			w.least, w.leastUnder = f, d
+		}
+		if u := ratio(d.Moment.Abs().In(units.NewtonMetre), f.design.In(units.NewtonMetre)); u > worst {
+			worst, w.Action, w.flexure = u, d, f
+		}
+	}
+	return w
+}
+
+func (e *edition) judgeSense(dst []beam.Check, t *beam.Trial, s beam.Sense, greatest *beam.Action) []beam.Check {
+	u := e.use(t, s, *greatest)
+	a := &u.Action
 	mu := a.Moment.Abs()
 	strength := checkAt(bendingIDs[s].strength, "9.5.1.1", s, a)
-	f, ok := e.trialFlexure(t, s)
-	if !ok {
+	if !u.ok {
 		strength.Compare(mu.Amount(), units.Moment{}.Amount())
 		strength.Reason = "no bars lie at the tension face"
+		if t.Steel(s.TensionFace()).Count > 0 {
+			strength.Reason = "nothing balances the section under the axial force"
+		}
 		return append(dst, strength)
 	}
-	strength.Compare(mu.Amount(), f.design.Amount())
-	if t.Ultimate.Equilibria > 1 {
-		strength.Reason = "with the displaced concrete deducted more than one depth of the neutral axis balances; the least was taken"
+	strength.Compare(mu.Amount(), u.design.Amount())
+	strain := checkAt(bendingIDs[s].strain, "9.3.3.1", s, &u.leastUnder)
+	strain.Compare(units.Plain(u.least.leastStrain), units.Plain(u.least.strain))
+	if u.tried {
+		e.trialUnder(t, s, under(&u)) // again, for the working
 	}
-	strain := checkAt(bendingIDs[s].strain, "9.3.3.1", s, a)
-	strain.Compare(units.Plain(f.leastStrain), units.Plain(f.strain))
+	switch {
+	case t.Ultimate.Equilibria > 1:
+		strength.Reason = "with the displaced concrete deducted more than one depth of the neutral axis balances; the least was taken"
+	case !u.axial.IsZero():
+		strength.Reason = "under the axial force, which takes from the strength in bending"
+	case !a.Axial.IsZero():
+		strength.Reason = "without the axial force, which adds to the strength in bending"
+	}
 	if t.Record {
-		w := e.flexureSteps(t, s, &f, mu)
+		w := e.flexureSteps(t, s, &u.flexure, mu)
 		if a.Combination != "" {
 			w.steps[0].Note = "under " + a.Combination
 		}
-		strength.Steps, strain.Steps = w.steps, e.strainSteps(t, &f).steps
+		strength.Steps, strain.Steps = w.steps, e.strainSteps(t, s, &u.least).steps
 	}
-	dst = append(dst, strength, strain, e.judgeMinimum(t, s, a))
+	dst = append(dst, strength, strain, e.judgeMinimum(t, s, greatest, u.pulled))
 	if t.Record {
-		dst = append(dst, e.judgeCrossCheck(t, s, a, f.nominal))
+		dst = append(dst, e.judgeCrossCheck(t, s, a, &u.flexure))
 	}
-	return e.judgeCracks(dst, t, s, a)
+	dst = e.judgeGrades(dst, t, s)
+	return e.judgeCracks(dst, t, s, greatest)
+}
+
+// under is the factored axial force in the equilibrium that an action meets.
+func under(u *usage) units.Force {
+	if u.axial.IsZero() {
+		return units.Force{}
+	}
+	return u.Axial
 }
 
 // judgeMinimum compares the steel of the tension face with 9.6.1: As,min, or
-// 4/3 of the steel required by analysis where that is less.
-func (e *edition) judgeMinimum(t *beam.Trial, s beam.Sense, a *beam.Action) beam.Check {
-	b, steel := &t.Brief, t.Steel(s.TensionFace())
+// 4/3 of the steel required by analysis where that is less. Under an axial
+// tension the waiver is not used.
+func (e *edition) judgeMinimum(t *beam.Trial, s beam.Sense, a *beam.Action, pulled bool) beam.Check {
+	b, provided := &t.Brief, e.tensionArea(t, s)
 	d := t.EffectiveDepth(s)
 	c := checkAt(bendingIDs[s].minimum, "9.6.1.2", s, a)
 	m := e.minimumSteel(b.Concrete.Strength, faceYield(t, s), e.problemWidth(t.Problem, s), d)
 	need := m.area
 	var req requiredTension
-	if !units.AtMost(need, e.areaIn(steel.Area)) {
+	if !units.AtMost(need, e.areaIn(provided)) && !pulled {
 		z := e.trialSizing(t, s)
 		req = z.tension(e.momentIn(a.Moment.Abs()))
 		if waived := e.minimum.waiver * req.area; req.ok && waived < need {
@@ -117,7 +184,7 @@ func (e *edition) judgeMinimum(t *beam.Trial, s beam.Sense, a *beam.Action) beam
 			c.Clause, c.Reason = "9.6.1.3", waiverReason
 		}
 	}
-	c.Compare(e.areaOf(need).Amount(), steel.Area.Amount())
+	c.Compare(e.areaOf(need).Amount(), provided.Amount())
 	if t.Record {
 		c.Steps = e.minimumSteps(t, s, &m, &req, a.Moment.Abs()).steps
 	}
@@ -127,9 +194,11 @@ func (e *edition) judgeMinimum(t *beam.Trial, s beam.Sense, a *beam.Action) beam
 const waiverReason = "4/3 of the steel required by analysis governs over 9.6.1.2"
 
 // judgeCrossCheck finds the strength again by fibres.
-func (e *edition) judgeCrossCheck(t *beam.Trial, s beam.Sense, a *beam.Action, nominal units.Moment) beam.Check {
+func (e *edition) judgeCrossCheck(t *beam.Trial, s beam.Sense, a *beam.Action, f *flexure) beam.Check {
 	c := checkAt(bendingIDs[s].crossCheck, "22.2", s, a)
-	cross, err := crossCheck(e.trialSection(t, s), t.Law, bendingOf(s, &t.Brief.Readings), nominal)
+	bending := bendingOf(s, &t.Brief.Readings)
+	bending.Axial = f.axial
+	cross, err := crossCheck(e.trialSection(t, s), t.Law, bending, f.nominal)
 	if err != nil {
 		c.Compare(units.Plain(beam.NoCapacity), units.Plain(crossCheckTolerance))
 		c.Reason = "the second route finds no equilibrium: " + err.Error()
@@ -140,30 +209,118 @@ func (e *edition) judgeCrossCheck(t *beam.Trial, s beam.Sense, a *beam.Action, n
 	return c
 }
 
-// judgeCracks compares the widest spacing of the bars nearest the tension face
-// with 24.3.2, or the width of the face where there is a single bar (24.3.3).
-// The stress at service loads is taken as 2/3 fy (24.3.2.1).
+// judgeGrades holds bars of a yield strength of their own against the tables; the
+// brief's own was held against them before.
+func (e *edition) judgeGrades(dst []beam.Check, t *beam.Trial, s beam.Sense) []beam.Check {
+	for i := range t.Steel(s.TensionFace()).Rows {
+		r := &t.Steel(s.TensionFace()).Rows[i]
+		if r.Yield == t.Brief.Reinforcement.Yield {
+			continue
+		}
+		c := beam.Check{ID: "flexure.grade", Clause: e.materials.yieldClause, Face: s.TensionFace()}
+		c.Compare(r.Yield.Amount(), e.stressOf(e.materials.mostYield).Amount())
+		if least := e.stressOf(e.materials.leastYield); !least.AtMost(r.Yield) {
+			c.Clause = "Table 20.2.1.3"
+			c.Compare(least.Amount(), r.Yield.Amount())
+		}
+		dst = append(dst, c)
+	}
+	return dst
+}
+
+// judgeCracks compares the widest spacing of the bars nearest the tension face,
+// those in its flange among them, with 24.3.2, or the width of the face where
+// there is a single bar (24.3.3). The stress at service loads is taken as 2/3 fy
+// (24.3.2.1), of the strongest of the bars.
 func (e *edition) judgeCracks(dst []beam.Check, t *beam.Trial, s beam.Sense, a *beam.Action) []beam.Check {
 	face := s.TensionFace()
 	steel := t.Steel(face)
 	if len(steel.Fit.Layers) == 0 {
 		return dst
 	}
-	nearest := &steel.Fit.Layers[0]
-	yield := t.Brief.Reinforcement.Yield
-	limit := e.crackSpacing(e.crackStress(yield), nearest.Cover)
+	cover := steel.Fit.Layers[0].Cover
+	yield := greatestYield(t, face)
+	limit := e.crackSpacing(e.crackStress(yield), cover)
 	c := checkAt("crack.spacing", "24.3.2", s, a)
 	c.Combination = "" // 24.3.2 goes by service loads, and here by 2/3 fy
-	given := nearest.Spacing
-	if nearest.Count == 1 {
+	n := nearestTo(steel)
+	given := n.widest(t, nil)
+	if n.len() == 1 {
 		c.ID, c.Clause, c.Reason = "crack.single-bar", "24.3.3", "one bar nearest the tension face: the width of the face may not exceed the spacing of 24.3.2"
-		given = t.Brief.Section.Width
+		given = t.Geometry.FaceWidth(face)
 	}
 	c.Compare(given.Amount(), limit.Amount())
 	if t.Record {
 		var w working
-		e.crackSteps(&w, yield, nearest.Cover)
+		e.crackSteps(&w, yield, cover)
 		c.Steps = w.steps
 	}
-	return append(dst, c)
+	return e.judgeFlange(append(dst, c), t, s, a, limit)
+}
+
+// greatestYield is the greatest yield strength of the bars of the layer nearest
+// a face.
+func greatestYield(t *beam.Trial, face beam.Face) units.Stress {
+	most := units.Stress{}
+	for i := range t.Steel(face).Rows {
+		if r := &t.Steel(face).Rows[i]; r.Layer == 1 {
+			most = most.Max(r.Yield)
+		}
+	}
+	if most.IsZero() {
+		return t.Brief.Reinforcement.Yield
+	}
+	return most
+}
+
+// judgeTension judges demands whose axial tension pulls on the steel of both
+// faces, for which neither sense of bending has a block of concrete: by statics
+// each face takes its share, at its yield strength (22.4.3.1).
+func (e *edition) judgeTension(dst []beam.Check, t *beam.Trial) []beam.Check {
+	h := e.lengthIn(t.Brief.Section.Depth)
+	var shares [beam.Top + 1]float64
+	var names [beam.Top + 1]string
+	both := false
+	for _, d := range t.Forces.Demands() {
+		pull := -e.forceIn(d.Axial)
+		if pull <= 0 {
+			continue
+		}
+		z := sizing{parts: t.Geometry.Parts, unit: e.length, height: h}
+		gross, first := z.concrete(h)
+		low, high := h, 0.0 // of the steel, from the top; without bars, the faces
+		if t.Bottom.Count > 0 {
+			low -= e.lengthIn(t.Bottom.Centroid)
+		}
+		if t.Top.Count > 0 {
+			high += e.lengthIn(t.Top.Centroid)
+		}
+		bottom := (pull*(first/gross-high) + e.momentIn(d.Moment)) / (low - high)
+		top := pull - bottom
+		if bottom <= 0 || top <= 0 {
+			continue // one face is pressed: bending
+		}
+		both = true
+		if bottom > shares[beam.Bottom] {
+			shares[beam.Bottom], names[beam.Bottom] = bottom, d.Combination
+		}
+		if top > shares[beam.Top] {
+			shares[beam.Top], names[beam.Top] = top, d.Combination
+		}
+	}
+	if !both {
+		return dst
+	}
+	for _, face := range [2]beam.Face{beam.Bottom, beam.Top} {
+		sense := beam.Positive
+		if face == beam.Top {
+			sense = beam.Negative
+		}
+		c := beam.Check{ID: "flexure.tension", Clause: "22.4.3.1", Face: face, Combination: names[face],
+			Reason: "the axial tension pulls on the steel of both faces: this face's share, by statics"}
+		strength := e.reduction.tension * e.areaIn(e.tensionArea(t, sense)) * e.stressIn(faceYield(t, sense))
+		c.Compare(e.forceOf(shares[face]).Amount(), e.forceOf(strength).Amount())
+		dst = append(dst, c)
+	}
+	return dst
 }

@@ -25,15 +25,19 @@ func (c Code) Strengths(q beam.SectionQuery) (beam.Strengths, error) {
 		q.Concrete.Kind = beam.Normalweight
 		out.Notes = append(out.Notes, "the kind of concrete is not stated: taken as normalweight, λ = 1")
 	}
-	if faults := e.queryFaults(&q); len(faults) > 0 {
+	if q.Section.Shape == 0 {
+		q.Section.Shape = beam.Rectangular
+	}
+	geometry, faults := e.queryFaults(&q)
+	if len(faults) > 0 {
 		return beam.Strengths{}, &beam.InputError{Faults: faults}
 	}
 	if out.Refusals = e.queryRefusals(&q); len(out.Refusals) > 0 {
 		return out, nil
 	}
-	section := e.querySection(&q)
+	section := e.querySection(&q, &geometry)
 	var err error
-	out.Flexure, err = e.flexureStrength(section, q.Concrete.Strength, q.Bending, &q.Readings)
+	out.Flexure, err = e.flexureUnder(section, q.Concrete.Strength, q.Bending, &q.Readings, q.Demand.Axial)
 	if err != nil {
 		if noEquilibrium(err) {
 			return beam.Strengths{}, &beam.InputError{Faults: []beam.Fault{{
@@ -45,23 +49,57 @@ func (c Code) Strengths(q beam.SectionQuery) (beam.Strengths, error) {
 	if out.Flexure.Equilibria > 1 {
 		out.Notes = append(out.Notes, "with the displaced concrete deducted more than one depth of the neutral axis balances; the least was taken")
 	}
+	out.Flexure.MinimumSteel = e.queryLeast(&q, &geometry, &out)
+	e.noteFlange(&q, &geometry, &out)
 	web := e.queryWeb(&q, &out.Flexure)
 	shear := web.at(e, e.queryForces(&q, &web))
 	out.Shear = e.shearStrength(&q, &web, &shear)
 	torsion := e.torsionStrength(q.Section, &q.Concrete, q.Demand.Axial)
 	out.Torsion = e.torsionAnswer(&torsion, q.Demand.Torque)
-	out.Checks = e.queryChecks(&q, &out, &web, &shear, &torsion)
+	out.Checks = append(out.Checks, e.queryChecks(&q, &geometry, &out, &web, &shear, &torsion)...)
 	return out, nil
 }
 
-// queryFaults names every value of a query that makes no sense.
-func (e *edition) queryFaults(q *beam.SectionQuery) []beam.Fault {
-	f := queryFaults{e: e}
-	if q.Section.Shape != 0 && q.Section.Shape != beam.Rectangular {
-		f.add("/section/shape", "shape is not one whose strengths this version gives", "rectangular")
+// queryLeast is As,min of a query (9.6.1.2). Nothing says whether the beam is
+// statically determinate, so that the stricter is taken.
+func (e *edition) queryLeast(q *beam.SectionQuery, g *beam.Geometry, out *beam.Strengths) units.Area {
+	w := e.minimumWidth(q.Section.Width, g.FaceWidth(q.Bending.TensionFace()), true)
+	if w.flanged {
+		out.Notes = append(out.Notes, "least steel goes by the lesser of bf and 2bw, as of a statically determinate beam with its flange in tension; in an indeterminate beam it goes by bw (9.6.1.2)")
 	}
-	f.within("/section/width", "width", q.Section.Width.Amount(), leastSide.Amount(), mostSide.Amount())
-	sound := f.within("/section/depth", "depth", q.Section.Depth.Amount(), leastSide.Amount(), mostSide.Amount())
+	yield := q.Layers[0].Yield
+	for _, l := range q.Layers {
+		yield = yield.Min(l.Yield)
+	}
+	m := e.minimumSteel(q.Concrete.Strength, yield, w, out.Flexure.EffectiveDepth)
+	return e.areaOf(m.area)
+}
+
+// noteFlange says what a flange takes for granted, and judges an isolated tee.
+func (e *edition) noteFlange(q *beam.SectionQuery, g *beam.Geometry, out *beam.Strengths) {
+	s := &q.Section
+	switch {
+	case s.Isolated:
+		c := isolatedCheck(s)
+		c.Combination = q.Demand.Name
+		if out.Checks = append(out.Checks, c); c.Outcome == beam.Fail {
+			out.Notes = append(out.Notes, "the flange does not meet 6.3.2.2, by which an isolated tee may count it")
+		}
+	case s.Flange() == beam.Top:
+		out.Notes = append(out.Notes, "the flange width is taken as given: 6.3.2.1 limits what works with the web")
+	}
+	if s.Flange() != 0 && s.Flange() == q.Bending.TensionFace() && g.Overall != s.Width {
+		out.Notes = append(out.Notes, "the flange is in tension: 24.3.4 spreads a part of the steel over it")
+	}
+}
+
+// queryFaults names every value of a query that makes no sense, and measures the
+// section.
+func (e *edition) queryFaults(q *beam.SectionQuery) (beam.Geometry, []beam.Fault) {
+	f := queryFaults{e: e}
+	geometry, faults := beam.MeasureSection(e.system, &q.Section)
+	f.list = faults
+	sound := len(faults) == 0
 	f.within("/concrete/strength", "concrete strength", q.Concrete.Strength.Amount(), leastStress.Amount(), mostConcrete.Amount())
 	if fault, wrong := e.densityFault(&q.Concrete); wrong {
 		f.list = append(f.list, fault)
@@ -98,7 +136,7 @@ func (e *edition) queryFaults(q *beam.SectionQuery) []beam.Fault {
 		f.add("/demand/moment", "moment "+e.system.Format(d.Moment.Amount())+" does not bend the section in the sense asked for, "+q.Bending.String(),
 			"sagging moments are positive, hogging moments negative")
 	}
-	return f.list
+	return geometry, f.list
 }
 
 // Bounds of a query. They belong to no design code: they are wide enough for
@@ -160,8 +198,8 @@ func (e *edition) queryRefusals(q *beam.SectionQuery) []beam.Refusal {
 }
 
 // querySection is the section of a query, for the kernel.
-func (e *edition) querySection(q *beam.SectionQuery) mechanics.Section {
-	s := mechanics.Section{Parts: mechanics.Rectangle(q.Section.Width, q.Section.Depth), Layers: make([]mechanics.Layer, len(q.Layers))}
+func (e *edition) querySection(q *beam.SectionQuery, g *beam.Geometry) mechanics.Section {
+	s := mechanics.Section{Parts: g.Parts, Layers: make([]mechanics.Layer, len(q.Layers))}
 	for i, l := range q.Layers {
 		s.Layers[i] = mechanics.Layer{Depth: l.Depth, Area: l.Area, Steel: e.barSteel(l.Yield)}
 	}
@@ -177,7 +215,7 @@ func (e *edition) torsionAnswer(t *torsionStrength, torque units.Moment) beam.To
 }
 
 // queryChecks judges a demand; none where nothing is asked.
-func (e *edition) queryChecks(q *beam.SectionQuery, out *beam.Strengths, web *webSteel, s *sectionShear, t *torsionStrength) []beam.Check {
+func (e *edition) queryChecks(q *beam.SectionQuery, g *beam.Geometry, out *beam.Strengths, web *webSteel, s *sectionShear, t *torsionStrength) []beam.Check {
 	d := &q.Demand
 	if *d == (beam.Demand{Name: d.Name}) {
 		return nil
@@ -192,7 +230,7 @@ func (e *edition) queryChecks(q *beam.SectionQuery, out *beam.Strengths, web *we
 		id, f := bendingIDs[q.Bending], &out.Flexure
 		compare(id.strength, "9.5.1.1", "", d.Moment.Abs().Amount(), f.Design.Amount())
 		compare(id.strain, "9.3.3.1", "", units.Plain(f.LeastStrain), units.Plain(f.ExtremeStrain))
-		clause, need, reason := e.queryMinimum(q, f)
+		clause, need, reason := e.queryMinimum(q, g, f)
 		compare(id.minimum, clause, reason, need.Amount(), f.TensionSteel.Amount())
 	}
 	if !d.Shear.IsZero() {
@@ -205,7 +243,7 @@ func (e *edition) queryChecks(q *beam.SectionQuery, out *beam.Strengths, web *we
 }
 
 // queryMinimum is the least steel of 9.6.1 at the demand.
-func (e *edition) queryMinimum(q *beam.SectionQuery, f *beam.FlexureStrength) (clause string, need units.Area, reason string) {
+func (e *edition) queryMinimum(q *beam.SectionQuery, g *beam.Geometry, f *beam.FlexureStrength) (clause string, need units.Area, reason string) {
 	if f.MinimumSteel.AtMost(f.TensionSteel) {
 		return "9.6.1.2", f.MinimumSteel, ""
 	}
@@ -213,8 +251,7 @@ func (e *edition) queryMinimum(q *beam.SectionQuery, f *beam.FlexureStrength) (c
 	for _, l := range q.Layers {
 		yield = yield.Min(l.Yield)
 	}
-	section := e.querySection(q)
-	z := e.sizing(section.Parts, q.Bending, q.Concrete.Strength, yield, f.EffectiveDepth, f.ExtremeDepth, q.Readings.RoundedYield)
+	z := e.sizing(g.Parts, q.Bending, q.Concrete.Strength, yield, f.EffectiveDepth, f.ExtremeDepth, q.Readings.RoundedYield)
 	req := z.tension(math.Abs(e.momentIn(q.Demand.Moment)))
 	if waived := e.areaOf(e.minimum.waiver * req.area); req.ok && waived.Less(f.MinimumSteel) {
 		return "9.6.1.3", waived, waiverReason

@@ -41,6 +41,15 @@ func (e *edition) asLength(v float64) measured {
 	return measured{e.lengthOf(v).Amount(), e.length.String()}
 }
 func (e *edition) asArea(v float64) measured { return measured{e.areaOf(v).Amount(), e.area.String()} }
+
+// asFirst is a first moment of area.
+func (e *edition) asFirst(v float64) measured {
+	unit := units.SectionInch3
+	if e.system == units.SI {
+		unit = units.SectionMillimetre3
+	}
+	return measured{unit.Of(v).Amount(), unit.String()}
+}
 func (e *edition) asForce(v float64) measured {
 	return measured{e.forceOf(v).Amount(), e.force.String()}
 }

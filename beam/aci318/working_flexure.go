@@ -22,23 +22,113 @@ func momentClause(t *beam.Trial) string {
 func (e *edition) flexureSteps(t *beam.Trial, s beam.Sense, f *flexure, moment units.Moment) *working {
 	b := &t.Brief
 	w := new(working)
+	section := e.trialSection(t, s)
 	w.given("Mu", "factored moment", momentClause(t), e.asMoment(e.momentIn(moment)))
-	e.strengthSteps(w, e.trialSection(t, s), &t.Ultimate, b.Concrete.Strength, f)
-	e.phiSteps(w, f, b.Reinforcement.Yield, b.Readings.RoundedYield)
+	e.strengthSteps(w, section, s, &t.Ultimate, b.Concrete.Strength, f)
+	e.phiSteps(w, f, extremeYield(section, s), b.Readings.RoundedYield)
 	w.find("φMn", "design strength", "9.5.1.1", "φ Mn", e.asMoment(e.momentIn(f.design)))
 	return w
 }
 
-// strengthSteps writes the way to Mn. All bars have one yield strength.
-func (e *edition) strengthSteps(w *working, section mechanics.Section, u *mechanics.Ultimate, strength units.Stress, f *flexure) {
-	w.given("f'c", "specified concrete strength", "19.2.1", e.asStress(e.stressIn(strength)))
-	w.given("fy", "yield strength of the bars", "20.2.2.4", e.asStress(e.stressIn(section.Layers[0].Steel.Yield)))
-	w.given("b", "width of the compression face", "", e.asLength(e.lengthIn(section.Parts[0].Width)))
-	if allYieldInTension(section, u) {
-		e.yieldingSteps(w, section, u, f)
-	} else {
-		e.layeredSteps(w, section, u, f, strength)
+// strengthSteps writes the way to Mn.
+func (e *edition) strengthSteps(w *working, section mechanics.Section, s beam.Sense, u *mechanics.Ultimate, strength units.Stress, f *flexure) {
+	z := sizing{parts: section.Parts, unit: e.length, height: e.lengthIn(section.Depth()), hogging: s == beam.Negative}
+	k := z.blockAt(f.blockFactor * e.lengthIn(u.NeutralAxis))
+	meaning := "yield strength of the bars"
+	if !oneYield(section) {
+		meaning = "yield strength of the extreme layer"
 	}
+	w.given("f'c", "specified concrete strength", "19.2.1", e.asStress(e.stressIn(strength)))
+	w.given("fy", meaning, "20.2.2.4", e.asStress(e.stressIn(extremeYield(section, s))))
+	e.blockInputs(w, &k, "b")
+	if allYieldInTension(section, u) && oneYield(section) && f.axial.IsZero() {
+		e.yieldingSteps(w, section, u, f, &k)
+	} else {
+		e.layeredSteps(w, section, &z, u, f, strength, &k)
+	}
+}
+
+// oneYield reports whether all layers have one yield strength.
+func oneYield(section mechanics.Section) bool {
+	for i := range section.Layers {
+		if section.Layers[i].Steel.Yield != section.Layers[0].Steel.Yield {
+			return false
+		}
+	}
+	return true
+}
+
+// block is where a stress block ends: in a strip that begins at x, where it is w
+// wide and widens by slope; with the concrete above that strip and the first
+// moment of that about the compression face.
+type block struct {
+	x, w, slope float64
+	area, first float64
+}
+
+// plain reports whether the block is a rectangle.
+func (k *block) plain() bool { return k.x == 0 && k.slope == 0 }
+
+// blockAt is the strip in which a block of depth a ends.
+func (z *sizing) blockAt(a float64) block {
+	for i := range z.parts {
+		x1, x2, w1, w2 := z.strip(i)
+		if a <= x2 || i == len(z.parts)-1 {
+			k := block{x: x1, w: w1, slope: (w2 - w1) / (x2 - x1)}
+			k.area, k.first = z.concrete(x1)
+			return k
+		}
+	}
+	return block{}
+}
+
+// blockInputs gives what the block depends on; width is the symbol of the width
+// of the strip in which it ends.
+func (e *edition) blockInputs(w *working, k *block, width string) {
+	if k.x == 0 {
+		w.given(width, "width of the compression face", "", e.asLength(k.w))
+	} else {
+		w.given("x", "depth at which the part of the section begins in which the block ends", "", e.asLength(k.x))
+		w.given("Af", "area of concrete above that depth", "", e.asArea(k.area))
+		w.given("Sf", "first moment of that area about the compression face", "", e.asFirst(k.first))
+		w.given(width, "width of the section from that depth on", "", e.asLength(k.w))
+	}
+	if k.slope != 0 {
+		w.given("k", "widening of the section with depth", "", asPlain(k.slope))
+	}
+}
+
+// blockSteps gives area and first moment of the block, whose depth a is known.
+func (e *edition) blockSteps(w *working, k *block, width string, a float64) {
+	area, first := upper(a-k.x, k.w, k.slope)
+	w.find("Ac", "area of concrete under the block", "22.2.2.4.1", k.areaForm(width), e.asArea(k.area+area))
+	w.find("Sc", "first moment of that area about the compression face", "", k.firstForm(width), e.asFirst(k.first+first+area*k.x))
+}
+
+func (k *block) areaForm(width string) string {
+	above, from := "Af + ", "(a - x)"
+	if k.x == 0 {
+		above, from = "", "a"
+	}
+	form := above + width + " " + from
+	if k.slope != 0 {
+		form += " + k " + from + "^2 / 2"
+	}
+	return form
+}
+
+func (k *block) firstForm(width string) string {
+	switch {
+	case k.plain():
+		return width + " a^2 / 2"
+	case k.x == 0:
+		return width + " a^2 / 2 + k a^3 / 3"
+	}
+	form := "Sf + " + width + " (a^2 - x^2) / 2"
+	if k.slope != 0 {
+		form += " + k (a - x)^2 (x / 2 + (a - x) / 3)"
+	}
+	return form
 }
 
 // allYieldInTension reports whether every layer pulls with its yield strength
@@ -73,7 +163,7 @@ func stateOf(section mechanics.Section, u *mechanics.Ultimate, i int) layerState
 
 // yieldingSteps is the closed form: all steel in tension at its yield
 // strength.
-func (e *edition) yieldingSteps(w *working, section mechanics.Section, u *mechanics.Ultimate, f *flexure) {
+func (e *edition) yieldingSteps(w *working, section mechanics.Section, u *mechanics.Ultimate, f *flexure, k *block) {
 	area, depth := e.asArea(e.areaIn(u.TensionArea)), e.asLength(e.lengthIn(u.EffectiveDepth))
 	n := len(u.Layers)
 	if n == 1 {
@@ -86,35 +176,65 @@ func (e *edition) yieldingSteps(w *working, section mechanics.Section, u *mechan
 		w.find("d", "depth to the centroid of all bars in tension", "", "("+sum(n, "As# d#")+") / As", depth)
 	}
 	a := e.lengthIn(u.NeutralAxis) * f.blockFactor
-	w.find("a", "depth of the stress block", "22.2.2.4.1", "As fy / (0.85 f'c b)", e.asLength(a))
+	form := "As fy / (0.85 f'c b)"
+	switch rest := "(As fy / (0.85 f'c) - Af)"; {
+	case k.slope != 0 && k.x == 0:
+		form = "2 (As fy / (0.85 f'c)) / (b + √(b^2 + 2 k (As fy / (0.85 f'c))))"
+	case k.slope != 0:
+		form = "x + 2 " + rest + " / (b + √(b^2 + 2 k " + rest + "))"
+	case k.x != 0:
+		form = "x + " + rest + " / b"
+	}
+	w.find("a", "depth of the stress block", "22.2.2.4.1", form, e.asLength(a))
 	w.note("every bar yields: see the strains below")
 	e.blockFactorStep(w, f.blockFactor)
 	w.find("c", "depth of the neutral axis", "22.2.2.4.2", "a / β1", e.asLength(e.lengthIn(u.NeutralAxis)))
 	if n > 1 {
 		e.layerStrains(w, u)
 	}
-	e.extremeStep(w, u, f)
-	w.find("Mn", "nominal strength", "22.3", "As fy (d - a / 2)", e.asMoment(e.momentIn(u.Nominal)))
+	e.extremeStep(w, e.lengthIn(u.ExtremeDepth), f)
+	form = "As fy (d - a / 2)"
+	if !k.plain() {
+		e.blockSteps(w, k, "b", a)
+		form = "As fy d - 0.85 f'c Sc"
+	}
+	w.find("Mn", "nominal strength", "22.3", form, e.asMoment(e.momentIn(u.Nominal)))
 }
 
-// layeredSteps is the general case. Knowing which layers yield, the balance of
-// forces is a quadratic in c:
+// layeredSteps is the general case. Knowing which layers yield and in which part
+// of the section the block ends, the balance of forces is a quadratic in c where
+// that part has upright sides:
 //
 //	0.85 f'c β1 b c² + P c - Q = 0
 //
 // where P collects what is constant and Q what the elastic layers owe to c.
 // The block ends inside the section: beyond it no layer would pull.
-func (e *edition) layeredSteps(w *working, section mechanics.Section, u *mechanics.Ultimate, f *flexure, strength units.Stress) {
+func (e *edition) layeredSteps(w *working, section mechanics.Section, z *sizing, u *mechanics.Ultimate, f *flexure, strength units.Stress, k *block) {
 	e.layerInputs(w, section, u)
+	under, about := "", ""
+	if !f.axial.IsZero() {
+		gross, first := z.concrete(z.height)
+		w.given("Pn", "axial force at nominal strength, compression positive", "22.4", e.asForce(e.forceIn(f.axial)))
+		w.note("Pu / φ, with the φ found below")
+		w.given("yc", "depth of the centroid of the concrete section", "", e.asLength(first/gross))
+		under, about = " + Pn", " + Pn yc"
+	}
 	w.given("Es", "modulus of elasticity of the bars", "20.2.2.2", e.asStress(e.materials.steelModulus))
 	e.blockFactorStep(w, f.blockFactor)
-	e.axisSteps(w, section, u, strength)
-	w.find("a", "depth of the stress block", "22.2.2.4.1", "β1 c", e.asLength(f.blockFactor*e.lengthIn(u.NeutralAxis)))
+	if k.slope == 0 {
+		e.axisSteps(w, section, u, strength, f, k)
+	} else {
+		w.given("c", "depth of the neutral axis", "22.2.2.4.2", e.asLength(e.lengthIn(u.NeutralAxis)))
+		w.note("the sides slope, so that the balance of forces is a cubic: c is its root, and the forces below balance")
+	}
+	a := f.blockFactor * e.lengthIn(u.NeutralAxis)
+	w.find("a", "depth of the stress block", "22.2.2.4.1", "β1 c", e.asLength(a))
 	e.layerStrains(w, u)
 	n := len(u.Layers)
 	for i, l := range u.Layers {
 		k := strconv.Itoa(i + 1)
-		w.find("fs"+k, "stress of layer "+k+", tension positive", "20.2.2.1", "min(fy, max(-fy, Es εs"+k+"))", e.asStress(-e.stressIn(l.Stress)))
+		fy := yieldSymbol(section, i)
+		w.find("fs"+k, "stress of layer "+k+", tension positive", "20.2.2.1", "min("+fy+", max(-"+fy+", Es εs"+k+"))", e.asStress(-e.stressIn(l.Stress)))
 		form, note := "As"+k+" fs"+k, ""
 		if inBlock(&l) {
 			form, note = "As"+k+" (fs"+k+" + 0.85 f'c)", "inside the block: less the concrete displaced"
@@ -122,21 +242,40 @@ func (e *edition) layeredSteps(w *working, section mechanics.Section, u *mechani
 		w.find("Fs"+k, "force of layer "+k+", tension positive", "22.2.1.1", form, e.asForce(-e.forceIn(l.Force)))
 		w.note(note)
 	}
-	w.find("Cc", "compression in the concrete", "22.2.2.4.1", "0.85 f'c a b", e.asForce(e.forceIn(u.Concrete)))
-	e.extremeStep(w, u, f)
-	w.find("Mn", "nominal strength, moments about the compression face", "22.3", sum(n, "Fs# d#")+" - Cc a / 2", e.asMoment(e.momentIn(u.Nominal)))
+	concrete := e.asForce(e.forceIn(u.Concrete))
+	moment := " - Cc a / 2"
+	if k.plain() {
+		w.find("Cc", "compression in the concrete", "22.2.2.4.1", "0.85 f'c a b", concrete)
+	} else {
+		e.blockSteps(w, k, "b", a)
+		w.find("Cc", "compression in the concrete", "22.2.2.4.1", "0.85 f'c Ac", concrete)
+		moment = " - 0.85 f'c Sc"
+	}
+	if k.slope != 0 {
+		w.find("T", "pull of the steel, with the axial force, which balances Cc", "22.2.1.1", sum(n, "Fs#")+under, concrete)
+	}
+	e.extremeStep(w, e.lengthIn(u.ExtremeDepth), f)
+	w.find("Mn", "nominal strength, moments about the compression face", "22.3", sum(n, "Fs# d#")+moment+about, e.asMoment(e.momentIn(u.Nominal)))
 	if u.Equilibria > 1 {
 		w.note("more than one depth of the neutral axis balances the section; the least was taken")
 	}
 }
 
+// yieldSymbol is the symbol of the yield strength of a layer.
+func yieldSymbol(section mechanics.Section, i int) string {
+	if oneYield(section) {
+		return "fy"
+	}
+	return "fy" + strconv.Itoa(i+1)
+}
+
 // axisSteps solves the quadratic for c.
-func (e *edition) axisSteps(w *working, section mechanics.Section, u *mechanics.Ultimate, strength units.Stress) {
+func (e *edition) axisSteps(w *working, section mechanics.Section, u *mechanics.Ultimate, strength units.Stress, f *flexure, k *block) {
 	var constant, owed []string
 	var p, q float64
 	fc, es := e.stressIn(strength), e.materials.steelModulus
 	for i := range u.Layers {
-		k := strconv.Itoa(i + 1)
+		k, sy := strconv.Itoa(i+1), yieldSymbol(section, i)
 		area, fy := e.areaIn(section.Layers[i].Area), e.stressIn(section.Layers[i].Steel.Yield)
 		displaced, less := 0.0, ""
 		if inBlock(&u.Layers[i]) {
@@ -144,10 +283,10 @@ func (e *edition) axisSteps(w *working, section mechanics.Section, u *mechanics.
 		}
 		switch stateOf(section, u, i) {
 		case pullsAtYield:
-			constant = append(constant, "- As"+k+" fy")
+			constant = append(constant, "- As"+k+" "+sy)
 			p -= area * fy
 		case pressesAtYield:
-			constant = append(constant, "+ As"+k+" (fy"+less+")")
+			constant = append(constant, "+ As"+k+" ("+sy+less+")")
 			p += area * (fy - displaced)
 		default:
 			constant = append(constant, "+ As"+k+" (0.003 Es"+less+")")
@@ -156,7 +295,18 @@ func (e *edition) axisSteps(w *working, section mechanics.Section, u *mechanics.
 			q += area * crushing * es * e.lengthIn(u.Layers[i].Depth)
 		}
 	}
-	w.find("P", "steel forces that do not change with c", "22.2.1.1", strings.TrimPrefix(strings.Join(constant, " "), "+ "), e.asForce(p))
+	meaning := "steel forces that do not change with c"
+	if k.x != 0 {
+		constant = append(constant, "+ 0.85 f'c (Af - b x)")
+		p += blockIntensity * fc * (k.area - k.w*k.x)
+		meaning = "forces that do not change with c"
+	}
+	if !f.axial.IsZero() {
+		constant = append(constant, "- Pn")
+		p -= e.forceIn(f.axial)
+		meaning = "forces that do not change with c"
+	}
+	w.find("P", meaning, "22.2.1.1", strings.TrimPrefix(strings.Join(constant, " "), "+ "), e.asForce(p))
 	c := e.asLength(e.lengthIn(u.NeutralAxis))
 	if len(owed) == 0 {
 		w.find("c", "depth of the neutral axis", "22.2.2.4.2", "-P / (0.85 f'c β1 b)", c)
@@ -180,6 +330,9 @@ func (e *edition) layerInputs(w *working, section mechanics.Section, u *mechanic
 		k := strconv.Itoa(i + 1)
 		w.given("As"+k, "area of layer "+k, "", e.asArea(e.areaIn(section.Layers[i].Area)))
 		w.given("d"+k, "depth of layer "+k+" from the compression face", "", e.asLength(e.lengthIn(l.Depth)))
+		if fy := yieldSymbol(section, i); fy != "fy" {
+			w.given(fy, "yield strength of layer "+k, "20.2.2.4", e.asStress(e.stressIn(section.Layers[i].Steel.Yield)))
+		}
 	}
 }
 
@@ -192,8 +345,8 @@ func (e *edition) layerStrains(w *working, u *mechanics.Ultimate) {
 
 // extremeStep gives εt, the strain of the layer farthest from the compression
 // face.
-func (e *edition) extremeStep(w *working, u *mechanics.Ultimate, f *flexure) {
-	w.given("dt", "depth of the extreme layer in tension", "", e.asLength(e.lengthIn(u.ExtremeDepth)))
+func (e *edition) extremeStep(w *working, depth float64, f *flexure) {
+	w.given("dt", "depth of the extreme layer in tension", "", e.asLength(depth))
 	w.find("εt", "net tensile strain of the extreme layer", "22.2.1.2", "0.003 (dt - c) / c", asPlain(f.strain))
 }
 
@@ -247,17 +400,25 @@ func (e *edition) phiSteps(w *working, f *flexure, yield units.Stress, rounded b
 }
 
 // strainSteps is the working of the strain limit.
-func (e *edition) strainSteps(t *beam.Trial, f *flexure) *working {
+func (e *edition) strainSteps(t *beam.Trial, s beam.Sense, f *flexure) *working {
 	w := new(working)
-	u, b := &t.Ultimate, &t.Brief
-	w.given("c", "depth of the neutral axis", "22.2.2.4.2", e.asLength(e.lengthIn(u.NeutralAxis)))
-	e.extremeStep(w, u, f)
+	b := &t.Brief
+	section := e.trialSection(t, s)
+	w.given("c", "depth of the neutral axis", "22.2.2.4.2", e.asLength(e.lengthIn(f.axis)))
+	if !f.axial.IsZero() {
+		w.note("with the axial force acting")
+	}
+	e.extremeStep(w, e.lengthIn(t.Ultimate.ExtremeDepth), f)
 	if e.reduction.fixedLeast > 0 {
 		w.find("εt,min", "least net tensile strain of a beam", "9.3.3.1", number(e.reduction.fixedLeast), asPlain(f.leastStrain))
 		return w
 	}
-	w.given("fy", "yield strength of the bars", "20.2.2.4", e.asStress(e.stressIn(b.Reinforcement.Yield)))
-	e.yieldStrainStep(w, f, b.Readings.RoundedYield, b.Reinforcement.Yield)
+	yield := extremeYield(section, s)
+	w.given("fy", "yield strength of the bars", "20.2.2.4", e.asStress(e.stressIn(yield)))
+	if !oneYield(section) {
+		w.note("of the extreme layer")
+	}
+	e.yieldStrainStep(w, f, b.Readings.RoundedYield, yield)
 	w.find("εt,min", "least net tensile strain of a beam", "9.3.3.1", "εty + "+number(e.reduction.margin), asPlain(f.leastStrain))
 	return w
 }
@@ -269,6 +430,9 @@ func (e *edition) minimumSteps(t *beam.Trial, s beam.Sense, m *minimumSteel, req
 	b := &t.Brief
 	w.given("f'c", "specified concrete strength", "19.2.1", e.asStress(e.stressIn(b.Concrete.Strength)))
 	w.given("fy", "yield strength of the bars", "20.2.2.4", e.asStress(e.stressIn(faceYield(t, s))))
+	if len(t.Steel(s.TensionFace()).Rows) > 0 && !e.oneFaceYield(t, s) {
+		w.note("the least of those at the tension face")
+	}
 	m.minimumWidth.steps(e, w)
 	w.given("d", "depth to the centroid of the tension steel", "", e.asLength(m.depth))
 	m.steelSteps(e, w)
@@ -276,12 +440,50 @@ func (e *edition) minimumSteps(t *beam.Trial, s beam.Sense, m *minimumSteel, req
 		w.given("Mu", "factored moment", momentClause(t), e.asMoment(e.momentIn(moment)))
 		w.find("φ", "strength reduction factor", "Table 21.2.2", number(req.phi), asPlain(req.phi))
 		w.note("with so little steel the section is tension-controlled")
-		w.find("a", "depth of the block that the moment needs", "22.3", "d - √(d^2 - 2 Mu / (φ 0.85 f'c b))", e.asLength(req.block))
-		w.find("As,req", "steel required by analysis", "22.3", "0.85 f'c b a / fy", e.asArea(req.area))
+		e.requiredSteps(t, s, w, m.width, req)
 		w.find("As,4/3", "steel that waives 9.6.1.2", "9.6.1.3", "(4 / 3) As,req", e.asArea(e.minimum.waiver*req.area))
 	}
-	w.given("As", "steel provided at the tension face", "", e.asArea(e.areaIn(t.Steel(s.TensionFace()).Area)))
+	w.given("As", "steel provided at the tension face", "", e.asArea(e.areaIn(e.tensionArea(t, s))))
 	return w
+}
+
+func (e *edition) oneFaceYield(t *beam.Trial, s beam.Sense) bool {
+	rows := t.Steel(s.TensionFace()).Rows
+	for i := range rows {
+		if rows[i].Yield != rows[0].Yield {
+			return false
+		}
+	}
+	return true
+}
+
+// requiredSteps is the way to the steel required by analysis; b is the width of
+// least steel.
+func (e *edition) requiredSteps(t *beam.Trial, s beam.Sense, w *working, b float64, req *requiredTension) {
+	z := e.trialSizing(t, s)
+	k := z.blockAt(req.block)
+	const clause = "22.3"
+	if k.plain() {
+		width := "b"
+		if k.w != b {
+			width = "bc"
+			e.blockInputs(w, &k, width)
+		}
+		w.find("a", "depth of the block that the moment needs", clause, "d - √(d^2 - 2 Mu / (φ 0.85 f'c "+width+"))", e.asLength(req.block))
+		w.find("As,req", "steel required by analysis", clause, "0.85 f'c "+width+" a / fy", e.asArea(req.area))
+		return
+	}
+	e.blockInputs(w, &k, "bc")
+	if k.slope == 0 {
+		w.find("a", "depth of the block that the moment needs", clause, "d - √((d - x)^2 - 2 (Mu / (φ 0.85 f'c) - (Af d - Sf)) / bc)", e.asLength(req.block))
+	} else {
+		w.given("a", "depth of the block that the moment needs", clause, e.asLength(req.block))
+		w.note("the sides slope, so that it is the root of a cubic: φ 0.85 f'c (Ac d - Sc) is Mu")
+		e.blockSteps(w, &k, "bc", req.block)
+		w.find("As,req", "steel required by analysis", clause, "0.85 f'c Ac / fy", e.asArea(req.area))
+		return
+	}
+	w.find("As,req", "steel required by analysis", clause, "0.85 f'c (Af + bc (a - x)) / fy", e.asArea(req.area))
 }
 
 // sum writes n terms of a form in which # stands for the number of the term.

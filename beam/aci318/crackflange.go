@@ -1,0 +1,322 @@
+package aci318
+
+import (
+	"soffit.example/bars"
+	"soffit.example/beam"
+	"soffit.example/beam/mechanics"
+	"soffit.example/units"
+)
+
+// Tension steel in a flange (24.3.4): a part of it lies beside the web, spread
+// over the lesser of the effective width and ℓn/10, centred on the web; what of
+// the flange lies farther out has steel of the level of 24.4.3.
+
+// flangeSide is the flange on one side of the web at a face in tension.
+type flangeSide struct {
+	over  units.Length // overhang
+	to    units.Length // from the web, where the spread ends
+	reach units.Length // from the web to the outermost place of a bar within the spread
+	needs bool         // there is room for a bar beside the web
+}
+
+// flangeSides are the sides of the flange at a face. A bar keeps the cover of
+// the stirrups to the end of the flange.
+func (e *edition) flangeSides(t *beam.Trial, face beam.Face) (sides [2]flangeSide, any bool) {
+	left, right := t.Brief.Section.Overhangs(face)
+	beyond := e.flangeSpread(t.Problem, face).Sub(t.Brief.Section.Width).Scale(0.5)
+	radius := t.Steel(face).Largest.Diameter.Scale(0.5)
+	for i, over := range [2]units.Length{left, right} {
+		s := flangeSide{over: over, to: beyond.Min(over)}
+		s.reach = beyond.Min(over.Sub(t.Cover).Sub(radius))
+		s.needs = !over.IsZero() && radius.Less(s.reach)
+		sides[i] = s
+		any = any || s.needs
+	}
+	return sides, any
+}
+
+// beside is how far a flange bar lies from the web, and on which side: 0 is the
+// left.
+func beside(t *beam.Trial, b *beam.FlangeBar) (side int, out units.Length) {
+	if middle := t.Brief.Section.Width.Scale(0.5); b.X.Less(middle) {
+		return 0, b.X.Neg()
+	}
+	return 1, b.X.Sub(t.Brief.Section.Width)
+}
+
+// counts reports whether a flange bar lies where 24.3.4 puts tension steel.
+func (s *flangeSide) counts(out units.Length) bool { return out.AtMost(s.to) }
+
+// spreadCounts is how many bars of a flange row, counted from the web, lie
+// within the spread, and how many there are.
+func spreadCounts(t *beam.Trial, f *beam.FaceSteel, sides *[2]flangeSide, row int) (within, all int) {
+	for i := range f.Flange {
+		b := &f.Flange[i]
+		if b.Row != row {
+			continue
+		}
+		all++
+		if side, out := beside(t, b); sides[side].counts(out) {
+			within++
+		}
+	}
+	return within, all
+}
+
+// withinSpread takes off the layers of a face in tension the bars that lie
+// farther out in the flange than 24.3.4 spreads the tension steel. The layers
+// begin with the rows of the face, in order.
+func (e *edition) withinSpread(t *beam.Trial, face beam.Face, layers []mechanics.Layer) []mechanics.Layer {
+	f := t.Steel(face)
+	sides, _ := e.flangeSides(t, face)
+	kept, row := 0, 0
+	for i := range layers {
+		l := layers[i]
+		if i < len(f.Rows) && f.Rows[i].Flange {
+			within, all := spreadCounts(t, f, &sides, row)
+			row++
+			if within == 0 {
+				continue
+			}
+			if within < all {
+				l.Area = l.Area.Scale(float64(within) / float64(all))
+			}
+		}
+		layers[kept] = l
+		kept++
+	}
+	return layers[:kept]
+}
+
+// tensionArea is the steel of the tension face that counts in bending.
+func (e *edition) tensionArea(t *beam.Trial, s beam.Sense) units.Area {
+	f := t.Steel(s.TensionFace())
+	area := f.Area
+	if len(f.Flange) == 0 {
+		return area
+	}
+	sides, _ := e.flangeSides(t, s.TensionFace())
+	for i := range f.Flange {
+		if side, out := beside(t, &f.Flange[i]); !sides[side].counts(out) {
+			area = area.Sub(f.Flange[i].Size.Area)
+		}
+	}
+	return area
+}
+
+// nearestBars are the bars nearest a face, from left to right: those beside the
+// web on its left, the first layer, and those on its right.
+type nearestBars struct {
+	flange []beam.FlangeBar
+	web    []bars.Placed
+	left   int // how many of flange come first
+}
+
+func nearestTo(f *beam.FaceSteel) (n nearestBars) {
+	if len(f.Fit.Layers) == 0 {
+		return n
+	}
+	l := &f.Fit.Layers[0]
+	n.web, n.flange = f.Fit.Bars[l.First:l.First+l.Count], f.Flange
+	for n.left < len(n.flange) && n.flange[n.left].X.Less(n.web[0].X) {
+		n.left++
+	}
+	return n
+}
+
+func (n *nearestBars) len() int { return len(n.web) + len(n.flange) }
+
+// at is the i-th bar: the size, the centre, and whether it lies beside the web.
+func (n *nearestBars) at(i int) (size *bars.Size, x, y units.Length, besideWeb bool) {
+	switch k := i - n.left; {
+	case k < 0:
+		b := &n.flange[i]
+		return &b.Size, b.X, b.Y, true
+	case k < len(n.web):
+		b := &n.web[k]
+		return &b.Size, b.X, b.Y, false
+	default:
+		b := &n.flange[i-len(n.web)]
+		return &b.Size, b.X, b.Y, true
+	}
+}
+
+// widest is the greatest distance between the centres of neighbours; with sides,
+// of those within the spread, and to its edges where a bar belongs there.
+func (n *nearestBars) widest(t *beam.Trial, sides *[2]flangeSide) (most units.Length) {
+	width := t.Brief.Section.Width
+	var last units.Length
+	seen := false
+	for i := range n.len() {
+		_, x, _, besideWeb := n.at(i)
+		if besideWeb && sides != nil {
+			side, out := 0, x.Neg()
+			if i >= n.left {
+				side, out = 1, x.Sub(width)
+			}
+			if !sides[side].counts(out) {
+				continue
+			}
+		}
+		switch {
+		case seen:
+			most = most.Max(x.Sub(last))
+		case sides != nil && sides[0].needs:
+			most = x.Add(sides[0].reach)
+		}
+		last, seen = x, true
+	}
+	if sides != nil && sides[1].needs {
+		most = most.Max(width.Add(sides[1].reach).Sub(last))
+	}
+	return most
+}
+
+// judgeFlange appends what 24.3.4 asks of a flange in tension.
+func (e *edition) judgeFlange(dst []beam.Check, t *beam.Trial, s beam.Sense, a *beam.Action, limit units.Length) []beam.Check {
+	const clause = "24.3.4"
+	face := s.TensionFace()
+	if left, right := t.Brief.Section.Overhangs(face); left.IsZero() && right.IsZero() {
+		return dst
+	}
+	sides, any := e.flangeSides(t, face)
+	steel := t.Steel(face)
+	spread := checkAt("crack.flange-spread", clause, s, a)
+	spread.Combination = ""
+	if !any {
+		spread.Outcome, spread.Reason = beam.NotApplicable, "the width over which tension steel is spread leaves no room for a bar beside the web"
+		dst = append(dst, spread)
+	} else {
+		var has [2]bool
+		for i := range steel.Flange {
+			side, out := beside(t, &steel.Flange[i])
+			has[side] = has[side] || sides[side].counts(out)
+		}
+		asked, found := 0, 0
+		for i := range sides {
+			if sides[i].needs {
+				asked++
+				if has[i] {
+					found++
+				}
+			}
+		}
+		spread.Compare(units.Plain(float64(asked)), units.Plain(float64(found)))
+		spread.Reason = "sides of the web with tension steel beside it, within the lesser of the effective width and ℓn/10: required and provided"
+		dst = append(dst, spread)
+
+		spacing := checkAt("crack.flange-spacing", "24.3.4, 24.3.2", s, a)
+		spacing.Combination = ""
+		n := nearestTo(steel)
+		spacing.Compare(n.widest(t, &sides).Amount(), limit.Amount())
+		if t.Record {
+			spacing.Steps = e.spreadSteps(t, s, limit, n.widest(t, &sides)).steps
+		}
+		dst = append(dst, spacing)
+	}
+	return e.judgeOuter(dst, t, s, a, &sides)
+}
+
+// judgeOuter judges the flange beyond ℓn/10: steel of 24.4.3 along its outer
+// parts.
+func (e *edition) judgeOuter(dst []beam.Check, t *beam.Trial, s beam.Sense, a *beam.Action, sides *[2]flangeSide) []beam.Check {
+	c := checkAt("crack.flange-outer", "24.3.4, 24.4.3", s, a)
+	c.Combination = ""
+	face := s.TensionFace()
+	if t.Forces.Spans() == 0 {
+		c.Outcome, c.Reason = beam.NotJudged, "demands have no clear span: whether the flange is wider than ℓn/10 is not known"
+		return append(dst, c)
+	}
+	if t.Geometry.FaceWidth(face).AtMost(e.flangeSpread(t.Problem, face)) {
+		return dst
+	}
+	var areas [2]units.Area
+	steel := t.Steel(face)
+	found := false
+	for i := range steel.Flange {
+		if side, out := beside(t, &steel.Flange[i]); !sides[side].counts(out) {
+			areas[side] = areas[side].Add(steel.Flange[i].Size.Area)
+			found = true
+		}
+	}
+	if !found {
+		c.Outcome, c.Reason = beam.NotJudged, "the flange is wider than ℓn/10, and no bars are given in its outer parts: the slab's own steel there is not part of the input"
+		return append(dst, c)
+	}
+	worst := -1.0
+	for i := range sides {
+		if !sides[i].to.Less(sides[i].over) {
+			continue
+		}
+		o := outerSteel{width: sides[i].over.Sub(sides[i].to), area: areas[i]}
+		need := e.outerNeed(t, &o)
+		if u := ratio(need.In(units.SquareMetre), o.area.In(units.SquareMetre)); u > worst {
+			worst = u
+			c.Compare(need.Amount(), o.area.Amount())
+			if t.Record {
+				c.Steps = e.outerSteps(t, &o).steps
+			}
+		}
+	}
+	return append(dst, c)
+}
+
+// outerSteel is one outer part of a flange and the bars in it.
+type outerSteel struct {
+	width units.Length
+	area  units.Area
+}
+
+func (e *edition) outerNeed(t *beam.Trial, o *outerSteel) units.Area {
+	return o.width.MulLength(t.Brief.Section.FlangeThickness).Scale(e.shrinkageRatio(t.Brief.Reinforcement.Yield))
+}
+
+// shrinkageRatio is the least ratio of steel against shrinkage and temperature
+// (24.4.3.2).
+func (e *edition) shrinkageRatio(yield units.Stress) float64 {
+	r, fy := &e.crack, e.stressIn(yield)
+	switch {
+	case !r.shrinkageByYield:
+		return r.shrinkage
+	case fy < e.materials.grade60 && !units.AtMost(e.materials.grade60, fy):
+		return r.shrinkageWeak
+	}
+	return max(r.shrinkage*e.materials.grade60/fy, r.shrinkageLeast)
+}
+
+// spreadSteps is the working of the spacing over a flange.
+func (e *edition) spreadSteps(t *beam.Trial, s beam.Sense, limit, given units.Length) *working {
+	w := new(working)
+	face := s.TensionFace()
+	w.given("be", "effective width of the flange", "6.3.2", e.asLength(e.lengthIn(t.Geometry.FaceWidth(face))))
+	if t.Forces.Spans() == 0 {
+		w.note("the clear span is not known, and ℓn/10 is left out")
+	} else {
+		shortest, _ := shortestClearSpan(&t.Brief)
+		w.given("ℓn", "shortest clear span", "", e.asLength(e.lengthIn(shortest)))
+		w.find("bs", "width over which the tension steel is spread", "24.3.4", "min(be, ℓn / 10)", e.asLength(e.lengthIn(e.flangeSpread(t.Problem, face))))
+	}
+	w.given("s,max", "greatest spacing between centres", "24.3.2", e.asLength(e.lengthIn(limit)))
+	w.note("see the spacing of the bars in the web")
+	w.given("s", "greatest distance left between bars, and from the last one to the edge of that width", "", e.asLength(e.lengthIn(given)))
+	return w
+}
+
+// outerSteps is the working of the steel in one outer part of a flange.
+func (e *edition) outerSteps(t *beam.Trial, o *outerSteel) *working {
+	w := new(working)
+	r := &e.crack
+	w.given("hf", "thickness of the flange", "", e.asLength(e.lengthIn(t.Brief.Section.FlangeThickness)))
+	w.given("bo", "width of the flange beyond the spread", "24.3.4", e.asLength(e.lengthIn(o.width)))
+	yield := t.Brief.Reinforcement.Yield
+	switch k := e.shrinkageRatio(yield); {
+	case r.shrinkageByYield && k != r.shrinkageWeak:
+		w.given("fy", "yield strength of the bars", "", e.asStress(e.stressIn(yield)))
+		w.find("ρ", "least ratio of steel", "Table 24.4.3.2", "max("+number(r.shrinkage)+" "+number(e.materials.grade60)+" / fy, "+number(r.shrinkageLeast)+")", asPlain(k))
+	default:
+		w.find("ρ", "least ratio of steel", "24.4.3.2", number(k), asPlain(k))
+	}
+	w.find("As,o", "steel required in that part", "24.4.3", "ρ bo hf", e.asArea(e.areaIn(e.outerNeed(t, o))))
+	w.given("As", "steel of bars there", "", e.asArea(e.areaIn(o.area)))
+	return w
+}
