@@ -187,7 +187,7 @@ func (e *edition) appendFlange(dst []beam.Check, t *beam.Trial) []beam.Check {
 	case beam.Top:
 		return append(dst, notJudgedTransverse)
 	case beam.Bottom:
-		return append(dst, notJudgedLedge)
+		return append(dst, notJudgedLedges)
 	}
 	return dst
 }
@@ -195,5 +195,5 @@ func (e *edition) appendFlange(dst []beam.Check, t *beam.Trial) []beam.Check {
 var notJudgedTransverse = beam.NotJudgedCheck("flange.transverse", "9.2.4.3, 7.5.2.3",
 	"slab steel across the web, which carries the overhanging flange as a cantilever, is not part of the input")
 
-var notJudgedLedge = beam.NotJudgedCheck("ledge.design", "16.5",
+var notJudgedLedges = beam.NotJudgedCheck("ledge.design", "16.5",
 	"the ledges under their own loads (bending, shear friction, punching and bearing, and the stirrups that lift them) are not judged by this version")

@@ -60,7 +60,7 @@ func (e *edition) problemWidth(p *beam.Problem, s beam.Sense) minimumWidth {
 // steps writes how the width comes about.
 func (m *minimumWidth) steps(e *edition, w *working) {
 	if !m.flanged {
-		w.given("b", "width of the web", "9.6.1.2", e.asLength(m.web))
+		w.given("b", "width of the web", "", e.asLength(m.web))
 		if !units.AtMost(m.face, m.web) {
 			w.note("the flange is in tension, of a statically indeterminate beam")
 		}
