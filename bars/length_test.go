@@ -217,6 +217,8 @@ func TestIncline(t *testing.T) {
 	require.NoError(t, err)
 	require.Equal(t, inches(20), length)
 	require.Zero(t, run)
+	_, _, err = bars.Incline(units.Metre.Of(100), 1)
+	require.NoError(t, err, "the limits themselves are allowed")
 	length, _, err = bars.Incline(units.Length{}, 45)
 	require.NoError(t, err)
 	require.Zero(t, length)
