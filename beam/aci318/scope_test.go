@@ -53,7 +53,7 @@ func TestScopeInMetric(t *testing.T) {
 			c.edit(&b)
 			p := &beam.Problem{Brief: b, Code: code}
 			if len(b.Demands) > 0 {
-				got := code.e.axialRefusals(b.Section, &b.Concrete, b.Demands[0].Axial, "A")
+				got := code.e.axialRefusals(b.Section.Width.MulLength(b.Section.Depth), &b.Concrete, b.Demands[0].Axial, "A")
 				require.Equal(t, c.rule != "", len(got) == 1, c.name)
 				continue
 			}
