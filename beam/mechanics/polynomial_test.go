@@ -87,20 +87,24 @@ func TestBernsteinAndComposition(t *testing.T) {
 		require.InDelta(t, p.at(lo), lower[0], size)
 		require.InDelta(t, p.at(hi), upper[degree], size)
 
-		short := p
-		for i := 3; i <= maxDegree; i++ {
-			short[i] = 0
-		}
-		for n := range 3 {
-			q := short
+		for n := range maxDegree + 1 {
+			q := p
 			for i := n + 1; i <= maxDegree; i++ {
 				q[i] = 0
 			}
-			var sum polynomial
-			sum.addComposed(&q, n, lo, 0.7, 2.5, 1)
 			k := hi
-			require.InDelta(t, 2.5*k*q.at(lo-0.7*k), sum.at(k), 1e-10)
+			for power := range min(3, maxDegree-n+1) {
+				var sum polynomial
+				sum.addComposed(&q, n, lo, 0.7, 2.5, power)
+				factor := 2.5 * math.Pow(k, float64(power))
+				require.InDelta(t, factor*q.at(lo-0.7*k), sum.at(k), 1e-11*factor*(1+q.magnitude(lo+0.7*k)))
+			}
 		}
+		divided := p
+		divided[0] = 0
+		value := divided.at(hi)
+		divided.divide()
+		require.InDelta(t, value, hi*divided.at(hi), size)
 		require.InDelta(t, p.slope(lo), (p.at(lo+1e-6)-p.at(lo-1e-6))/2e-6, 1e-3*(1+p.magnitude(hi)))
 	})
 }
