@@ -126,3 +126,32 @@ func TestReactions(t *testing.T) {
 	require.Equal(t, "0.9D + 1.0W", r[1].LeastBy)
 	require.True(t, r[1].Moment.IsZero())
 }
+
+// The part of a torque that compatibility imposes goes its own way along the
+// span: torques of both paths add up to the torque, and only the one counts as
+// compatible.
+func TestCompatibleTorqueAlongASpan(t *testing.T) {
+	b := Brief{
+		Spans:    []units.Length{units.Metre.Of(6)},
+		Supports: []Support{{Kind: statics.Fixed}, {Kind: statics.Fixed}},
+		Loads: []Load{
+			{Case: Dead, Shape: Torque, At: units.Metre.Of(2), Moment: units.KilonewtonMetre.Of(30), Path: CompatibilityTorque},
+			{Case: Dead, Shape: UniformTorque, Moment: units.KilonewtonMetre.Of(-12), Path: EquilibriumTorque},
+			{Case: Dead, Shape: Torque, At: units.Metre.Of(4), Moment: units.KilonewtonMetre.Of(9)},
+		},
+	}
+	kept := []Combination{{ID: "1.4D", Factors: []CaseFactor{{Case: Dead, Factor: 1.4}}}}
+	f, err := memberForces(&b, units.LineLoad{}, kept)
+	require.NoError(t, err)
+	// At 1 m: 30·4/6 of the first, -12·(1/2 - 1/6) of the second, 9·2/6 of the third.
+	a := f.Action(0, 1, units.Metre.Of(1), true)
+	require.InDelta(t, 1.4*20, a.Compatible.In(units.KilonewtonMetre), 1e-9)
+	require.InDelta(t, 1.4*(20-4+3), a.Torque.In(units.KilonewtonMetre), 1e-9)
+	worst, ok := f.Torque(1, units.Length{}, units.Metre.Of(6))
+	require.True(t, ok)
+	require.InDelta(t, 1.4*20, worst.Compatible.In(units.KilonewtonMetre), 1e-9)
+
+	d := demandForces([]Demand{{Torque: units.KilonewtonMetre.Of(5), Path: CompatibilityTorque}, {Torque: units.KilonewtonMetre.Of(7)}})
+	require.Equal(t, units.KilonewtonMetre.Of(5), d.Demands()[0].Compatible)
+	require.True(t, d.Demands()[1].Compatible.IsZero())
+}

@@ -168,6 +168,9 @@ func (b *Brief) check(f *faults, catalog bars.Catalog) {
 	f.word("/serviceability/attached", "attached construction", b.Serviceability.Attached.String(), b.Serviceability.Attached == 0, attachmentWords)
 	f.count("/serviceability/months", "months", b.Serviceability.Months, 0, mostMonths)
 
+	if b.Section.Shape == Polygon && len(b.Preferences.Depths) > 0 {
+		f.add("/preferences/depths", "none with a polygon", "the outline of the section says its depth, and %d depths to try are given", len(b.Preferences.Depths))
+	}
 	b.checkActions(f)
 	b.Preferences.check(f, catalog)
 	f.word("/shear_row", "shear row", b.Readings.ShearRow.String(), b.Readings.ShearRow == 0, shearRowWords)

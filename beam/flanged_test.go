@@ -1,0 +1,278 @@
+package beam_test
+
+import (
+	"context"
+	"testing"
+
+	"github.com/stretchr/testify/require"
+
+	"soffit.example/beam"
+	"soffit.example/beam/aci318"
+	"soffit.example/beam/statics"
+	"soffit.example/units"
+)
+
+// hogging is a cantilever tee, its flange in tension, of an invented beam.
+func hogging() beam.Brief {
+	b := plain()
+	b.Section = beam.Section{Shape: beam.Tee, Width: units.Inch.Of(14), Depth: units.Inch.Of(26), FlangeThickness: units.Inch.Of(6), FlangeWidth: units.Inch.Of(54)}
+	b.Spans = []units.Length{units.Foot.Of(12)}
+	b.Supports = []beam.Support{{Kind: statics.Fixed, Width: units.Inch.Of(12)}, {Kind: statics.Free}}
+	return b
+}
+
+// rowsOf is a layout of bars in the web at top and bottom, with more rows.
+func rowsOf(more ...beam.Row) beam.Layout {
+	return beam.Layout{
+		Longitudinal: append([]beam.Row{
+			{Mark: "B1", Bar: "#6", Count: 2, Face: beam.Bottom, Layer: 1},
+			{Mark: "T1", Bar: "#7", Count: 3, Face: beam.Top, Layer: 1},
+		}, more...),
+		Transverse: []beam.Zone{{Mark: "S1", Bar: "#4", Legs: 2, Spacing: units.Inch.Of(8), From: units.Inch.Of(6), To: units.Foot.Of(12), Form: "closed"}},
+	}
+}
+
+func checked(t *testing.T, b beam.Brief, l beam.Layout) *beam.Result {
+	t.Helper()
+	r, err := beam.CheckLayout(context.Background(), aci318.ACI31819(), b, l)
+	require.NoError(t, err)
+	return r
+}
+
+// Bars beside the web stand at their spacing outward from the outermost bars
+// of the web, an odd one more on the left, at the level of the first layer:
+// coordinates by hand. The web begins 20 in from the left end of the flange; a
+// #7 seated in a #4 stirrup of 1.5 in cover stands 1.5 + 0.5 + 1.0 in from its
+// side.
+func TestBarsBesideTheWeb(t *testing.T) {
+	r := checked(t, hogging(), rowsOf(
+		beam.Row{Mark: "T2", Bar: "#5", Count: 3, Face: beam.Top, Flange: true, Spacing: units.Inch.Of(6)},
+		beam.Row{Mark: "T3", Bar: "#4", Count: 2, Face: beam.Top, Flange: true, Spacing: units.Inch.Of(5)},
+	))
+	at := map[string][][2]float64{}
+	for _, bar := range r.Bars {
+		if bar.Face == beam.Top {
+			at[bar.Mark] = append(at[bar.Mark], [2]float64{bar.X.In(units.Inch), bar.Y.In(units.Inch)})
+		}
+	}
+	near := func(want, got [][2]float64) {
+		t.Helper()
+		require.Len(t, got, len(want))
+		for i := range want {
+			require.InDelta(t, want[i][0], got[i][0], 1e-9)
+			require.InDelta(t, want[i][1], got[i][1], 1e-9)
+		}
+	}
+	near([][2]float64{{23, 26 - 2.4375}, {27, 26 - 2.4375}, {31, 26 - 2.4375}}, at["T1"])
+	near([][2]float64{{11, 26 - 2.3125}, {17, 26 - 2.3125}, {37, 26 - 2.3125}}, at["T2"])
+	near([][2]float64{{6, 26 - 2.25}, {42, 26 - 2.25}}, at["T3"])
+
+	area := 3*0.60 + 3*0.31 + 2*0.20 // ASTM areas
+	d := 26 - (3*0.60*2.4375+3*0.31*2.3125+2*0.20*2.25)/area
+	require.InDelta(t, area, r.Flexure[0].TensionSteel.In(units.SquareInch), 1e-9)
+	require.InDelta(t, d, r.Flexure[0].EffectiveDepth.In(units.Inch), 1e-9)
+}
+
+// All bars beside the web of an ell stand on its one side.
+func TestBarsBesideTheWebOfAnEll(t *testing.T) {
+	b := hogging()
+	b.Section.Shape = beam.Ell
+	r := checked(t, b, rowsOf(beam.Row{Mark: "T2", Bar: "#5", Count: 2, Face: beam.Top, Flange: true, Spacing: units.Inch.Of(6)}))
+	var x []float64
+	for _, bar := range r.Bars {
+		if bar.Mark == "T2" {
+			x = append(x, bar.X.In(units.Inch))
+		}
+	}
+	require.InDeltaSlice(t, []float64{11 + 6, 11 + 12}, x, 1e-9)
+}
+
+// A bar beside the web keeps the stirrups' cover to the edge of the flange and
+// to its soffit.
+func TestBarsMustLieInsideTheFlange(t *testing.T) {
+	at := func(spacing, thickness float64) map[string]beam.Outcome {
+		b := hogging()
+		b.Section.FlangeThickness = units.Inch.Of(thickness)
+		r := checked(t, b, rowsOf(beam.Row{Mark: "T2", Bar: "#6", Count: 2, Face: beam.Top, Flange: true, Spacing: units.Inch.Of(spacing)}))
+		out := map[string]beam.Outcome{}
+		for i := range r.Checks {
+			out[r.Checks[i].ID] = r.Checks[i].Outcome
+		}
+		return out
+	}
+	// 20 in of overhang, 3 in to the bar in the web, 0.375 + 1.5 in to the edge.
+	require.Equal(t, beam.Pass, at(20+3-1.875, 6)["fit.flange"])
+	require.Equal(t, beam.Fail, at(20+3-1.874, 6)["fit.flange"])
+	// 2.0 in to the bar, 0.75 in of it, 1.5 in below.
+	require.Equal(t, beam.Pass, at(8, 4.25)["fit.flange-thickness"])
+	require.Equal(t, beam.Fail, at(8, 4.24)["fit.flange-thickness"])
+}
+
+func TestFaultsOfRows(t *testing.T) {
+	row := beam.Row{Mark: "X", Bar: "#6", Count: 4, Face: beam.Top, Layer: 1}
+	flange := row
+	flange.Flange, flange.Layer, flange.Spacing = true, 0, units.Inch.Of(6)
+	bent := beam.BentBars{Bar: "#6", Count: 2, At: units.Foot.Of(2), Angle: 45, Rises: "left"}
+	tests := []struct {
+		name string
+		edit func(b *beam.Brief, l *beam.Layout)
+		path string
+	}{
+		{"bundles that do not divide", func(_ *beam.Brief, l *beam.Layout) { r := row; r.Bundled = 3; l.Longitudinal[1] = r }, "/layout/longitudinal/1/bundled"},
+		{"five in a bundle", func(_ *beam.Brief, l *beam.Layout) { r := row; r.Count, r.Bundled = 10, 5; l.Longitudinal[1] = r }, "/layout/longitudinal/1/bundled"},
+		{"soft bars", func(_ *beam.Brief, l *beam.Layout) { l.Longitudinal[0].Yield = units.PSI.Of(60) }, "/layout/longitudinal/0/yield"},
+		{"two grades of one size in a layer", func(_ *beam.Brief, l *beam.Layout) {
+			r := l.Longitudinal[1]
+			r.Yield = units.KSI.Of(80)
+			l.Longitudinal = append(l.Longitudinal, r)
+		}, "/layout/longitudinal"},
+		{"no flange there", func(_ *beam.Brief, l *beam.Layout) {
+			r := flange
+			r.Face = beam.Bottom
+			l.Longitudinal = append(l.Longitudinal, r)
+		}, "/layout/longitudinal/2/flange"},
+		{"no spacing in the flange", func(_ *beam.Brief, l *beam.Layout) {
+			r := flange
+			r.Spacing = units.Length{}
+			l.Longitudinal = append(l.Longitudinal, r)
+		}, "/layout/longitudinal/2/spacing"},
+		{"bundles in the flange", func(_ *beam.Brief, l *beam.Layout) {
+			r := flange
+			r.Bundled = 2
+			l.Longitudinal = append(l.Longitudinal, r)
+		}, "/layout/longitudinal/2"},
+		{"bars in the flange alone", func(_ *beam.Brief, l *beam.Layout) { l.Longitudinal[1] = flange }, "/layout/longitudinal"},
+		{"bent: unknown bar", func(_ *beam.Brief, l *beam.Layout) { x := bent; x.Bar = "#77"; l.Bent = append(l.Bent, x) }, "/layout/bent/0/bar"},
+		{"bent: no bars", func(_ *beam.Brief, l *beam.Layout) { x := bent; x.Count = 0; l.Bent = append(l.Bent, x) }, "/layout/bent/0/count"},
+		{"bent: flat", func(_ *beam.Brief, l *beam.Layout) { x := bent; x.Angle = 14.9; l.Bent = append(l.Bent, x) }, "/layout/bent/0/angle"},
+		{"bent: beyond upright", func(_ *beam.Brief, l *beam.Layout) { x := bent; x.Angle = 90.1; l.Bent = append(l.Bent, x) }, "/layout/bent/0/angle"},
+		{"bent: rises nowhere", func(_ *beam.Brief, l *beam.Layout) { x := bent; x.Rises = "up"; l.Bent = append(l.Bent, x) }, "/layout/bent/0/rises"},
+		{"bent: groups without a spacing", func(_ *beam.Brief, l *beam.Layout) { x := bent; x.Bends = 2; l.Bent = append(l.Bent, x) }, "/layout/bent/0/spacing"},
+		{"bent: beyond the span", func(_ *beam.Brief, l *beam.Layout) {
+			x := bent
+			x.At = units.Foot.Of(13)
+			l.Bent = append(l.Bent, x)
+		}, "/layout/bent/0/at"},
+		{"bent: another span", func(_ *beam.Brief, l *beam.Layout) { x := bent; x.Span = 2; l.Bent = append(l.Bent, x) }, "/layout/bent/0/span"},
+		{"bent: with demands", func(b *beam.Brief, l *beam.Layout) {
+			b.Spans, b.Supports, b.Loads = nil, nil, nil
+			b.Demands = []beam.Demand{{Name: "d", Moment: units.KipFoot.Of(-50)}}
+			l.Transverse[0].From, l.Transverse[0].To = units.Length{}, units.Length{}
+			l.Bent = append(l.Bent, bent)
+		}, "/layout/bent/0"},
+		{"stirrups lying down", func(_ *beam.Brief, l *beam.Layout) { l.Transverse[0].Angle = 10 }, "/layout/transverse/0/angle"},
+	}
+	for _, tt := range tests {
+		t.Run(tt.name, func(t *testing.T) {
+			b, l := hogging(), rowsOf()
+			tt.edit(&b, &l)
+			_, err := beam.CheckLayout(context.Background(), aci318.ACI31819(), b, l)
+			var wrong *beam.InputError
+			require.ErrorAs(t, err, &wrong)
+			require.Equal(t, tt.path, wrong.Faults[0].Path, "%v", err)
+			require.NotEmpty(t, wrong.Faults[0].Detail)
+		})
+	}
+}
+
+func TestFaultsOfFlangedSections(t *testing.T) {
+	slab := beam.Slab{ClearLeft: units.Foot.Of(6), ClearRight: units.Foot.Of(6)}
+	tests := []struct {
+		name string
+		edit func(b *beam.Brief)
+		path string
+	}{
+		{"no web", func(b *beam.Brief) { b.Section.Width = units.Length{} }, "/section/web_width"},
+		{"no flange thickness", func(b *beam.Brief) { b.Section.FlangeThickness = units.Length{} }, "/section/flange_thickness"},
+		{"a flange as deep as the beam", func(b *beam.Brief) { b.Section.FlangeThickness = b.Section.Depth }, "/section/flange_thickness"},
+		{"a flange narrower than the web", func(b *beam.Brief) { b.Section.FlangeWidth = units.Inch.Of(13) }, "/section/flange_width"},
+		{"no flange width", func(b *beam.Brief) { b.Section.FlangeWidth = units.Length{} }, "/section/flange_width"},
+		{"width and slab", func(b *beam.Brief) { b.Section.Slab = slab }, "/section/slab"},
+		{"a tee with a slab on one side", func(b *beam.Brief) {
+			b.Section.FlangeWidth, b.Section.Slab = units.Length{}, beam.Slab{ClearLeft: slab.ClearLeft}
+		}, "/section/slab"},
+		{"an ell with a slab on both", func(b *beam.Brief) {
+			b.Section.Shape, b.Section.FlangeWidth, b.Section.Slab = beam.Ell, units.Length{}, slab
+		}, "/section/slab"},
+		{"a negative clear distance", func(b *beam.Brief) {
+			b.Section.FlangeWidth, b.Section.Slab = units.Length{}, beam.Slab{ClearLeft: slab.ClearLeft.Neg(), ClearRight: slab.ClearRight}
+		}, "/section/slab/clear_left"},
+		{"a slab under an inverted tee", func(b *beam.Brief) { b.Section.Shape, b.Section.Slab = beam.InvertedTee, slab }, "/section/slab"},
+		{"a slab and no span", func(b *beam.Brief) {
+			b.Section.FlangeWidth, b.Section.Slab = units.Length{}, slab
+			b.Spans, b.Supports, b.Loads, b.Demands = nil, nil, nil, []beam.Demand{{Moment: units.KipFoot.Of(9)}}
+		}, "/section/slab"},
+		{"alone in a slab", func(b *beam.Brief) { b.Section.FlangeWidth, b.Section.Slab, b.Section.Isolated = units.Length{}, slab, true }, "/section/isolated"},
+		{"an ell of its own", func(b *beam.Brief) { b.Section.Shape, b.Section.Isolated = beam.Ell, true }, "/section/isolated"},
+		{"a rectangle with a flange", func(b *beam.Brief) { b.Section.Shape = beam.Rectangular }, "/section/flange_thickness"},
+		{"a tee with an outline", func(b *beam.Brief) { b.Section.Outline = outline(0, 0, 1, 0, 1, 1) }, "/section/outline"},
+		{"a polygon with a width", func(b *beam.Brief) {
+			b.Section = beam.Section{Shape: beam.Polygon, Width: mm(300), Outline: outline(0, 0, 300, 0, 300, 500, 0, 500)}
+		}, "/section/width"},
+		{"a polygon with depths to try", func(b *beam.Brief) {
+			b.Section = beam.Section{Shape: beam.Polygon, Outline: outline(0, 0, 300, 0, 300, 500, 0, 500)}
+			b.Preferences.Depths = []units.Length{mm(600)}
+		}, "/preferences/depths"},
+		{"a polygon of two corners", func(b *beam.Brief) {
+			b.Section = beam.Section{Shape: beam.Polygon, Outline: outline(0, 0, 300, 0)}
+		}, "/section/outline"},
+		{"no such path", func(b *beam.Brief) {
+			b.Loads = append(b.Loads, beam.Load{Case: beam.Dead, Shape: beam.Torque, Moment: units.KipFoot.Of(1), Path: 7})
+		}, "/loads/2/path"},
+		{"flat diagonals", func(b *beam.Brief) { b.Readings.TorsionAngle = 9 }, "/torsion_angle"},
+		{"a share beyond all of it", func(b *beam.Brief) { b.Concrete.Kind, b.Concrete.Normal = beam.FineBlend, 1.1 }, "/concrete/normal_share"},
+		{"a share of no blend", func(b *beam.Brief) { b.Concrete.Normal = 0.5 }, "/concrete/normal_share"},
+		{"splitting strength of normalweight", func(b *beam.Brief) { b.Concrete.Splitting = units.PSI.Of(400) }, "/concrete/splitting"},
+		{"five in a bundle", func(b *beam.Brief) { b.Preferences.Bundles = 5 }, "/preferences/bundles"},
+	}
+	for _, tt := range tests {
+		t.Run(tt.name, func(t *testing.T) {
+			b := hogging()
+			tt.edit(&b)
+			err := beam.Validate(aci318.ACI31819(), b)
+			var wrong *beam.InputError
+			require.ErrorAs(t, err, &wrong)
+			paths := make([]string, len(wrong.Faults))
+			for i, f := range wrong.Faults {
+				paths[i] = f.Path
+				require.NotEmpty(t, f.Detail)
+			}
+			require.Contains(t, paths, tt.path)
+		})
+	}
+}
+
+// Bundles keep their bars together, real bars by coordinates, as units of the
+// steel of the face.
+func TestBundlesInALayout(t *testing.T) {
+	b := plain()
+	l := rowsOf(beam.Row{Mark: "B2", Bar: "#8", Count: 4, Bundled: 2, Face: beam.Bottom, Layer: 2})
+	l.Longitudinal[0] = beam.Row{Mark: "B1", Bar: "#8", Count: 6, Bundled: 2, Face: beam.Bottom, Layer: 1}
+	l.Transverse[0].To = units.Foot.Of(21.5)
+	r := checked(t, b, l)
+	count := map[string]int{}
+	for _, bar := range r.Bars {
+		count[bar.Mark+" "+bar.Bar]++
+	}
+	require.Equal(t, map[string]int{"B1 #8": 6, "B2 #8": 4, "T1 #7": 3}, count)
+	require.InDelta(t, 10*0.79, r.Flexure[0].TensionSteel.In(units.SquareInch), 1e-9)
+}
+
+// The search proposes bundles only where they are allowed, and says so in the
+// rows.
+func TestSearchOfBundles(t *testing.T) {
+	b := plain()
+	b.Loads[1].Intensity = units.KipPerFoot.Of(2.6)
+	b.Section.Depth = units.Inch.Of(28)
+	b.Preferences.Bars, b.Preferences.MaxLayers = []string{"#7"}, 1
+	require.Equal(t, beam.Unsatisfied, design(t, b).Verdict)
+	b.Preferences.Bundles = 2
+	r := design(t, b)
+	require.Equal(t, beam.Satisfied, r.Verdict, failures(r))
+	row := r.Layout.Longitudinal[0]
+	require.Equal(t, 2, row.Bundled)
+	require.Equal(t, "#7", row.Bar)
+	require.Zero(t, row.Count%2)
+	again := checked(t, b, r.Layout)
+	require.Equal(t, r.Checks, again.Checks)
+}
