@@ -15,7 +15,7 @@ import (
 func (t *Trial) stirrupLength(size bars.Size, z *Zone) units.Length {
 	cage := t.cage()
 	width, depth := cage.Outside()
-	l, err := bars.StirrupSet{Size: size, Form: z.form(), Width: width, Depth: depth, Legs: z.Legs}.Lengths()
+	l, err := bars.StirrupSet{Size: size, Form: z.form(), Width: width, Depth: depth, Legs: z.Legs, Angle: z.Angle}.Lengths()
 	if err != nil {
 		return units.Length{}
 	}

@@ -2,6 +2,7 @@ package beam_test
 
 import (
 	"context"
+	"math"
 	"testing"
 
 	"github.com/stretchr/testify/require"
@@ -202,7 +203,9 @@ func TestFaultsOfFlangedSections(t *testing.T) {
 			b.Section.FlangeWidth, b.Section.Slab = units.Length{}, slab
 			b.Spans, b.Supports, b.Loads, b.Demands = nil, nil, nil, []beam.Demand{{Moment: units.KipFoot.Of(9)}}
 		}, "/section/slab"},
-		{"alone in a slab", func(b *beam.Brief) { b.Section.FlangeWidth, b.Section.Slab, b.Section.Isolated = units.Length{}, slab, true }, "/section/isolated"},
+		{"alone in a slab", func(b *beam.Brief) {
+			b.Section.FlangeWidth, b.Section.Slab, b.Section.Isolated = units.Length{}, slab, true
+		}, "/section/isolated"},
 		{"an ell of its own", func(b *beam.Brief) { b.Section.Shape, b.Section.Isolated = beam.Ell, true }, "/section/isolated"},
 		{"a rectangle with a flange", func(b *beam.Brief) { b.Section.Shape = beam.Rectangular }, "/section/flange_thickness"},
 		{"a tee with an outline", func(b *beam.Brief) { b.Section.Outline = outline(0, 0, 1, 0, 1, 1) }, "/section/outline"},
@@ -275,4 +278,25 @@ func TestSearchOfBundles(t *testing.T) {
 	require.Zero(t, row.Count%2)
 	again := checked(t, b, r.Layout)
 	require.Equal(t, r.Checks, again.Checks)
+}
+
+// A bar bent at 45 degrees crosses the 24 in beam between the levels 1.5 + 0.5 +
+// 0.375 in from both faces: 19.25 in of rise, the root of two times that of
+// bar. The legs of a stirrup at 45 degrees are longer by as much, between the
+// centre lines of its level sides, 24 - 2 1.5 - 0.5 in apart.
+func TestScheduleOfInclinedSteel(t *testing.T) {
+	b := plain()
+	l := rowsOf()
+	l.Transverse[0].To = units.Foot.Of(21.5)
+	upright := checked(t, b, l)
+	l.Transverse[0].Angle = 45
+	l.Bent = []beam.BentBars{{Mark: "D1", Bar: "#6", Count: 2, At: units.Foot.Of(2), Angle: 45, Rises: "left", Bends: 3, Spacing: units.Inch.Of(9)}}
+	r := checked(t, b, l)
+	last := r.Schedule[len(r.Schedule)-1]
+	require.Equal(t, "D1", last.Mark)
+	require.Equal(t, 6, last.Count)
+	require.InEpsilon(t, 19.25*math.Sqrt2, last.Length.In(units.Inch), 1e-9)
+	longer := r.Schedule[2].Length.Sub(upright.Schedule[2].Length)
+	require.InEpsilon(t, 2*20.5*(math.Sqrt2-1), longer.In(units.Inch), 1e-9)
+	require.True(t, upright.Quantities.SteelMass.Less(r.Quantities.SteelMass))
 }

@@ -3,6 +3,7 @@ package beam
 import (
 	"github.com/shopspring/decimal"
 
+	"soffit.example/bars"
 	"soffit.example/units"
 )
 
@@ -67,7 +68,25 @@ func (r *Result) takeOff(t *Trial) {
 		m := line(z.Mark, z.Bar, z.form().String()+" stirrup, 135-degree hooks", count, t.stirrupLength(t.ZoneBar[i], z))
 		q.StirrupMass, q.SteelMass = q.StirrupMass.Add(m), q.SteelMass.Add(m)
 	}
+	for i := range t.Bent {
+		b := &t.Bent[i]
+		m := line(b.Mark, b.Bar, "slope of a bent bar, its straight parts not counted", b.Count*b.Bends, t.slope(i))
+		q.SteelMass = q.SteelMass.Add(m)
+	}
 	q.Concrete = t.Geometry.Gross.MulLength(length)
 	q.Form = t.Geometry.Form.MulLength(length)
 	q.SteelPerConcrete = q.SteelMass.DivVolume(q.Concrete)
+}
+
+// slope is the length of bar across the web of the i-th bent bars, between the
+// levels at which bars of their size would rest inside the stirrups; zero where
+// there is no room between them.
+func (t *Trial) slope(i int) units.Length {
+	inside := t.Cover.Add(t.Stirrup.Diameter).Scale(2).Add(t.BentBar[i].Diameter)
+	rise := t.Brief.Section.Depth.Sub(inside).Max(units.Length{})
+	length, _, err := bars.Incline(rise, t.Bent[i].Angle)
+	if err != nil {
+		return units.Length{}
+	}
+	return length
 }
