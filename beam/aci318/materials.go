@@ -113,7 +113,9 @@ func (e *edition) blockFactor(strength units.Stress) float64 {
 }
 
 // isLight reports whether a kind of concrete holds lightweight aggregate.
-func isLight(k beam.ConcreteKind) bool { return k > beam.Normalweight }
+func isLight(k beam.ConcreteKind) bool {
+	return beam.Normalweight < k && k <= beam.CoarseBlend
+}
 
 // lightness is the factor for lightweight concrete, λ, with where it is from.
 type lightness struct {
