@@ -159,9 +159,10 @@ func (s *search) result() (*Result, error) {
 		return nil, fmt.Errorf("beam: the layout that was found: %v", err)
 	}
 	if len(s.kept) == 0 {
+		// Side bars that the brief counts in bending are added last, and may
+		// make the closest layout pass: finish has the last word.
 		s.rejectClosest(chosen)
 		r.Rejected = s.rejects.list
-		r.Verdict = Unsatisfied
 		return r, nil
 	}
 	s.retrace(chosen)
