@@ -264,7 +264,8 @@ func (s *search) bounds(sense Sense, tie bars.Size, size *bars.Size) (most int, 
 // singleLayerDepth is the effective depth of one layer of a size resting on
 // the stirrup, with the cover of the trial.
 func (s *search) singleLayerDepth(tie, size bars.Size) units.Length {
-	return s.p.Brief.Section.Depth.Sub(s.t.Cover).Sub(tie.Diameter).Sub(size.Diameter.Scale(0.5))
+	_, rests, _ := size.Extent()
+	return s.p.Brief.Section.Depth.Sub(s.t.Cover).Sub(tie.Diameter).Sub(rests)
 }
 
 // judge puts the current trial to groups of checks and sifts them.
