@@ -192,6 +192,9 @@ func onOtherDoors() map[string][]badInput {
 			{name: "negative cover", replace: `"1.5 in"`, with: `"-1.5 in"`, pointer: "/cover", detail: "cover is -1.5 in", allowed: "zero"},
 			{name: "narrow", replace: `"16 in"`, with: `"16 mm"`, pointer: "/width", detail: "width is 0.629921259843 in", allowed: "50 mm to 10 m"},
 			{name: "no bars", replace: `"count": 4`, with: `"count": 0`, pointer: "/layers/0/count", detail: "count is 0", allowed: "a whole number from 1 to 200"},
+			{name: "bundle of five", replace: `"#9", "count": 4`, with: `"#9", "count": 5, "bundled": 5`, pointer: "/layers/0/bundled", detail: "bundled is 5", allowed: "a whole number from 1 to 4"},
+			{name: "bundle that is left over", replace: `"#9", "count": 4`, with: `"#9", "count": 4, "bundled": 3`, pointer: "/layers/0/bundled", detail: "4 bars do not make up bundles of it", allowed: "a divisor of count"},
+			{name: "bundle of none", replace: `"#9", "count": 4`, with: `"#9", "count": 4, "bundled": 0`, pointer: "/layers/0/bundled", detail: "bundled is 0", allowed: "a whole number from 1 to 4"},
 			{name: "thick stirrup", replace: `"size": "#4"`, with: `"size": "#18"`, pointer: "/stirrup/size", detail: "#18"},
 		},
 	}

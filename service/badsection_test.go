@@ -154,6 +154,9 @@ func onBareSections() []badInput {
 	return []badInput{
 		{name: "tee without web", request: t, replace: `"web_width": "14 in", `, with: ``, pointer: "/section/web_width", detail: "web_width is missing; a tee section needs it"},
 		{name: "bare slab", request: t, replace: `"flange_width": "48 in"`, with: `"slab": {"clear_left": "7 ft", "clear_right": "7 ft"}`, pointer: "/section/slab", detail: "slab does not belong to a bare section", allowed: "a flange_width"},
+		{name: "flange below the web", request: t, replace: `"48 in"`, with: `"8 in"`, pointer: "/section/flange_width", detail: "flange width is 8 in", allowed: "no less than the web, 14 in"},
+		{name: "flange of the whole depth", request: t, replace: `"5 in"`, with: `"25 in"`, pointer: "/section/flange_thickness", detail: "flange thickness is 25 in", allowed: "less than the depth"},
+		{name: "hollow through the side", request: of(goodStrengths, box), replace: `{"x": "17 in", "y": "23 in"}`, with: `{"x": "27 in", "y": "23 in"}`, pointer: "/section/voids/0", detail: "a void is no hollow of the section"},
 		{name: "single leg", replace: form, with: form + `, "legs": 1`, pointer: "/stirrups/legs", detail: "legs is 1", allowed: "a whole number from 2 to 12"},
 		{name: "flat stirrups", replace: form, with: form + `, "angle": 5`, pointer: "/stirrups/angle", detail: "angle is 5", allowed: "a number from 15 to 90"},
 		{name: "unknown form", replace: form, with: form + `, "form": "hoop"`, pointer: "/stirrups/form", detail: `form is "hoop"`, allowed: "closed, open"},

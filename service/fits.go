@@ -85,9 +85,23 @@ func (in *intake) fit(w *wire.FitsRequest) (*bars.Cage, bars.Catalog, []bars.Lay
 	var layers []bars.Layer
 	for i, l := range w.Layers {
 		size := in.size(catalog, l.Size, fmt.Sprintf("/layers/%d/size", i))
-		layers = append(layers, bars.Layer{{Size: size, Count: l.Count}})
+		layers = append(layers, bars.Layer{in.bundles(size, l.Count, l.Bundled, fmt.Sprintf("/layers/%d/bundled", i))})
 	}
 	return cage, catalog, layers
+}
+
+// bundles groups bars of a size, single ones unless bundled says otherwise.
+func (in *intake) bundles(size bars.Size, count int, bundled *int, path string) bars.Group {
+	if bundled == nil || size.IsZero() {
+		return bars.Group{Size: size, Count: count}
+	}
+	n := *bundled
+	unit, err := bars.Bundle(size, n)
+	if err != nil || count%n != 0 {
+		in.fault(path, "a divisor of count", "is %d, and %d bars do not make up bundles of it", n, count)
+		return bars.Group{Size: size, Count: count}
+	}
+	return bars.Group{Size: unit, Count: count / n}
 }
 
 // catalogID finds a bar catalog.
@@ -142,8 +156,9 @@ func (o *outlet) fit(w *wire.Fits, cage *bars.Cage, layers []bars.Layer, need ba
 		w.Verdict = beam.Fail.String()
 		w.Failed = append(w.Failed, fmt.Sprintf(format, args...))
 	}
-	w.Bars = make([]wire.FitBar, len(f.Bars))
-	for i, b := range f.Bars {
+	singles := f.AppendSingles(nil)
+	w.Bars = make([]wire.FitBar, len(singles))
+	for i, b := range singles {
 		w.Bars[i] = wire.FitBar{Size: b.Size.Name, X: express(o, b.X), Y: express(o, b.Y), Layer: b.Layer}
 	}
 	gap := func(g bars.Gap, where string) (clear, required *units.Measure) {
@@ -175,9 +190,10 @@ func (o *outlet) fit(w *wire.Fits, cage *bars.Cage, layers []bars.Layer, need ba
 		if *at.most, err = c.MostInLayer(size, need.InLayer); err != nil {
 			return err
 		}
+		*at.most *= size.Bundled()
 	}
-	if most := max(w.Most.Seated, w.Most.Tucked); most == bars.MaxBars {
-		w.Notes = append(w.Notes, fmt.Sprintf("more than %d bars would fit; counting stops there", bars.MaxBars))
+	if most := max(w.Most.Seated, w.Most.Tucked); most == bars.MaxBars*size.Bundled() {
+		w.Notes = append(w.Notes, fmt.Sprintf("more than %d bars would fit; counting stops there", most))
 	}
 	return nil
 }

@@ -49,11 +49,12 @@ func fuzzDoor(f *testing.F, path string, bad []badInput, seeds ...string) {
 func dear(body string) bool { return strings.Count(body, `"depths"`) > 0 || len(body) > 8<<10 }
 
 func FuzzDesigns(f *testing.F) {
-	fuzzDoor(f, "/v1/designs", slices.Concat(onBrief(), onSections(), onTorques()), goodBrief, goodDemands)
+	fuzzDoor(f, "/v1/designs", slices.Concat(onBrief(), onSections(), onTorques()), goodBrief, goodDemands,
+		of(goodBrief, tee), of(goodBrief, floorTee), of(goodBrief, ledges), of(goodBrief, box), of(goodDemands, tee))
 }
 
 func FuzzChecks(f *testing.F) {
-	fuzzDoor(f, "/v1/checks", append(onOtherDoors()["/v1/checks"], onLayouts()...), goodCheck)
+	fuzzDoor(f, "/v1/checks", append(onOtherDoors()["/v1/checks"], onLayouts()...), goodCheck, of(goodCheck, tee), of(goodCheck, box))
 }
 
 func FuzzStrengths(f *testing.F) {

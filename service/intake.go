@@ -161,7 +161,7 @@ func (in *intake) belong(at, thing string, members []member, needs, may string) 
 		case needed && !m.given:
 			in.fault(at+"/"+m.name, m.what, "is missing; %s needs it", thing)
 		case m.given && !needed && !hasWord(may, m.name):
-			in.fault(at+"/"+m.name, "", "does not belong to %s, which has %s", thing, strings.Join(strings.Fields(needs+" "+may), ", "))
+			in.fault(at+"/"+m.name, "", "does not belong to %s, which has %s", thing, listed(needs+" "+may))
 		}
 	}
 }

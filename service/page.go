@@ -8,6 +8,7 @@ import (
 	"fmt"
 	"html/template"
 	"net/http"
+	"strings"
 
 	"soffit.example/beam"
 )
@@ -36,6 +37,20 @@ func doors() []door {
 	}
 }
 
+// shapeRow is a row of the page: the members of one shape of section.
+type shapeRow struct{ Shape, Needs, May string }
+
+func shapes() (rows []shapeRow) {
+	for s := beam.Shape(1); s.String() != ""; s++ {
+		needs, may := sectionMembers(s)
+		rows = append(rows, shapeRow{s.String(), listed(needs), listed(may + " joist")})
+	}
+	return rows
+}
+
+// listed puts commas between the words of a list.
+func listed(words string) string { return strings.Join(strings.Fields(words), ", ") }
+
 // page is the page for people: the doors, and what the problems mean.
 func (s *Service) page() (*document, error) {
 	t, err := template.New("page").Parse(pageSource)
@@ -54,7 +69,7 @@ func (s *Service) page() (*document, error) {
 	}
 	var b bytes.Buffer
 	err = t.Execute(&b, map[string]any{
-		"Style": template.CSS(pageStyle), "Version": beam.Version, "Doors": doors(), "Problems": problems, "Codes": s.codeList().Codes,
+		"Style": template.CSS(pageStyle), "Version": beam.Version, "Doors": doors(), "Problems": problems, "Codes": s.codeList().Codes, "Shapes": shapes(),
 	})
 	if err != nil {
 		return nil, fmt.Errorf("service: page: %w", err)

@@ -71,6 +71,7 @@ type StirrupSize struct {
 
 // BarLayer is a layer of like bars.
 type BarLayer struct {
-	Size  string `json:"size" validate:"min=1,max=20" doc:"Size, as the catalog names it."`
-	Count int    `json:"count" validate:"min=1,max=200" doc:"Number of bars."`
+	Size    string `json:"size" validate:"min=1,max=20" doc:"Size, as the catalog names it."`
+	Count   int    `json:"count" validate:"min=1,max=200" doc:"Number of bars."`
+	Bundled *int   `json:"bundled,omitzero" validate:"omitnil,min=1,max=4" doc:"Bars in contact in each bundle; count is a multiple of it. Default: 1, single bars."`
 }
