@@ -37,7 +37,7 @@ func (m *maker) breakScope(b *beam.Brief) {
 			Moment: m.momentOf(m.torque() * m.between(0.2, 4)), At: b.Spans[0].Scale(m.Float64()),
 		})
 	case !member && r < 7:
-		b.Demands[0].Axial = m.forceOf(m.fc * m.width * m.depth * m.between(0.05, 0.4))
+		b.Demands[0].Axial = m.forceOf(m.fc * m.width * m.depth * m.between(-0.3, 0.4))
 	case !member:
 		b.Demands[0].Torque = m.momentOf(m.torque() * m.between(0.6, 3))
 	default:
