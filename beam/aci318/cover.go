@@ -14,22 +14,28 @@ type coverRules struct {
 	weatherLarge float64 // exposed to weather or in contact with ground, No. 6 and larger
 	weatherSmall float64 // No. 5 and smaller
 	interior     float64 // not exposed: primary bars, stirrups, ties
+	bundle       float64 // of a bundle: its equivalent diameter, but no more than this
 
-	clause string
+	clause, bundleClause string
 }
 
 // smallCover is the largest bar number with the lesser cover in weather.
 const smallCover = 5
 
 var (
-	cover14US = coverRules{ground: 3, weatherLarge: 2, weatherSmall: 1.5, interior: 1.5, clause: "Table 20.6.1.3.1"}
-	cover14SI = coverRules{ground: 75, weatherLarge: 50, weatherSmall: 40, interior: 40, clause: "Table 20.6.1.3.1"}
-	cover19US = coverRules{ground: 3, weatherLarge: 2, weatherSmall: 1.5, interior: 1.5, clause: "Table 20.5.1.3.1"}
-	cover19SI = coverRules{ground: 75, weatherLarge: 50, weatherSmall: 40, interior: 40, clause: "Table 20.5.1.3.1"}
+	cover14US = coverRules{ground: 3, weatherLarge: 2, weatherSmall: 1.5, interior: 1.5, bundle: 2, clause: "Table 20.6.1.3.1", bundleClause: "20.6.1.3.4"}
+	cover14SI = coverRules{ground: 75, weatherLarge: 50, weatherSmall: 40, interior: 40, bundle: 50, clause: "Table 20.6.1.3.1", bundleClause: "20.6.1.3.4"}
+	cover19US = coverRules{ground: 3, weatherLarge: 2, weatherSmall: 1.5, interior: 1.5, bundle: 2, clause: "Table 20.5.1.3.1", bundleClause: "20.5.1.3.5"}
+	cover19SI = coverRules{ground: 75, weatherLarge: 50, weatherSmall: 40, interior: 40, bundle: 50, clause: "Table 20.5.1.3.1", bundleClause: "20.5.1.3.5"}
 )
 
-// leastCover is the clear cover that a bar of its own size needs.
+// leastCover is the clear cover that a bar of its own size needs. A bundle needs
+// that of its bars, and its equivalent diameter as far as the limit.
 func (e *edition) leastCover(x beam.Exposure, bar *bars.Size) units.Length {
+	if bar.Bundled() > 1 {
+		single := bar.Single()
+		return e.leastCover(x, &single).Max(bar.Diameter.Min(e.lengthOf(e.cover.bundle)))
+	}
 	r := &e.cover
 	switch {
 	case x == beam.Ground:
@@ -89,20 +95,30 @@ func (e *edition) appendCover(dst []beam.Check, t *beam.Trial) []beam.Check {
 		f := t.Steel(face)
 		var least, cover units.Length
 		worst := -1.0
-		for i := range f.Fit.Bars {
-			b := &f.Fit.Bars[i]
-			need := e.leastCover(t.Brief.Exposure, &b.Size)
-			side := b.X.Min(t.Brief.Section.Width.Sub(b.X))
-			clear := b.Y.Min(side).Sub(b.Size.Diameter.Scale(0.5))
+		take := func(size *bars.Size, clear units.Length) {
+			need := e.leastCover(t.Brief.Exposure, size)
 			if u := ratio(need.In(units.Metre), clear.In(units.Metre)); u > worst {
 				worst, least, cover = u, need, clear
 			}
+		}
+		for i := range f.Fit.Bars {
+			b := &f.Fit.Bars[i]
+			half, towards, _ := b.Size.Extent()
+			side := b.X.Min(t.Brief.Section.Width.Sub(b.X)).Sub(half)
+			take(&b.Size, side.Min(b.Y.Sub(towards)))
+		}
+		for i := range f.Flange {
+			b := &f.Flange[i]
+			take(&b.Size, flangeCover(t, face, b))
 		}
 		if worst < 0 {
 			continue
 		}
 		c := e.coverCheck("cover.bar", t, least, cover)
 		c.Face = face
+		if f.Largest.Bundled() > 1 || f.Smallest.Bundled() > 1 {
+			c.Clause = e.cover.clause + ", " + e.cover.bundleClause
+		}
 		dst = append(dst, c)
 	}
 	if t.Side.Each > 0 {
@@ -111,6 +127,19 @@ func (e *edition) appendCover(dst []beam.Check, t *beam.Trial) []beam.Check {
 		dst = append(dst, c)
 	}
 	return dst
+}
+
+// flangeCover is the clear cover of a bar in a flange: to its face, to the
+// flange's other face, and to the end of a flange that ends in the open. A slab
+// goes on.
+func flangeCover(t *beam.Trial, face beam.Face, b *beam.FlangeBar) units.Length {
+	s := &t.Brief.Section
+	clear := b.Y.Min(s.FlangeThickness.Sub(b.Y))
+	if s.Isolated || s.Shape == beam.InvertedTee {
+		left, right := s.Overhangs(face)
+		clear = clear.Min(b.X.Add(left)).Min(s.Width.Add(right).Sub(b.X))
+	}
+	return clear.Sub(b.Size.Diameter.Scale(0.5))
 }
 
 // barCover is the clear cover to bars that lie against the stirrups.

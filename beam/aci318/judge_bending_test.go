@@ -49,7 +49,6 @@ func check(t testing.TB, c Code, b beam.Brief, rows []beam.Row) (*beam.Result, *
 	}
 	if len(b.Spans) > 0 {
 		layout.Transverse[0].Span, layout.Transverse[0].To = 1, b.Spans[0]
-		layout.Transverse[0].Count = int(b.Spans[0].Ratio(in(8)))
 	}
 	var trial *beam.Trial
 	r, err := beam.CheckLayout(context.Background(), spy{c, &trial}, b, layout)

@@ -17,6 +17,10 @@ func (e *edition) appendSideFace(dst []beam.Check, t *beam.Trial) []beam.Check {
 		c := beam.NotApplicableCheck("side-face.spacing", clause, "the beam is no deeper than the limit beyond which side faces need bars")
 		return append(dst, c)
 	}
+	if !uprightSides(t) {
+		return append(dst, beam.NotJudgedCheck("side-face.spacing", clause,
+			"the beam is deep enough to need bars along its sides, which are not those of the strip in which the stirrups stand: the cover to them changes with the level"))
+	}
 	cc := barCover(t)
 	yield := t.Brief.Reinforcement.Yield
 	most := e.crackSpacing(e.crackStress(yield), cc)
@@ -46,6 +50,13 @@ func (e *edition) appendSideFace(dst []beam.Check, t *beam.Trial) []beam.Check {
 		dst = append(dst, beam.NotJudgedCheck("side-face.spacing", clause, "the beam is deep enough to need bars along its sides, and no moment says which face is in tension"))
 	}
 	return dst
+}
+
+// uprightSides reports whether the sides of the section are those of the strip in
+// which the stirrups stand. A flange or a ledge beside a web does not change the
+// web's sides.
+func uprightSides(t *beam.Trial) bool {
+	return t.Brief.Section.Shape != beam.Polygon || t.Geometry.Overall.AtMost(t.Brief.Section.Width)
 }
 
 // bendsAnywhere reports whether any action bends the beam in a sense.

@@ -24,6 +24,7 @@ var (
 // Shares of 26.4.2.1(a) that the aggregate may not exceed.
 const (
 	stoneToForm = 1.0 / 5 // of the narrowest dimension between sides of forms
+	stoneToSlab = 1.0 / 3 // of the depth of a slab
 	stoneToGap  = 3.0 / 4 // of the least clear spacing of bars
 )
 
@@ -40,9 +41,13 @@ func (c Code) Gaps(p *beam.Problem) bars.Clearances {
 }
 
 // Allows reports whether a size may be used so: bars of Table 20.2.1.3 up to
-// No. 18 along the beam, No. 3 to No. 8 as stirrups (Table 25.3.2).
+// No. 18 along the beam, bundled up to No. 11 (25.6.1.3), No. 3 to No. 8 as
+// stirrups (Table 25.3.2).
 func (c Code) Allows(use bars.Use, s bars.Size) bool {
-	n := barNumber(s.Diameter)
+	n := barNumber(s.Single().Diameter)
+	if s.Bundled() > 1 {
+		return use == bars.Main && leastBar <= n && n <= mostBundledSize && s.Bundled() <= mostBundled
+	}
 	switch use {
 	case bars.Main:
 		return leastBar <= n && n <= mostBar
@@ -71,26 +76,42 @@ func (g *barGap) take(h barGap) {
 	}
 }
 
-// besideGap is the tightest pair of neighbours in the layers of a face.
+// besideGap is the tightest pair of neighbours in the layers of a face, those in
+// its flange among them. Bundles count with the diameter of one bar of their
+// area (25.6.1.6).
 func (e *edition) besideGap(t *beam.Trial, f *beam.FaceSteel) (g barGap) {
-	r := &e.spacing
-	floor := e.lengthOf(r.least).Max(t.Brief.Concrete.Aggregate.Scale(r.stone))
+	floor := e.lengthOf(e.spacing.least).Max(t.Brief.Concrete.Aggregate.Scale(e.spacing.stone))
 	for i := 1; i < len(f.Fit.Bars); i++ {
 		a, b := &f.Fit.Bars[i-1], &f.Fit.Bars[i]
-		if a.Layer != b.Layer {
+		if a.Layer == b.Layer {
+			g.take(e.gapOf(&a.Size, &b.Size, a.Clear(b), floor))
+		}
+	}
+	if len(f.Flange) == 0 {
+		return g
+	}
+	n := nearestTo(f)
+	for i := 1; i < n.len(); i++ {
+		a, ax, ay, beside := n.at(i - 1)
+		b, bx, by, also := n.at(i)
+		if !beside && !also {
 			continue
 		}
-		larger := a.Size.Diameter.Max(b.Size.Diameter)
-		g.take(barGap{true, clearBetween(a, b), floor.Max(larger.Scale(r.diameter)), larger})
+		aHalf, _, _ := a.Extent()
+		bHalf, _, _ := b.Extent()
+		apart := math.Hypot(bx.Sub(ax).In(units.Metre), by.Sub(ay).In(units.Metre))
+		g.take(e.gapOf(a, b, units.Metre.Of(apart).Sub(aHalf).Sub(bHalf), floor))
 	}
 	return g
 }
 
-// clearBetween is the clear distance between two bars.
-func clearBetween(a, b *bars.Placed) units.Length {
-	dx, dy := a.X.Sub(b.X).In(units.Metre), a.Y.Sub(b.Y).In(units.Metre)
-	return units.Metre.Of(math.Hypot(dx, dy)).Sub(a.Size.Diameter.Add(b.Size.Diameter).Scale(0.5))
+func (e *edition) gapOf(a, b *bars.Size, clear, floor units.Length) barGap {
+	larger := a.Diameter.Max(b.Diameter)
+	return barGap{true, clear, floor.Max(larger.Scale(e.spacing.diameter)), larger}
 }
+
+// clearBetween is the clear distance between two bars.
+func clearBetween(a, b *bars.Placed) units.Length { return a.Clear(b) }
 
 // layerGap is the least clear distance between neighbouring layers of a face.
 func (e *edition) layerGap(f *beam.FaceSteel) (g barGap) {
@@ -100,11 +121,11 @@ func (e *edition) layerGap(f *beam.FaceSteel) (g barGap) {
 		row := f.Fit.Bars[l.First : l.First+l.Count]
 		low, high := row[0].Y, row[0].Y
 		for k := range row {
-			radius := row[k].Size.Diameter.Scale(0.5)
+			_, towards, away := row[k].Size.Extent()
 			if k == 0 {
-				low, high = row[k].Y.Sub(radius), row[k].Y.Add(radius)
+				low, high = row[k].Y.Sub(towards), row[k].Y.Add(away)
 			}
-			low, high = low.Min(row[k].Y.Sub(radius)), high.Max(row[k].Y.Add(radius))
+			low, high = low.Min(row[k].Y.Sub(towards)), high.Max(row[k].Y.Add(away))
 		}
 		if i > 0 {
 			g.take(barGap{found: true, clear: low.Sub(top), required: e.lengthOf(e.spacing.least)})
@@ -160,6 +181,39 @@ func (e *edition) appendGaps(dst []beam.Check, t *beam.Trial, face beam.Face) []
 		dst = append(dst, c)
 	}
 	return dst
+}
+
+// Limits of 25.6.1 on bundles, which all editions share.
+const (
+	mostBundled     = 4  // bars in a bundle, 25.6.1.1
+	mostBundledSize = 11 // number of the bars of a bundle in a beam, 25.6.1.3
+)
+
+// appendBundles appends what 25.6.1 asks of the bundles of a face.
+func (e *edition) appendBundles(dst []beam.Check, t *beam.Trial, face beam.Face) []beam.Check {
+	most, largest := 1, 0
+	for i := range t.Steel(face).Rows {
+		if s := &t.Steel(face).Rows[i].Size; s.Bundled() > 1 {
+			single := s.Single()
+			most, largest = max(most, s.Bundled()), max(largest, barNumber(single.Diameter))
+		}
+	}
+	if most == 1 {
+		return dst
+	}
+	c := beam.Check{ID: "bundles.bars", Clause: "25.6.1.1", Face: face}
+	c.Compare(units.Plain(float64(most)), units.Plain(mostBundled))
+	dst = append(dst, c)
+	c = beam.Check{ID: "bundles.size", Clause: "25.6.1.3", Face: face}
+	c.Compare(units.Plain(float64(largest)), units.Plain(mostBundledSize))
+	dst = append(dst, c)
+	c = beam.Check{ID: "bundles.enclosed", Clause: "25.6.1.2", Face: face, Reason: "bundles lie inside stirrups: stirrups required and provided"}
+	provided := 0.0
+	if !t.Stirrup.Diameter.IsZero() {
+		provided = 1
+	}
+	c.Compare(units.Plain(1), units.Plain(provided))
+	return append(dst, c)
 }
 
 func (e *edition) gapSteps(g *barGap, stone units.Length) []beam.Step {

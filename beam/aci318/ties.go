@@ -19,7 +19,7 @@ var (
 )
 
 // Bar numbers of 9.7.6.4.2: No. 3 ties hold bars up to No. 10, No. 4 larger
-// ones.
+// ones and bundles.
 const (
 	smallTie, largeTie = 3, 4
 	smallTied          = 10
@@ -44,7 +44,7 @@ func (e *edition) judgeTies(dst []beam.Check, t *beam.Trial) []beam.Check {
 
 func (e *edition) appendTieSize(dst []beam.Check, t *beam.Trial, f *beam.FaceSteel) []beam.Check {
 	need := smallTie
-	if barNumber(f.Largest.Diameter) > smallTied {
+	if largest := f.Largest.Single(); barNumber(largest.Diameter) > smallTied || hasBundles(f) {
 		need = largeTie
 	}
 	least := 0
@@ -58,13 +58,35 @@ func (e *edition) appendTieSize(dst []beam.Check, t *beam.Trial, f *beam.FaceSte
 	return append(dst, c)
 }
 
+// hasBundles reports whether some bars of a face are bundled.
+func hasBundles(f *beam.FaceSteel) bool {
+	for i := range f.Rows {
+		if f.Rows[i].Size.Bundled() > 1 {
+			return true
+		}
+	}
+	return false
+}
+
+// smallestBar is the diameter of the smallest single bar inside the stirrups of a
+// face.
+func smallestBar(f *beam.FaceSteel) units.Length {
+	least := f.Smallest.Single().Diameter
+	for i := range f.Rows {
+		if r := &f.Rows[i]; !r.Flange {
+			least = least.Min(r.Size.Single().Diameter)
+		}
+	}
+	return least
+}
+
 // appendTieSpacing compares the widest distance between stirrups, across what
 // the zones leave out too.
 func (e *edition) appendTieSpacing(dst []beam.Check, t *beam.Trial, f *beam.FaceSteel) []beam.Check {
 	r := &e.ties
 	c := beam.Check{ID: "ties.spacing", Clause: "9.7.6.4.3", Face: f.Face}
 	section := &t.Brief.Section
-	most := f.Smallest.Diameter.Scale(r.bars).Min(section.Width).Min(section.Depth)
+	most := smallestBar(f).Scale(r.bars).Min(section.Width).Min(section.Depth)
 	var widest, tie units.Length
 	for k := range t.Zones {
 		if k == 0 || t.ZoneBar[k].Diameter.Less(tie) {
@@ -85,7 +107,7 @@ func (e *edition) appendTieSpacing(dst []beam.Check, t *beam.Trial, f *beam.Face
 	}
 	if t.Record && len(t.Zones) > 0 {
 		var out working
-		out.given("db", "diameter of the smallest bar in compression", "", e.asLength(e.lengthIn(f.Smallest.Diameter)))
+		out.given("db", "diameter of the smallest bar in compression", "", e.asLength(e.lengthIn(smallestBar(f))))
 		out.given("dst", "diameter of the stirrups", "", e.asLength(e.lengthIn(tie)))
 		out.given("b", "width", "", e.asLength(e.lengthIn(section.Width)))
 		out.given("h", "overall depth", "", e.asLength(e.lengthIn(section.Depth)))
