@@ -14,11 +14,12 @@ import (
 // one size in the flange beside the web.
 type barSet struct {
 	barPlan
-	used  int // layers
-	count int
-	area  units.Area
-	mass  float64 // kg/m
-	sizes int     // different sizes, 1 or 2
+	used   int // layers
+	count  int
+	area   units.Area
+	mass   float64 // kg/m
+	sizes  int     // different sizes, 1 or 2
+	uneven float64 // m by which bars beside the web stand closer or wider than those in it
 
 	judged, passes bool
 	cover          units.Length // with which it was judged
@@ -60,6 +61,9 @@ func (b *barSet) beside(size *bars.Size, count int, spacing units.Length) {
 	b.area = b.area.Add(size.Area.Scale(float64(count)))
 	b.mass += size.MassPerLength.In(units.KilogramPerMetre) * float64(count)
 }
+
+// inLayer is the number of bars in a layer of the web.
+func (b *barSet) inLayer(i int) int { return b.layers[i][0].count + b.layers[i][1].count }
 
 // rows is the number of marks that the set needs.
 func (b *barSet) rows() int {
@@ -203,16 +207,18 @@ func mixedSets(dst []barSet, larger, smaller *bars.Size, least units.Area, mostL
 	return dst
 }
 
-// sortSets puts light sets first, and among equals the one with fewer bars.
+// sortSets puts light sets first, and among equals the one with fewer bars, in
+// fewer layers, more evenly spread over web and flange.
 func sortSets(sets []barSet) {
 	slices.SortStableFunc(sets, func(a, b barSet) int {
-		return cmp.Or(cmp.Compare(a.mass, b.mass), cmp.Compare(a.count, b.count), cmp.Compare(a.used, b.used))
+		return cmp.Or(cmp.Compare(a.mass, b.mass), cmp.Compare(a.count, b.count), cmp.Compare(a.used, b.used), cmp.Compare(a.uneven, b.uneven))
 	})
 }
 
 // flangeRoom is the room for bars in the flange beside the web at a face.
 type flangeRoom struct {
 	sides int          // of the web that have a flange: 0 to 2
+	web   units.Length // between the outermost bars of the web
 	reach units.Length // on each side from the outermost bar of the web to the last that a flange bar may lie
 	least units.Length // between bars
 }
@@ -240,6 +246,7 @@ func (r flangeRoom) withFlange(sets []barSet, size *bars.Size, least units.Area,
 			}
 			b := sets[i]
 			b.beside(size, m*r.sides, spacing)
+			b.uneven = spacing.Sub(r.web.Scale(1 / float64(b.inLayer(0)-1))).Abs().In(units.Metre)
 			if !b.area.Add(size.Area.Scale(float64(r.sides))).Less(least) {
 				out = append(out, b)
 			}

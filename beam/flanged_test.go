@@ -300,3 +300,33 @@ func TestScheduleOfInclinedSteel(t *testing.T) {
 	require.InEpsilon(t, 2*20.5*(math.Sqrt2-1), longer.In(units.Inch), 1e-9)
 	require.True(t, upright.Quantities.SteelMass.Less(r.Quantities.SteelMass))
 }
+
+// Steel of a flange in tension is found in the web and beside it, as evenly as
+// equal masses allow, and within the width that 24.3.4 spreads it over: a tenth
+// of the clear span of 30 ft less 14 in.
+func TestSearchOfSteelBesideTheWeb(t *testing.T) {
+	b := hogging()
+	b.Spans[0] = units.Foot.Of(30)
+	b.Supports[0].Width = units.Inch.Of(14)
+	b.Supports[1] = b.Supports[0]
+	b.Loads[0].Intensity, b.Loads[1].Intensity = units.KipPerFoot.Of(1.5), units.KipPerFoot.Of(1.5)
+	r := design(t, b)
+	require.Equal(t, beam.Satisfied, r.Verdict, failures(r))
+	var web, flange []float64
+	for _, bar := range r.Bars {
+		switch x := bar.X.In(units.Inch) - 27; { // from the middle of the web
+		case bar.Face != beam.Top:
+		case x < -7 || x > 7:
+			flange = append(flange, x)
+		default:
+			web = append(web, x)
+		}
+	}
+	require.NotEmpty(t, flange)
+	require.Zero(t, len(flange)%2)
+	for _, x := range flange {
+		require.LessOrEqual(t, math.Abs(x), (360-14)/20.0+1e-9)
+	}
+	require.Greater(t, len(web), 2)
+	require.Equal(t, r.Checks, checked(t, b, r.Layout).Checks)
+}

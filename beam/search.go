@@ -244,7 +244,7 @@ func (s *search) flangeRoom(face Face, tie bars.Size, size *bars.Size) (r flange
 	if bend, err := tie.Bend(bars.Stirrup); err == nil && !s.p.Brief.Readings.TuckedCorner {
 		inset = s.t.Cover.Add(tie.Diameter).Add(radius.Max(bend.Inside.Scale(0.5)))
 	}
-	r.reach = r.reach.Add(inset)
+	r.reach, r.web = r.reach.Add(inset), web.Sub(inset.Scale(2))
 	return r
 }
 
@@ -612,7 +612,10 @@ func (s *search) keepBest(f found) {
 		}
 		s.kept = slices.Delete(s.kept, same, same+1)
 	}
-	at, _ := slices.BinarySearchFunc(s.kept, f, func(a, b found) int { return slices.Compare(a.key[:], b.key[:]) })
+	at := len(s.kept) // after its equals, which were tried before it for a reason
+	for at > 0 && slices.Compare(f.key[:], s.kept[at-1].key[:]) < 0 {
+		at--
+	}
 	s.kept = slices.Insert(s.kept, at, f)
 	if len(s.kept) > s.keep {
 		s.kept = s.kept[:s.keep]
