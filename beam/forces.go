@@ -194,6 +194,9 @@ func (f *Forces) Action(i, span int, at units.Length, right bool) Action {
 	return a
 }
 
+// HasTorque reports whether any torque acts on a span.
+func (f *Forces) HasTorque(span int) bool { return len(f.spans[span-1].twists) > 0 }
+
 // Torque is the action with the largest magnitude of torque between two
 // positions of a span; ok is false where none acts.
 func (f *Forces) Torque(span int, from, to units.Length) (a Action, ok bool) {

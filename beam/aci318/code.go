@@ -55,7 +55,8 @@ func isArrangement(id string) bool {
 	case "shear.spacing-along", "shear.spacing-across", "shear.stirrup-size", "shear.stirrup-anchorage", "shear.leg-bars",
 		"shear.stirrup-angle", "shear.spacing-inclined", "shear.bent-angle", "shear.bent-spacing",
 		"joist.rib-width", "joist.rib-depth", "joist.spacing", "joist.slab",
-		"ties.size", "ties.spacing", "ties.held-bars", "side-face.spacing", "bracing.spacing":
+		"ties.size", "ties.spacing", "ties.held-bars", "side-face.spacing", "bracing.spacing",
+		"torsion.spacing-along", "torsion.longitudinal-spacing", "torsion.bar-diameter", "torsion.corners", "torsion.closed", "torsion.wall":
 		return true
 	}
 	return false

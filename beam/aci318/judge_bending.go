@@ -25,7 +25,8 @@ func (e *edition) judgeBending(dst []beam.Check, t *beam.Trial) []beam.Check {
 		}
 		dst = e.judgeSense(dst, t, s, &a)
 	}
-	return e.judgeTension(dst, t)
+	dst = e.judgeTension(dst, t)
+	return e.judgeTorsionBars(dst, t)
 }
 
 func notBent(s beam.Sense) string {

@@ -282,6 +282,9 @@ func (s *shearSpan) judge(dst []beam.Check, breaks []units.Length, k int, spacin
 		z.follow(i, lo, hi, breaks)
 	}
 	z.settle()
+	if z.torsion.on && !z.torsion.needed {
+		z.torsion.needed = z.nearTorsion(from, to)
+	}
 	if z.limit.found && (!s.limit.found || z.limit.utilization > s.limit.utilization) {
 		s.limit, s.limitWeb = z.limit, *z.webFor(z.limit.sense, z.limit.action.Shear)
 	}

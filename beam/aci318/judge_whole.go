@@ -10,6 +10,7 @@ import (
 func (e *edition) judgeWhole(dst []beam.Check, t *beam.Trial) []beam.Check {
 	dst = e.appendDepth(dst, t)
 	dst = e.appendSideFace(dst, t)
+	dst = e.appendTorsionSides(dst, t)
 	dst = e.appendBracing(dst, t)
 	dst = e.appendJoist(dst, t)
 	dst = e.appendFlange(dst, t)

@@ -27,6 +27,7 @@ func (c Code) Resolve(b *beam.Brief, note *beam.Register) []beam.Fault {
 	r.flange()
 	r.surroundings()
 	r.actions()
+	r.torsion()
 	r.readings()
 	r.shearReadings()
 	r.method()

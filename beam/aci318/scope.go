@@ -2,7 +2,6 @@ package aci318
 
 import (
 	"fmt"
-	"math"
 	"slices"
 
 	"soffit.example/beam"
@@ -27,7 +26,6 @@ var scopeWords = []string{
 	"deep beams: clear spans of at most 4h, cantilevers of at most 2h (9.9)",
 	"concentrated loads within 2h of the face of a support, among them distributed loads of which more than half lies within a length h (9.9)",
 	"axial compression of at least 0.10 f'c Ag (22.4)",
-	"torsion not below its threshold (22.7)",
 	"concrete below the least strength of 19.2.1.1",
 	"bars that are not of ASTM sizes (20.2.1.3), or stronger than Table 20.2.2.4 allows",
 	"openings, prestress and shotcrete",
@@ -45,7 +43,7 @@ func (e *edition) scopeOf(p *beam.Problem) []beam.Refusal {
 	for _, d := range p.Forces.Demands() {
 		out = append(out, e.axialRefusals(p.Geometry.Gross, &b.Concrete, d.Axial, d.Combination)...)
 	}
-	return append(out, e.torsionRefusals(p)...)
+	return out
 }
 
 // barRefusals names a catalog that the standard does not know.
@@ -116,47 +114,4 @@ func named(name string) string {
 		return ""
 	}
 	return " (" + name + ")"
-}
-
-// torsionRefusals names a torque that may not be neglected (9.5.4.1).
-func (e *edition) torsionRefusals(p *beam.Problem) []beam.Refusal {
-	a, t, ok := e.worstTorque(p)
-	if !ok || t.neglects(e, a.Torque) {
-		return nil
-	}
-	return []beam.Refusal{e.torsionRefusal(&t, a.Torque, a.Combination)}
-}
-
-// torsionRefusal names a torque against the threshold that it reaches.
-func (e *edition) torsionRefusal(t *torsionStrength, torque units.Moment, name string) beam.Refusal {
-	return beam.Refusal{
-		Rule: "scope.torsion", Clause: "9.5.4.1",
-		Detail: "torque of " + e.moment.Format(torque.Abs()) + named(name) + " is not below φTth = " +
-			e.moment.Format(e.momentOf(t.phi*t.threshold)) + ": the beam must be designed for torsion by 22.7",
-	}
-}
-
-// worstTorque is the action whose torque comes nearest its threshold; ok is
-// false where no torque acts.
-func (e *edition) worstTorque(p *beam.Problem) (worst beam.Action, strength torsionStrength, ok bool) {
-	most := 0.0
-	take := func(a beam.Action) {
-		if a.Torque.IsZero() {
-			return
-		}
-		t := e.torsionStrength(p.Brief.Section, &p.Brief.Concrete, a.Axial)
-		if u := ratio(math.Abs(e.momentIn(a.Torque)), t.phi*t.threshold); !ok || u > most {
-			worst, strength, most, ok = a, t, u, true
-		}
-	}
-	for span := 1; span <= p.Forces.Spans(); span++ {
-		from, to := p.Faces(span)
-		if a, acts := p.Forces.Torque(span, from, to); acts {
-			take(a)
-		}
-	}
-	for _, d := range p.Forces.Demands() {
-		take(d)
-	}
-	return worst, strength, ok
 }

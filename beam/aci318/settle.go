@@ -14,6 +14,7 @@ func (c Code) Settle(t *beam.Trial, checks []beam.Check, note *beam.Register) {
 	c.e.settleLeastStirrups(t, note)
 	c.e.settleSlopes(t, note)
 	c.e.settleCover(t, note)
+	c.e.settleTorsion(t, note)
 }
 
 // settleCover lists a cover that the brief itself sets below the table's.

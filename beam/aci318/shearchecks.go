@@ -24,10 +24,10 @@ func (z *webZone) appendChecks(dst []beam.Check) []beam.Check {
 	dst = z.appendStrength(dst)
 	dst = z.appendLeast(dst)
 	dst = z.appendHanger(dst)
-	if z.zone < 0 {
-		return dst
+	if z.zone >= 0 {
+		dst = z.appendSpacing(dst)
 	}
-	return z.appendSpacing(dst)
+	return z.appendTorsion(dst)
 }
 
 func (z *webZone) appendStrength(dst []beam.Check) []beam.Check {

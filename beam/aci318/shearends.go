@@ -20,20 +20,21 @@ type shearEnd struct {
 
 // What is said of the critical section.
 const (
-	noteAtDepth     = "sections nearer the face of the support take the shear at d from it (9.4.3.2)"
-	noteFreeEnd     = "a free end: every section takes its own shear"
-	noteHungSupport = "shear at the face, not at d: the reaction does not compress the end of the beam (9.4.3.2(a))"
-	noteHungLoad    = "shear at the face, not at d: a load hangs below the top of the beam (9.4.3.2(b))"
-	noteLoadInDepth = "shear at the face, not at d: a concentrated load acts between the two (9.4.3.2(c))"
-	noteNoSteel     = "shear at the face: there is no steel in tension to measure d to"
-	notePulled      = "shear at the face, not at d: under this combination the reaction pulls (9.4.3.2(a))"
-	noteNoStirrups  = "judged without stirrups: there are none"
-	noteGap         = "judged without stirrups: no zone of the layout reaches this length"
-	noteTooWide     = "the stirrups are further apart than Table 9.7.6.2.2 allows and are not counted"
-	noteBetween     = "between two zones: the spacing is the distance of the stirrups on either side"
-	noteNotRequired = "stirrups are not required here: Vu is below the shear that calls for them, and below φVc"
-	noteForStrength = "9.6.3.1 does not ask for least stirrups here; strength does"
-	noteHook        = "a standard hook round a bar develops stirrups of this size and strength"
+	noteAtDepth       = "sections nearer the face of the support take the shear at d from it (9.4.3.2)"
+	noteFreeEnd       = "a free end: every section takes its own shear"
+	noteHungSupport   = "shear at the face, not at d: the reaction does not compress the end of the beam (9.4.3.2(a))"
+	noteHungLoad      = "shear at the face, not at d: a load hangs below the top of the beam (9.4.3.2(b))"
+	noteLoadInDepth   = "shear at the face, not at d: a concentrated load acts between the two (9.4.3.2(c))"
+	noteTorqueInDepth = "shear and torque at the face, not at d: a concentrated torque acts between the two (9.4.4.3)"
+	noteNoSteel       = "shear at the face: there is no steel in tension to measure d to"
+	notePulled        = "shear at the face, not at d: under this combination the reaction pulls (9.4.3.2(a))"
+	noteNoStirrups    = "judged without stirrups: there are none"
+	noteGap           = "judged without stirrups: no zone of the layout reaches this length"
+	noteTooWide       = "the stirrups are further apart than Table 9.7.6.2.2 allows and are not counted"
+	noteBetween       = "between two zones: the spacing is the distance of the stirrups on either side"
+	noteNotRequired   = "stirrups are not required here: Vu is below the shear that calls for them, and below φVc"
+	noteForStrength   = "9.6.3.1 does not ask for least stirrups here; strength does"
+	noteHook          = "a standard hook round a bar develops stirrups of this size and strength"
 )
 
 // shearEnds decides both ends of a span.
@@ -69,6 +70,10 @@ func (s *shearEnd) decide(t *beam.Trial, span int, support *beam.Support) {
 	critical := s.inward(d)
 	if concentrated(&t.Brief, span, s.face, critical) {
 		s.note = noteLoadInDepth
+		return
+	}
+	if t.Twisted && concentratedTorque(&t.Brief, span, s.face, critical) {
+		s.note = noteTorqueInDepth
 		return
 	}
 	s.critical, s.note = critical, noteAtDepth
@@ -154,7 +159,6 @@ func hungLoads(b *beam.Brief, span int) bool {
 // the second of them included. What distributed loads do there is seen to
 // combination by combination.
 func concentrated(b *beam.Brief, span int, face, critical units.Length) bool {
-	reach := critical.Sub(face).Abs()
 	for i := range b.Loads {
 		l := &b.Loads[i]
 		if l.Span != 0 && l.Span != span {
@@ -163,15 +167,32 @@ func concentrated(b *beam.Brief, span int, face, critical units.Length) bool {
 		if l.Shape != beam.PointLoad && l.Shape != beam.Couple || l.Force.IsZero() && l.Moment.IsZero() {
 			continue
 		}
-		from := l.At.Sub(face)
-		if critical.Less(face) {
-			from = from.Neg()
-		}
-		if !from.AtMost(units.Length{}) && from.AtMost(reach) {
+		if between(l.At, face, critical) {
 			return true
 		}
 	}
 	return false
+}
+
+// concentratedTorque is the same of a torque at one place.
+func concentratedTorque(b *beam.Brief, span int, face, critical units.Length) bool {
+	for i := range b.Loads {
+		l := &b.Loads[i]
+		if l.Shape == beam.Torque && (l.Span == 0 || l.Span == span) && !l.Moment.IsZero() && between(l.At, face, critical) {
+			return true
+		}
+	}
+	return false
+}
+
+// between reports whether a place lies beyond the face of a support and no
+// further than the critical section.
+func between(at, face, critical units.Length) bool {
+	from := at.Sub(face)
+	if critical.Less(face) {
+		from = from.Neg()
+	}
+	return !from.AtMost(units.Length{}) && from.AtMost(critical.Sub(face).Abs())
 }
 
 // uneven reports a load on the span that is not spread evenly over it.

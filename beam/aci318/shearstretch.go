@@ -35,6 +35,11 @@ func (p *shearStretch) moment(t float64) float64 {
 	return p.m + t*(p.v[0]+t*(p.v[1]/2+t*p.v[2]/3))
 }
 
+// curved reports whether the shear is more than linear along the stretch.
+func (p *shearStretch) curved() bool {
+	return math.Abs(p.v[2])*p.length*p.length > noBending*(math.Abs(p.v[0])+math.Abs(p.end))
+}
+
 // vertex is where the shear is extreme between a and b; ok is false if it is
 // so only at an end.
 func (p *shearStretch) vertex(a, b float64) (t float64, ok bool) {

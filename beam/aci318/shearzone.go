@@ -39,8 +39,8 @@ type webZone struct {
 	note  string
 	web   [2]webSteel // positive and negative bending
 	bends [2]bool     // senses that bend the span at all
-	// local says that Vc depends on the forces themselves, so that the
-	// greatest shear of a sense need not be its worst section.
+	// local says that the greatest shear of a sense need not be its worst
+	// section: Vc depends on the forces themselves, or a torque acts too.
 	local bool
 
 	// Stirrups that lean count against the shear of one sign, that of the
@@ -62,6 +62,9 @@ type webZone struct {
 	near, far string
 
 	legs units.Length // between legs, across the beam
+
+	torsion torsionZone
+	varies  bool // Vc depends on the forces
 
 	peak                     [2]peakShear
 	strength, limit, trigger worstSection
@@ -106,7 +109,11 @@ func (e *edition) newWebZone(t *beam.Trial, span, zone int, spacing units.Length
 	if span > 0 && hungLoads(b, span) {
 		z.hanger = new(hangerSection)
 	}
-	z.local = !e.shear.rowsByStirrups && b.Readings.ShearMethod == beam.DetailedShear || z.leaning || z.bentBars || z.hanger != nil
+	z.varies = !e.shear.rowsByStirrups && b.Readings.ShearMethod == beam.DetailedShear || z.leaning || z.bentBars || z.hanger != nil
+	z.local = z.varies
+	if t.Twisted {
+		z.readyTorsion(spacing)
+	}
 	return z
 }
 
@@ -157,6 +164,9 @@ func (z *webZone) offer(sense beam.Sense, a *beam.Action, note string) {
 	z.heavy = z.heavy || s.heavy
 	if z.hanger != nil {
 		z.lift(sense, web, a, &s, note)
+	}
+	if z.torsion.on {
+		z.offerTorsion(sense, a, web, &s, note)
 	}
 }
 
@@ -221,13 +231,22 @@ func (z *webZone) seekBent(at units.Length) {
 
 // meets is point with the bent bars known.
 func (z *webZone) meets(a beam.Action) {
-	m := a.Moment.In(units.NewtonMetre)
-	if m >= 0 && (m > 0 || z.bends[0]) {
+	sign := a.Moment.Compare(units.Moment{})
+	if z.takes(beam.Positive, sign) {
 		z.meet(beam.Positive, &a)
 	}
-	if m <= 0 && (m < 0 || z.bends[1]) {
+	if z.takes(beam.Negative, sign) {
 		z.meet(beam.Negative, &a)
 	}
+}
+
+// takes reports whether sections with a moment of a sign are judged as bent in a
+// sense. Torque alone is judged with the bottom bars.
+func (z *webZone) takes(sense beam.Sense, sign int) bool {
+	if sense == beam.Negative {
+		return sign < 0 || sign == 0 && z.bends[1]
+	}
+	return sign > 0 || sign == 0 && (z.bends[0] || z.torsion.on && !z.bends[1])
 }
 
 // follow meets the sections of combination i between two places.
@@ -254,15 +273,18 @@ func (z *webZone) stretch(i int, from, to units.Length) {
 		z.point(b)
 		return
 	}
+	if z.torsion.on {
+		z.turnsTorque(i, from, length, &a, &b)
+	}
 	z.seekBent(from.Add(to).Scale(0.5))
 	s := loadedStretch{i: i, from: from, to: to, shearStretch: newShearStretch(length,
 		a.Moment.In(units.NewtonMetre), a.Shear.In(units.Newton), b.Moment.In(units.NewtonMetre), b.Shear.In(units.Newton))}
 	parts, n := s.parts()
 	for _, p := range parts[:n] {
-		if p.sign > 0 || p.sign == 0 && z.bends[0] {
+		if z.takes(beam.Positive, p.sign) {
 			z.part(beam.Positive, &s, p)
 		}
-		if p.sign < 0 || p.sign == 0 && z.bends[1] {
+		if z.takes(beam.Negative, p.sign) {
 			z.part(beam.Negative, &s, p)
 		}
 	}
@@ -281,7 +303,7 @@ func (z *webZone) part(sense beam.Sense, s *loadedStretch, p signedPart) {
 	if t, ok := s.vertex(p.from, p.to); ok {
 		z.station(sense, s, t)
 	}
-	if z.local {
+	if z.varies || z.local && s.curved() {
 		step := (p.to - p.from) / sections
 		for k := 1; k < sections; k++ {
 			z.station(sense, s, p.from+float64(k)*step)

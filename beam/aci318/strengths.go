@@ -10,7 +10,7 @@ import (
 )
 
 // Strengths gives the strengths of a bare section: flexure by 22.2 and 22.3,
-// one-way shear by 22.5, threshold and cracking torsion by 22.7. With a demand
+// one-way shear by 22.5, torsion by 22.7. With a demand
 // it judges them too. The error is a *[beam.InputError] for values that make
 // no sense, or says that the section has no strength in bending; what the
 // method does not cover is a refusal in the result.
@@ -54,8 +54,11 @@ func (c Code) Strengths(q beam.SectionQuery) (beam.Strengths, error) {
 	web := e.queryWeb(&q, &out.Flexure)
 	shear := web.at(e, e.queryForces(&q, &web))
 	out.Shear = e.shearStrength(&q, &web, &shear)
-	torsion := e.torsionStrength(q.Section, &q.Concrete, q.Demand.Axial)
-	out.Torsion = e.torsionAnswer(&torsion, q.Demand.Torque)
+	torsion, faults := e.queryTorsion(&q, &geometry, &web, &shear, &out.Flexure)
+	if len(faults) > 0 {
+		return beam.Strengths{}, &beam.InputError{Faults: faults}
+	}
+	out.Torsion = torsion.answer()
 	out.Checks = append(out.Checks, e.queryChecks(&q, &geometry, &out, &web, &shear, &torsion)...)
 	return out, nil
 }
@@ -186,14 +189,6 @@ func (e *edition) queryRefusals(q *beam.SectionQuery) []beam.Refusal {
 		}
 	}
 	out = append(out, e.axialRefusals(queryGross(q), &q.Concrete, q.Demand.Axial, q.Demand.Name)...)
-	t := e.torsionStrength(q.Section, &q.Concrete, q.Demand.Axial)
-	if !q.Demand.Torque.IsZero() && !t.neglects(e, q.Demand.Torque) {
-		out = append(out, beam.Refusal{
-			Rule: "scope.torsion", Clause: "9.5.4.1",
-			Detail: "torque of " + e.moment.Format(q.Demand.Torque.Abs()) + named(q.Demand.Name) + " is not below φTth = " +
-				e.moment.Format(e.momentOf(t.phi*t.threshold)) + ": the section must be designed for torsion by 22.7",
-		})
-	}
 	return out
 }
 
@@ -206,16 +201,8 @@ func (e *edition) querySection(q *beam.SectionQuery, g *beam.Geometry) mechanics
 	return s
 }
 
-func (e *edition) torsionAnswer(t *torsionStrength, torque units.Moment) beam.TorsionStrength {
-	return beam.TorsionStrength{
-		Area: e.areaOf(t.area), Perimeter: e.lengthOf(t.perimeter),
-		Threshold: e.momentOf(t.threshold), Cracking: e.momentOf(t.cracking), Phi: t.phi,
-		MayBeNeglected: t.neglects(e, torque),
-	}
-}
-
 // queryChecks judges a demand; none where nothing is asked.
-func (e *edition) queryChecks(q *beam.SectionQuery, g *beam.Geometry, out *beam.Strengths, web *webSteel, s *sectionShear, t *torsionStrength) []beam.Check {
+func (e *edition) queryChecks(q *beam.SectionQuery, g *beam.Geometry, out *beam.Strengths, web *webSteel, s *sectionShear, t *queryTorsion) []beam.Check {
 	d := &q.Demand
 	if *d == (beam.Demand{Name: d.Name}) {
 		return nil
@@ -236,10 +223,7 @@ func (e *edition) queryChecks(q *beam.SectionQuery, g *beam.Geometry, out *beam.
 	if !d.Shear.IsZero() {
 		checks = append(checks, e.queryShear(q, &out.Shear, web, s)...)
 	}
-	if !d.Torque.IsZero() {
-		compare("torsion.threshold", "9.5.4.1", "below its threshold the torque may be neglected", d.Torque.Abs().Amount(), e.momentOf(t.phi*t.threshold).Amount())
-	}
-	return checks
+	return append(checks, t.checks()...)
 }
 
 // queryMinimum is the least steel of 9.6.1 at the demand.

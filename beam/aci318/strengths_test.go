@@ -177,8 +177,6 @@ func TestStrengthsRefuses(t *testing.T) {
 		{"soft bars", func(q *beam.SectionQuery) { q.Layers[0].Yield = psi(33000) }, "scope.steel-grade"},
 		// 0.10 f'c Ag = 0.1 × 4500 × 416 = 187.2 kip, refused when reached.
 		{"axial compression", func(q *beam.SectionQuery) { q.Demand.Axial = units.PoundForce.Of(187200) }, "scope.axial"},
-		// φTth = 0.75 √4500 × 416²/84 = 103,652 lb-in.
-		{"torque", func(q *beam.SectionQuery) { q.Demand.Torque = units.PoundInch.Of(104000) }, "scope.torsion"},
 	} {
 		t.Run(tc.name, func(t *testing.T) {
 			q := query()

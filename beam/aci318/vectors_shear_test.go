@@ -23,8 +23,7 @@ func TestPublishedShear(t *testing.T) {
 		case "stirrups":
 			c.Meet(publishedStirrups(t, c, e))
 		case "torsion":
-			s := e.torsionStrength(
-				beam.Section{Width: c.Length("b"), Depth: c.Length("h")}, &beam.Concrete{Strength: c.Stress("fc")}, units.Force{})
+			s := torsionOf(t, e, beam.Section{Width: c.Length("b"), Depth: c.Length("h")}, &beam.Concrete{Strength: c.Stress("fc")}, units.Force{})
 			c.Meet(map[string]units.Amount{"Tth": e.momentOf(s.threshold).Amount(), "Tcr": e.momentOf(s.cracking).Amount()})
 		default:
 			require.Fail(t, "unknown kind of case", c.Asks)

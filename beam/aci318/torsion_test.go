@@ -1,0 +1,95 @@
+package aci318
+
+import (
+	"math"
+	"testing"
+
+	"github.com/stretchr/testify/require"
+
+	"soffit.example/beam"
+	"soffit.example/units"
+)
+
+// torsionOf measures a section and evaluates it.
+func torsionOf(t testing.TB, e *edition, s beam.Section, c *beam.Concrete, axial units.Force) torsionStrength {
+	t.Helper()
+	g, faults := beam.GeometryOf(&s)
+	require.Empty(t, faults)
+	return e.torsionStrength(&s, &g, c, axial)
+}
+
+// 22.7.4.1 and 22.7.5.1 of a solid rectangle. Own calculations: 16 by 28 in.,
+// Acp = 448 in2, pcp = 88 in.
+func TestThresholdAndCrackingTorsion(t *testing.T) {
+	section := beam.Section{Shape: beam.Rectangular, Width: units.Inch.Of(16), Depth: units.Inch.Of(28)}
+	unit := 448.0 * 448 / 88
+	for _, c := range []struct {
+		name     string
+		e        *edition
+		concrete beam.Concrete
+		axial    units.Force
+		root     float64
+		factor   float64
+	}{
+		{"4000 psi", &us19, beam.Concrete{Strength: units.PSI.Of(4000)}, units.Force{}, math.Sqrt(4000), 1},
+		{"sand-lightweight, 318-14", &us14, beam.Concrete{Strength: units.PSI.Of(4000), Kind: beam.SandLightweight, Density: units.PoundPerCubicFoot.Of(110)},
+			units.Force{}, 0.85 * math.Sqrt(4000), 1},
+		{"root capped at 100 psi whatever the stirrups", &us19, beam.Concrete{Strength: units.PSI.Of(14400)}, units.Force{}, 100, 1},
+		{"compression", &us19, beam.Concrete{Strength: units.PSI.Of(4900)}, units.Kip.Of(100), 70, math.Sqrt(1 + 100000/(4*448*70.0))},
+		{"tension", &us19, beam.Concrete{Strength: units.PSI.Of(4900)}, units.Kip.Of(-100), 70, math.Sqrt(1 - 100000/(4*448*70.0))},
+		{"so much tension leaves nothing", &us19, beam.Concrete{Strength: units.PSI.Of(4900)}, units.Kip.Of(-200), 70, 0},
+	} {
+		t.Run(c.name, func(t *testing.T) {
+			s := torsionOf(t, c.e, section, &c.concrete, c.axial)
+			require.InDelta(t, c.root*unit*c.factor, s.threshold, 1e-6)
+			require.InDelta(t, 4*c.root*unit*c.factor, s.cracking, 1e-6)
+		})
+	}
+	metric := beam.Section{Shape: beam.Rectangular, Width: units.Millimetre.Of(400), Depth: units.Millimetre.Of(700)}
+	concrete := beam.Concrete{Strength: units.Megapascal.Of(25)}
+	s := torsionOf(t, &si19, metric, &concrete, units.Kilonewton.Of(200))
+	unit = 5 * 280000.0 * 280000 / 2200 * math.Sqrt(1+200000/(0.33*280000*5.0))
+	require.InEpsilon(t, 0.083*unit, s.threshold, 1e-12)
+	require.InEpsilon(t, 0.33*unit, s.cracking, 1e-12)
+}
+
+// A torque below φTth is neglected, one equal to it is not (9.5.4.1).
+func TestTorqueThreshold(t *testing.T) {
+	section := usBrief().Section
+	concrete := usBrief().Concrete
+	limit := 0.75 * math.Sqrt(4000) * 336 * 336 / 76 // lb-in.
+	s := torsionOf(t, &us19, section, &concrete, units.Force{})
+	for _, c := range []struct {
+		share float64
+		want  bool
+	}{{0.999999, true}, {1, false}, {1.000001, false}} {
+		require.Equal(t, c.want, s.neglects(limit*c.share), "%g", c.share)
+	}
+
+	edge := trialOf(t, problemOf(t, ACI31819(), demandBrief(beam.Demand{Name: "A", Moment: units.KipFoot.Of(50)})), "#3", []group{{5, "#8"}}, []group{{2, "#6"}})
+	edge.Forces.Demands()[0].Torque = units.PoundInch.Of(limit)
+	require.True(t, us19.twists(edge.Problem))
+	require.Equal(t, beam.NotApplicable, only(t, us19.judgeTorsion(nil, edge), "torsion.threshold").Outcome)
+
+	below := beam.Load{Case: beam.Dead, Shape: beam.Torque, Moment: units.PoundInch.Of(1), At: units.Foot.Of(11)}
+	tr := shearTrial(t, ACI31819(), func(b *beam.Brief) {
+		// 1.4D: half of the torque to each end.
+		below.Moment = units.PoundInch.Of(limit / 0.7 * 0.9)
+		b.Loads = append(b.Loads, below)
+	})
+	tr.Record = true
+	got := only(t, us19.judgeTorsion(nil, tr), "torsion.threshold")
+	require.Equal(t, beam.Pass, got.Outcome)
+	require.InEpsilon(t, 0.9, got.Utilization, 1e-9)
+	requireEvaluable(t, &got)
+	require.Equal(t, beam.NotApplicable, only(t, us19.judgeTorsion(nil, shearTrial(t, ACI31819(), nil)), "torsion.threshold").Outcome)
+
+	strong := demandBrief(beam.Demand{Name: "A", Moment: units.KipFoot.Of(50), Torque: units.PoundInch.Of(0.5 * limit), Axial: units.Kip.Of(20)})
+	strong.Concrete.Strength = units.PSI.Of(12000)
+	p := problemOf(t, ACI31819(), strong)
+	tr = trialOf(t, p, "#3", []group{{5, "#8"}}, []group{{2, "#6"}})
+	tr.Record = true
+	got = only(t, us19.judgeTorsion(nil, tr), "torsion.threshold")
+	require.Equal(t, "A", got.Combination)
+	requireEvaluable(t, &got)
+}

@@ -1,0 +1,89 @@
+package aci318
+
+import (
+	"fmt"
+
+	"soffit.example/beam"
+	"soffit.example/units"
+)
+
+// torsionChecks are those that rest on how a torque is taken.
+var torsionChecks = []string{"torsion.section", "torsion.transverse", "torsion.longitudinal.bottom", "torsion.longitudinal.top", "torsion.longitudinal.side"}
+
+// torsion fills what the brief leaves open of its torques.
+func (r *resolution) torsion() {
+	b := r.b
+	if fault, wrong := angleFault(b.Readings.TorsionAngle); wrong {
+		r.faults = append(r.faults, fault)
+	}
+	unstated := false
+	state := func(torque units.Moment, path *beam.TorquePath) {
+		if *path == 0 && !torque.IsZero() {
+			*path, unstated = beam.EquilibriumTorque, true
+		}
+	}
+	for i := range b.Loads {
+		if l := &b.Loads[i]; l.Shape == beam.Torque || l.Shape == beam.UniformTorque {
+			state(l.Moment, &l.Path)
+		}
+	}
+	for i := range b.Demands {
+		state(b.Demands[i].Torque, &b.Demands[i].Path)
+	}
+	if unstated {
+		r.confirm("torsion.path", "torques whose path is not stated are needed for equilibrium: none of them is shed (22.7.3.1)", torsionChecks...)
+	}
+}
+
+// settleTorsion lists how a torque that must be designed for was taken.
+func (e *edition) settleTorsion(t *beam.Trial, note *beam.Register) {
+	if !t.Twisted {
+		return
+	}
+	holds := func(id, assumed string) {
+		note.Assume(beam.Assumption{ID: id, Assumed: assumed, UsedIn: torsionChecks, Found: "a choice of reading: it holds as taken", Holds: true})
+	}
+	angle := t.Brief.Readings.TorsionAngle
+	if angle == 0 {
+		angle = usualDiagonal
+	}
+	holds("reading.torsion-angle", "the compression diagonals of the space truss stand at "+number(angle)+" degrees to the axis (22.7.6.1.2)")
+	holds("reading.torsion-shares", "the longitudinal steel of torsion lies round the section in proportion to the perimeter of the stirrups, bars in the corners with the top and the bottom; where the sides are no higher than the spacing of 9.7.5.1, their shares lie half at the top and half at the bottom")
+	if e.shear.rowsByStirrups {
+		holds("reading.torsion-shear-row", "stirrups of at least "+e.stirrups.leastClause+" let Vc be by row (a) or (b) of Table 22.5.5.1 although torsion takes a part of them")
+	}
+	note.Assume(beam.Assumption{
+		ID: "torsion.stirrup-hooks", UsedIn: []string{"torsion.closed"}, Open: true,
+		Assumed: "closed stirrups end in 135-degree hooks round a bar, or in 90-degree ones only where a flange or slab keeps the concrete from spalling (25.7.1.6)",
+	})
+	if a, shed := e.mostShed(t.Problem); shed > 0 {
+		where := ""
+		if a.Span > 0 {
+			where = fmt.Sprintf(", at %s in span %d", e.length.Format(a.At), a.Span)
+		}
+		note.Assume(beam.Assumption{
+			ID: "torsion.redistribution", UsedIn: torsionChecks, Open: true,
+			Assumed: "the neighbours are designed for the torque that this beam sheds by 22.7.3.2, in equilibrium with what it keeps (22.7.3.3)",
+			Found:   e.moment.Format(e.momentOf(shed)) + " at most" + where + named(a.Combination),
+		})
+	}
+}
+
+// mostShed is the greatest part of a torque that is left to the neighbours.
+func (e *edition) mostShed(p *beam.Problem) (worst beam.Action, shed float64) {
+	s := e.problemTorsion(p)
+	take := func(a beam.Action) {
+		if q := s.torque(e, &a); q.shed > shed {
+			worst, shed = a, q.shed
+		}
+	}
+	for span := 1; span <= p.Forces.Spans(); span++ {
+		left, right := p.Faces(span)
+		eachTorque(&p.Forces, span, left, right, take)
+	}
+	for _, d := range p.Forces.Demands() {
+		s.load(e, d.Axial)
+		take(d)
+	}
+	return worst, shed
+}
