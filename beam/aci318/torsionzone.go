@@ -243,9 +243,9 @@ func (z *webZone) appendTorsionSpacing(dst []beam.Check) []beam.Check {
 	dst = append(dst, c)
 
 	c = beam.Check{ID: "torsion.bar-diameter", Clause: "9.7.5.2", Span: z.span}
-	c.Compare(e.leastTorsionBar(e.lengthOf(web.s)).Amount(), smallestBar(z.t).Amount())
+	c.Compare(e.leastTorsionBar(e.lengthOf(web.s)).Amount(), smallestRound(z.t).Amount())
 	if z.t.Record {
-		c.Steps = e.barDiameterSteps(web.s, e.lengthIn(smallestBar(z.t)))
+		c.Steps = e.barDiameterSteps(web.s, e.lengthIn(smallestRound(z.t)))
 	}
 	return append(dst, c)
 }
@@ -255,24 +255,11 @@ func (e *edition) leastTorsionBar(spacing units.Length) units.Length {
 	return spacing.Scale(barShare).Max(e.lengthOf(e.torsion.bar))
 }
 
-// smallestBar is the diameter of the smallest bar inside the stirrups at the
-// top and the bottom; of a bundle that of one of its bars. It is nil where a
-// face has none.
-func smallestBar(t *beam.Trial) units.Length {
-	var least units.Length
-	for _, f := range [2]*beam.FaceSteel{&t.Bottom, &t.Top} {
-		if len(f.Fit.Bars) == 0 {
-			return units.Length{}
-		}
-		for i := range f.Fit.Bars {
-			d := f.Fit.Bars[i].Size.Diameter
-			if f.Fit.Bars[i].Size.Bundled() > 1 {
-				d = f.Fit.Bars[i].Size.Single().Diameter
-			}
-			if least.IsZero() || d.Less(least) {
-				least = d
-			}
-		}
+// smallestRound is the diameter of the smallest bar inside the stirrups at the
+// top and the bottom, nil where a face has none.
+func smallestRound(t *beam.Trial) units.Length {
+	if len(t.Bottom.Fit.Bars) == 0 || len(t.Top.Fit.Bars) == 0 {
+		return units.Length{}
 	}
-	return least
+	return smallestBar(&t.Bottom).Min(smallestBar(&t.Top))
 }
