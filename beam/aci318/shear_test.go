@@ -17,15 +17,24 @@ type shearCase struct {
 	row                      beam.ShearRow
 	method                   beam.ShearMethod
 	vu, mu, nu               float64
+	ag                       float64 // zero: bw h
+	angle                    float64 // of the stirrups
+	slab                     float64
+	fibres, joist            bool
+	bent                     bentShare
 }
 
 func (c shearCase) evaluate(e *edition) (webSteel, sectionShear) {
+	if c.ag == 0 {
+		c.ag = c.bw * c.h
+	}
 	w := e.newWebSteel(&shearSection{
-		strength: e.stressOf(c.fc), light: lightness{factor: c.lambda}, width: e.lengthOf(c.bw), height: e.lengthOf(c.h), gross: e.areaOf(c.bw * c.h),
+		strength: e.stressOf(c.fc), light: lightness{factor: c.lambda}, width: e.lengthOf(c.bw), height: e.lengthOf(c.h), gross: e.areaOf(c.ag),
 		depth: e.lengthOf(c.d), area: e.areaOf(c.as), row: c.row, method: c.method,
-		stirrups: stirrupSteel{area: e.areaOf(c.av), spacing: e.lengthOf(c.s), yield: e.stressOf(c.fyt)},
+		stirrups: stirrupSteel{area: e.areaOf(c.av), spacing: e.lengthOf(c.s), yield: e.stressOf(c.fyt), angle: c.angle},
+		slab:     e.lengthOf(c.slab), fibres: c.fibres, joist: c.joist,
 	})
-	return w, w.at(e, shearForces{shear: e.forceOf(c.vu), moment: e.momentOf(c.mu), axial: e.forceOf(c.nu)})
+	return w, w.at(e, shearForces{shear: e.forceOf(c.vu), moment: e.momentOf(c.mu), axial: e.forceOf(c.nu), bent: c.bent})
 }
 
 // Own calculations from the clauses of each edition, written out beside each
