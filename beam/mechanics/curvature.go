@@ -49,8 +49,7 @@ func (s *Solver) MomentCurvature(dst []CurvaturePoint, section Section, law Law,
 	}
 	before := 0.0
 	for i, strain := range strains {
-		field := "strains"
-		if err := law.checkTruncation(field, strain); err != nil {
+		if err := law.checkTruncation("strains", strain); err != nil {
 			return dst, indexed(err, i)
 		}
 		if !(strain > before) {
