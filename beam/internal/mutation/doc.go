@@ -22,8 +22,9 @@
 // and notes the places that it reaches. A mutant in a place that no test
 // reaches is not covered, without being run. Every other mutant is run
 // with the tests that reach it alone, the quick ones before the slow ones, and
-// stops at the first that fails. Property tests of pgregory.net/rapid first
-// make few checks, from a fixed seed; what survives meets them with all.
+// stops at the first that fails. Tests run short. Property tests of
+// pgregory.net/rapid first make few checks, from a fixed seed; what survives
+// meets them with all.
 // A run that lasts much longer than it should, or takes a gibibyte, is
 // stopped and counts as killed.
 //

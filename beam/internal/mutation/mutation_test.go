@@ -20,6 +20,7 @@ func TestTinyPackage(t *testing.T) {
 	report, err := Run(context.Background(), Options{Package: tiny, Jobs: 4})
 	require.NoError(t, err)
 	require.Empty(t, report.Excluded)
+	require.False(t, report.Partial)
 	require.Equal(t, before, sources(t), "the source tree is not touched")
 
 	got := map[Outcome][]string{}
@@ -51,6 +52,8 @@ func TestTinyPackage(t *testing.T) {
 		"Halvings: n /= 2 -> n *= 2", // until it overflows
 		"Halvings: n /= 2 -> n /= 3",
 		"Halvings: k++ -> nothing",
+		"Rare: n == 57 -> n != 57",
+		"Rare: n == 57 -> n == 58", // by all checks, after few did not
 	}, got[Killed])
 	require.Equal(t, []string{
 		"Halvings: n /= 2 -> nothing",
@@ -125,7 +128,8 @@ func TestReport(t *testing.T) {
 	require.Equal(t, 50.0, r.Counts().Rate())
 	require.Equal(t, 100.0, Counts{}.Rate())
 
-	known, err := ReadEquivalents(strings.NewReader("p/a.go: G: a < b -> a <= b\n\tequal values are the same\n\teither way\n"))
+	known, err := ReadEquivalents(strings.NewReader("p/a.go: G: a < b -> a <= b\n\tequal values are the same\n\teither way\n" +
+		"p/a.go: F: a < b -> a <= b\n\tso it was thought\np/c.go: F: a < b -> a <= b\n\tin another file\n"))
 	require.NoError(t, err)
 	require.Equal(t, 1, r.Unexplained(known))
 	var out strings.Builder
@@ -142,7 +146,14 @@ p/b.go:40: a < b -> a <= b	[4 not covered in T.K]
 alive, and explained: 1
 p/a.go:20: a < b -> a <= b	[2 survived in G]
 	equal values are the same either way
+
+explained, but not alive: 1
+p/a.go: F: a < b -> a <= b
 `, out.String())
+	r.Partial = true
+	out.Reset()
+	require.NoError(t, r.Write(&out, known))
+	require.NotContains(t, out.String(), "not alive", "of a part nothing is known of the rest")
 }
 
 func TestReadEquivalents(t *testing.T) {
@@ -166,5 +177,19 @@ p/b.go: F: x -> nothing
 	} {
 		_, err := ReadEquivalents(strings.NewReader(wrong))
 		require.Error(t, err, wrong)
+	}
+}
+
+// The list of equivalents is well formed, and names files that are there.
+func TestListOfEquivalents(t *testing.T) {
+	f, err := os.Open("equivalents.txt")
+	require.NoError(t, err)
+	defer f.Close()
+	known, err := ReadEquivalents(f)
+	require.NoError(t, err)
+	require.NotEmpty(t, known)
+	for key := range known {
+		file, _, _ := strings.Cut(key, ": ")
+		require.FileExists(t, filepath.Join("../../..", file), key)
 	}
 }

@@ -15,6 +15,7 @@ type Report struct {
 	Package  string
 	Verdicts []Verdict // in the order of mutants
 	Excluded []string  // tests that fail without a mutant, only by being rewritten
+	Partial  bool      // not all mutants of the files that it names
 }
 
 // Counts are numbers of mutants.
@@ -96,8 +97,10 @@ func (r *Report) Write(w io.Writer, known Equivalents) error {
 	for _, name := range r.Excluded {
 		fmt.Fprintf(b, "left out, as it fails without a mutant: %s\n", name)
 	}
-	var open, explained []string
+	var open, explained, dead []string
+	alive := map[string]bool{}
 	for _, v := range r.Alive() {
+		alive[v.key()] = true
 		line := fmt.Sprintf("%s:%d: %s -> %s\t[%d %s in %s]", v.File, v.Line, v.Before, v.After, v.ID, v.Outcome, v.In)
 		if reason, ok := known[v.key()]; ok {
 			explained = append(explained, line+"\n\t"+reason)
@@ -112,6 +115,13 @@ func (r *Report) Write(w io.Writer, known Equivalents) error {
 	}
 	section("alive", open)
 	section("alive, and explained", explained)
+	for key := range known {
+		if file, _, _ := strings.Cut(key, ": "); !r.Partial && files[file] != nil && !alive[key] {
+			dead = append(dead, key)
+		}
+	}
+	slices.Sort(dead)
+	section("explained, but not alive", dead)
 	return b.Flush()
 }
 

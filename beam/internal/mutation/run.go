@@ -32,7 +32,7 @@ type Options struct {
 
 	Jobs     int     // processes at once; 0: one
 	Patience float64 // a run may last this many times its clean time, and two seconds; 0: eight
-	Checks   int     // of a property in the first round; 0: ten
+	Checks   int     // asked of a property in the first round; 0: 25
 	Long     bool    // without -test.short
 
 	Progress io.Writer // nil: none
@@ -83,11 +83,9 @@ func List(o Options) ([]Mutant, error) {
 
 // choose gives the mutants that the options ask for, in order.
 func (o *Options) choose(all []Mutant) []Mutant {
-	var out []Mutant
-	for _, m := range all {
-		if (o.Files == nil || o.Files.MatchString(filepath.Base(m.File))) && (len(o.Only) == 0 || slices.Contains(o.Only, m.ID)) {
-			out = append(out, m)
-		}
+	out := o.ofFiles(all)
+	if len(o.Only) > 0 {
+		out = slices.DeleteFunc(out, func(m Mutant) bool { return !slices.Contains(o.Only, m.ID) })
 	}
 	if o.Sample > 0 && o.Sample < len(out) {
 		rand.New(rand.NewPCG(o.Seed, 0)).Shuffle(len(out), func(i, k int) { out[i], out[k] = out[k], out[i] })
@@ -97,9 +95,19 @@ func (o *Options) choose(all []Mutant) []Mutant {
 	return out
 }
 
+// ofFiles gives the mutants of the files that the options ask for.
+func (o *Options) ofFiles(all []Mutant) (out []Mutant) {
+	for _, m := range all {
+		if o.Files == nil || o.Files.MatchString(filepath.Base(m.File)) {
+			out = append(out, m)
+		}
+	}
+	return out
+}
+
 // Run makes the mutants of a package and puts each to its tests.
 func Run(ctx context.Context, o Options) (*Report, error) {
-	o.Jobs, o.Checks = cmp.Or(o.Jobs, 1), cmp.Or(o.Checks, 10)
+	o.Jobs, o.Checks = cmp.Or(o.Jobs, 1), cmp.Or(o.Checks, 25)
 	o.Patience = cmp.Or(o.Patience, 8)
 	if o.Progress == nil {
 		o.Progress = io.Discard
@@ -119,7 +127,7 @@ func Run(ctx context.Context, o Options) (*Report, error) {
 	if err := h.build(ctx, text, len(all)); err != nil {
 		return nil, err
 	}
-	report := &Report{Package: s.path}
+	report := &Report{Package: s.path, Partial: len(chosen) < len(o.ofFiles(all))}
 	if err := h.survey(ctx, report); err != nil {
 		return nil, err
 	}
@@ -133,8 +141,8 @@ func Run(ctx context.Context, o Options) (*Report, error) {
 		}
 		queue = append(queue, i)
 	}
-	rounds := []round{{name: "few checks", property: []string{"-rapid.checks=" + strconv.Itoa(o.Checks)}}}
-	if h.rapid {
+	rounds := []round{{name: "few checks", few: true}}
+	if len(h.property) > 0 {
 		rounds = append(rounds, round{name: "all checks"})
 	}
 	for _, r := range rounds {
@@ -154,8 +162,9 @@ type harness struct {
 	binary string
 	rapid  bool // the binary takes the flags of pgregory.net/rapid
 
-	took  map[string]time.Duration // a test, with few checks
-	reach map[int][]string         // tests by mutant, the quick ones first
+	took     map[string]time.Duration // a test, with few checks
+	property map[string]bool          // tests that make checks of rapid
+	reach    map[int][]string         // tests by mutant, the quick ones first
 }
 
 // build compiles the tests of the package against its rewritten files.
@@ -206,13 +215,12 @@ func (h *harness) survey(ctx context.Context, report *Report) error {
 		return fmt.Errorf("listing the tests of %s: %w", h.path, err)
 	}
 	tests := strings.Fields(string(out))
-	h.took, h.reach = map[string]time.Duration{}, map[int][]string{}
+	h.took, h.property, h.reach = map[string]time.Duration{}, map[string]bool{}, map[int][]string{}
 	var lock sync.Mutex
-	few := round{property: []string{"-rapid.checks=" + strconv.Itoa(h.Checks)}}
 	err = h.parallel(len(tests), func(i int) error {
 		note := filepath.Join(h.work, "reached."+strconv.Itoa(i))
 		started := time.Now()
-		res, err := h.run(ctx, few, 0, tests[i:i+1], 10*time.Minute, "MUTATION_REACHED="+note)
+		res, err := h.run(ctx, round{few: true, verbose: true}, 0, tests[i:i+1], 10*time.Minute, "MUTATION_REACHED="+note)
 		took := time.Since(started)
 		if err != nil {
 			return err
@@ -225,6 +233,9 @@ func (h *harness) survey(ctx context.Context, report *Report) error {
 			return nil
 		}
 		h.took[tests[i]] = took
+		if strings.Contains(res.output, "[rapid] OK") {
+			h.property[tests[i]] = true
+		}
 		reached, err := os.ReadFile(note)
 		if err != nil && !errors.Is(err, os.ErrNotExist) {
 			return err
@@ -242,14 +253,21 @@ func (h *harness) survey(ctx context.Context, report *Report) error {
 	for _, list := range h.reach {
 		slices.SortFunc(list, func(a, b string) int { return cmp.Or(cmp.Compare(h.took[a], h.took[b]), cmp.Compare(a, b)) })
 	}
-	fmt.Fprintf(h.Progress, "%s: %d tests\n", h.path, len(tests))
+	var total time.Duration
+	for _, took := range h.took {
+		total += took
+	}
+	fmt.Fprintf(h.Progress, "%s: %d tests, %s of one process\n", h.path, len(tests), total.Round(100*time.Millisecond))
 	return err
 }
 
-// A round puts mutants to their tests in one manner.
+// A round puts mutants to their tests, properties with few checks or with all.
+// With all of them only properties are run: the other tests would do again what
+// they did.
 type round struct {
-	name     string
-	property []string // flags, where the tests take them
+	name    string
+	few     bool
+	verbose bool
 }
 
 // round gives those that survive it.
@@ -281,17 +299,16 @@ func (h *harness) round(ctx context.Context, r round, report *Report, queue []in
 // ever longer.
 func (h *harness) put(ctx context.Context, r round, id int) (Outcome, string, error) {
 	tests, budget := h.reach[id], 100*time.Millisecond
+	if !r.few {
+		tests = slices.DeleteFunc(slices.Clone(tests), func(name string) bool { return !h.property[name] })
+	}
 	for len(tests) > 0 {
 		n, clean := 0, time.Duration(0)
 		for n < len(tests) && (n == 0 || clean+h.took[tests[n]] <= budget) {
 			clean += h.took[tests[n]]
 			n++
 		}
-		// With all checks a property takes so many times longer.
-		limit := 2*time.Second + time.Duration(h.Patience*float64(clean))
-		if len(r.property) == 0 {
-			limit = 10*time.Second + time.Duration(100/float64(h.Checks)*h.Patience*float64(clean))
-		}
+		limit := 2*time.Second + time.Duration(float64(h.checks(r))/float64(h.Checks)*h.Patience*float64(clean))
 		res, err := h.run(ctx, r, id, tests[:n], limit)
 		switch {
 		case err != nil:
@@ -309,6 +326,18 @@ func (h *harness) put(ctx context.Context, r round, id int) (Outcome, string, er
 	return Survived, "", nil
 }
 
+// checks is the number of checks to ask for. All are the hundred that rapid makes
+// by itself; under -test.short it makes a fifth of what it is asked for.
+func (h *harness) checks(r round) int {
+	switch {
+	case r.few:
+		return h.Checks
+	case h.Long:
+		return 100
+	}
+	return 500
+}
+
 type result struct {
 	failed, late bool
 	output       string
@@ -320,9 +349,12 @@ func (h *harness) run(ctx context.Context, r round, id int, tests []string, limi
 	if !h.Long {
 		args = append(args, "-test.short")
 	}
+	if r.verbose {
+		args = append(args, "-test.v")
+	}
 	if h.rapid {
 		args = append(args, "-rapid.seed=1", "-rapid.nofailfile", "-rapid.shrinktime=1ms")
-		args = append(args, r.property...)
+		args = append(args, "-rapid.checks="+strconv.Itoa(h.checks(r)))
 	}
 	bounded, cancel := context.WithTimeout(ctx, limit)
 	defer cancel()
@@ -330,7 +362,7 @@ func (h *harness) run(ctx context.Context, r round, id int, tests []string, limi
 	cmd.Dir = h.dir
 	cmd.Env = append(append(os.Environ(), "MUTATION_ACTIVE="+strconv.Itoa(id), "MUTATION_REACHED="), env...)
 	cmd.WaitDelay = time.Second
-	out := &head{most: 1 << 16}
+	out := &head{most: 1 << 24}
 	cmd.Stdout, cmd.Stderr = out, out
 	err := cmd.Run()
 	var exit *exec.ExitError
@@ -338,7 +370,7 @@ func (h *harness) run(ctx context.Context, r round, id int, tests []string, limi
 	case ctx.Err() != nil:
 		return result{}, ctx.Err()
 	case err == nil:
-		return result{}, nil
+		return result{output: out.String()}, nil
 	case bounded.Err() != nil:
 		return result{late: true, failed: true, output: out.String()}, nil
 	case errors.As(err, &exit):

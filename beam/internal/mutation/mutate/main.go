@@ -40,7 +40,7 @@ func run() (enough bool, err error) {
 	flag.Uint64Var(&o.Seed, "seed", 1, "of the sample")
 	flag.IntVar(&o.Jobs, "jobs", runtime.NumCPU(), "processes at once")
 	flag.Float64Var(&o.Patience, "patience", 8, "a run may last so many `times` its clean time, and two seconds")
-	flag.IntVar(&o.Checks, "checks", 10, "of a property in the first round")
+	flag.IntVar(&o.Checks, "checks", 25, "asked of a property in the first round")
 	flag.BoolVar(&o.Long, "long", false, "run the tests without -test.short")
 	list := flag.Bool("list", false, "list the mutants and run none")
 	killers := flag.Bool("killers", false, "print the test that killed each mutant")

@@ -61,3 +61,6 @@ func Halvings(n int) (k int) {
 	}
 	return k
 }
+
+// Rare is true of one number in a hundred.
+func Rare(n int) bool { return n == 57 }
