@@ -110,3 +110,74 @@ func TestNoCombinationsForDemands(t *testing.T) {
 	require.Empty(t, kept)
 	require.Empty(t, dropped)
 }
+
+// 5.3.1(a) to (g) as printed, each alternative of roof live load, snow and rain
+// written out, with wind and earthquake acting one way.
+func TestFactorsAsPrinted(t *testing.T) {
+	const d, l, w, e = beam.Dead, beam.Live, beam.Wind, beam.Earthquake
+	type factors map[beam.LoadCase]float64
+	want := map[string][]factors{"5.3.1(a)": {{d: 1.4}}}
+	for _, r := range []beam.LoadCase{beam.RoofLive, beam.Snow, beam.Rain} {
+		want["5.3.1(b)"] = append(want["5.3.1(b)"], factors{d: 1.2, l: 1.6, r: 0.5})
+		want["5.3.1(c)"] = append(want["5.3.1(c)"], factors{d: 1.2, r: 1.6, l: 1}, factors{d: 1.2, r: 1.6, w: 0.5}, factors{d: 1.2, r: 1.6, w: -0.5})
+		want["5.3.1(d)"] = append(want["5.3.1(d)"], factors{d: 1.2, w: 1, l: 1, r: 0.5}, factors{d: 1.2, w: -1, l: 1, r: 0.5})
+	}
+	want["5.3.1(e)"] = []factors{{d: 1.2, e: 1, l: 1, beam.Snow: 0.2}, {d: 1.2, e: -1, l: 1, beam.Snow: 0.2}}
+	want["5.3.1(f)"] = []factors{{d: 0.9, w: 1}, {d: 0.9, w: -1}}
+	want["5.3.1(g)"] = []factors{{d: 0.9, e: 1}, {d: 0.9, e: -1}}
+	for _, c := range Editions() {
+		kept, _ := c.Combinations(briefOf(beam.LoadCases()...))
+		got := map[string][]factors{}
+		for _, k := range kept {
+			f := factors{}
+			for _, x := range k.Factors {
+				f[x.Case] = x.Factor
+			}
+			got[k.Clause] = append(got[k.Clause], f)
+		}
+		require.Len(t, got, len(want), c.e.id)
+		for clause := range want {
+			require.ElementsMatch(t, want[clause], got[clause], "%s %s", c.e.id, clause)
+		}
+	}
+}
+
+// A combination that says nothing new is dropped once for both senses where its
+// reversible load is absent, and once a sense where it is there.
+func TestDroppedCombinationsOfBothSenses(t *testing.T) {
+	reasons := func(b *beam.Brief) map[string]string {
+		_, dropped := ACI31819().Combinations(b)
+		out := map[string]string{}
+		for _, d := range dropped {
+			out[d.ID] = d.Reason
+		}
+		return out
+	}
+	snow := reasons(briefOf(beam.Snow))
+	require.Equal(t, "without wind load it is the same as 1.2D + 1.6S", snow["1.2D + 1.6S ± 0.5W"])
+	wind := reasons(briefOf(beam.Wind))
+	require.Equal(t, "without live and snow load it is the same as 1.2D + 1.0W", wind["1.2D + 1.0W + 1.0L + 0.5S"])
+	require.Equal(t, "without live and snow load it is the same as 1.2D - 1.0W", wind["1.2D - 1.0W + 1.0L + 0.5S"])
+}
+
+// A load that may act either way may stand first in a combination.
+func TestReversibleLoadFirst(t *testing.T) {
+	e := us19
+	e.loads = loadRules{[]printedCombination{{"own", beam.Wind, []term{{factor: 1, load: beam.Wind, reversible: true}, {factor: 0.9, load: beam.Dead}}}}}
+	kept, dropped := e.combinations(briefOf(beam.Wind))
+	require.Empty(t, dropped)
+	require.Len(t, kept, 2)
+	require.Equal(t, "1.0W + 0.9D", kept[0].ID)
+	require.Equal(t, "-1.0W + 0.9D", kept[1].ID)
+	require.Equal(t, -1.0, kept[1].Factors[0].Factor)
+	_, dropped = e.combinations(briefOf(beam.Live))
+	require.Equal(t, "±1.0W + 0.9D", dropped[0].ID)
+}
+
+// Loads of no known case are nobody's.
+func TestUnknownCasesLoadNothing(t *testing.T) {
+	loaded := loadedCases(&beam.Brief{NoSelfWeight: true, Loads: []beam.Load{{Case: 0}, {Case: beam.Earthquake + 1}}})
+	for c, is := range loaded {
+		require.False(t, is, c)
+	}
+}

@@ -30,3 +30,13 @@ func requireEvaluable(t testing.TB, c *beam.Check) {
 		known[s.Symbol] = v
 	}
 }
+
+// requireSymbols asserts what a working shows, in order.
+func requireSymbols(t testing.TB, c *beam.Check, want ...string) {
+	t.Helper()
+	var got []string
+	for _, s := range c.Steps {
+		got = append(got, s.Symbol)
+	}
+	require.Equal(t, want, got, c.ID)
+}

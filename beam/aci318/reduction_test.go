@@ -46,5 +46,7 @@ func TestReductionOfFlexure(t *testing.T) {
 	require.InDelta(t, 0.005759, reduction19.leastStrain(grade80), 5e-7)
 	require.InDelta(t, 0.006448, reduction19.leastStrain(grade100), 5e-7)
 	require.Equal(t, 0.75, reduction14.shear)
+	require.Equal(t, 0.75, reduction19.shear)
+	require.Equal(t, 0.75, reduction14.torsion)
 	require.Equal(t, 0.75, reduction19.torsion)
 }

@@ -1,6 +1,8 @@
 package aci318
 
 import (
+	"slices"
+	"strings"
 	"testing"
 
 	"github.com/stretchr/testify/require"
@@ -144,4 +146,112 @@ func TestCautionsDeferToTheEngineer(t *testing.T) {
 		require.Contains(t, c.Cautions()[0], "licensed engineer")
 		require.Contains(t, c.Cautions()[1], c.e.title)
 	}
+}
+
+// Which assumptions of exposure, loads, demands and supports a brief brings, by
+// id: what is listed is what was taken for granted, and no more.
+func TestAssumptionsOfABrief(t *testing.T) {
+	spans := []string{"supports.width", "shear.direct-support"}
+	uniform := func(c beam.LoadCase) beam.Load {
+		return beam.Load{Case: c, Shape: beam.Uniform, Intensity: units.KipPerFoot.Of(1)}
+	}
+	loads := func(list ...beam.Load) func(*beam.Brief) {
+		return func(b *beam.Brief) { b.Loads = list }
+	}
+	demands := func(list ...beam.Demand) func(*beam.Brief) {
+		return func(b *beam.Brief) { b.Spans, b.Supports, b.Loads, b.Demands = nil, nil, nil, list }
+	}
+	moment, shear := beam.Demand{Name: "1", Moment: units.KipFoot.Of(1)}, beam.Demand{Name: "2", Shear: units.Kip.Of(1)}
+	for _, tc := range []struct {
+		name string
+		edit func(*beam.Brief)
+		more []string // beside those of spans
+	}{
+		{"live load", func(*beam.Brief) {}, []string{"loads.live"}},
+		{"no load", loads(), []string{"loads.none"}},
+		{"dead load", loads(uniform(beam.Dead)), nil},
+		{"dead load that holds the weight", func(b *beam.Brief) { b.NoSelfWeight = true; b.Loads[0].Case = beam.Dead }, []string{"loads.self-weight"}},
+		{"wind", loads(uniform(beam.Wind)), []string{"loads.wind", "loads.reversal"}},
+		{"earthquake", loads(uniform(beam.Earthquake)), []string{"loads.reversal"}},
+		{"wind, and dead load after it", loads(uniform(beam.Wind), uniform(beam.Dead)), []string{"loads.wind", "loads.reversal"}},
+		{"snow", loads(uniform(beam.Snow)), nil},
+		{"live and snow", loads(uniform(beam.Live), uniform(beam.Snow)), []string{"loads.live", "loads.live-factor"}},
+		{"live and earthquake", loads(uniform(beam.Live), uniform(beam.Earthquake)), []string{"loads.live", "loads.reversal", "loads.live-factor"}},
+		{"two live loads", loads(uniform(beam.Live), uniform(beam.Live)), []string{"loads.live"}},
+		{"a torque, and dead load after it", loads(beam.Load{Case: beam.Dead, Shape: beam.Torque}, uniform(beam.Dead)), []string{"supports.torsion"}},
+		{"a torque along the span", loads(beam.Load{Case: beam.Dead, Shape: beam.UniformTorque}), []string{"supports.torsion"}},
+		{"a fixed end", func(b *beam.Brief) { b.Supports[1].Kind = statics.Fixed }, []string{"loads.live", "supports.fixity"}},
+	} {
+		t.Run(tc.name, func(t *testing.T) {
+			b := bare()
+			tc.edit(&b)
+			require.ElementsMatch(t, append(tc.more, spans...), assumed(t, ACI31819(), b))
+		})
+	}
+	for _, tc := range []struct {
+		name string
+		edit func(*beam.Brief)
+		more []string
+	}{
+		{"moments alone", demands(moment), []string{"demands.shear", "demands.factored"}},
+		{"shear in one of the demands", demands(shear, moment), []string{"demands.factored"}},
+		{"supports of stated width", func(b *beam.Brief) { b.Supports[0].Width, b.Supports[1].Width = in(12), in(12) }, []string{"loads.live", "shear.direct-support"}},
+		{"a free end has no face", func(b *beam.Brief) {
+			b.Supports = []beam.Support{{Kind: statics.Fixed, Width: in(12)}, {Kind: statics.Free}}
+		}, []string{"loads.live", "supports.fixity", "shear.direct-support"}},
+		{"a hung support", func(b *beam.Brief) { b.Supports[0].Hung = true }, []string{"loads.live", "supports.width"}},
+		{"a hung load, and one that is not", func(b *beam.Brief) {
+			b.Loads = []beam.Load{uniform(beam.Dead), uniform(beam.Dead)}
+			b.Loads[0].Hung = true
+		}, []string{"supports.width"}},
+		{"cover alone", func(b *beam.Brief) { b.Exposure, b.Cover = 0, in(2) }, []string{"exposure.class", "loads.live", "supports.width", "shear.direct-support"}},
+	} {
+		t.Run(tc.name, func(t *testing.T) {
+			b := bare()
+			tc.edit(&b)
+			require.ElementsMatch(t, tc.more, assumed(t, ACI31819(), b))
+		})
+	}
+	b := bare()
+	b.Exposure, b.Cover = 0, in(2)
+	var note beam.Register
+	require.Empty(t, ACI31819().Resolve(&b, &note))
+	require.Equal(t, beam.Interior, b.Exposure)
+}
+
+// assumed are the ids of what a brief brings of exposure, loads, demands and
+// supports.
+func assumed(t *testing.T, c Code, b beam.Brief) []string {
+	t.Helper()
+	var note beam.Register
+	require.Empty(t, c.Resolve(&b, &note))
+	var ids []string
+	for _, a := range note.All() {
+		topic, _, _ := strings.Cut(a.ID, ".")
+		if slices.Contains([]string{"exposure", "loads", "demands", "supports"}, topic) || a.ID == "shear.direct-support" {
+			ids = append(ids, a.ID)
+		}
+	}
+	return ids
+}
+
+// The readings that the brief chooses are listed as they were chosen.
+func TestReadingsInWords(t *testing.T) {
+	words := func(edit func(b *beam.Brief)) map[string]string {
+		b := bare()
+		edit(&b)
+		var note beam.Register
+		require.Empty(t, ACI31819().Resolve(&b, &note))
+		out := map[string]string{}
+		for _, a := range note.All() {
+			out[a.ID] = a.Assumed
+		}
+		return out
+	}
+	usual := words(func(*beam.Brief) {})
+	require.Equal(t, "the concrete that compression bars displace is deducted", usual["reading.displaced-concrete"])
+	require.Contains(t, usual["reading.corner"], "tangent point")
+	other := words(func(b *beam.Brief) { b.Readings.IgnoreDisplaced, b.Readings.TuckedCorner = true, true })
+	require.Equal(t, "the concrete that compression bars displace is not deducted", other["reading.displaced-concrete"])
+	require.Contains(t, other["reading.corner"], "pushed into")
 }

@@ -1,6 +1,7 @@
 package aci318
 
 import (
+	"context"
 	"testing"
 
 	"github.com/stretchr/testify/require"
@@ -70,4 +71,60 @@ func TestLeastTension(t *testing.T) {
 	_, trial = checkUS(t, ACI31819(), rows, nil, beam.Demand{Name: "1", Moment: units.KipFoot.Of(-2000)})
 	_, ok = ACI31819().LeastTension(trial.Problem, beam.Negative, in(21.5))
 	require.False(t, ok)
+}
+
+// Negative bending is settled like positive; a beam that nothing bends holds.
+func TestSettleTensionControlOfEachSense(t *testing.T) {
+	rows := []beam.Row{bottom(3, "#9"), top(3, "#9")}
+	r, _ := checkUS(t, ACI31819(), rows, nil, beam.Demand{Name: "1", Moment: units.KipFoot.Of(-100)})
+	a := assumption(t, r, assumeTensionControl)
+	require.True(t, a.Holds)
+	require.Contains(t, a.Found, "negative bending: strain")
+	require.NotContains(t, a.Found, "positive")
+
+	r, _ = checkUS(t, ACI31819(), rows, nil, beam.Demand{Name: "1", Moment: units.KipFoot.Of(100)}, beam.Demand{Name: "2", Moment: units.KipFoot.Of(-100)})
+	require.Regexp(t, "^positive bending: .*; negative bending: ", assumption(t, r, assumeTensionControl).Found)
+
+	r, _ = checkUS(t, ACI31819(), rows, nil, beam.Demand{Name: "1", Shear: units.Kip.Of(10)})
+	a = assumption(t, r, assumeTensionControl)
+	require.True(t, a.Holds)
+	require.Equal(t, "nothing is bent", a.Found)
+}
+
+// Without stirrups Vc is by row (c) of Table 22.5.5.1 of 318-19.
+func TestSettleWithoutStirrups(t *testing.T) {
+	b := demandBrief(beam.Demand{Name: "1", Moment: units.KipFoot.Of(100)})
+	r, err := beam.CheckLayout(context.Background(), ACI31819(), b, beam.Layout{Longitudinal: []beam.Row{bottom(3, "#9"), top(2, "#4")}})
+	require.NoError(t, err)
+	a := assumption(t, r, assumeLeastStirrups)
+	require.False(t, a.Holds)
+	require.Equal(t, "there are no stirrups: Vc is by row (c)", a.Found)
+}
+
+// A beam with steel at its top alone is settled with the web of negative
+// bending: #3 at 8 in. are Av/s = 0.0275 in., of which 50 × 14/60000 = 0.01167
+// are needed (9.6.3.4), and d/2 = 10.8 in. allows them.
+func TestSettleLeastStirrupsOfATopAlone(t *testing.T) {
+	p := problemOf(t, ACI31819(), demandBrief(beam.Demand{Name: "1", Moment: units.KipFoot.Of(-100), Shear: units.Kip.Of(10)}))
+	tr := trialOf(t, p, "#3", nil, []group{{3, "#8"}})
+	addZone(tr, 2, 8, 0, 0)
+	var note beam.Register
+	b := p.Brief
+	require.Empty(t, ACI31819().Resolve(&b, &note))
+	us19.settleLeastStirrups(tr, &note)
+	a := assumption(t, &beam.Result{Assumptions: note.All()}, assumeLeastStirrups)
+	require.True(t, a.Holds)
+	require.Contains(t, a.Found, "0.42 of those provided")
+}
+
+// A cover of the brief's own below the table's is among what the engineer has
+// to confirm.
+func TestSettleListsOwnCover(t *testing.T) {
+	r, _ := checkUS(t, ACI31819(), []beam.Row{bottom(3, "#9"), top(2, "#4")}, func(b *beam.Brief) { b.Cover = in(1) },
+		beam.Demand{Name: "1", Moment: units.KipFoot.Of(100)})
+	a := assumption(t, r, "cover.below-table")
+	require.True(t, a.Open)
+	require.Contains(t, a.Assumed, "1 in")
+	require.Contains(t, a.Assumed, "1.5 in")
+	require.Contains(t, a.Assumed, "Table 20.5.1.3.1")
 }

@@ -80,3 +80,93 @@ func TestStretchIsExact(t *testing.T) {
 		}
 	})
 }
+
+// Where the shear vanishes, found from quadratics with known roots. Roots at the
+// ends or beyond are not inside.
+func TestTurnsOfTheMoment(t *testing.T) {
+	for _, c := range []struct {
+		name string
+		v    [3]float64 // V = v0 + v1 t + v2 t2 over a length of 4
+		want []float64
+	}{
+		{"(t - 1)(t - 3)", [3]float64{3, -4, 1}, []float64{1, 3}},
+		{"(1 - t)(t - 3)", [3]float64{-3, 4, -1}, []float64{1, 3}},
+		{"(t - 1)(t - 1.5)", [3]float64{1.5, -2.5, 1}, []float64{1, 1.5}},
+		{"(t - 1)(t - 2)/2", [3]float64{1, -1.5, 0.5}, []float64{1, 2}},
+		{"(t + 1)(t - 3)", [3]float64{-3, -2, 1}, []float64{3}},
+		{"(t - 1)(t + 3)", [3]float64{-3, 2, 1}, []float64{1}},
+		{"2 - t", [3]float64{2, -1, 0}, []float64{2}},
+		{"t: at the start", [3]float64{0, 1, 0}, nil},
+		{"t - 4: at the end", [3]float64{-4, 1, 0}, nil},
+		{"t2 + 1: nowhere", [3]float64{1, 0, 1}, nil},
+		{"1: nowhere", [3]float64{1, 0, 0}, nil},
+		{"0: everywhere", [3]float64{0, 0, 0}, nil},
+	} {
+		t.Run(c.name, func(t *testing.T) {
+			p := shearStretch{length: 4, v: c.v}
+			got, n := p.turns()
+			require.Len(t, c.want, n)
+			for i, want := range c.want {
+				require.InDelta(t, want, got[i], 1e-15)
+			}
+		})
+	}
+}
+
+// The shear is extreme inside a stretch, not at its ends.
+func TestVertexOfTheShear(t *testing.T) {
+	p := shearStretch{length: 4, v: [3]float64{3, -4, 1}}
+	for _, c := range []struct {
+		a, b float64
+		ok   bool
+	}{{0, 4, true}, {1.9, 2.1, true}, {2, 4, false}, {0, 2, false}, {3, 4, false}} {
+		x, ok := p.vertex(c.a, c.b)
+		require.Equal(t, c.ok, ok, c)
+		require.InDelta(t, 2, x, 1e-15)
+	}
+	line := shearStretch{length: 4, v: [3]float64{3, -4, 0}}
+	x, ok := line.vertex(0, 4)
+	require.False(t, ok)
+	require.Zero(t, x)
+}
+
+// A moment is compared with the greatest moment of the ends, or shear times
+// length, whichever is greater: 1e-9 of it has no sign.
+func TestSignOfAMoment(t *testing.T) {
+	for _, c := range []struct{ m0, v0, m1, v1, scale float64 }{
+		{10, 0, 20, 0, 20},
+		{-30, 0, 20, 0, 30},
+		{1, -8, 2, 3, 32},
+		{1, 3, 2, -8, 32},
+	} {
+		p := newShearStretch(4, c.m0, c.v0, c.m1, c.v1)
+		require.Equal(t, c.scale, p.scale, c)
+	}
+	for _, c := range []struct {
+		m    float64
+		want int
+	}{{1e-8, 0}, {1.01e-6, 1}, {1e-4, 1}, {0.99e-6, 0}, {-1e-8, 0}, {-1.01e-6, -1}, {-1e-4, -1}, {-0.99e-6, 0}} {
+		p := shearStretch{length: 4, m: c.m, scale: 1000}
+		require.Equal(t, c.want, p.bends(2), c.m)
+	}
+}
+
+// The places of contraflexure do not depend on how large the moments are.
+func TestContraflexureOfSmallMoments(t *testing.T) {
+	const w, l = 3e-3, 8.0
+	p := newShearStretch(l, -w*l*l/12, w*l/2, -w*l*l/12, -w*l/2)
+	parts, n := p.parts()
+	require.Equal(t, 3, n)
+	require.InDelta(t, l*(0.5-1/math.Sqrt(12)), parts[0].to, 1e-9)
+	require.InDelta(t, l*(0.5+1/math.Sqrt(12)), parts[1].to, 1e-9)
+}
+
+// At its end a stretch has the shear given, to the last bit.
+func TestShearAtTheEndIsAsGiven(t *testing.T) {
+	rapid.Check(t, func(r *rapid.T) {
+		c := func(name string) float64 { return rapid.Float64Range(-10, 10).Draw(r, name) }
+		length, v1 := rapid.Float64Range(0.5, 10).Draw(r, "length"), c("v1")
+		p := newShearStretch(length, c("m0"), c("v0"), c("m1"), v1)
+		require.Equal(r, v1, p.shear(length))
+	})
+}
