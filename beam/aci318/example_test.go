@@ -13,7 +13,8 @@ import (
 // than it can carry.
 func ExampleCode_RequiredSteel() {
 	q := aci318.SteelQuery{
-		Width: units.Inch.Of(14), Depth: units.Inch.Of(21.5), Top: units.Inch.Of(2.5),
+		Section: beam.Section{Shape: beam.Rectangular, Width: units.Inch.Of(14), Depth: units.Inch.Of(24)},
+		Depth:   units.Inch.Of(21.5), Top: units.Inch.Of(2.5),
 		Strength: units.PSI.Of(4000), Yield: units.KSI.Of(60), Moment: units.KipFoot.Of(345.6),
 	}
 	for _, moment := range []float64{345.6, 560} {

@@ -12,6 +12,10 @@ import (
 	"soffit.example/units"
 )
 
+func rectangle(width, depth units.Length) beam.Section {
+	return beam.Section{Shape: beam.Rectangular, Width: width, Depth: depth}
+}
+
 // Required steel put back into the kernel gives the demand.
 func TestRequiredSteelGivesTheDemand(t *testing.T) {
 	single, both := 0, 0
@@ -23,7 +27,7 @@ func TestRequiredSteelGivesTheDemand(t *testing.T) {
 		b, d := rapid.Float64Range(8, 36).Draw(t, "b"), rapid.Float64Range(10, 48).Draw(t, "d")
 		extreme := d + rapid.Float64Range(0, 1.2).Draw(t, "dt - d")
 		q := SteelQuery{
-			Width: in(b), Depth: in(d), Extreme: in(extreme), Top: in(2.5), Strength: fc, Yield: fy,
+			Section: rectangle(in(b), in(extreme+2.5)), Depth: in(d), Extreme: in(extreme), Top: in(2.5), Strength: fc, Yield: fy,
 			Readings: beam.Readings{IgnoreDisplaced: rapid.Bool().Draw(t, "ignore")},
 		}
 		// As a share of the moment of a balanced block.
@@ -41,7 +45,7 @@ func TestRequiredSteelGivesTheDemand(t *testing.T) {
 			both++
 			layers = append(layers, mechanics.Layer{Depth: q.Top, Area: s.Compression})
 		}
-		f, err := e.flexureStrength(e.testSection(q.Width, in(extreme+2.5), fy, layers...), fc, beam.Positive, &q.Readings)
+		f, err := e.flexureStrength(e.testSection(in(b), in(extreme+2.5), fy, layers...), fc, beam.Positive, &q.Readings)
 		if err != nil {
 			t.Fatal(err)
 		}
@@ -71,7 +75,7 @@ func TestRequiredSteelInTheTransition(t *testing.T) {
 	as := 0.85 * 4 * 14 * 7.48 / 60
 	phi := 0.65 + 0.25*(0.0045-60.0/29000)/(0.005-60.0/29000)
 	mu := phi * as * 60 * (22 - 3.74)
-	q := SteelQuery{Width: in(14), Depth: in(22), Strength: psi(4000), Yield: psi(60000), Moment: units.KipInch.Of(mu)}
+	q := SteelQuery{Section: rectangle(in(14), in(24.5)), Depth: in(22), Strength: psi(4000), Yield: psi(60000), Moment: units.KipInch.Of(mu)}
 	s, err := ACI31814().RequiredSteel(q)
 	require.NoError(t, err)
 	require.InEpsilon(t, as, s.Tension.In(units.SquareInch), 1e-9)
@@ -88,13 +92,17 @@ func TestRequiredSteelInTheTransition(t *testing.T) {
 }
 
 func TestRequiredSteelInput(t *testing.T) {
-	good := SteelQuery{Width: in(14), Depth: in(22), Strength: psi(4000), Yield: psi(60000), Moment: units.KipFoot.Of(200)}
+	good := SteelQuery{Section: rectangle(in(14), in(24.5)), Depth: in(22), Strength: psi(4000), Yield: psi(60000), Moment: units.KipFoot.Of(200)}
 	for _, tc := range []struct {
 		name string
 		edit func(q *SteelQuery)
 		want string
 	}{
-		{"no width", func(q *SteelQuery) { q.Width = units.Length{} }, "width is 0 in; allowed: above zero"},
+		{"no width", func(q *SteelQuery) { q.Section.Width = units.Length{} }, "/section/width"},
+		{"no depth", func(q *SteelQuery) { q.Depth = units.Length{} }, "depth of the tension steel is 0 in; allowed: above zero"},
+		{"extreme below the section", func(q *SteelQuery) { q.Extreme = in(25) }, "no more than that of the section, 24.5 in"},
+		{"layers too far apart", func(q *SteelQuery) { q.Depth, q.Extreme, q.Moment = in(13), in(24), units.KipFoot.Of(230) }, "too far apart"},
+		{"sense", func(q *SteelQuery) { q.Bending = 3 }, "sense of bending"},
 		{"NaN", func(q *SteelQuery) { q.Moment = units.KipFoot.Of(math.NaN()) }, "moment"},
 		{"negative moment", func(q *SteelQuery) { q.Moment = units.KipFoot.Of(-1) }, "moment is -1 kip-ft"},
 		{"extreme above centroid", func(q *SteelQuery) { q.Extreme = in(20) }, "extreme layer is 20 in"},

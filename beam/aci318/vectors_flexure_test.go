@@ -100,10 +100,10 @@ func publishedStrength(t *testing.T, c *vectors.Case, e *edition) map[string]uni
 
 func publishedRequired(t *testing.T, c *vectors.Case, e *edition) map[string]units.Amount {
 	t.Helper()
-	q := SteelQuery{Width: c.Length("b"), Depth: c.Length("d1"), Strength: c.Stress("fc"), Yield: c.Stress("fy"), Moment: c.Moment("Mu")}
+	q := SteelQuery{Section: rectangle(c.Length("b"), c.Length("d1").Scale(1.1)), Depth: c.Length("d1"), Strength: c.Stress("fc"), Yield: c.Stress("fy"), Moment: c.Moment("Mu")}
 	s, err := Code{e}.RequiredSteel(q)
 	require.NoError(t, err)
-	m := e.minimumSteel(q.Strength, q.Yield, e.minimumWidth(q.Width, q.Width, true), q.Depth)
+	m := e.minimumSteel(q.Strength, q.Yield, e.minimumWidth(q.Section.Width, q.Section.Width, true), q.Depth)
 	return map[string]units.Amount{
 		"As": s.Tension.Amount(), "strain": units.Plain(s.Strain), "As_min": e.areaOf(m.area).Amount(),
 	}
