@@ -93,6 +93,8 @@ func (r *Result) strengths(p *prepared, t *Trial) error {
 			return nil
 		case err != nil:
 			return fmt.Errorf("beam: strength of the finished section: %w", err)
+		case len(found.Refusals) > 0:
+			continue // a check says so
 		}
 		r.Flexure = append(r.Flexure, found.Flexure)
 	}
