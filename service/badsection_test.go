@@ -99,6 +99,7 @@ func onTorques() []badInput {
 		{name: "angle in words", replace: `"exposure"`, with: `"torsion_angle": "45 degrees", "exposure"`, pointer: "/torsion_angle", detail: "torsion_angle is text", allowed: "a number from 10 to 80"},
 		{name: "flat angle", replace: `"exposure"`, with: `"torsion_angle": 5, "exposure"`, pointer: "/torsion_angle", detail: "torsion_angle is 5", allowed: "a number from 10 to 80"},
 		{name: "no angle", replace: `"exposure"`, with: `"torsion_angle": 0, "exposure"`, pointer: "/torsion_angle", detail: "torsion_angle is 0", allowed: "a number from 10 to 80"},
+		{name: "angle beyond the code", replace: `"exposure"`, with: `"torsion_angle": 25, "exposure"`, pointer: "/torsion_angle", detail: "angle is 25 degrees", allowed: "30 to 60 degrees (22.7.6.1.2)"},
 		{name: "side bars counted by number", replace: `"exposure"`, with: `"count_side_bars": 2, "exposure"`, pointer: "/count_side_bars", detail: "count_side_bars is a number", allowed: "true or false"},
 		{name: "bundles of five", replace: `"max_layers": 2`, with: `"bundles": 5`, pointer: "/preferences/bundles", detail: "bundles is 5", allowed: "a whole number from 1 to 4"},
 		{name: "bundles as answer", replace: `"max_layers": 2`, with: `"bundles": true`, pointer: "/preferences/bundles", detail: "bundles is true or false", allowed: "a whole number from 1 to 4"},
@@ -166,6 +167,9 @@ func onBareSections() []badInput {
 		{name: "bent steel that lies flat", replace: `"demand"`, with: strings.Replace(bent, `45`, `4.5`, 1), pointer: "/bent/angle", detail: "angle is 4.5", allowed: "a number from 15 to 90"},
 		{name: "bent steel without yield", replace: `"demand"`, with: strings.Replace(bent, `"yield": "60 ksi", `, ``, 1), pointer: "/bent/yield", detail: "yield is missing", allowed: "a stress in"},
 		{name: "bent steel on the spot", replace: `"demand"`, with: strings.Replace(bent, `45}`, `45, "spacing": "0 in"}`, 1), pointer: "/bent/spacing", detail: "it must be above zero", allowed: "above zero"},
+		{name: "torque without cover", replace: `"cover": "1.5 in", "diameter": "0.375 in"},
+  "demand": {"moment": "250 kip-ft", "shear": "45 kip", "torque": "0 kip-ft"`, with: `"diameter": "0.375 in"},
+  "demand": {"moment": "250 kip-ft", "shear": "45 kip", "torque": "30 kip-ft"`, pointer: "/stirrups/cover", detail: "the torque must be designed for, and the stirrups' cover is missing", allowed: "above zero"},
 		{name: "steep angle", replace: `"bending"`, with: `"torsion_angle": 85, "bending"`, pointer: "/torsion_angle", detail: "torsion_angle is 85", allowed: "a number from 10 to 80"},
 		{name: "path of no torque", replace: `, "torque": "0 kip-ft"`, with: `, "path": "equilibrium"`, pointer: "/demand/path", detail: "path belongs to a torque"},
 	}

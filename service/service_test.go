@@ -179,6 +179,7 @@ func TestWhatIsShownToReadersWorks(t *testing.T) {
 			for _, body := range bodies {
 				w := send(s, "POST", path, body)
 				require.Equal(t, http.StatusOK, w.Code, "%s: %s %s", name, path, w.Body)
+				require.Equal(t, beam.Satisfied.String(), decode[struct{ Verdict string }](t, w).Verdict, "%s: %s", name, path)
 			}
 		}
 	}
@@ -206,6 +207,42 @@ func TestADesignPassesItsOwnCheck(t *testing.T) {
 			require.JSONEq(t, string(design["checks"]), string(check["checks"]))
 		})
 	}
+}
+
+// Every member of a layout is echoed, and the echo is taken as the layout.
+func TestALayoutGoesRound(t *testing.T) {
+	const layout = `{
+  "longitudinal": [
+    {"mark": "B1", "bar": "#8", "count": 4, "face": "bottom", "layer": 1, "bundled": 2, "yield": "80 ksi"},
+    {"mark": "B2", "bar": "#6", "count": 2, "face": "bottom", "layer": 2},
+    {"mark": "W1", "bar": "#4", "count": 1, "face": "side", "spacing": "6 in"},
+    {"mark": "T1", "bar": "#6", "count": 2, "face": "top", "layer": 1},
+    {"mark": "T2", "bar": "#5", "count": 4, "face": "top", "flange": true, "spacing": "5 in", "yield": "60 ksi"}
+  ],
+  "transverse": [
+    {"mark": "S1", "bar": "#3", "legs": 4, "spacing": "7 in", "from": "6 in", "to": "13.5 ft", "form": "open", "angle": 60},
+    {"mark": "S2", "bar": "#4", "legs": 2, "spacing": "9 in", "from": "13.5 ft", "to": "26.5 ft"}
+  ],
+  "bent": [{"mark": "D1", "bar": "#7", "count": 2, "span": 1, "at": "4 ft", "angle": 45, "rises": "left", "bends": 2, "spacing": "11 in"}]
+}`
+	s := newService(t)
+	check := func(layout string) map[string]json.RawMessage {
+		w := send(s, "POST", "/v1/checks", `{"brief": `+of(goodBrief, floorTee)+`, "layout": `+layout+`}`)
+		require.Equal(t, http.StatusOK, w.Code, w.Body.String())
+		return decode[map[string]json.RawMessage](t, w)
+	}
+	first := check(layout)
+	echo := string(first["layout"])
+	for _, member := range []string{
+		`"bundled":2`, `"yield":{"value":80,"unit":"ksi"}`, `"flange":true`, `"spacing":{"value":5,"unit":"in"}`, `"angle":60`, `"form":"open"`,
+		`"at":{"value":4,"unit":"ft"}`, `"rises":"left"`, `"bends":2`,
+	} {
+		require.Contains(t, echo, member)
+	}
+	second := check(echo)
+	require.JSONEq(t, echo, string(second["layout"]))
+	require.JSONEq(t, string(first["checks"]), string(second["checks"]))
+	require.JSONEq(t, string(first["bars"]), string(second["bars"]))
 }
 
 func TestReportInChangesUnitsAlone(t *testing.T) {

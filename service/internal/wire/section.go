@@ -34,8 +34,8 @@ type SectionStirrups struct {
 	Area     units.Area    `json:"area" doc:"Area of all legs that cross one shear crack at one stirrup."`
 	Spacing  units.Length  `json:"spacing" doc:"Spacing along the span."`
 	Yield    units.Stress  `json:"yield" doc:"Yield strength."`
-	Cover    *units.Length `json:"cover,omitzero" doc:"Clear cover to the stirrup; torsion goes by it and by diameter."`
-	Diameter *units.Length `json:"diameter,omitzero" doc:"Diameter of the stirrup bar."`
+	Cover    *units.Length `json:"cover,omitzero" doc:"Clear cover to the stirrup. Needed, as diameter is, where a torque must be designed for."`
+	Diameter *units.Length `json:"diameter,omitzero" doc:"Diameter of the stirrup bar. Needed where a torque must be designed for."`
 	Across   *units.Length `json:"across,omitzero" doc:"Greatest distance between legs across the web. Default: not known, and not judged."`
 	Legs     *int          `json:"legs,omitzero" validate:"omitnil,min=2,max=12" doc:"Legs that area is of. Default: 2."`
 	Angle    *float64      `json:"angle,omitzero" validate:"omitnil,min=15,max=90" doc:"Angle of the legs with the axis of the beam, in degrees, leaning against the shear, and within the code's own limits. Default: 90."`
