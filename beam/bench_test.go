@@ -23,10 +23,18 @@ func BenchmarkDesign(b *testing.B) {
 	doubly.Loads[1].Intensity = units.KipPerFoot.Of(1.9)
 	uplift := plain()
 	uplift.Loads = append(uplift.Loads, beam.Load{Case: beam.Wind, Shape: beam.Uniform, Intensity: units.KipPerFoot.Of(-2.5)})
+	tee := hogging()
+	tee.Spans[0] = units.Foot.Of(30)
+	tee.Supports = fixed.Supports
+	twisted := plain()
+	twisted.Loads = append(twisted.Loads, beam.Load{Case: beam.Dead, Shape: beam.UniformTorque, Moment: units.KipFoot.Of(40)})
 	for _, bb := range []struct {
 		name  string
 		brief beam.Brief
-	}{{"ordinary", plain()}, {"two layers", heavy}, {"fixed ends", fixed}, {"compression steel", doubly}, {"uplift", uplift}} {
+	}{
+		{"ordinary", plain()}, {"two layers", heavy}, {"fixed ends", fixed}, {"compression steel", doubly}, {"uplift", uplift},
+		{"hogging tee", tee}, {"torque", twisted},
+	} {
 		b.Run(bb.name, func(b *testing.B) {
 			b.ReportAllocs()
 			for b.Loop() {
