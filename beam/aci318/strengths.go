@@ -145,7 +145,6 @@ func (e *edition) queryFaults(q *beam.SectionQuery) (beam.Geometry, []beam.Fault
 // Bounds of a query. They belong to no design code: they are wide enough for
 // any beam that is built and narrow enough that a slipped unit is caught.
 var (
-	leastSide    = units.Millimetre.Of(50)
 	mostSide     = units.Metre.Of(10)
 	leastLength  = units.Millimetre.Of(1)
 	leastStress  = units.Megapascal.Of(1)
