@@ -361,8 +361,8 @@ func (e *edition) appendTorsionSides(dst []beam.Check, t *beam.Trial) []beam.Che
 		c.Outcome, c.Reason = beam.NotApplicable, noteNeglected
 	case n.broken != "":
 		refuse(&c, n.broken)
-	case f.cage.corners(e):
-		c.Outcome, c.Reason = beam.NotApplicable, "the corners are close enough together: half of the sides' share lies at the top, half at the bottom"
+	case f.cage.sideParts(e) == 1:
+		c.Outcome, c.Reason = beam.NotApplicable, "the bars in the corners are close enough together to need none between them (9.7.5.1)"
 	default:
 		c.Span, c.At, c.HasAt, c.Combination = n.action.Span, n.action.At, n.action.Span > 0, n.action.Combination
 		c.Compare(e.areaOf(f.cage.sideShare(e)*max(n.strength, n.least)/fy).Amount(), side.Amount())

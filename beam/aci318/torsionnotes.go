@@ -48,7 +48,7 @@ func (e *edition) settleTorsion(t *beam.Trial, note *beam.Register) {
 		angle = usualDiagonal
 	}
 	holds("reading.torsion-angle", "the compression diagonals of the space truss stand at "+number(angle)+" degrees to the axis (22.7.6.1.2)")
-	holds("reading.torsion-shares", "the longitudinal steel of torsion lies round the section in proportion to the perimeter of the stirrups, bars in the corners with the top and the bottom; where the sides are no higher than the spacing of 9.7.5.1, their shares lie half at the top and half at the bottom")
+	holds("reading.torsion-shares", "the longitudinal steel of torsion is spread evenly over the perimeter of the stirrups, each bar taking what is nearest to it, with bars along the sides no closer than 9.7.5.1 asks for")
 	if e.shear.rowsByStirrups {
 		holds("reading.torsion-shear-row", "stirrups of at least "+e.stirrups.leastClause+" let Vc be by row (a) or (b) of Table 22.5.5.1 although torsion takes a part of them")
 	}

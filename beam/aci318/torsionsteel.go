@@ -167,24 +167,21 @@ func (e *edition) torsionYield(yield units.Stress) float64 {
 	return min(e.stressIn(yield), e.materials.mostTorsionYield)
 }
 
-// corners is whether the bars in the corners suffice for the sides of the
-// stirrup: the sides then need no bars of their own, and half of what they
-// would carry goes to the top, half to the bottom.
-func (c *torsionCage) corners(e *edition) bool { return units.AtMost(c.y1, e.torsion.around) }
+// sideParts is into how many parts the bars along a side divide it, where they
+// are just no further apart than 9.7.5.1 allows: one where the corners suffice.
+func (c *torsionCage) sideParts(e *edition) float64 {
+	return max(1, math.Ceil(c.y1/e.torsion.around*(1-noLength)))
+}
 
 // faceShare is the part of the longitudinal steel that lies at the top and at
-// the bottom each, in proportion to the stirrup's perimeter; sideShare is that
-// of each side. Their sum, twice, is the whole.
+// the bottom each, and sideShare that along each side. Steel is spread evenly
+// over the perimeter of the stirrup, and each bar takes what is nearest to it,
+// so that the bars in the corners take half a part of each side. The sum of
+// both, twice, is the whole.
 func (c *torsionCage) faceShare(e *edition) float64 {
-	if c.corners(e) {
-		return 0.5
-	}
-	return c.x1 / c.perimeter
+	return (c.x1 + c.y1/c.sideParts(e)) / c.perimeter
 }
 
 func (c *torsionCage) sideShare(e *edition) float64 {
-	if c.corners(e) {
-		return 0
-	}
-	return c.y1 / c.perimeter
+	return c.y1 * (1 - 1/c.sideParts(e)) / c.perimeter
 }

@@ -175,8 +175,8 @@ func (z *webZone) transverseSteps(w *worstTorsion) []beam.Step {
 		out.given("al", "area per length of all legs that lifts what hangs here", "R9.4.3.2", e.asSteel(v.lift))
 		lift = " + al"
 	}
-	out.given("n", "legs", "", asPlain(q.legs))
-	out.find("ao,req", "area per length of an outer leg", "9.5.4.3", "(av"+lift+") / n + at", e.asSteel(v.outer))
+	out.given("nl", "legs", "", asPlain(q.legs))
+	out.find("ao,req", "area per length of an outer leg", "9.5.4.3", "(av"+lift+") / nl + at", e.asSteel(v.outer))
 	out.note("the outer legs alone resist torsion; shear is shared by all")
 	if q.leg > 0 {
 		out.given("s", "spacing along the beam", "", e.asLength(web.s))
@@ -256,20 +256,21 @@ func (c *torsionCage) pullSteps(e *edition, out *working, n *faceNeed, fy float6
 	out.find("Al", "longitudinal steel all round", "9.5.4.3", "max(F, F,min) / fy", e.asArea(max(n.strength, n.least)/fy))
 }
 
+// partSteps gives the parts of a side.
+func (c *torsionCage) partSteps(e *edition, out *working) {
+	out.given("m", "parts into which bars just close enough divide a side", "9.7.5.1", asPlain(c.sideParts(e)))
+	out.note("no further apart than " + e.length.Format(e.lengthOf(e.torsion.around)))
+}
+
 // faceSteps is the working of the bars of a face.
 func (f *torsionFaces) faceSteps(face *torsionFace, inside bool) []beam.Step {
 	e, c, n := f.e, &f.cage, &face.worst
 	var out working
 	c.pullSteps(e, &out, n, face.fy)
-	share := "x1 / ph"
-	if c.corners(e) {
-		share = "0.5"
-	}
+	c.partSteps(e, &out)
+	const share = "(x1 + y1 / m) / ph"
 	out.find("A,t", "what of it lies at this face", "9.7.5.1", "Al "+share, e.asArea(n.share))
-	out.note("in proportion to the perimeter of the stirrup")
-	if c.corners(e) {
-		out.note("half: the sides are low enough to need no bars of their own")
-	}
+	out.note("steel is spread evenly over the perimeter of the stirrup; the bars in the corners take half a part of each side")
 	switch {
 	case n.moment <= 0:
 		out.given("Mu", "factored moment that presses on this face", "", e.asMoment(-n.moment))
@@ -301,8 +302,9 @@ func (f *torsionFaces) sideSteps(fy, provided float64) []beam.Step {
 	e, n := f.e, &f.side.need
 	var out working
 	f.cage.pullSteps(e, &out, n, fy)
-	out.find("A,req", "what of it lies along each side", "9.7.5.1", "Al y1 / ph", e.asArea(f.cage.sideShare(e)*max(n.strength, n.least)/fy))
-	out.note("in proportion to the perimeter of the stirrup")
+	f.cage.partSteps(e, &out)
+	out.find("A,req", "what of it lies along each side", "9.7.5.1", "Al y1 (1 - 1 / m) / ph", e.asArea(f.cage.sideShare(e)*max(n.strength, n.least)/fy))
+	out.note("steel is spread evenly over the perimeter of the stirrup; the bars in the corners take half a part of each side")
 	out.given("A", "steel provided along each side", "", e.asArea(provided))
 	return out.steps
 }

@@ -1,0 +1,509 @@
+package aci318
+
+import (
+	"context"
+	"math"
+	"strings"
+	"testing"
+
+	"github.com/stretchr/testify/require"
+	"pgregory.net/rapid"
+
+	"soffit.example/beam"
+	"soffit.example/beam/statics"
+	"soffit.example/units"
+)
+
+// twistedBrief is ownSection under 45 kip-ft of torque with 30 kip of shear and
+// 100 kip-ft of moment, and a layout that carries them.
+func twistedBrief() (beam.Brief, beam.Layout) {
+	b := beam.Brief{
+		Section: ownSection(), Concrete: beam.Concrete{Strength: psi(4000)},
+		Reinforcement: beam.Reinforcement{Catalog: "astm-inch", Yield: psi(60000)},
+		Exposure:      beam.Interior, Cover: in(1.5),
+		Demands: []beam.Demand{{Name: "A", Moment: units.KipFoot.Of(100), Shear: units.Kip.Of(30), Torque: units.KipFoot.Of(45)}},
+	}
+	return b, beam.Layout{
+		Longitudinal: []beam.Row{bottom(4, "#8"), top(3, "#6"), {Mark: "W", Bar: "#5", Count: 2, Face: beam.Side, Spacing: in(7.65)}},
+		Transverse:   []beam.Zone{{Mark: "S", Bar: "#4", Legs: 2, Spacing: in(6), Form: "closed"}},
+	}
+}
+
+// twisted judges that layout, edited.
+func twisted(t testing.TB, c Code, edit func(*beam.Brief, *beam.Layout)) *beam.Result {
+	t.Helper()
+	r, _ := twistedTrial(t, c, edit)
+	return r
+}
+
+func twistedTrial(t testing.TB, c Code, edit func(*beam.Brief, *beam.Layout)) (*beam.Result, *beam.Trial) {
+	t.Helper()
+	b, l := twistedBrief()
+	if edit != nil {
+		edit(&b, &l)
+	}
+	var trial *beam.Trial
+	r, err := beam.CheckLayout(context.Background(), spy{c, &trial}, b, l)
+	require.NoError(t, err)
+	require.Empty(t, r.Refusals)
+	return r, trial
+}
+
+// torsionFailures are the ids of the checks on torsion that fail.
+func torsionFailures(r *beam.Result) (ids []string) {
+	for i := range r.Checks {
+		if c := &r.Checks[i]; c.Outcome == beam.Fail && strings.HasPrefix(c.ID, "torsion.") {
+			ids = append(ids, c.ID)
+		}
+	}
+	return ids
+}
+
+// The longitudinal steel of each face is that of bending and of torsion, spread
+// evenly round the stirrup; on the side in compression the moment relieves it,
+// but not below the least (9.5.4.3, 9.5.4.5). Own calculation: Al = 1.70564
+// in2; sides of 24.5 in. in three parts; x1 + y1/3 = 20.667 in. of ph = 74 in.
+func TestLongitudinalSteelFaceByFace(t *testing.T) {
+	r := twisted(t, ACI31814(), nil)
+	require.Equal(t, beam.Satisfied, r.Verdict, "%v", torsionFailures(r))
+	const d, dTop = 25.5, 28 - 1.5 - 0.5 - 0.375
+	al := ownLong(60000)
+	share := al * (12.5 + 24.5/3) / 74
+	rn := 100 * 12000 / (0.9 * 16 * d * d)
+	as := 0.85 * 4000 / 60000 * (1 - math.Sqrt(1-2*rn/(0.85*4000))) * 16 * d
+	c := find1(t, r, "torsion.longitudinal.bottom")
+	require.InEpsilon(t, as+share, valueIn(t, c.Demand, "in2"), 1e-9)
+	require.InEpsilon(t, 4*0.79, valueIn(t, c.Capacity, "in2"), 1e-12)
+	require.Equal(t, beam.Bottom, c.Face)
+	c = find1(t, r, "torsion.longitudinal.side")
+	require.InEpsilon(t, al*24.5*2/3/74, valueIn(t, c.Demand, "in2"), 1e-9)
+	require.InEpsilon(t, 2*0.31, valueIn(t, c.Capacity, "in2"), 1e-12)
+
+	least := (5*math.Sqrt(4000)*448/60000 - al) * (12.5 + 24.5/3) / 74
+	relief := 100 * 12000 / (0.9 * d * 60000.0)
+	require.Less(t, share-relief, least)
+	c = find1(t, r, "torsion.longitudinal.top")
+	require.InEpsilon(t, least, valueIn(t, c.Demand, "in2"), 1e-9, "no less than the least steel")
+
+	// A small moment relieves by itself; none relieves nothing; a hogging one
+	// turns the faces round.
+	r = twisted(t, ACI31814(), func(b *beam.Brief, _ *beam.Layout) { b.Demands[0].Moment = units.KipFoot.Of(10) })
+	require.InEpsilon(t, share-0.1*relief, valueIn(t, find1(t, r, "torsion.longitudinal.top").Demand, "in2"), 1e-9)
+	r = twisted(t, ACI31814(), func(b *beam.Brief, _ *beam.Layout) { b.Demands[0].Moment = units.Moment{} })
+	require.InEpsilon(t, share, valueIn(t, find1(t, r, "torsion.longitudinal.top").Demand, "in2"), 1e-9)
+	require.InEpsilon(t, share, valueIn(t, find1(t, r, "torsion.longitudinal.bottom").Demand, "in2"), 1e-9)
+	r = twisted(t, ACI31814(), func(b *beam.Brief, _ *beam.Layout) { b.Demands[0].Moment = units.KipFoot.Of(-10) })
+	require.InEpsilon(t, share-10*12000/(0.9*dTop*60000), valueIn(t, find1(t, r, "torsion.longitudinal.bottom").Demand, "in2"), 1e-9)
+}
+
+// Low sides need no bars of their own: 12 in. between corners, and just more.
+func TestSidesWithoutBars(t *testing.T) {
+	for _, tc := range []struct {
+		height float64 // y1
+		side   beam.Outcome
+	}{{12, beam.NotApplicable}, {12.1, beam.Fail}} {
+		r := twisted(t, ACI31819(), func(b *beam.Brief, l *beam.Layout) {
+			b.Section.Depth = in(tc.height + 3.5)
+			b.Demands[0].Torque, b.Demands[0].Moment = units.KipFoot.Of(12), units.KipFoot.Of(20)
+			l.Longitudinal = l.Longitudinal[:2]
+		})
+		require.Equal(t, tc.side, find1(t, r, "torsion.longitudinal.side").Outcome, "%g", tc.height)
+	}
+}
+
+// Each limit of detailing is met just so, and missed by a little.
+func TestTorsionDetailing(t *testing.T) {
+	side := func(l *beam.Layout) *beam.Row { return &l.Longitudinal[2] }
+	for _, tc := range []struct {
+		name string
+		edit func(b *beam.Brief, l *beam.Layout)
+		fail []string
+	}{
+		{"as drawn", nil, nil},
+		// ph/8 = 9.25 in.
+		{"stirrups at ph/8", func(b *beam.Brief, l *beam.Layout) {
+			l.Transverse[0].Spacing = in(9.25)
+			b.Demands[0].Torque = units.KipFoot.Of(30)
+		}, nil},
+		{"stirrups wider", func(b *beam.Brief, l *beam.Layout) {
+			l.Transverse[0].Spacing = in(9.26)
+			b.Demands[0].Torque = units.KipFoot.Of(30)
+		}, []string{"torsion.spacing-along"}},
+		{"open stirrups", func(_ *beam.Brief, l *beam.Layout) { l.Transverse[0].Form = "open" }, []string{"torsion.transverse", "torsion.closed", "torsion.minimum-stirrups"}},
+		{"stirrups at 60 degrees", func(_ *beam.Brief, l *beam.Layout) { l.Transverse[0].Angle = 60 }, []string{"torsion.transverse", "torsion.closed", "torsion.minimum-stirrups"}},
+		{"upright stirrups said to be so", func(_ *beam.Brief, l *beam.Layout) { l.Transverse[0].Angle = 90 }, nil},
+		{"no stirrups", func(_ *beam.Brief, l *beam.Layout) { l.Transverse = nil }, []string{"torsion.transverse", "torsion.closed"}},
+		{"no top bars", func(_ *beam.Brief, l *beam.Layout) { l.Longitudinal = append(l.Longitudinal[:1:1], *side(l)) },
+			[]string{"torsion.longitudinal.top", "torsion.corners", "torsion.bar-diameter", "torsion.longitudinal-spacing"}},
+		{"no bottom bars", func(b *beam.Brief, l *beam.Layout) {
+			l.Longitudinal = l.Longitudinal[1:2]
+			b.Demands[0].Moment = units.KipFoot.Of(-20)
+		}, []string{"torsion.longitudinal.bottom", "torsion.corners", "torsion.bar-diameter", "torsion.longitudinal-spacing", "torsion.longitudinal.side"}},
+		{"one top bar", func(_ *beam.Brief, l *beam.Layout) { l.Longitudinal[1] = top(1, "#9") }, []string{"torsion.corners"}},
+		{"no side bars", func(_ *beam.Brief, l *beam.Layout) { l.Longitudinal = l.Longitudinal[:2] }, []string{"torsion.longitudinal.side", "torsion.longitudinal-spacing"}},
+		{"side bars too thin for the side", func(_ *beam.Brief, l *beam.Layout) { side(l).Bar = "#3" }, []string{"torsion.longitudinal.side"}},
+		{"twelve inches", func(_ *beam.Brief, l *beam.Layout) { side(l).Spacing = in(11.125) }, []string{}}, // 2.5, 13.625, 24.75; the top bars at 25.625
+		{"more than twelve inches", func(_ *beam.Brief, l *beam.Layout) {
+			side(l).Spacing = in(12.01)
+			side(l).Count = 1
+			side(l).Bar = "#9"
+		}, []string{"torsion.longitudinal-spacing"}},
+		// 0.042 × 9 = 0.378 in. of No. 3 bars.
+		{"bars thinner than 0.042 s", func(b *beam.Brief, l *beam.Layout) {
+			b.Demands[0].Torque, l.Transverse[0].Spacing, l.Longitudinal[1] = units.KipFoot.Of(20), in(9), top(6, "#3")
+		}, []string{"torsion.bar-diameter"}},
+		{"bars of 3/8 in.", func(b *beam.Brief, l *beam.Layout) {
+			b.Demands[0].Torque, l.Transverse[0].Spacing, l.Longitudinal[1] = units.KipFoot.Of(20), in(8.9), top(6, "#3")
+		}, nil},
+		{"side bars thinner than 0.042 s", func(b *beam.Brief, l *beam.Layout) {
+			b.Demands[0].Torque, l.Transverse[0].Spacing = units.KipFoot.Of(20), in(9)
+			side(l).Bar, side(l).Count, side(l).Spacing = "#3", 4, in(4.6)
+		}, []string{"torsion.bar-diameter"}},
+		{"too little in the legs", func(_ *beam.Brief, l *beam.Layout) { l.Transverse[0].Bar = "#3"; l.Transverse[0].Spacing = in(6) }, []string{"torsion.transverse"}},
+		{"too little section", func(b *beam.Brief, l *beam.Layout) {
+			b.Demands[0].Torque = units.KipFoot.Of(90)
+			l.Transverse[0].Bar, l.Transverse[0].Spacing = "#5", in(4)
+			l.Longitudinal = []beam.Row{bottom(4, "#9"), top(4, "#9"), {Mark: "W", Bar: "#9", Count: 2, Face: beam.Side, Spacing: in(7.6)}}
+		}, []string{"torsion.section"}},
+	} {
+		t.Run(tc.name, func(t *testing.T) {
+			r := twisted(t, ACI31819(), tc.edit)
+			require.ElementsMatch(t, tc.fail, torsionFailures(r))
+			for i := range r.Checks {
+				if c := &r.Checks[i]; strings.HasPrefix(c.ID, "torsion.") && len(c.Steps) > 0 {
+					requireEvaluable(t, c)
+				}
+			}
+			require.Equal(t, len(tc.fail) > 0, r.Verdict == beam.Unsatisfied && len(torsionFailures(r)) > 0)
+		})
+	}
+}
+
+// The least stirrups of 9.6.4.2 are asked for where shear alone would not.
+func TestLeastStirrupsOfTorsion(t *testing.T) {
+	at := func(spacing float64) *beam.Result {
+		return twisted(t, ACI31819(), func(b *beam.Brief, l *beam.Layout) {
+			b.Section = beam.Section{Shape: beam.Rectangular, Width: in(36), Depth: in(14)}
+			b.Demands[0].Torque, b.Demands[0].Shear, b.Demands[0].Moment = units.KipFoot.Of(17), units.Kip.Of(5), units.KipFoot.Of(20)
+			l.Transverse[0].Bar, l.Transverse[0].Spacing = "#3", in(spacing)
+			l.Longitudinal = []beam.Row{bottom(6, "#7"), top(6, "#7")}
+		})
+	}
+	// 50 × 36/60,000 = 0.03 in2/in, 0.22/0.03 = 7.333 in.
+	require.Equal(t, beam.Pass, find1(t, at(7.3333), "torsion.minimum-stirrups").Outcome)
+	r := at(7.34)
+	require.Equal(t, beam.Fail, find1(t, r, "torsion.minimum-stirrups").Outcome)
+	require.Equal(t, beam.NotApplicable, find1(t, r, "shear.minimum-stirrups").Outcome)
+}
+
+// θ from 30 to 60 degrees, the same in both formulas; outside it is a fault.
+func TestAngleOfTheDiagonals(t *testing.T) {
+	for _, angle := range []float64{30, 45, 60} {
+		r := twisted(t, ACI31819(), func(b *beam.Brief, _ *beam.Layout) {
+			b.Readings.TorsionAngle = angle
+			b.Demands[0].Shear = units.Kip.Of(5)
+		})
+		cot := 1 / math.Tan(angle*math.Pi/180)
+		at := 45 * 12000 / (2 * 0.75 * 260.3125 * 60000 * cot)
+		require.InEpsilon(t, at, valueIn(t, find1(t, r, "torsion.transverse").Demand, "in2/in"), 1e-9)
+		least := 5*math.Sqrt(4000)*448/60000 - at*74
+		require.InEpsilon(t, max(at*74*cot*cot, least)*24.5*2/3/74, valueIn(t, find1(t, r, "torsion.longitudinal.side").Demand, "in2"), 1e-9)
+	}
+	for _, angle := range []float64{29.9, 60.1} {
+		b, l := twistedBrief()
+		b.Readings.TorsionAngle = angle
+		_, err := beam.CheckLayout(context.Background(), ACI31819(), b, l)
+		var input *beam.InputError
+		require.ErrorAs(t, err, &input)
+		require.Equal(t, "/torsion_angle", input.Faults[0].Path)
+		require.Contains(t, input.Faults[0].Allowed, "30 to 60")
+	}
+}
+
+// A torque below its threshold leaves all of torsion aside, whatever the bars.
+func TestNeglectedTorque(t *testing.T) {
+	r := twisted(t, ACI31819(), func(b *beam.Brief, l *beam.Layout) {
+		b.Demands[0].Torque = units.KipFoot.Of(9) // φTth = 9.015 kip-ft
+		l.Transverse[0].Form = "open"
+		l.Longitudinal = l.Longitudinal[:2]
+	})
+	require.Equal(t, beam.Pass, find1(t, r, "torsion.threshold").Outcome)
+	for i := range r.Checks {
+		if c := &r.Checks[i]; strings.HasPrefix(c.ID, "torsion.") && c.ID != "torsion.threshold" {
+			require.Equal(t, beam.NotApplicable, c.Outcome, c.ID)
+			require.Equal(t, noteNeglected, c.Reason)
+		}
+	}
+	r = twisted(t, ACI31819(), func(b *beam.Brief, l *beam.Layout) { b.Demands[0].Torque = units.KipFoot.Of(9.02) })
+	require.Equal(t, beam.NotApplicable, find1(t, r, "torsion.threshold").Outcome)
+	require.Equal(t, beam.Pass, find1(t, r, "torsion.section").Outcome)
+}
+
+// twistedSpan is the section over 24 ft with a dead torque in kip-ft at x ft,
+// both ends held against twist, and closed stirrups over all of it.
+func twistedSpan(torque, x float64) func(*beam.Brief, *beam.Layout) {
+	return func(b *beam.Brief, l *beam.Layout) {
+		b.Demands = nil
+		b.Spans = []units.Length{units.Foot.Of(24)}
+		b.Supports = []beam.Support{{Kind: statics.Pinned, Width: in(12)}, {Kind: statics.Roller, Width: in(12)}}
+		b.Loads = []beam.Load{
+			{Case: beam.Dead, Shape: beam.Uniform, Intensity: units.KipPerFoot.Of(0.5)},
+			{Case: beam.Dead, Shape: beam.Torque, Moment: units.KipFoot.Of(torque), At: units.Foot.Of(x)},
+		}
+		l.Transverse = []beam.Zone{{Mark: "S", Span: 1, Bar: "#4", Legs: 2, Spacing: in(6), From: in(6), To: in(282), Form: "closed"}}
+	}
+}
+
+// 9.7.6.3.2: stirrups of torsion go on bt + d beyond the place to which they
+// are needed. 24 kip-ft of 1.4D at 6 ft: 18 to the left, 6 to the right, which
+// is below φTth = 9.015; bt + d = 16 + 25.625 = 41.625 in, by the top bars.
+func TestStirrupsGoOnBeyondTheirNeed(t *testing.T) {
+	closed := func(to float64, open bool) *beam.Result {
+		return twisted(t, ACI31819(), func(b *beam.Brief, l *beam.Layout) {
+			twistedSpan(24/1.4, 6)(b, l)
+			rest := l.Transverse[0]
+			l.Transverse[0].To, rest.From, rest.Mark, rest.Form = in(to), in(to), "O", "open"
+			if open {
+				l.Transverse = append(l.Transverse, rest)
+			}
+		})
+	}
+	require.Empty(t, torsionFailures(closed(72+41.63, true)))
+	require.Equal(t, []string{"torsion.minimum-stirrups", "torsion.closed"}, reorder(torsionFailures(closed(72+41.62, true))))
+	require.Contains(t, torsionFailures(closed(60, false)), "torsion.transverse", "a bare length where torsion acts")
+	require.Equal(t, []string{"torsion.closed"}, torsionFailures(closed(80, false)), "a bare length within bt + d of it")
+}
+
+func reorder(ids []string) []string {
+	if len(ids) == 2 && ids[0] > ids[1] {
+		return ids
+	}
+	return []string{ids[1], ids[0]}
+}
+
+// 9.4.4.3: a torque within d of the face is designed for at the face; d = 25.5
+// in., the face at 6 in.
+func TestConcentratedTorqueWithinDepth(t *testing.T) {
+	for _, tc := range []struct {
+		at   float64
+		note string
+	}{{31.5, noteTorqueInDepth}, {31.6, noteAtDepth}, {5.9, noteAtDepth}} {
+		_, trial := twistedTrial(t, ACI31819(), func(b *beam.Brief, l *beam.Layout) { twistedSpan(30, tc.at/12)(b, l) })
+		ends := shearEnds(trial, 1)
+		require.Equal(t, tc.note, ends[0].note, "%g", tc.at)
+	}
+}
+
+// Torque alone, with nothing that bends or shears the beam, is still judged. With
+// No. 3 stirrups x1 = 12.625 and y1 = 24.625 in.
+func TestTorqueAlone(t *testing.T) {
+	r := twisted(t, ACI31819(), func(b *beam.Brief, l *beam.Layout) {
+		twistedSpan(60, 12)(b, l)
+		b.Loads, b.NoSelfWeight = b.Loads[1:], true
+		l.Transverse[0].Bar = "#3"
+		l.Transverse[0].Spacing = in(9)
+	})
+	c := find1(t, r, "torsion.transverse")
+	require.Equal(t, beam.Fail, c.Outcome)
+	require.InEpsilon(t, 42*12000/(2*0.75*0.85*12.625*24.625*60000), valueIn(t, c.Demand, "in2/in"), 1e-9)
+}
+
+// A torque whose path is not stated is taken as needed for equilibrium, and
+// said to be.
+func TestUnstatedPath(t *testing.T) {
+	stated := func(path beam.TorquePath) bool {
+		r := twisted(t, ACI31819(), func(b *beam.Brief, l *beam.Layout) { b.Demands[0].Path = path })
+		for _, a := range r.Assumptions {
+			if a.ID == "torsion.path" {
+				require.True(t, a.Open)
+				return true
+			}
+		}
+		return false
+	}
+	require.True(t, stated(0))
+	require.False(t, stated(beam.EquilibriumTorque))
+	require.False(t, stated(beam.CompatibilityTorque))
+	r := twisted(t, ACI31819(), twistedSpan(60, 12))
+	require.Contains(t, strings.Join(r.Cautions, "\n"), "path is not stated")
+	require.Contains(t, strings.Join(r.Cautions, "\n"), "holds the beam against twist")
+}
+
+// Axial force enters the threshold, the shear beside the torque and the
+// longitudinal steel.
+func TestTorsionUnderAxialForce(t *testing.T) {
+	pull := twisted(t, ACI31819(), func(b *beam.Brief, l *beam.Layout) {
+		b.Demands[0].Axial, b.Demands[0].Torque = units.Kip.Of(-60), units.KipFoot.Of(7) // below φTth of no axial force
+	})
+	c := find1(t, pull, "torsion.threshold")
+	require.Equal(t, beam.NotApplicable, c.Outcome)
+	want := 0.75 * math.Sqrt(4000) * 448 * 448 / 88 * math.Sqrt(1-60000/(4*448*math.Sqrt(4000)))
+	require.InEpsilon(t, want, valueIn(t, c.Capacity, "lb-in"), 1e-9)
+	none := twisted(t, ACI31819(), func(b *beam.Brief, l *beam.Layout) {
+		b.Demands[0].Axial, b.Demands[0].Torque = units.Kip.Of(-60), units.KipFoot.Of(15)
+	})
+	bare := twisted(t, ACI31819(), func(b *beam.Brief, l *beam.Layout) { b.Demands[0].Torque = units.KipFoot.Of(15) })
+	for _, id := range []string{"torsion.longitudinal.bottom", "torsion.longitudinal.top"} {
+		require.Greater(t, find1(t, none, id).Utilization, find1(t, bare, id).Utilization, id)
+	}
+	for _, r := range []*beam.Result{pull, none} {
+		for i := range r.Checks {
+			if c := &r.Checks[i]; strings.HasPrefix(c.ID, "torsion.") && len(c.Steps) > 0 {
+				requireEvaluable(t, c)
+			}
+		}
+	}
+}
+
+// drawTwisted is a span under loads and torques of both paths.
+func drawTwisted(r *rapid.T) func(*beam.Brief, *beam.Layout) {
+	kinds := rapid.SampledFrom([][2]statics.SupportKind{{statics.Pinned, statics.Roller}, {statics.Fixed, statics.Fixed}, {statics.Fixed, statics.Free}, {statics.Fixed, statics.Roller}}).Draw(r, "supports")
+	torque := func(name string) beam.Load {
+		l := beam.Load{
+			Case: rapid.SampledFrom([]beam.LoadCase{beam.Dead, beam.Live}).Draw(r, name), Shape: beam.Torque,
+			Moment: units.KipFoot.Of(float64(rapid.IntRange(-60, 60).Draw(r, name))), At: units.Foot.Of(float64(rapid.IntRange(3, 21).Draw(r, name))),
+			Path: rapid.SampledFrom([]beam.TorquePath{beam.EquilibriumTorque, beam.CompatibilityTorque}).Draw(r, name),
+		}
+		if rapid.Bool().Draw(r, name) {
+			l.Shape, l.At = beam.UniformTorque, units.Length{}
+		}
+		return l
+	}
+	loads := []beam.Load{
+		{Case: beam.Dead, Shape: beam.Uniform, Intensity: units.KipPerFoot.Of(0.25 * float64(rapid.IntRange(0, 8).Draw(r, "w")))},
+		{Case: beam.Live, Shape: beam.PointLoad, Force: units.Kip.Of(float64(rapid.IntRange(0, 20).Draw(r, "P"))), At: units.Foot.Of(12)},
+		torque("1"), torque("2"),
+	}
+	if rapid.Bool().Draw(r, "triangle") {
+		loads = append(loads, beam.Load{Case: beam.Live, Shape: beam.Partial, Varies: true, To: units.Foot.Of(24), IntensityEnd: units.KipPerFoot.Of(1.5)})
+	}
+	return func(b *beam.Brief, l *beam.Layout) {
+		twistedSpan(1, 12)(b, l)
+		b.Supports[0].Kind, b.Supports[1].Kind = kinds[0], kinds[1]
+		if kinds[1] == statics.Free {
+			b.Supports[1].Width = units.Length{}
+			l.Transverse[0].To = in(288)
+		}
+		b.Loads = loads
+		l.Longitudinal[0], l.Longitudinal[1] = bottom(5, "#9"), top(5, "#9")
+	}
+}
+
+// No section of a span is worse than the one that the checks report: sections
+// taken closely along it, each by itself, never exceed their utilization.
+func TestNoSectionIsWorseInTorsion(t *testing.T) {
+	rapid.Check(t, func(r *rapid.T) {
+		code := rapid.SampledFrom(Editions()[:1]).Draw(r, "code")
+		_, trial := twistedTrial(t, code, drawTwisted(r))
+		if !trial.Twisted {
+			return
+		}
+		e := code.e
+		checks := e.judgeTorsionBars(e.judgeShearing(nil, trial), trial)
+		reported := map[string]float64{}
+		for i := range checks {
+			reported[checks[i].ID] = max(reported[checks[i].ID], checks[i].Utilization)
+		}
+		f := e.newTorsionFaces(trial)
+		z := e.newWebZone(trial, 1, 0, trial.Zones[0].Spacing)
+		ends := shearEnds(trial, 1)
+		for i := range trial.Forces.Combinations() {
+			from, _ := ends[0].start(&trial.Forces, i, 1)
+			to, _ := ends[1].start(&trial.Forces, i, 1)
+			left, right := trial.Faces(1)
+			for k := range 301 {
+				at := left.Add(right.Sub(left).Scale(float64(k) / 300))
+				a := trial.Forces.Action(i, 1, at, k < 300)
+				q := f.strength.torque(e, &a)
+				if q.neglected {
+					continue
+				}
+				m := e.momentIn(a.Moment)
+				f.part(&a, m, m, q.used, q.used)
+				if !at.Less(from) && !to.Less(at) {
+					z.point(a)
+				}
+			}
+		}
+		for id, found := range map[string]float64{
+			"torsion.section": z.torsion.section.utilization, "torsion.transverse": z.torsion.transverse.utilization,
+			"torsion.longitudinal.bottom": f.faces[0].worstRatio, "torsion.longitudinal.top": f.faces[1].worstRatio,
+		} {
+			if found > reported[id]*(1+1e-7) {
+				t.Fatalf("%s: %v reported, %v found", id, reported[id], found)
+			}
+		}
+		// The bound of the bars is close to what they need.
+		for i, id := range torsionFaceIDs {
+			if worst := f.faces[i].worstRatio; reported[id] < 1e8 && reported[id] > worst+0.1 {
+				t.Fatalf("%s: %v reported, %v needed", id, reported[id], worst)
+			}
+		}
+	})
+}
+
+// A closer spacing never makes anything of torsion fail that passes with a
+// wider one: the search for stirrups relies on it.
+func TestCloserStirrupsNeverHarm(t *testing.T) {
+	rapid.Check(t, func(r *rapid.T) {
+		code := rapid.SampledFrom(Editions()).Draw(r, "code")
+		edit := drawTwisted(r)
+		if code.e.system == units.SI {
+			return
+		}
+		wide := rapid.Float64Range(4, 14).Draw(r, "wide")
+		close := rapid.Float64Range(2, 1*wide).Draw(r, "close")
+		fails := func(s float64) map[string]bool {
+			_, trial := twistedTrial(t, code, func(b *beam.Brief, l *beam.Layout) { edit(b, l); l.Transverse[0].Spacing = in(s) })
+			out := map[string]bool{}
+			checks := code.e.judgeShearing(nil, trial)
+			for i := range checks {
+				if checks[i].Outcome == beam.Fail && strings.HasPrefix(checks[i].ID, "torsion.") {
+					out[checks[i].ID] = true
+				}
+			}
+			return out
+		}
+		before := fails(wide)
+		for id := range fails(close) {
+			if !before[id] {
+				t.Fatalf("%s fails at %v in. and passes at %v in.", id, close, wide)
+			}
+		}
+	})
+}
+
+// Judging torsion without working allocates nothing.
+func TestJudgingTorsionAllocatesNothing(t *testing.T) {
+	for _, c := range []Code{ACI31814(), ACI31819()} {
+		_, trial := twistedTrial(t, c, func(b *beam.Brief, l *beam.Layout) {
+			twistedSpan(40, 9)(b, l)
+			b.Loads = append(b.Loads, beam.Load{Case: beam.Live, Shape: beam.UniformTorque, Moment: units.KipFoot.Of(20), Path: beam.CompatibilityTorque})
+		})
+		require.True(t, trial.Twisted)
+		trial.Record = false
+		var dst []beam.Check
+		for _, g := range []beam.Group{beam.Shearing, beam.Bending, beam.Whole} {
+			dst = c.Judge(dst[:0], g, trial)
+			require.Zero(t, testing.AllocsPerRun(20, func() { dst = c.Judge(dst[:0], g, trial) }), "%s, group %d", c.e.id, g)
+		}
+		require.Zero(t, testing.AllocsPerRun(20, func() { c.e.twists(trial.Problem) }))
+	}
+}
+
+func BenchmarkJudgeTorsion(b *testing.B) {
+	_, trial := twistedTrial(b, ACI31819(), func(p *beam.Brief, l *beam.Layout) {
+		twistedSpan(40, 9)(p, l)
+		p.Loads = append(p.Loads, beam.Load{Case: beam.Live, Shape: beam.Uniform, Intensity: units.KipPerFoot.Of(1)})
+	})
+	trial.Record = false
+	for name, g := range map[string]beam.Group{"shearing": beam.Shearing, "bending": beam.Bending, "whole": beam.Whole} {
+		b.Run(name, func(b *testing.B) {
+			var dst []beam.Check
+			b.ReportAllocs()
+			for b.Loop() {
+				dst = ACI31819().Judge(dst[:0], g, trial)
+			}
+		})
+	}
+}
