@@ -16,7 +16,7 @@ import (
 )
 
 // version of the door: it changes with the contract, not with the engine.
-const version = "1.0.0"
+const version = "1.1.0"
 
 // door is one operation.
 type door struct {
