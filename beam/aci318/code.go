@@ -52,7 +52,7 @@ func (c Code) Judge(dst []beam.Check, g beam.Group, t *beam.Trial) []beam.Check 
 // arrangement, which layouts are drawn to exactly.
 func isArrangement(id string) bool {
 	switch id {
-	case "shear.spacing-along", "shear.spacing-across", "shear.stirrup-size", "shear.stirrup-anchorage", "shear.leg-bars",
+	case "crack.flange-spread", "shear.spacing-along", "shear.spacing-across", "shear.stirrup-size", "shear.stirrup-anchorage", "shear.leg-bars",
 		"shear.stirrup-angle", "shear.spacing-inclined", "shear.bent-angle", "shear.bent-spacing",
 		"joist.rib-width", "joist.rib-depth", "joist.spacing", "joist.slab",
 		"ties.size", "ties.spacing", "ties.held-bars", "side-face.spacing", "bracing.spacing",
