@@ -170,3 +170,16 @@ func TestShearAtTheEndIsAsGiven(t *testing.T) {
 		require.Equal(r, v1, p.shear(length))
 	})
 }
+
+// Shear is linear where its bend over the length is what rounding leaves of the
+// shears at the ends: a billionth of their sum.
+func TestCurvedShear(t *testing.T) {
+	for _, c := range []struct {
+		share float64
+		want  bool
+	}{{0, false}, {0.5, false}, {0.99, false}, {1.01, true}, {-1.01, true}, {1e6, true}} {
+		p := shearStretch{length: 4, v: [3]float64{3, 0, c.share * 1e-9 * 8 / 16}, end: -5}
+		require.Equal(t, c.want, p.curved(), c.share)
+	}
+	require.False(t, (&shearStretch{length: 4}).curved(), "no shear at all")
+}
