@@ -49,9 +49,9 @@ func TestLimitsOfBundles(t *testing.T) {
 		require.Equal(t, beam.Pass, find1(t, r, "bundles.enclosed").Outcome)
 		require.Equal(t, beam.Bottom, find1(t, r, "bundles.enclosed").Face)
 	}
-	r, trial := checkUS(t, ACI31819(), []beam.Row{bottom(4, "#9"), top(2, "#5")}, wide, demand)
+	r, _ := checkUS(t, ACI31819(), []beam.Row{bottom(4, "#9"), top(2, "#5")}, wide, demand)
 	require.Empty(t, checksOf(r.Checks, "bundles.size"))
-	_, trial = checkUS(t, ACI31819(), []beam.Row{bundled(bottom(4, "#9"), 2), top(2, "#5")}, wide, demand)
+	_, trial := checkUS(t, ACI31819(), []beam.Row{bundled(bottom(4, "#9"), 2), top(2, "#5")}, wide, demand)
 	trial.Stirrup = bars.Size{}
 	require.Equal(t, beam.Fail, only(t, ACI31819().e.appendBundles(nil, trial, beam.Bottom), "bundles.enclosed").Outcome)
 	require.Empty(t, ACI31819().e.appendBundles(nil, trial, beam.Top))

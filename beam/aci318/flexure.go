@@ -183,35 +183,45 @@ func tensionSide(u *mechanics.Ultimate, section mechanics.Section) (units.Area, 
 // flexureStrength is the full account of a section's strength in bending.
 // Layers are measured from the top face, whichever the sense.
 func (e *edition) flexureStrength(section mechanics.Section, strength units.Stress, s beam.Sense, r *beam.Readings) (beam.FlexureStrength, error) {
-	return e.flexureUnder(section, strength, s, r, units.Force{})
+	f, _, err := e.flexureUnder(section, strength, s, r, units.Force{})
+	return f, err
 }
 
 // flexureUnder is flexureStrength with a factored axial force acting too: the
-// lesser strength of those with and without it, with its own strain.
-func (e *edition) flexureUnder(section mechanics.Section, strength units.Stress, s beam.Sense, r *beam.Readings, axial units.Force) (beam.FlexureStrength, error) {
+// lesser strength of those with and without it, with its own strain; zero where
+// nothing balances the section under the force. strain is the lesser of the two
+// strains, to be held against 9.3.3.1.
+func (e *edition) flexureUnder(section mechanics.Section, strength units.Stress, s beam.Sense, r *beam.Readings, axial units.Force) (out beam.FlexureStrength, strain float64, err error) {
 	law, err := e.block(strength)
 	if err != nil {
-		return beam.FlexureStrength{}, err
+		return out, 0, err
 	}
 	bending := bendingOf(s, r)
 	var solver mechanics.Solver
 	var u mechanics.Ultimate
 	f, err := e.solveUnder(&solver, &u, section, law, bending, strength, r, units.Force{})
 	if err != nil {
-		return beam.FlexureStrength{}, err
+		return out, 0, err
 	}
+	strain = f.strain
+	balanced := true
 	if !axial.IsZero() {
 		var under mechanics.Ultimate
 		with, err := e.solveUnder(&solver, &under, section, law, bending, strength, r, axial)
-		if err != nil {
-			return beam.FlexureStrength{}, err
-		}
-		if with.design.Less(f.design) {
-			u, f, bending.Axial = under, with, with.axial
+		switch {
+		case noEquilibrium(err):
+			balanced = false
+		case err != nil:
+			return out, 0, err
+		default:
+			strain = math.Min(strain, with.strain)
+			if with.design.Less(f.design) {
+				u, f, bending.Axial = under, with, with.axial
+			}
 		}
 	}
 	area, depth := tensionSide(&u, section)
-	out := beam.FlexureStrength{
+	out = beam.FlexureStrength{
 		Sense: s, NeutralAxis: u.NeutralAxis, BlockDepth: u.NeutralAxis.Scale(f.blockFactor), BlockFactor: f.blockFactor,
 		EffectiveDepth: depth, ExtremeDepth: u.ExtremeDepth, ExtremeStrain: f.strain, YieldStrain: f.yieldStrain,
 		Class: f.class, Phi: f.phi, Nominal: f.nominal, Design: f.design,
@@ -224,12 +234,15 @@ func (e *edition) flexureUnder(section mechanics.Section, strength units.Stress,
 	m := e.minimumSteel(strength, leastYield(section), e.minimumWidth(webWidth(section), tensionWidth(section, s), true), depth)
 	out.MinimumSteel = e.areaOf(m.area)
 	if out.CrossCheck, err = crossCheck(section, law, bending, u.Nominal); err != nil {
-		return beam.FlexureStrength{}, fmt.Errorf("second route to the strength in bending: %w", err)
+		return beam.FlexureStrength{}, 0, fmt.Errorf("second route to the strength in bending: %w", err)
 	}
 	if out.CrossCheck.Difference > crossCheckTolerance {
-		return beam.FlexureStrength{}, &DisagreementError{Nominal: u.Nominal, Other: out.CrossCheck.Nominal}
+		return beam.FlexureStrength{}, 0, &DisagreementError{Nominal: u.Nominal, Other: out.CrossCheck.Nominal}
 	}
-	return out, nil
+	if !balanced {
+		out.Nominal, out.Design = units.Moment{}, units.Moment{}
+	}
+	return out, strain, nil
 }
 
 // DisagreementError says that two independent routes to one strength differ by

@@ -487,3 +487,66 @@ func TestRequiredAreaOfATrial(t *testing.T) {
 	require.False(t, ok)
 	require.Zero(t, testing.AllocsPerRun(50, func() { e.requiredArea(both, beam.Positive, units.KipFoot.Of(480), units.Kip.Of(-5)) }))
 }
+
+// The door of bare sections under a small axial force: the lesser strength and the
+// lesser strain, the 4/3 rule not under tension, and none at all where nothing
+// balances. 14 by 24 in, 3 in2 at 21.5 in.
+func TestQueryUnderAxialForce(t *testing.T) {
+	at := func(moment, axial, area float64) beam.Strengths {
+		q := teeQuery()
+		q.Section = rectangle(in(14), in(24))
+		q.Layers = []beam.SteelLayer{{Area: in2(area), Depth: in(21.5), Yield: psi(60000)}}
+		q.Demand = beam.Demand{Name: "1", Moment: units.KipFoot.Of(moment), Axial: units.Kip.Of(axial)}
+		s, err := ACI31819().Strengths(q)
+		require.NoError(t, err)
+		return s
+	}
+	bare, pressed, pulled := at(100, 0, 3), at(100, 60, 3), at(100, -60, 3)
+	require.Equal(t, bare.Flexure.Design, pressed.Flexure.Design)
+	require.Equal(t, bare.Flexure.ExtremeStrain, pressed.Flexure.ExtremeStrain)
+	c := (180 + 60/0.9) / 47.6 / 0.85
+	require.InEpsilon(t, 0.003*(21.5-c)/c, checkOf(t, pressed.Checks, "flexure.strain.positive").Capacity.SI(), 1e-9)
+	a := (180 - 60/0.9) / 47.6
+	require.InEpsilon(t, 0.9*(180*9.5+(180-60/0.9)*(12-a/2)), pulled.Flexure.Design.In(units.KipInch), 1e-9)
+	require.Contains(t, pulled.Notes, "under axial tension a section is to be judged in both senses of bending, with the moment that acts")
+	require.InEpsilon(t, bare.Flexure.ExtremeStrain, checkOf(t, pulled.Checks, "flexure.strain.positive").Capacity.SI(), 1e-9)
+
+	for _, moment := range []float64{0, 100} {
+		none := at(moment, -170, 3)
+		require.True(t, none.Flexure.Design.IsZero())
+		require.Equal(t, beam.Fail, checkOf(t, none.Checks, "flexure.positive").Outcome)
+		require.Equal(t, beam.NoCapacity, checkOf(t, none.Checks, "flexure.positive").Utilization)
+	}
+	require.Equal(t, "9.6.1.3", checkOf(t, at(20, 0, 0.4).Checks, "flexure.minimum.positive").Clause)
+	require.Equal(t, "9.6.1.2", checkOf(t, at(20, -1, 0.4).Checks, "flexure.minimum.positive").Clause)
+}
+
+// Steel beside compression steel that is there, in every edition: what is found is
+// put back into the kernel.
+func TestSteelBesideCompressionSteel(t *testing.T) {
+	relied := top(3, "#9")
+	relied.InCompression = true
+	for _, c := range []Code{ACI31814(), ACI31819()} {
+		e, classes := c.e, map[string]int{}
+		_, trial := checkUS(t, c, []beam.Row{bottom(4, "#9"), relied}, nil, beam.Demand{Name: "1", Moment: units.KipFoot.Of(100)})
+		d := 24 - 1.5 - 0.375 - 0.564
+		for moment := 390.0; moment < 640; moment += 10 {
+			area, ok := e.requiredArea(trial, beam.Positive, units.KipFoot.Of(moment), units.Force{})
+			if !ok {
+				continue
+			}
+			s := mechanics.Section{Parts: trial.Geometry.Parts, Layers: []mechanics.Layer{
+				{Depth: in(d), Area: area, Steel: e.barSteel(psi(60000))}, {Depth: in(1.5 + 0.375 + 0.564), Area: in2(3), Steel: e.barSteel(psi(60000))},
+			}}
+			f := strengthOf(t, c, s, psi(4000), beam.Readings{})
+			z := e.trialSizing(trial, beam.Positive)
+			if z.tension(moment * 12000).ok {
+				s.Layers = s.Layers[:1]
+				f = strengthOf(t, c, s, psi(4000), beam.Readings{})
+			}
+			require.InEpsilon(t, moment, f.Design.In(units.KipFoot), 1e-9)
+			classes[f.Class]++
+		}
+		require.Positive(t, classes[tensionControlled])
+	}
+}

@@ -37,7 +37,8 @@ func (c Code) Strengths(q beam.SectionQuery) (beam.Strengths, error) {
 	}
 	section := e.querySection(&q, &geometry)
 	var err error
-	out.Flexure, err = e.flexureUnder(section, q.Concrete.Strength, q.Bending, &q.Readings, q.Demand.Axial)
+	var strain float64
+	out.Flexure, strain, err = e.flexureUnder(section, q.Concrete.Strength, q.Bending, &q.Readings, q.Demand.Axial)
 	if err != nil {
 		if noEquilibrium(err) {
 			return beam.Strengths{}, &beam.InputError{Faults: []beam.Fault{{
@@ -49,6 +50,12 @@ func (c Code) Strengths(q beam.SectionQuery) (beam.Strengths, error) {
 	if out.Flexure.Equilibria > 1 {
 		out.Notes = append(out.Notes, "with the displaced concrete deducted more than one depth of the neutral axis balances; the least was taken")
 	}
+	if q.Demand.Axial.Compare(units.Force{}) < 0 {
+		out.Notes = append(out.Notes, "under axial tension a section is to be judged in both senses of bending, with the moment that acts")
+		if out.Flexure.Design.IsZero() {
+			out.Notes = append(out.Notes, "nothing balances the section under the axial tension: it has no strength in bending, and the rest is that of the section without the force")
+		}
+	}
 	out.Flexure.MinimumSteel = e.queryLeast(&q, &geometry, &out)
 	e.noteFlange(&q, &geometry, &out)
 	web := e.queryWeb(&q, &out.Flexure)
@@ -59,7 +66,7 @@ func (c Code) Strengths(q beam.SectionQuery) (beam.Strengths, error) {
 		return beam.Strengths{}, &beam.InputError{Faults: faults}
 	}
 	out.Torsion = torsion.answer()
-	out.Checks = append(out.Checks, e.queryChecks(&q, &geometry, &out, &web, &shear, &torsion)...)
+	out.Checks = append(out.Checks, e.queryChecks(&q, &geometry, &out, strain, &web, &shear, &torsion)...)
 	return out, nil
 }
 
@@ -201,7 +208,7 @@ func (e *edition) querySection(q *beam.SectionQuery, g *beam.Geometry) mechanics
 }
 
 // queryChecks judges a demand; none where nothing is asked.
-func (e *edition) queryChecks(q *beam.SectionQuery, g *beam.Geometry, out *beam.Strengths, web *webSteel, s *sectionShear, t *queryTorsion) []beam.Check {
+func (e *edition) queryChecks(q *beam.SectionQuery, g *beam.Geometry, out *beam.Strengths, strain float64, web *webSteel, s *sectionShear, t *queryTorsion) []beam.Check {
 	d := &q.Demand
 	if *d == (beam.Demand{Name: d.Name}) {
 		return nil
@@ -212,10 +219,13 @@ func (e *edition) queryChecks(q *beam.SectionQuery, g *beam.Geometry, out *beam.
 		c.Compare(demand, capacity)
 		checks = append(checks, c)
 	}
-	if !d.Moment.IsZero() {
+	if !d.Moment.IsZero() || out.Flexure.Design.IsZero() {
 		id, f := bendingIDs[q.Bending], &out.Flexure
 		compare(id.strength, "9.5.1.1", "", d.Moment.Abs().Amount(), f.Design.Amount())
-		compare(id.strain, "9.3.3.1", "", units.Plain(f.LeastStrain), units.Plain(f.ExtremeStrain))
+		if c := &checks[len(checks)-1]; f.Design.IsZero() {
+			c.Outcome, c.Utilization, c.Reason = beam.Fail, beam.NoCapacity, "nothing balances the section under the axial force"
+		}
+		compare(id.strain, "9.3.3.1", "", units.Plain(f.LeastStrain), units.Plain(strain))
 		clause, need, reason := e.queryMinimum(q, g, f)
 		compare(id.minimum, clause, reason, need.Amount(), f.TensionSteel.Amount())
 	}
@@ -236,7 +246,8 @@ func (e *edition) queryMinimum(q *beam.SectionQuery, g *beam.Geometry, f *beam.F
 	}
 	z := e.sizing(g.Parts, q.Bending, q.Concrete.Strength, yield, f.EffectiveDepth, f.ExtremeDepth, q.Readings.RoundedYield)
 	req := z.tension(math.Abs(e.momentIn(q.Demand.Moment)))
-	if waived := e.areaOf(e.minimum.waiver * req.area); req.ok && waived.Less(f.MinimumSteel) {
+	pulled := q.Demand.Axial.Compare(units.Force{}) < 0 // as in judgeMinimum
+	if waived := e.areaOf(e.minimum.waiver * req.area); req.ok && !pulled && waived.Less(f.MinimumSteel) {
 		return "9.6.1.3", waived, waiverReason
 	}
 	return "9.6.1.2", f.MinimumSteel, ""
