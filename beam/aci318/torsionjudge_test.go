@@ -507,3 +507,46 @@ func BenchmarkJudgeTorsion(b *testing.B) {
 		})
 	}
 }
+
+// Bent bars take their part of the shear, and a hung load its part of the legs,
+// in the working too.
+func TestTorsionBesideBentBarsAndHungLoads(t *testing.T) {
+	bent := func(b *beam.Brief, l *beam.Layout) {
+		twistedSpan(40, 9)(b, l)
+		b.Loads[0].Intensity = units.KipPerFoot.Of(4.5)
+		l.Transverse[0].Bar, l.Transverse[0].Spacing = "#4", in(5)
+		l.Longitudinal[0] = bottom(6, "#9")
+		l.Bent = []beam.BentBars{{Mark: "X", Bar: "#8", Count: 2, Span: 1, At: in(40), Angle: 45, Rises: "left"}}
+	}
+	hung := func(b *beam.Brief, l *beam.Layout) {
+		bent(b, l)
+		l.Bent = nil
+		b.Loads[0].Hung = true
+	}
+	for name, edit := range map[string]func(*beam.Brief, *beam.Layout){"bent": bent, "hung": hung} {
+		_, with := twistedTrial(t, ACI31819(), edit)
+		seen := map[string]bool{}
+		checks := us19.judgeShearing(nil, with)
+		for i := range checks {
+			if c := &checks[i]; strings.HasPrefix(c.ID, "torsion.") && len(c.Steps) > 0 {
+				requireEvaluable(t, c)
+				for _, s := range c.Steps {
+					seen[c.ID+" "+s.Symbol] = true
+				}
+			}
+		}
+		require.True(t, seen["torsion.transverse "+map[string]string{"bent": "Vs,req", "hung": "al"}[name]], name)
+	}
+	// What hangs takes the legs: 1.4 × 4.5 kip/ft over φ fyt, two legs.
+	_, up := twistedTrial(t, ACI31819(), func(b *beam.Brief, l *beam.Layout) { hung(b, l); b.Loads[0].Hung = false })
+	_, down := twistedTrial(t, ACI31819(), hung)
+	at := units.Foot.Of(8)
+	for i, tr := range []*beam.Trial{up, down} {
+		z := us19.newWebZone(tr, 1, 0, in(5))
+		z.bends = [2]bool{true, false}
+		z.point(tr.Forces.Action(0, 1, at, true))
+		v := z.torsion.transverse.values
+		require.InDelta(t, float64(i)*1.4*4500/12/(0.75*60000), v.lift, 1e-9)
+		require.InDelta(t, v.shear/2+v.lift/2+v.leg, v.outer, 1e-12)
+	}
+}
