@@ -43,7 +43,7 @@ type Brief struct {
 // (web_width, depth, flange_thickness, flange_width), polygon (outline, and
 // voids if it is hollow).
 type Section struct {
-	Shape           string        `json:"shape" validate:"oneof=rectangular tee ell inverted-tee polygon" doc:"Shape of the outline. tee and ell have their flange at the top, an inverted-tee its ledges at the bottom."`
+	Shape           string        `json:"shape" validate:"oneof=rectangular tee ell inverted-tee polygon" doc:"Shape of the outline, which decides what else belongs to it: rectangular (width, depth); tee and ell, with the flange at the top (web_width, depth, flange_thickness, and either flange_width or slab; a tee may be isolated); inverted-tee, with ledges at the bottom (web_width, depth, flange_thickness, flange_width); polygon (outline, and voids if it is hollow). Any may be a joist."`
 	Width           *units.Length `json:"width,omitzero" doc:"Width of a rectangle, 50 mm to 10 m."`
 	WebWidth        *units.Length `json:"web_width,omitzero" doc:"Width of the web of a flanged section, 50 mm to 10 m."`
 	Depth           *units.Length `json:"depth,omitzero" doc:"Overall depth, 50 mm to 10 m; of a polygon it follows from the outline."`
@@ -100,7 +100,7 @@ type Support struct {
 // path), uniform-torque (moment, over the span, and path).
 type Load struct {
 	Case         string          `json:"case" validate:"oneof=dead live roof-live snow rain wind earthquake" doc:"Origin of the load."`
-	Shape        string          `json:"shape" validate:"oneof=uniform partial point couple torque uniform-torque" doc:"How the load is spread."`
+	Shape        string          `json:"shape" validate:"oneof=uniform partial point couple torque uniform-torque" doc:"How the load is spread, which decides what else belongs to it: uniform (intensity); partial (intensity, from, to, and intensity_end if it varies); point (force, at); couple (moment, at); torque (moment, at, and path); uniform-torque (moment, over the span, and path)."`
 	Span         *int            `json:"span,omitzero" validate:"omitnil,min=1,max=20" doc:"Number of the span from the left, from 1. Default: every span."`
 	From         *units.Length   `json:"from,omitzero" doc:"Start of a partial load, from the span's left end."`
 	To           *units.Length   `json:"to,omitzero" doc:"End of a partial load, beyond from."`
@@ -164,7 +164,7 @@ type Row struct {
 	Mark          string        `json:"mark,omitzero" validate:"max=40" doc:"Mark of the bars."`
 	Bar           string        `json:"bar" validate:"min=1,max=20" doc:"Size, as the brief's catalog names it."`
 	Count         int           `json:"count" validate:"min=1,max=200" doc:"Number of bars; of side bars, on each side face."`
-	Face          string        `json:"face" validate:"oneof=bottom top side" doc:"Face at which the bars lie."`
+	Face          string        `json:"face" validate:"oneof=bottom top side" doc:"Face at which the bars lie. Side bars have spacing, and no layer, flange, bundled, yield or in_compression."`
 	Layer         *int          `json:"layer,omitzero" validate:"omitnil,min=1,max=20" doc:"Layer of the face, 1 nearest to it. Default: 1. Side bars have none."`
 	Flange        *bool         `json:"flange,omitzero" doc:"true: the bars lie in the flange beside the web, at the level of the first layer, half of them on each side (an odd one more on the left), of an ell all on its one side."`
 	Spacing       *units.Length `json:"spacing,omitzero" doc:"Of side bars, their vertical spacing, counted up from the highest layer at the bottom with more than one bar. Of bars in a flange, their spacing outward from the outermost bar of the web, or from the row listed before."`
