@@ -34,7 +34,7 @@ func (e *edition) bentGroup(t *beam.Trial, i int) bentGroup {
 	return bentGroup{
 		area: e.areaIn(bars.TotalArea(bars.Group{Size: *size, Count: b.Count})),
 		fy:   e.stressIn(yield), fyCapped: capped, slope: slopeOf(b.Angle),
-		height: e.lengthIn(inside), spacing: e.lengthIn(b.Spacing), series: b.Bends > 1,
+		height: max(0, e.lengthIn(inside)), spacing: e.lengthIn(b.Spacing), series: b.Bends > 1,
 	}
 }
 
@@ -42,14 +42,14 @@ func (e *edition) bentGroup(t *beam.Trial, i int) bentGroup {
 // effective, along the beam: an upright section within it cuts the middle of
 // the slope.
 func (g *bentGroup) reach() float64 {
-	return effective / 2 * max(g.height, 0) * g.slope.cos / g.slope.sin
+	return effective / 2 * g.height * g.slope.cos / g.slope.sin
 }
 
 // most is the greatest spacing of a series for a depth d: every line at 45
 // degrees from mid-depth to the tension steel crosses a slope where it is
 // effective (9.7.6.2.3).
 func (g *bentGroup) most(d float64, heavy bool) float64 {
-	most := min(effective/2*max(g.height, 0), d/2) * (1 + g.slope.cos/g.slope.sin)
+	most := min(effective/2*g.height, d/2) * (1 + g.slope.cos/g.slope.sin)
 	if heavy {
 		most /= 2
 	}
@@ -114,7 +114,7 @@ func against(shear units.Force) int {
 func (e *edition) bentReach(t *beam.Trial, i int) (from, to units.Length) {
 	b, g := &t.Bent[i], e.bentGroup(t, i)
 	reach := e.lengthOf(g.reach())
-	last := b.At.Add(b.Spacing.Scale(float64(max(b.Bends-1, 0))))
+	last := b.At.Add(b.Spacing.Scale(float64(b.Bends - 1)))
 	return b.At.Sub(reach), last.Add(reach)
 }
 
@@ -208,7 +208,7 @@ func (g *bentGroup) spacingSteps(e *edition, d float64, heavy bool) []beam.Step 
 	out.given("sinα", "sine of the angle with the axis of the beam", "", asPlain(g.slope.sin))
 	out.given("cosα", "its cosine", "", asPlain(g.slope.cos))
 	out.find("y", "depth below mid-depth to which a line at 45 degrees may count on the slope", "9.7.6.2.3",
-		"min("+number(effective/2)+" hs, d / 2)", e.asLength(min(effective/2*max(g.height, 0), d/2)))
+		"min("+number(effective/2)+" hs, d / 2)", e.asLength(min(effective/2*g.height, d/2)))
 	expression := "y (1 + cosα / sinα)"
 	if heavy {
 		expression += " / 2"

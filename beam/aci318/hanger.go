@@ -107,7 +107,7 @@ type hangerSection struct {
 // lift judges the stirrups of a section where a load hangs.
 func (z *webZone) lift(sense beam.Sense, web *webSteel, a *beam.Action, s *sectionShear, note string) {
 	load := hungLoad(z.t.Problem, z.span, a.Combination, a.At)
-	if load <= 0 || web.bare.d <= 0 {
+	if load == 0 || web.bare.d == 0 {
 		return
 	}
 	h := web.lifting(z.e, s, load)
