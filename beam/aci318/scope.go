@@ -76,13 +76,14 @@ func (e *edition) deepRefusals(p *beam.Problem, span int) []beam.Refusal {
 		})
 	}
 	left, right := p.Faces(span)
+	slip := b.Spans[span-1].Scale(noLength) // a load at the face is not off it by rounding
 	for _, l := range concentratedLoads(p, span) {
 		a, z := l.from, l.to
 		// How far the load's near and far ends are from each face.
 		for end, reach := range [2][2]units.Length{{a.Sub(left), z.Sub(left)}, {right.Sub(z), right.Sub(a)}} {
 			s := &b.Supports[span-1+end]
 			from := reach[0].Max(units.Length{})
-			if s.Kind == statics.Free || s.Hung || reach[1].AtMost(units.Length{}) || !from.AtMost(h.Scale(r.deepLoad)) {
+			if s.Kind == statics.Free || s.Hung || reach[1].AtMost(slip) || !from.AtMost(h.Scale(r.deepLoad)) {
 				continue
 			}
 			out = append(out, beam.Refusal{

@@ -57,8 +57,8 @@ func (p *shearStretch) turns() (t [2]float64, n int) {
 	var roots [2]float64
 	k := 0
 	if disc := b*b - 4*a*c; disc >= 0 {
-		// Without cancellation; a zero denominator gives a root off the
-		// stretch, which is dropped below.
+		// Without cancellation, the lesser in magnitude first; a zero
+		// denominator gives a root off the stretch, which is dropped below.
 		q := -(b + math.Copysign(math.Sqrt(disc), b)) / 2
 		if q != 0 {
 			roots[k] = c / q
@@ -68,9 +68,6 @@ func (p *shearStretch) turns() (t [2]float64, n int) {
 			roots[k] = q / a
 			k++
 		}
-	}
-	if k == 2 && roots[0] > roots[1] {
-		roots[0], roots[1] = roots[1], roots[0]
 	}
 	for _, r := range roots[:k] {
 		if 0 < r && r < p.length {

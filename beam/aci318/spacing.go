@@ -122,9 +122,6 @@ func (e *edition) layerGap(f *beam.FaceSteel) (g barGap) {
 		low, high := row[0].Y, row[0].Y
 		for k := range row {
 			_, towards, away := row[k].Size.Extent()
-			if k == 0 {
-				low, high = row[k].Y.Sub(towards), row[k].Y.Add(away)
-			}
 			low, high = low.Min(row[k].Y.Sub(towards)), high.Max(row[k].Y.Add(away))
 		}
 		if i > 0 {
