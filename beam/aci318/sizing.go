@@ -152,31 +152,23 @@ func (z *sizing) axisFor(nominal float64) float64 {
 	return math.NaN()
 }
 
+// halvings of an interval leave nothing of it but rounding.
+const halvings = 60
+
 // taperedBlock is the height h, at most most, of a strip of width w at its upper
 // edge that changes by slope, whose moment about a point lever below that edge
-// is rest. It is the root of a cubic that grows on [0, most]: Newton's method,
-// kept inside a bracket.
+// is rest. It is the root of a cubic that grows on [0, most].
 func taperedBlock(rest, lever, w, slope, most float64) float64 {
 	low, high := 0.0, most
-	h := most / 2
-	for range 100 {
-		area, first := upper(h, w, slope)
-		off := area*lever - first - rest
-		if off < 0 {
+	for range halvings {
+		h := (low + high) / 2
+		if area, first := upper(h, w, slope); area*lever-first < rest {
 			low = h
 		} else {
 			high = h
 		}
-		next := h - off/((w+slope*h)*(lever-h))
-		if !(low < next && next < high) {
-			next = (low + high) / 2
-		}
-		if math.Abs(next-h) <= 1e-15*most {
-			return next
-		}
-		h = next
 	}
-	return h
+	return (low + high) / 2
 }
 
 // requiredTension is the tension steel that a moment needs in a section without
@@ -226,7 +218,7 @@ func (z *sizing) axisBetween(full, limit, moment float64) float64 {
 			low = high
 			continue
 		}
-		for range 60 {
+		for range halvings {
 			mid := (low + high) / 2
 			if z.design(mid) < moment {
 				low = mid
@@ -290,34 +282,30 @@ func (z *sizing) tensionWith(e *edition, t *beam.Trial, s beam.Sense, moment, ax
 	return z.tensionAndPressed(e, t, s, moment, axial)
 }
 
-// tensionAndPressed counts the compression steel that the trial has. φMn grows
-// with the neutral axis, but for a small drop where the block passes a layer.
+// tensionAndPressed counts the compression steel that the trial has, in a section
+// that is tension-controlled. φMn grows there with the neutral axis, but for a
+// small drop where the block passes a layer.
 func (z *sizing) tensionAndPressed(e *edition, t *beam.Trial, s beam.Sense, moment, axial float64) (area float64, ok bool) {
-	give := func(axis float64) (design, force, phi float64) {
-		pressed, about := z.pressed(e, t, s, axis)
-		concrete, _ := z.concrete(z.beta1 * axis)
-		phi = z.phi(axis)
-		return phi * (z.nominal(axis) + about), z.intensity()*concrete + pressed, phi
+	phi := z.reduction.tension
+	low, high := 0.0, z.axisAt(z.reduction.tensionStrain(z.yieldStrain))
+	design := func(axis float64) float64 {
+		_, about := z.pressed(e, t, s, axis)
+		return phi * (z.nominal(axis) + about)
 	}
-	low, high := 0.0, z.axisAt(z.reduction.leastStrain(z.yieldStrain))
-	if full := z.axisAt(z.reduction.tensionStrain(z.yieldStrain)); full < high {
-		if most, _, _ := give(full); units.AtMost(moment, most) {
-			high = full
-		}
-	}
-	if most, _, _ := give(high); !units.AtMost(moment, most) {
+	if !units.AtMost(moment, design(high)) {
 		return 0, false
 	}
-	for range 60 {
+	for range halvings {
 		mid := (low + high) / 2
-		if most, _, _ := give(mid); most < moment {
+		if design(mid) < moment {
 			low = mid
 		} else {
 			high = mid
 		}
 	}
-	_, force, phi := give(high)
-	return math.Max(0, (force-axial/phi)/z.fy), true
+	force, _ := z.pressed(e, t, s, high)
+	concrete, _ := z.concrete(z.beta1 * high)
+	return (z.intensity()*concrete + force - axial/phi) / z.fy, true
 }
 
 // pressed is the force of the trial's compression steel with the neutral axis at
