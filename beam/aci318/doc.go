@@ -11,6 +11,6 @@
 // number a clause differently both numbers are data too.
 //
 // Not covered, and refused by name: deep beams and loads close to supports,
-// significant axial force, torsion above its threshold, prestress, shotcrete,
+// significant axial compression, prestress, shotcrete,
 // seismic detailing, steel beyond the tables of chapter 20.
 package aci318

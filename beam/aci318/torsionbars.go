@@ -23,8 +23,7 @@ type torsionFace struct {
 	sizing     sizing
 	fy         float64 // of its bars as it may be used in torsion
 	area, web  float64 // of all its bars, and of those inside the stirrups
-	credit     float64 // 0.9 d of the opposite bars, 9.5.4.5
-	lever      float64 // that d
+	lever      float64 // d of the opposite bars, 9.5.4.5
 	most       float64 // the greatest moment in tension, and the steel that it needs
 	mostSteel  float64
 	beyond     bool // no steel in tension carries that moment
