@@ -649,3 +649,90 @@ func find2(t testing.TB, r *beam.Result, like *beam.Check) *beam.Check {
 	require.Fail(t, "no check "+like.ID)
 	return nil
 }
+
+// What leaves nothing to compare fails, with the reason.
+func TestTorsionWithoutAnythingToCompare(t *testing.T) {
+	for _, tc := range []struct {
+		name, reason string
+		edit         func(*beam.Brief, *beam.Layout)
+		ids          []string
+	}{
+		{"cover without room", noteNoCage, func(b *beam.Brief, l *beam.Layout) { b.Cover = in(7.9) },
+			[]string{"torsion.section", "torsion.transverse", "torsion.longitudinal.bottom", "torsion.longitudinal.top", "torsion.longitudinal.side"}},
+		{"hollow and cover without room", noteNoCage, func(b *beam.Brief, l *beam.Layout) {
+			at := func(x, y float64) beam.Point { return beam.Point{X: in(x), Y: in(y)} }
+			b.Section = beam.Section{
+				Shape: beam.Polygon, Outline: []beam.Point{at(0, 0), at(16, 0), at(16, 28), at(0, 28)},
+				Voids: [][]beam.Point{{at(6, 10), at(10, 10), at(10, 18), at(6, 18)}},
+			}
+			b.Cover = in(7.9)
+		}, []string{"torsion.wall", "torsion.section"}},
+		{"more moment than steel can carry", noteBeyondBending, func(b *beam.Brief, l *beam.Layout) { b.Demands[0].Moment = units.KipFoot.Of(900) },
+			[]string{"torsion.longitudinal.bottom"}},
+		{"no steel in tension to measure d to", noteNoDepth, func(b *beam.Brief, l *beam.Layout) { l.Longitudinal = l.Longitudinal[1:2] },
+			[]string{"torsion.section", "torsion.transverse"}},
+	} {
+		t.Run(tc.name, func(t *testing.T) {
+			r := twisted(t, ACI31819(), tc.edit)
+			for _, id := range tc.ids {
+				c := find1(t, r, id)
+				require.Equal(t, beam.Fail, c.Outcome, id)
+				require.Equal(t, tc.reason, c.Reason, id)
+			}
+			require.Equal(t, beam.Unsatisfied, r.Verdict)
+		})
+	}
+}
+
+// Bars beside the web are outside the closed stirrups: they help in bending,
+// not in torsion (9.7.5.1).
+func TestBarsBesideTheWebDoNotCountInTorsion(t *testing.T) {
+	edit := func(web string, moment float64) func(b *beam.Brief, l *beam.Layout) {
+		return func(b *beam.Brief, l *beam.Layout) {
+			b.Section = beam.Section{Shape: beam.Tee, Width: in(16), Depth: in(28), FlangeThickness: in(6), FlangeWidth: in(48)}
+			b.Demands[0].Moment, b.Demands[0].Torque = units.KipFoot.Of(moment), units.KipFoot.Of(44)
+			l.Longitudinal = []beam.Row{bottom(3, "#9"), top(2, web), l.Longitudinal[2],
+				{Mark: "F", Bar: "#7", Count: 4, Face: beam.Top, Layer: 1, Flange: true, Spacing: in(5)}}
+		}
+	}
+	// The least steel governs: Acp = 16 × 28 + 2 × 16 × 6 = 640 in2, with
+	// flanges as wide as they are.
+	al := 44.0 / 45 * ownLong(60000)
+	require.Less(t, al, 5*math.Sqrt(4000)*640/60000-al)
+	share := (5*math.Sqrt(4000)*640/60000 - al) * (12.5 + 24.5/3) / 74
+	require.Greater(t, share, 0.4)
+	r := twisted(t, ACI31819(), edit("#4", -1))
+	c := find1(t, r, "torsion.longitudinal.top")
+	require.Equal(t, beam.Fail, c.Outcome)
+	require.InEpsilon(t, share, valueIn(t, c.Demand, "in2"), 1e-9)
+	require.InEpsilon(t, 0.4, valueIn(t, c.Capacity, "in2"), 1e-9)
+	require.Contains(t, c.Reason, "beside the web")
+	requireEvaluable(t, c)
+	r = twisted(t, ACI31819(), edit("#4", 1)) // the same where the face is pressed a little
+	c = find1(t, r, "torsion.longitudinal.top")
+	require.Equal(t, beam.Fail, c.Outcome)
+	requireEvaluable(t, c)
+	require.Equal(t, beam.Pass, find1(t, twisted(t, ACI31819(), edit("#5", -1)), "torsion.longitudinal.top").Outcome)
+}
+
+// Layers of bars count as bars along the side where their outer bars stand at
+// the legs: their distance, and what is left above them.
+func TestWidestDistanceRoundTheSection(t *testing.T) {
+	_, trial := twistedTrial(t, ACI31819(), func(_ *beam.Brief, l *beam.Layout) {
+		l.Longitudinal = append(l.Longitudinal, beam.Row{Mark: "B2", Bar: "#8", Count: 2, Face: beam.Bottom, Layer: 2})
+		l.Longitudinal[2].Spacing, l.Longitudinal[2].Count = in(4), 1
+	})
+	gap, found := widestRound(trial)
+	require.True(t, found)
+	// Layers at 2.5 and 4.5 in., a side bar 4 in. above them, the top bars at 25.625 in.
+	require.InEpsilon(t, 25.625-8.5, gap.In(units.Inch), 1e-9)
+	trial.Side = beam.SideSteel{}
+	gap, _ = widestRound(trial)
+	require.InEpsilon(t, 25.625-4.5, gap.In(units.Inch), 1e-9)
+	_, wide := twistedTrial(t, ACI31819(), func(b *beam.Brief, l *beam.Layout) {
+		b.Section.Width, b.Demands[0].Torque = in(40), units.KipFoot.Of(100)
+		l.Longitudinal[0] = bottom(2, "#11")
+	})
+	gap, _ = widestRound(wide)
+	require.Greater(t, gap.In(units.Inch), 30.0)
+}
