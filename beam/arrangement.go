@@ -56,16 +56,16 @@ func (c *Check) Describe(sys units.System) string {
 	if c.Outcome == Fail {
 		relation = ">"
 	}
-	s := fmt.Sprintf("%s: %s %s %s (%s)", c.ID, short(sys, c.Demand), relation, short(sys, c.Capacity), c.Clause)
+	s := fmt.Sprintf("%s: %s %s %s (%s)", c.ID, Short(sys, c.Demand), relation, Short(sys, c.Capacity), c.Clause)
 	if c.Reason != "" {
 		s += ": " + c.Reason
 	}
 	return s
 }
 
-// short prints an amount to five significant digits, enough to read beside a
-// limit.
-func short(sys units.System, a units.Amount) string {
+// Short prints an amount to five significant digits, enough to read beside a
+// limit or in a sentence.
+func Short(sys units.System, a units.Amount) string {
 	v := sys.Float(a)
 	digits := 0
 	if v != 0 {

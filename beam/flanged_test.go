@@ -330,3 +330,28 @@ func TestSearchOfSteelBesideTheWeb(t *testing.T) {
 	require.Greater(t, len(web), 2)
 	require.Equal(t, r.Checks, checked(t, b, r.Layout).Checks)
 }
+
+// A wide top that no moment bends still needs bars close enough for a torque
+// (ACI 318-19 9.7.5.1): the search adds a third one to the box.
+func TestSearchSpacesBarsForTorque(t *testing.T) {
+	b := plain()
+	at := func(xy ...float64) []beam.Point {
+		var out []beam.Point
+		for i := 0; i < len(xy); i += 2 {
+			out = append(out, beam.Point{X: units.Inch.Of(xy[i]), Y: units.Inch.Of(xy[i+1])})
+		}
+		return out
+	}
+	b.Section = beam.Section{Shape: beam.Polygon, Outline: at(0, 0, 24, 0, 24, 30, 0, 30), Voids: [][]beam.Point{at(7, 7, 17, 7, 17, 23, 7, 23)}}
+	b.Spans[0] = units.Foot.Of(27)
+	b.Loads = append(b.Loads, beam.Load{Case: beam.Dead, Shape: beam.Torque, At: units.Foot.Of(13.5), Moment: units.KipFoot.Of(40)})
+	r := design(t, b)
+	require.Equal(t, beam.Satisfied, r.Verdict, failures(r))
+	top := 0
+	for _, bar := range r.Bars {
+		if bar.Face == beam.Top {
+			top++
+		}
+	}
+	require.GreaterOrEqual(t, top, 3)
+}

@@ -72,7 +72,7 @@ func (e *edition) deepRefusals(p *beam.Problem, span int) []beam.Refusal {
 		out = append(out, beam.Refusal{
 			Rule: "scope.deep-beam", Clause: "9.9.1.1(a)",
 			Detail: fmt.Sprintf("%s %s of span %d is at most %g h = %s: a deep beam, to be designed by 9.9 or chapter 23",
-				what, e.length.Format(clear), span, limit, e.length.Format(h.Scale(limit))),
+				what, beam.Short(e.system, clear.Amount()), span, limit, beam.Short(e.system, h.Scale(limit).Amount())),
 		})
 	}
 	left, right := p.Faces(span)
@@ -89,7 +89,7 @@ func (e *edition) deepRefusals(p *beam.Problem, span int) []beam.Refusal {
 			out = append(out, beam.Refusal{
 				Rule: "scope.load-within-2h", Clause: "9.9.1.1(b)",
 				Detail: fmt.Sprintf("load %d acts %s from the face of support %d, which is within %g h = %s: that region is a deep beam, to be designed by 9.9 or chapter 23",
-					l.load, e.length.Format(from), span+end, r.deepLoad, e.length.Format(h.Scale(r.deepLoad))),
+					l.load, beam.Short(e.system, from.Amount()), span+end, r.deepLoad, beam.Short(e.system, h.Scale(r.deepLoad).Amount())),
 			})
 		}
 	}
@@ -105,7 +105,7 @@ func (e *edition) axialRefusals(gross units.Area, c *beam.Concrete, axial units.
 	}
 	return []beam.Refusal{{
 		Rule: "scope.axial", Clause: "9.5.2.2",
-		Detail: "axial compression of " + e.force.Format(axial) + named(name) + " is not below 0.10 f'c Ag = " + e.force.Format(limit) + ": 22.4 applies",
+		Detail: "axial compression of " + beam.Short(e.system, axial.Amount()) + named(name) + " is not below 0.10 f'c Ag = " + beam.Short(e.system, limit.Amount()) + ": 22.4 applies",
 	}}
 }
 

@@ -112,7 +112,7 @@ func (e *edition) shearStrength(q *beam.SectionQuery, web *webSteel, s *sectionS
 	}
 	if q.Bent != nil {
 		g := e.queryBent(q.Bent, web)
-		say(s.bent > 0, fmt.Sprintf("bent bars carry %s of Vs where a section cuts the central three quarters of their slope", e.force.Format(e.forceOf(s.bent))))
+		say(s.bent > 0, fmt.Sprintf("bent bars carry %s of Vs where a section cuts the central three quarters of their slope", beam.Short(e.system, e.forceOf(s.bent).Amount())))
 		say(s.bent > 0 && !g.series && s.bent < g.single(), fmt.Sprintf("a single group of bent bars carries no more than %g √f'c bw d (%s)", e.stirrups.bentMost, e.stirrups.bentSingleClause))
 		say(s.bent == 0, "the bent bars are too flat, or too far apart, to count")
 		say(g.fyCapped, "the bent bars count with "+cap+" of their yield strength in shear ("+e.materials.yieldClause+")")

@@ -273,7 +273,7 @@ const noteBeyondBending = "no amount of steel in tension carries the moment alon
 var torsionFaceIDs = [2]string{"torsion.longitudinal.bottom", "torsion.longitudinal.top"}
 
 // judgeTorsionBars appends, for the bars of either face, whether they suffice
-// for bending and torsion together.
+// for bending and torsion together, and stand close enough along the face.
 func (e *edition) judgeTorsionBars(dst []beam.Check, t *beam.Trial) []beam.Check {
 	if !t.Twisted {
 		return dst
@@ -282,8 +282,20 @@ func (e *edition) judgeTorsionBars(dst []beam.Check, t *beam.Trial) []beam.Check
 	f.follow()
 	for i := range f.faces {
 		dst = append(dst, f.check(i))
+		steel := t.Steel(f.faces[i].sense.TensionFace())
+		if len(steel.Fit.Layers) > 0 {
+			dst = append(dst, e.aroundCheck(steel.Face, steel.Fit.Layers[0].Spacing))
+		}
 	}
 	return dst
+}
+
+// aroundCheck compares a distance of neighbouring bars round the section with
+// 9.7.5.1.
+func (e *edition) aroundCheck(face beam.Face, gap units.Length) beam.Check {
+	c := beam.Check{ID: "torsion.longitudinal-spacing", Clause: "9.7.5.1", Face: face}
+	c.Compare(gap.Amount(), e.lengthOf(e.torsion.around).Amount())
+	return c
 }
 
 // check is that of a face.
@@ -371,9 +383,8 @@ func (e *edition) appendTorsionSides(dst []beam.Check, t *beam.Trial) []beam.Che
 	}
 	dst = append(dst, c)
 
-	c = beam.Check{ID: "torsion.longitudinal-spacing", Clause: "9.7.5.1"}
-	gap, found := widestRound(t)
-	c.Compare(gap.Amount(), e.lengthOf(e.torsion.around).Amount())
+	gap, found := widestAlongSide(t)
+	c = e.aroundCheck(beam.Side, gap)
 	if !found {
 		refuse(&c, "no bars lie round the section")
 	}
@@ -391,18 +402,16 @@ func (e *edition) appendTorsionSides(dst []beam.Check, t *beam.Trial) []beam.Che
 	return dst
 }
 
-// widestRound is the greatest distance between neighbouring bars round the
-// section, inside the stirrups: along the layers nearest the faces, and along
-// the sides from layer to layer by their outer bars and the side bars. found is
-// false where a face has no bars.
-func widestRound(t *beam.Trial) (widest units.Length, found bool) {
+// widestAlongSide is the greatest distance between neighbouring bars along the
+// sides, inside the stirrups: from layer to layer by their outer bars, and the
+// side bars. found is false where a face has no bars.
+func widestAlongSide(t *beam.Trial) (widest units.Length, found bool) {
 	depth := t.Brief.Section.Depth
 	for _, f := range [2]*beam.FaceSteel{&t.Bottom, &t.Top} {
 		if len(f.Fit.Layers) == 0 {
 			return units.Length{}, false
 		}
 		first := &f.Fit.Layers[0]
-		widest = widest.Max(first.Spacing)
 		below := first.Centroid
 		for i := 1; i < len(f.Fit.Layers); i++ {
 			if l := &f.Fit.Layers[i]; l.Count > 1 {

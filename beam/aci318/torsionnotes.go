@@ -59,12 +59,12 @@ func (e *edition) settleTorsion(t *beam.Trial, note *beam.Register) {
 	if a, shed := e.mostShed(t.Problem); shed > 0 {
 		where := ""
 		if a.Span > 0 {
-			where = fmt.Sprintf(", at %s in span %d", e.length.Format(a.At), a.Span)
+			where = fmt.Sprintf(", at %s in span %d", beam.Short(e.system, a.At.Amount()), a.Span)
 		}
 		note.Assume(beam.Assumption{
 			ID: "torsion.redistribution", UsedIn: torsionChecks, Open: true,
 			Assumed: "the neighbours are designed for the torque that this beam sheds by 22.7.3.2, in equilibrium with what it keeps (22.7.3.3)",
-			Found:   e.moment.Format(e.momentOf(shed)) + " at most" + where + named(a.Combination),
+			Found:   beam.Short(e.system, e.momentOf(shed).Amount()) + " at most" + where + named(a.Combination),
 		})
 	}
 }

@@ -360,7 +360,7 @@ func TestTrap21CompatibilityTorsion(t *testing.T) {
 		if a.ID == "torsion.redistribution" {
 			found = true
 			require.True(t, a.Open, "the neighbours are the engineer's to see to")
-			require.Contains(t, a.Found, us19.moment.Format(units.PoundInch.Of(80*12000-crack)))
+			require.Contains(t, a.Found, beam.Short(units.US, units.PoundInch.Of(80*12000-crack).Amount()))
 		}
 	}
 	require.True(t, found)
