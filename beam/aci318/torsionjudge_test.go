@@ -568,17 +568,18 @@ func TestWidestDistanceRoundTheSection(t *testing.T) {
 		l.Longitudinal = append(l.Longitudinal, beam.Row{Mark: "B2", Bar: "#8", Count: 2, Face: beam.Bottom, Layer: 2})
 		l.Longitudinal[2].Spacing, l.Longitudinal[2].Count = in(4), 1
 	})
-	gap, found := widestRound(trial)
+	gap, found := widestAlongSide(trial)
 	require.True(t, found)
 	// Layers at 2.5 and 4.5 in., a side bar 4 in. above them, the top bars at 25.625 in.
 	require.InEpsilon(t, 25.625-8.5, gap.In(units.Inch), 1e-9)
 	trial.Side = beam.SideSteel{}
-	gap, _ = widestRound(trial)
+	gap, _ = widestAlongSide(trial)
 	require.InEpsilon(t, 25.625-4.5, gap.In(units.Inch), 1e-9)
-	_, wide := twistedTrial(t, ACI31819(), func(b *beam.Brief, l *beam.Layout) {
+	r, _ := twistedTrial(t, ACI31819(), func(b *beam.Brief, l *beam.Layout) {
 		b.Section.Width, b.Demands[0].Torque = in(40), units.KipFoot.Of(100)
 		l.Longitudinal[0] = bottom(2, "#11")
 	})
-	gap, _ = widestRound(wide)
-	require.Greater(t, gap.In(units.Inch), 30.0)
+	c := find1(t, r, "torsion.longitudinal-spacing")
+	require.Equal(t, beam.Bottom, c.Face)
+	require.Greater(t, valueIn(t, c.Demand, "in"), 30.0)
 }
