@@ -24,7 +24,7 @@
 // with the tests that reach it alone, the quick ones before the slow ones, and
 // stops at the first that fails. Tests run short. Property tests of
 // pgregory.net/rapid first make few checks, from a fixed seed; what survives
-// meets them with all.
+// meets them with all, in a second round that -quick leaves out.
 // A run that lasts much longer than it should, or takes a gibibyte, is
 // stopped and counts as killed.
 //

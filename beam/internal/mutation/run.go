@@ -34,6 +34,7 @@ type Options struct {
 	Patience float64 // a run may last this many times its clean time, and two seconds; 0: eight
 	Checks   int     // asked of a property in the first round; 0: 25
 	Long     bool    // without -test.short
+	Quick    bool    // without the second round
 
 	Progress io.Writer // nil: none
 	Output   io.Writer // of the tests that kill; nil: nowhere
@@ -142,7 +143,7 @@ func Run(ctx context.Context, o Options) (*Report, error) {
 		queue = append(queue, i)
 	}
 	rounds := []round{{name: "few checks", few: true}}
-	if len(h.property) > 0 {
+	if len(h.property) > 0 && !o.Quick {
 		rounds = append(rounds, round{name: "all checks"})
 	}
 	for _, r := range rounds {

@@ -42,6 +42,7 @@ func run() (enough bool, err error) {
 	flag.Float64Var(&o.Patience, "patience", 8, "a run may last so many `times` its clean time, and two seconds")
 	flag.IntVar(&o.Checks, "checks", 25, "asked of a property in the first round")
 	flag.BoolVar(&o.Long, "long", false, "run the tests without -test.short")
+	flag.BoolVar(&o.Quick, "quick", false, "leave out the second round, in which properties make all their checks")
 	list := flag.Bool("list", false, "list the mutants and run none")
 	killers := flag.Bool("killers", false, "print the test that killed each mutant")
 	threshold := flag.Float64("threshold", 95, "least `percent` of mutants killed")
