@@ -55,6 +55,14 @@ func (t *Trial) appendGeometry(dst []Check) []Check {
 		}
 		c.Compare(f.Fit.Height.Add(other).Amount(), depth.Amount())
 		dst = append(dst, c)
+
+		// Bars beyond mid-depth are no steel of their face, whatever a layout
+		// calls them: bent towards it, they may even be in compression.
+		if t.Record || depth.Scale(0.5).Less(f.Fit.Height) {
+			c = Check{ID: "fit.half", Clause: clause, Face: face, Detailing: true}
+			c.Compare(f.Highest().Amount(), depth.Scale(0.5).Amount())
+			dst = append(dst, c)
+		}
 	}
 	dst = t.appendSideGeometry(dst)
 	dst = t.appendFlangeGeometry(dst)
@@ -63,6 +71,10 @@ func (t *Trial) appendGeometry(dst []Check) []Check {
 		c := Check{ID: "stirrup.clear", Clause: clause, Span: t.Zones[i].Span, At: t.Zones[i].From, Detailing: true}
 		c.Compare(t.ZoneBar[i].Diameter.Add(t.Code.Gaps(t.Problem).InLayer.Least).Amount(), t.Zones[i].Spacing.Amount())
 		dst = append(dst, c)
+
+		if c, hollow := t.hollowLegs(i); hollow {
+			dst = append(dst, c)
+		}
 
 		c = Check{ID: "stirrup.bends", Clause: clause, Span: t.Zones[i].Span, At: t.Zones[i].From, Detailing: true}
 		cage := t.cage()
@@ -119,20 +131,26 @@ func (t *Trial) appendFlangeGeometry(dst []Check) []Check {
 		left, right := t.Brief.Section.Overhangs(face)
 		width := t.Brief.Section.Width
 		c := Check{ID: "fit.flange", Clause: clause, Face: face, Detailing: true}
-		var worstNeed, worstRoom units.Length
+		beside := Check{ID: "fit.beside-web", Clause: clause, Face: face, Detailing: true}
+		var worstNeed, worstRoom, nearest, radius units.Length
 		for i := range f.Flange {
 			b := &f.Flange[i]
 			out, room := b.X.Neg(), left
-			if zero := (units.Length{}); zero.Less(b.X) {
+			if width.Scale(0.5).Less(b.X) {
 				out, room = b.X.Sub(width), right
 			}
-			need := out.Add(b.Size.Diameter.Scale(0.5)).Add(t.Cover)
+			r := b.Size.Diameter.Scale(0.5)
+			need := out.Add(r).Add(t.Cover)
 			if i == 0 || worstNeed.Sub(worstRoom).Less(need.Sub(room)) {
 				worstNeed, worstRoom = need, room
 			}
+			if i == 0 || out.Sub(r).Less(nearest.Sub(radius)) {
+				nearest, radius = out, r
+			}
 		}
 		c.Compare(worstNeed.Amount(), worstRoom.Amount())
-		dst = append(dst, c)
+		beside.Compare(radius.Amount(), nearest.Amount())
+		dst = append(dst, c, beside)
 
 		c = Check{ID: "fit.flange-thickness", Clause: clause, Face: face, Detailing: true}
 		highest := units.Length{}
@@ -144,7 +162,11 @@ func (t *Trial) appendFlangeGeometry(dst []Check) []Check {
 	}
 	if g := &t.Geometry; g.Hollow {
 		c := Check{ID: "fit.hollow", Clause: clause, Detailing: true}
-		c.Compare(t.Cover.Add(t.Stirrup.Diameter).Add(t.Cover).Amount(), g.SideWall.Amount())
+		inside := t.Cover.Add(t.Stirrup.Diameter)
+		if t.Side.Each > 0 {
+			inside = inside.Add(t.Side.Size.Diameter)
+		}
+		c.Compare(inside.Add(t.Cover).Amount(), g.SideWall.Amount())
 		dst = append(dst, c)
 		for _, face := range [2]Face{Bottom, Top} {
 			wall := g.BottomWall
@@ -159,6 +181,41 @@ func (t *Trial) appendFlangeGeometry(dst []Check) []Check {
 		}
 	}
 	return dst
+}
+
+// hollowLegs sees whether the legs of zone i between the outer two, spread
+// evenly, stand in the concrete beside the section's hollows, by the stirrups'
+// cover. It reports whether there is anything to see.
+func (t *Trial) hollowLegs(i int) (c Check, hollow bool) {
+	z := &t.Zones[i]
+	if len(t.Geometry.Hollows) == 0 || z.Legs <= 2 {
+		return c, false
+	}
+	c = Check{ID: "stirrup.hollow", Clause: "geometry", Span: z.Span, At: z.From, Detailing: true}
+	c.Compare(units.Plain(float64(t.standingInHollows(t.ZoneBar[i].Diameter, z.Legs))), units.Plain(0))
+	if c.Outcome == Fail {
+		c.Reason = "legs between the outer two stand in a hollow of the section or too near it"
+	}
+	return c, true
+}
+
+// standingInHollows counts the legs between the outer two that do.
+func (t *Trial) standingInHollows(diameter units.Length, legs int) (n int) {
+	if len(t.Geometry.Hollows) == 0 {
+		return 0
+	}
+	edge := t.Cover.Add(diameter.Scale(0.5))
+	between := t.Brief.Section.Width.Sub(edge.Scale(2)).Scale(1 / float64(legs-1))
+	for k := 1; k < legs-1; k++ {
+		x := edge.Add(between.Scale(float64(k)))
+		for _, h := range t.Geometry.Hollows {
+			if h[0].Sub(edge).Less(x) && x.Less(h[1].Add(edge)) {
+				n++
+				break
+			}
+		}
+	}
+	return n
 }
 
 // layoutOf writes a found layout as a drawing would.
@@ -245,6 +302,9 @@ func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
 				f.add(path, "straight", "a bar end %q is not one that this version judges", end)
 			}
 		}
+		if !r.Yield.IsZero() {
+			f.within(path+"/yield", "yield strength", r.Yield.Amount(), f.leastYield.Amount(), f.mostYield.Amount())
+		}
 		switch r.Face {
 		case Bottom, Top:
 		case Side:
@@ -252,7 +312,7 @@ func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
 				f.add(path, "one row of side bars", "a second row of side bars is given")
 				continue
 			}
-			t.Side = SideSteel{Size: size, Each: r.Count, Spacing: r.Spacing, TensionFace: Bottom}
+			t.Side = SideSteel{Size: size, Each: r.Count, Spacing: r.Spacing, Yield: r.yield(p), TensionFace: Bottom}
 			if !(r.Spacing.Amount().SI() > 0) {
 				f.add(path+"/spacing", "above zero", "side bars need the distance between them, and it is %s", p.System.Format(r.Spacing.Amount()))
 			}
@@ -262,9 +322,6 @@ func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
 			continue
 		}
 		k := int(r.Face) - 1
-		if !r.Yield.IsZero() {
-			f.within(path+"/yield", "yield strength", r.Yield.Amount(), f.leastYield.Amount(), f.mostYield.Amount())
-		}
 		if r.Flange {
 			if row, ok := t.flangeRow(&f, path, r, size); ok {
 				flanges[k] = append(flanges[k], row)

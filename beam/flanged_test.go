@@ -335,14 +335,7 @@ func TestSearchOfSteelBesideTheWeb(t *testing.T) {
 // (ACI 318-19 9.7.5.1): the search adds a third one to the box.
 func TestSearchSpacesBarsForTorque(t *testing.T) {
 	b := plain()
-	at := func(xy ...float64) []beam.Point {
-		var out []beam.Point
-		for i := 0; i < len(xy); i += 2 {
-			out = append(out, beam.Point{X: units.Inch.Of(xy[i]), Y: units.Inch.Of(xy[i+1])})
-		}
-		return out
-	}
-	b.Section = beam.Section{Shape: beam.Polygon, Outline: at(0, 0, 24, 0, 24, 30, 0, 30), Voids: [][]beam.Point{at(7, 7, 17, 7, 17, 23, 7, 23)}}
+	b.Section = beam.Section{Shape: beam.Polygon, Outline: inches(0, 0, 24, 0, 24, 30, 0, 30), Voids: [][]beam.Point{inches(7, 7, 17, 7, 17, 23, 7, 23)}}
 	b.Spans[0] = units.Foot.Of(27)
 	b.Loads = append(b.Loads, beam.Load{Case: beam.Dead, Shape: beam.Torque, At: units.Foot.Of(13.5), Moment: units.KipFoot.Of(40)})
 	r := design(t, b)
@@ -354,4 +347,105 @@ func TestSearchSpacesBarsForTorque(t *testing.T) {
 		}
 	}
 	require.GreaterOrEqual(t, top, 3)
+}
+
+// outcomes are those of of the checks with an id.
+func outcomes(r *beam.Result, id string) (out []beam.Outcome) {
+	for i := range r.Checks {
+		if r.Checks[i].ID == id {
+			out = append(out, r.Checks[i].Outcome)
+		}
+	}
+	return out
+}
+
+// Bars that a layout calls bars of the flange stand clear of the web.
+func TestFlangeBarsStandBesideTheWeb(t *testing.T) {
+	at := func(spacing float64) []beam.Outcome {
+		r := checked(t, hogging(), rowsOf(beam.Row{Mark: "T2", Bar: "#6", Count: 2, Face: beam.Top, Flange: true, Spacing: units.Inch.Of(spacing)}))
+		return outcomes(r, "fit.beside-web")
+	}
+	require.Equal(t, []beam.Outcome{beam.Pass}, at(3+0.375))
+	require.Equal(t, []beam.Outcome{beam.Fail}, at(3+0.374))
+}
+
+// Bars beyond mid-depth are no steel of their face.
+func TestBarsLieInTheirHalf(t *testing.T) {
+	l := rowsOf()
+	l.Transverse[0].To = units.Foot.Of(21.5)
+	for layer := 2; layer <= 6; layer++ {
+		l.Longitudinal = append(l.Longitudinal, beam.Row{Mark: "B2", Bar: "#6", Count: 2, Face: beam.Bottom, Layer: layer})
+	}
+	require.Equal(t, []beam.Outcome{beam.Pass, beam.Pass}, outcomes(checked(t, plain(), l), "fit.half"))
+	l.Longitudinal = append(l.Longitudinal, beam.Row{Mark: "B3", Bar: "#6", Count: 2, Face: beam.Bottom, Layer: 7})
+	require.Equal(t, []beam.Outcome{beam.Fail, beam.Pass}, outcomes(checked(t, plain(), l), "fit.half"))
+}
+
+// Legs between the outer two stand in concrete, side bars in the walls; the
+// search keeps to that.
+func TestSteelStandsClearOfHollows(t *testing.T) {
+	b := plain()
+	b.Section = beam.Section{Shape: beam.Polygon, Outline: inches(0, 0, 40, 0, 40, 36, 0, 36), Voids: [][]beam.Point{inches(8, 8, 32, 8, 32, 28, 8, 28)}}
+	b.Spans, b.Supports, b.Loads = nil, nil, nil
+	b.Demands = []beam.Demand{{Name: "a", Moment: units.KipFoot.Of(600), Shear: units.Kip.Of(110)}}
+	l := beam.Layout{
+		Longitudinal: []beam.Row{
+			{Mark: "B1", Bar: "#8", Count: 8, Face: beam.Bottom, Layer: 1},
+			{Mark: "T1", Bar: "#6", Count: 8, Face: beam.Top, Layer: 1},
+			{Mark: "F1", Bar: "#5", Count: 2, Face: beam.Side, Spacing: units.Inch.Of(9)},
+		},
+		Transverse: []beam.Zone{{Mark: "S1", Bar: "#3", Legs: 4, Spacing: units.Inch.Of(10), Form: "closed"}},
+	}
+	require.Equal(t, []beam.Outcome{beam.Fail}, outcomes(checked(t, b, l), "stirrup.hollow"))
+	l.Transverse[0].Legs = 2
+	require.Empty(t, outcomes(checked(t, b, l), "stirrup.hollow"))
+	require.Equal(t, beam.Pass, outcomes(checked(t, b, l), "fit.hollow")[0])
+	// 2 × 1.5 + 0.375 + 5 in would leave nothing of a wall of 8 in.
+	l.Longitudinal[2].Bar = "#18"
+	l.Longitudinal[2].Count = 1
+	b.Cover = units.Inch.Of(2.7)
+	require.Equal(t, beam.Fail, outcomes(checked(t, b, l), "fit.hollow")[0], "2 × 2.7 + 0.375 + 2.257 in of an 8 in wall")
+	b.Cover = units.Length{}
+	r := design(t, b)
+	for _, z := range r.Layout.Transverse {
+		require.Equal(t, 2, z.Legs)
+	}
+
+	// Between two hollows there is room for a leg.
+	b.Section.Voids = [][]beam.Point{inches(7, 8, 17, 8, 17, 28, 7, 28), inches(23, 8, 33, 8, 33, 28, 23, 28)}
+	l.Longitudinal[2].Bar, l.Transverse[0].Legs = "#5", 3
+	require.Equal(t, []beam.Outcome{beam.Pass}, outcomes(checked(t, b, l), "stirrup.hollow"))
+}
+
+// Side bars have the yield strength of their own row.
+func TestSideBarsOfAnotherGrade(t *testing.T) {
+	b := plain()
+	b.Readings.CountSideBars = true
+	l := rowsOf(beam.Row{Mark: "F1", Bar: "#5", Count: 2, Face: beam.Side, Spacing: units.Inch.Of(6)})
+	l.Transverse[0].To = units.Foot.Of(21.5)
+	full := checked(t, b, l).Flexure[0].Nominal
+	l.Longitudinal[2].Yield = units.KSI.Of(40)
+	soft := checked(t, b, l).Flexure[0].Nominal
+	require.True(t, soft.Less(full))
+	l.Longitudinal[2].Yield = units.PSI.Of(60)
+	_, err := beam.CheckLayout(context.Background(), aci318.ACI31819(), b, l)
+	require.ErrorContains(t, err, "/layout/longitudinal/2/yield")
+}
+
+// A brief as resolved, its flange found from the slab, can be given again.
+func TestResolvedBriefsAreBriefs(t *testing.T) {
+	b := hogging()
+	b.Section.FlangeWidth, b.Section.Slab = units.Length{}, beam.Slab{ClearLeft: units.Foot.Of(6), ClearRight: units.Foot.Of(7)}
+	r := design(t, b)
+	again := design(t, r.Problem.Brief)
+	require.Equal(t, r.Section, again.Section)
+	require.Equal(t, r.Verdict, again.Verdict)
+}
+
+// inches makes points of pairs of inches.
+func inches(xy ...float64) (out []beam.Point) {
+	for i := 0; i < len(xy); i += 2 {
+		out = append(out, beam.Point{X: units.Inch.Of(xy[i]), Y: units.Inch.Of(xy[i+1])})
+	}
+	return out
 }

@@ -20,15 +20,19 @@ type Geometry struct {
 	Perimeter units.Length // outside
 	Form      units.Length // of the perimeter, what is not the top face
 
-	Web         units.Length // least width of concrete at any level, net of hollows
-	WebLeft     units.Length // from the left end to the strip of Section.Width
-	Overall     units.Length // between the ends
-	TopWidth    units.Length // of the faces
-	BottomWidth units.Length
+	Web     units.Length // least width of concrete at any level, net of hollows
+	WebLeft units.Length // from the left end to the strip of Section.Width
+	Overall units.Length // between the ends
+	// OverhangThickness is how thick the outline is just outside the left and
+	// the right side of the strip; zero where nothing is there.
+	OverhangThickness [2]units.Length
+	TopWidth          units.Length // of the faces
+	BottomWidth       units.Length
 
 	// Of a section with hollows: the least concrete between a hollow and the
 	// outside of the strip in which the stirrups stand.
 	Hollow                        bool
+	Hollows                       [][2]units.Length // their left and right ends, from the left side of the strip
 	SideWall, TopWall, BottomWall units.Length
 }
 
@@ -60,6 +64,11 @@ func (s *Section) flanged() Geometry {
 		TopWidth:  s.Width, BottomWidth: s.Width,
 	}
 	t := s.FlangeThickness
+	for i, o := range [2]units.Length{left, right} {
+		if !o.IsZero() {
+			g.OverhangThickness[i] = t
+		}
+	}
 	switch {
 	case s.Flange() == 0 || over.IsZero():
 		g.Parts = mechanics.Rectangle(s.Width, s.Depth)
@@ -299,9 +308,61 @@ func (s *Section) polygon() (g Geometry, faults []Fault) {
 	g.TopWidth, g.BottomWidth = g.Parts[0].Width, g.Parts[len(g.Parts)-1].BottomWidth
 	g.Form = g.Perimeter.Sub(g.TopWidth)
 	g.Web = units.Metre.Of(min(least, right-left))
+	slip := 1e-6 * (right - left)
+	for i, x := range [2]float64{left - slip, right + slip} {
+		g.OverhangThickness[i] = units.Metre.Of(outer.turned().width(x, x))
+	}
 	g.WebLeft, g.Overall = units.Metre.Of(left-ends[0]), units.Metre.Of(ends[1]-ends[0])
 	s.Width, s.Depth = units.Metre.Of(right-left), units.Metre.Of(top-bottom)
 	return g, nil
+}
+
+// turned is the ring with its axes exchanged.
+func (r ring) turned() ring {
+	t := make(ring, len(r))
+	for i, c := range r {
+		t[i] = corner{c.y, c.x}
+	}
+	return t
+}
+
+// clipped is the part of the ring to the left of an upright line; of a ring that
+// every level cuts in one piece.
+func (r ring) clipped(x float64) ring {
+	out := make(ring, 0, len(r)+2)
+	for i, a := range r {
+		b := r[(i+1)%len(r)]
+		if a.x <= x {
+			out = append(out, a)
+		}
+		if (a.x < x && x < b.x) || (b.x < x && x < a.x) {
+			out = append(out, corner{x, a.y + (b.y-a.y)*(x-a.x)/(b.x-a.x)})
+		}
+	}
+	return out
+}
+
+// mirrored is the ring seen from behind.
+func (r ring) mirrored() ring {
+	m := make(ring, len(r))
+	for i, c := range r {
+		m[len(r)-1-i] = corner{-c.x, c.y}
+	}
+	return m
+}
+
+// Clipped is the area inside the outside perimeter, and that perimeter, of a
+// polygon whose overhangs beyond the strip of its Width are cut off at given
+// widths. Its Width and Depth are those that GeometryOf found.
+func (s *Section) Clipped(g *Geometry, left, right units.Length) (units.Area, units.Length) {
+	r := ringOf(s.Outline)
+	from := math.Inf(1)
+	for _, c := range r {
+		from = min(from, c.x)
+	}
+	side := from + g.WebLeft.In(units.Metre)
+	r = r.clipped(side + s.Width.Add(right).In(units.Metre)).mirrored().clipped(-(side - left.In(units.Metre)))
+	return units.SquareMetre.Of(r.area()), units.Metre.Of(r.perimeter())
 }
 
 const (
@@ -313,7 +374,9 @@ const (
 // wall takes a hollow into account for the thickness of the walls about it.
 func (g *Geometry) wall(v ring, left, right, top, bottom float64) {
 	side, up, down := math.Inf(1), math.Inf(1), math.Inf(1)
+	from, to := math.Inf(1), math.Inf(-1)
 	for _, c := range v {
+		from, to = min(from, c.x-left), max(to, c.x-left)
 		side = min(side, c.x-left, right-c.x)
 		up, down = min(up, top-c.y), min(down, c.y-bottom)
 	}
@@ -326,4 +389,5 @@ func (g *Geometry) wall(v ring, left, right, top, bottom float64) {
 	take(&g.TopWall, up)
 	take(&g.BottomWall, down)
 	g.Hollow = true
+	g.Hollows = append(g.Hollows, [2]units.Length{units.Metre.Of(from), units.Metre.Of(to)})
 }

@@ -97,6 +97,37 @@ func TestGeometryOfEveryShape(t *testing.T) {
 	}
 }
 
+// A tee cut off at its overhangs is a tee of those overhangs, cut at its web a
+// rectangle, and cut beyond its ends whole: elementary geometry. So is a section
+// with slabs at two levels, and one with haunches.
+func TestClippedOutlines(t *testing.T) {
+	tests := []struct {
+		name            string
+		points          []beam.Point
+		left, right     float64
+		area, perimeter float64
+		thick           [2]float64
+	}{
+		{"tee, whole", outline(0, 600, 1100, 600, 1100, 480, 700, 480, 700, 0, 400, 0, 400, 480, 0, 480), 400, 400, 276000, 3400, [2]float64{120, 120}},
+		{"tee, wider than it is", outline(0, 600, 1100, 600, 1100, 480, 700, 480, 700, 0, 400, 0, 400, 480, 0, 480), 900, 900, 276000, 3400, [2]float64{120, 120}},
+		{"tee, cut", outline(0, 600, 1100, 600, 1100, 480, 700, 480, 700, 0, 400, 0, 400, 480, 0, 480), 100, 250, 180000 + 350*120, 2 * (650 + 600), [2]float64{120, 120}},
+		{"tee, its web alone", outline(0, 600, 1100, 600, 1100, 480, 700, 480, 700, 0, 400, 0, 400, 480, 0, 480), 0, 0, 180000, 1800, [2]float64{120, 120}},
+		{"slabs at two levels", outline(0, 0, 900, 0, 900, 100, 500, 100, 500, 500, 700, 500, 700, 600, 0, 600), 0, 300, 500*600 + 300*100 + 200*100, 2*(800+600) + 2*200, [2]float64{0, 200}},
+		{"haunches", outline(0, 400, 900, 400, 600, 300, 600, 0, 300, 0, 300, 300), 150, 300, 300*400 + 150*(100+50)/2 + 300*100/2, 1000 + 0 + 300 + 300 + 300 + (750 - 1000) + 50 + math.Hypot(150, 50) + math.Hypot(300, 100), [2]float64{100, 100}},
+	}
+	for _, tt := range tests {
+		t.Run(tt.name, func(t *testing.T) {
+			g, s := measured(t, beam.Section{Shape: beam.Polygon, Outline: tt.points})
+			area, perimeter := s.Clipped(&g, mm(tt.left), mm(tt.right))
+			require.InEpsilon(t, tt.area, area.In(units.SquareMillimetre), 1e-9)
+			require.InEpsilon(t, tt.perimeter, perimeter.In(units.Millimetre), 1e-9)
+			for i, thick := range tt.thick {
+				require.InDelta(t, thick, g.OverhangThickness[i].In(units.Millimetre), 0.01)
+			}
+		})
+	}
+}
+
 func TestGeometryRefusesWhatIsNoSection(t *testing.T) {
 	square := outline(0, 0, 400, 0, 400, 400, 0, 400)
 	tests := []struct {

@@ -57,8 +57,9 @@ type search struct {
 	first   Layout // of the first of kept, with the side bars it needs
 	whole   bool   // first passes as a whole member too
 	rejects rejectLog
-	logs    bool    // log every arrangement of stirrups that fails
-	near    [3]near // by face, and at 0 for whole pairs
+	logs    bool          // log every arrangement of stirrups that fails
+	near    [3]near       // by face, and at 0 for whole pairs
+	alone   [Top + 1]bool // faces at which some set passes by itself
 }
 
 // laid is what lies at a face of the trial. The zero value is not known.
@@ -136,6 +137,9 @@ func (s *search) run(ctx context.Context) error {
 		return nil
 	}
 	for _, face := range [2]Face{Bottom, Top} {
+		if s.alone[face] {
+			continue // what fails is not the steel of this face
+		}
 		hopeless := make(map[barPlan]bool)
 		for _, tie := range s.ties {
 			if err := s.compressed(ctx, tie, face, hopeless); err != nil {
@@ -245,6 +249,7 @@ func (s *search) flangeRoom(face Face, tie bars.Size, size *bars.Size) (r flange
 		inset = s.t.Cover.Add(tie.Diameter).Add(radius.Max(bend.Inside.Scale(0.5)))
 	}
 	r.reach, r.web = r.reach.Add(inset), web.Sub(inset.Scale(2))
+	r.least = r.least.Max(inset.Add(radius)) // the first stands clear of the web
 	return r
 }
 
@@ -334,6 +339,7 @@ func (s *search) accepts(face Face, tie bars.Size, b *barSet) bool {
 		return false
 	}
 	b.passes = s.judge(face, Fitting, Bending)
+	s.alone[face] = s.alone[face] || b.passes
 	if worst := s.worst(); !s.near[face].ok || worst < s.near[face].worst {
 		s.near[face] = near{ok: true, worst: worst, set: *b}
 	}

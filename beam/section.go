@@ -134,6 +134,7 @@ func (s *Section) check(f *faults, member bool) {
 	absent("flange_width", !flanged && !s.FlangeWidth.IsZero(), a)
 	absent("slab", s.Flange() != Top && !s.Slab.IsZero(), a)
 	absent("isolated", s.Shape != Tee && s.Isolated, a)
+	absent("joist", s.Flange() != Top && s.Joist, a)
 	if s.Shape == 0 {
 		return
 	}
@@ -151,13 +152,13 @@ func (s *Section) check(f *faults, member bool) {
 	if !flanged {
 		return
 	}
-	if within("flange_thickness", "flange thickness", s.FlangeThickness) && deep && !s.FlangeThickness.Less(s.Depth) {
-		f.add("/section/flange_thickness", "less than the depth", "flange thickness is %s", f.system.Format(s.FlangeThickness.Amount()))
+	if within("flange_thickness", "flange thickness", s.FlangeThickness) && deep && !s.FlangeThickness.Add(f.leastWeb).AtMost(s.Depth) {
+		f.add("/section/flange_thickness", "less than the depth by "+f.system.Format(f.leastWeb.Amount()), "flange thickness is %s", f.system.Format(s.FlangeThickness.Amount()))
 	}
 	switch {
-	case !s.FlangeWidth.IsZero() && !s.Slab.IsZero():
+	case !s.FlangeWidth.IsZero() && !s.Slab.IsZero() && s.OverhangLeft.Add(s.OverhangRight).IsZero():
 		f.add("/section/slab", "", "a flange has either a width or a slab, not both")
-	case !s.FlangeWidth.IsZero():
+	case !s.FlangeWidth.IsZero() && s.Slab.IsZero():
 		if within("flange_width", "flange width", s.FlangeWidth) && sound && !s.Width.AtMost(s.FlangeWidth) {
 			f.add("/section/flange_width", "no less than the web, "+f.system.Format(s.Width.Amount()), "flange width is %s", f.system.Format(s.FlangeWidth.Amount()))
 		}

@@ -42,6 +42,9 @@ func (s *search) eachStirrup(tie bars.Size, promising func(mass float64) bool, k
 	}
 	before := 0
 	for legs := 2; legs <= s.p.Brief.Preferences.MaxLegs; legs++ {
+		if s.t.standingInHollows(tie.Diameter, legs) > 0 {
+			continue
+		}
 		uniform, ok := s.uniform(tie, legs)
 		if !ok {
 			continue

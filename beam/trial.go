@@ -71,6 +71,7 @@ type SideSteel struct {
 	Size        bars.Size
 	Each        int
 	Spacing     units.Length
+	Yield       units.Stress
 	TensionFace Face
 }
 
@@ -83,6 +84,15 @@ type RowSteel struct {
 	Area   units.Area
 	Yield  units.Stress
 	Flange bool // beside the web
+}
+
+// Highest is the distance from the face to the centre of the bar farthest from
+// it.
+func (f *FaceSteel) Highest() (y units.Length) {
+	for i := range f.Rows {
+		y = y.Max(f.Rows[i].Height)
+	}
+	return y
 }
 
 // Steel is the steel of a face.
@@ -137,7 +147,7 @@ func (t *Trial) Layers(s Sense, modulus units.Stress) []mechanics.Layer {
 		}
 	}
 	if t.Brief.Readings.CountSideBars && !t.Twisted {
-		steel := mechanics.Steel{Modulus: modulus, Yield: t.Brief.Reinforcement.Yield}
+		steel := mechanics.Steel{Modulus: modulus, Yield: t.Side.Yield}
 		for i := range t.Side.Each {
 			t.layers = append(t.layers, mechanics.Layer{Depth: t.sideDepth(i), Area: t.Side.Size.Area.Scale(2), Steel: steel})
 		}

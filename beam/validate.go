@@ -16,6 +16,7 @@ import (
 // built and narrow enough that a slipped unit is caught.
 type bounds struct {
 	leastSide, mostSide         units.Length
+	leastWeb                    units.Length // below a flange
 	leastStrength, mostStrength units.Stress
 	leastYield, mostYield       units.Stress
 	leastDensity, mostDensity   units.Density
@@ -29,7 +30,7 @@ type bounds struct {
 
 var boundsIn = [...]bounds{
 	units.SI: {
-		units.Millimetre.Of(50), units.Millimetre.Of(10_000),
+		units.Millimetre.Of(50), units.Millimetre.Of(10_000), units.Millimetre.Of(0.2),
 		units.Megapascal.Of(1), units.Megapascal.Of(250),
 		units.Megapascal.Of(100), units.Megapascal.Of(1500),
 		units.KilogramPerCubicMetre.Of(500), units.KilogramPerCubicMetre.Of(5000),
@@ -39,7 +40,7 @@ var boundsIn = [...]bounds{
 		units.KilonewtonPerMetre.Of(1e5), units.Kilonewton.Of(1e6), units.KilonewtonMetre.Of(1e7),
 	},
 	units.US: {
-		units.Inch.Of(2), units.Inch.Of(400),
+		units.Inch.Of(2), units.Inch.Of(400), units.Inch.Of(0.01),
 		units.KSI.Of(0.15), units.KSI.Of(36),
 		units.KSI.Of(15), units.KSI.Of(200),
 		units.PoundPerCubicFoot.Of(30), units.PoundPerCubicFoot.Of(300),

@@ -224,34 +224,40 @@ func (s *shearSpan) apart(at, end units.Length) units.Length {
 	return d
 }
 
-// gap judges a length that no zone reaches. What counts is how far the stirrups
-// on either side of it are apart, or the first one from the face of the
-// support: up to a spacing, nothing is amiss; between two zones up to two
-// spacings are judged as the spacing that they are; anything else as bare.
+// gap judges a length that no zone reaches, by how far the stirrups on either
+// side of it are apart. At the end of a span a zone goes on to the face as long
+// as its first stirrup is no further from it than a spacing; between two zones
+// the weaker stirrups are judged at the distance that they are apart, as long
+// as that is no more than two spacings of the wider. Anything else is bare.
 func (s *shearSpan) gap(dst []beam.Check, breaks []units.Length, at, end units.Length, note string) []beam.Check {
 	before, after := s.neighbours(at, end)
-	if before < 0 && after < 0 {
-		return s.judge(dst, breaks, -1, units.Length{}, at, end, note)
-	}
-	wider, weaker := max(before, after), max(before, after)
-	if before >= 0 && after >= 0 {
-		a, b := &s.t.Zones[before], &s.t.Zones[after]
-		wider, weaker = before, before
-		if a.Spacing.Less(b.Spacing) {
-			wider = after
-		}
-		if s.t.ZoneBar[after].Area.Scale(float64(b.Legs)).Less(s.t.ZoneBar[before].Area.Scale(float64(a.Legs))) {
-			weaker = after
-		}
-	}
-	spacing, apart := s.t.Zones[wider].Spacing, s.apart(at, end)
+	apart := s.apart(at, end)
 	switch {
-	case apart.AtMost(spacing):
-		return dst
-	case before < 0 || after < 0 || !apart.AtMost(spacing.Scale(2)):
-		return s.judge(dst, breaks, -1, units.Length{}, at, end, note)
+	case before < 0 && after < 0:
+	case before < 0 || after < 0:
+		k := max(before, after)
+		if spacing := s.t.Zones[k].Spacing; apart.AtMost(spacing) {
+			return s.judge(dst, breaks, k, spacing, at, end, "")
+		}
+	case apart.AtMost(s.t.Zones[before].Spacing.Max(s.t.Zones[after].Spacing).Scale(2)):
+		return s.judge(dst, breaks, s.weaker(before, after), apart, at, end, noteBetween)
 	}
-	return s.judge(dst, breaks, weaker, apart, at, end, noteBetween)
+	return s.judge(dst, breaks, -1, units.Length{}, at, end, note)
+}
+
+// weaker is the zone of two whose stirrups count for less between them: open
+// ones, or those of less area.
+func (s *shearSpan) weaker(a, b int) int {
+	if open := s.t.Zones[b].Form == "open"; open != (s.t.Zones[a].Form == "open") {
+		if open {
+			return b
+		}
+		return a
+	}
+	if s.t.ZoneBar[b].Area.Scale(float64(s.t.Zones[b].Legs)).Less(s.t.ZoneBar[a].Area.Scale(float64(s.t.Zones[a].Legs))) {
+		return b
+	}
+	return a
 }
 
 // judge judges the length between two places with the stirrups of zone k at a

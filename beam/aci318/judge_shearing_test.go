@@ -223,11 +223,54 @@ func TestShortGapIsAWiderSpacing(t *testing.T) {
 	legs := tr.ZoneBar[0].Area.Scale(2).In(units.SquareInch)
 	require.InEpsilon(t, 0.75*(2*math.Sqrt(4000)*14*21.625+legs*60000*21.625/10.5), valueIn(t, checks[2].Capacity, "lb"), 1e-9)
 
-	// A wider zone beside a closer one bridges up to its own spacing.
+	// Beside a closer zone too, the stirrups are as far apart as they stand:
+	// 3 + 1 + 5 in.
 	tr = shearTrial(t, ACI31819(), nil)
 	addZone(tr, 2, 6, 6, 96)
 	addZone(tr, 2, 10, 97, 258)
-	require.Len(t, checksOf(us19.judgeShearing(nil, tr), "shear.strength"), 2)
+	checks = checksOf(us19.judgeShearing(nil, tr), "shear.strength")
+	require.Len(t, checks, 3)
+	require.InEpsilon(t, 0.75*(2*math.Sqrt(4000)*14*21.625+legs*60000*21.625/9), valueIn(t, checks[2].Capacity, "lb"), 1e-9)
+}
+
+// Stirrups that are set so wide that they do not count bridge nothing: the
+// sections on either side of them are judged with what is there, between zones
+// and from the face (Table 9.7.6.2.2, 9.6.3.1).
+func TestWideZonesBridgeNothing(t *testing.T) {
+	tr := shearTrial(t, ACI31819(), nil)
+	addZone(tr, 2, 270, 131.5, 132.5)
+	checks := us19.judgeShearing(nil, tr)
+	strength := checksOf(checks, "shear.strength")
+	require.Len(t, strength, 3)
+	require.Equal(t, beam.Fail, strength[1].Outcome, "from the left face")
+	require.Equal(t, beam.Fail, strength[2].Outcome, "to the right face")
+
+	tr = shearTrial(t, ACI31819(), nil)
+	addZone(tr, 2, 4, 6, 86)
+	addZone(tr, 2, 40, 104, 160)
+	addZone(tr, 2, 4, 178, 258)
+	failed := map[string]bool{}
+	for _, c := range us19.judgeShearing(nil, tr) {
+		failed[c.ID] = failed[c.ID] || c.Outcome == beam.Fail
+	}
+	require.True(t, failed["shear.spacing-along"])
+	require.True(t, failed["shear.minimum-stirrups"])
+}
+
+// Between open and closed stirrups the open ones are what is there, and of two
+// like ones those of less area.
+func TestWeakerOfTwoZones(t *testing.T) {
+	tr := shearTrial(t, ACI31819(), nil)
+	addZone(tr, 4, 10, 6, 90)
+	addZone(tr, 2, 10, 96, 258)
+	s := newShearSpan(tr, 1)
+	require.Equal(t, 1, s.weaker(0, 1))
+	require.Equal(t, 1, s.weaker(1, 0))
+	tr.Zones[0].Form = "open"
+	require.Equal(t, 0, s.weaker(0, 1))
+	require.Equal(t, 0, s.weaker(1, 0))
+	tr.Zones[1].Form = "open"
+	require.Equal(t, 1, s.weaker(0, 1))
 }
 
 // A gap beside the face stands for the sections up to d from it, and fails.

@@ -175,10 +175,10 @@ func TestStrengthsNoteWhatDecidedShear(t *testing.T) {
 			q.Layers = []beam.SteelLayer{{Area: in2(1), Depth: in(7.5), Yield: psi(60000)}}
 		}, "exempt: the beam is no deeper than 10 in", ""},
 		{"joist", ACI31819(), func(q *beam.SectionQuery) {
-			q.Section = beam.Section{Shape: beam.Rectangular, Width: in(8), Depth: in(26), Joist: true}
+			q.Section = beam.Section{Shape: beam.Tee, Width: in(8), Depth: in(26), FlangeThickness: in(4), FlangeWidth: in(30), Joist: true}
 		}, "Vc holds the 1.1 of joists (9.8.1.5)", "breaks a limit"},
 		{"no joist", ACI31819(), func(q *beam.SectionQuery) {
-			q.Section = beam.Section{Shape: beam.Rectangular, Width: in(7), Depth: in(26), Joist: true}
+			q.Section = beam.Section{Shape: beam.Tee, Width: in(6), Depth: in(26), FlangeThickness: in(4), FlangeWidth: in(30), Joist: true}
 		}, "the rib breaks a limit of 9.8.1 and is no joist (9.8.1.8)", "1.1"},
 		{"blend", ACI31814(), func(q *beam.SectionQuery) {
 			q.Concrete.Kind, q.Concrete.Normal, q.Concrete.Density = beam.FineBlend, 0.4, units.PoundPerCubicFoot.Of(110)
