@@ -57,7 +57,7 @@ type torsionShape struct {
 	walls               bool    // hollow in its strip alone, or as a whole
 	enclosed            float64 // Acp
 	perimeter           float64 // pcp
-	gross               float64 // Ag: Acp less the hollows
+	gross               float64 // Ag of that outline: Acp less the hollows
 }
 
 // basis is what stands squared over pcp in 22.7.4.1.
@@ -120,6 +120,7 @@ func torsionOverhangs(s *beam.Section) (left, right units.Length) {
 // at, in the units of the edition.
 type torsionStrength struct {
 	torsionShape
+	area           float64 // Ag of the whole section, flanges that 9.2.4.4 leaves out included
 	strength, root float64 // f'c, and √f'c as it is capped without exception, 22.7.2.1
 	rootCapped     bool
 	light          lightness
@@ -134,8 +135,8 @@ type torsionStrength struct {
 // positive.
 func (e *edition) torsionStrength(s *beam.Section, g *beam.Geometry, c *beam.Concrete, axial units.Force) torsionStrength {
 	t := torsionStrength{
-		torsionShape: e.torsionShape(s, g),
-		strength:     e.stressIn(c.Strength), root: e.sqrtStrength(c.Strength), light: e.lightness(c), phi: e.reduction.torsion,
+		torsionShape: e.torsionShape(s, g), area: e.areaIn(g.Gross),
+		strength: e.stressIn(c.Strength), root: e.sqrtStrength(c.Strength), light: e.lightness(c), phi: e.reduction.torsion,
 	}
 	if t.root > e.materials.rootCap {
 		t.root, t.rootCapped = e.materials.rootCap, true
@@ -149,7 +150,7 @@ func (t *torsionStrength) load(e *edition, axial units.Force) {
 	r := &e.torsion
 	t.axial, t.axialFactor = e.forceIn(axial), 1
 	if t.axial != 0 {
-		t.axialFactor = math.Sqrt(max(0, 1+t.axial/(r.axial*t.gross*t.light.factor*t.root)))
+		t.axialFactor = math.Sqrt(max(0, 1+t.axial/(r.axial*t.area*t.light.factor*t.root)))
 	}
 	unit := t.light.factor * t.root / t.perimeter * t.axialFactor
 	t.threshold = r.threshold * unit * t.basis() * t.basis()

@@ -93,3 +93,27 @@ func TestTorqueThreshold(t *testing.T) {
 	require.Equal(t, "A", got.Combination)
 	requireEvaluable(t, &got)
 }
+
+// The factor for an axial force goes by Ag of the whole section (22.7.4.1,
+// 22.7.5.1), whatever of its flanges counts in Acp. Own calculation: a tee of 12
+// by 24 in. with a flange of 100 by 2 in. leaves Acp at 288 in2, while Ag is
+// 288 + 88 × 2 = 464 in2.
+func TestAxialFactorOfTorsionGoesByTheWholeSection(t *testing.T) {
+	b := demandBrief(beam.Demand{Name: "A", Moment: units.KipFoot.Of(100), Shear: units.Kip.Of(10), Torque: units.KipFoot.Of(6.8), Axial: units.Kip.Of(100)})
+	b.Section = beam.Section{Shape: beam.Tee, Width: in(12), Depth: in(24), FlangeThickness: in(2), FlangeWidth: in(100)}
+	tr := trialOf(t, problemOf(t, ACI31819(), b), "#3", []group{{3, "#8"}}, []group{{2, "#6"}})
+	tr.Record = true
+	c := only(t, us19.judgeTorsion(nil, tr), "torsion.threshold")
+	root := math.Sqrt(4000)
+	factor := math.Sqrt(1 + 100000/(4*464*root))
+	require.InEpsilon(t, 0.75*root*288*288/72*factor, valueIn(t, c.Capacity, "kip-ft")*12000, 1e-9)
+	require.Equal(t, beam.NotApplicable, c.Outcome, "6.8 kip-ft is not below 6.2")
+	require.True(t, us19.twists(tr.Problem))
+	requireEvaluable(t, &c)
+
+	// So it does without the hollows of a box, whose threshold goes by its
+	// concrete squared.
+	s := torsionOf(t, &us19, box(5), &b.Concrete, units.Kip.Of(100))
+	require.InEpsilon(t, math.Sqrt(1+100000/(4*s.gross*root)), s.axialFactor, 1e-12)
+	require.Less(t, s.gross, s.enclosed)
+}

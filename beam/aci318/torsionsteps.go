@@ -37,20 +37,20 @@ func (t *torsionStrength) thresholdSteps(e *edition) []beam.Step {
 		out.note("capped")
 	}
 	t.outlineSteps(e, &out)
-	gross, basis := "Acp", "Acp"
-	if t.gross != t.enclosed {
-		out.given("Ag", "area of the concrete alone", "22.7.4.1", e.asArea(t.gross))
-		gross = "Ag"
-	}
+	basis := "Acp"
 	if t.hollow {
-		basis = "Ag"
-		out.note("a hollow section: Ag in place of Acp")
+		if basis = "Ag"; t.axial != 0 { // whose Ag is of the whole section
+			basis = "Ag,cp"
+		}
+		out.given(basis, "what of Acp is concrete", "22.7.4.1", e.asArea(t.gross))
+		out.note("a hollow section: this in place of Acp")
 	}
 	expression := number(r.threshold) + " λ r " + basis + "^2 / pcp"
 	if t.axial != 0 {
 		out.given("Nu", "factored axial force, compression positive", "", e.asForce(t.axial))
+		out.given("Ag", "area of the concrete of the whole section", "22.7.4.1", e.asArea(t.area))
 		out.find("k", "factor for the axial force", "22.7.4.1",
-			"√(max(0, 1 + Nu / ("+number(r.axial)+" "+gross+" λ r)))", asPlain(t.axialFactor))
+			"√(max(0, 1 + Nu / ("+number(r.axial)+" Ag λ r)))", asPlain(t.axialFactor))
 		expression += " k"
 	}
 	out.find("Tth", "threshold torsion", "22.7.4.1", expression, e.asMoment(t.threshold))
