@@ -3,8 +3,10 @@ package aci318
 import (
 	"fmt"
 	"math"
+	"slices"
 
 	"soffit.example/beam"
+	"soffit.example/beam/mechanics"
 	"soffit.example/units"
 )
 
@@ -25,9 +27,11 @@ type queryTorsion struct {
 	unfit  string
 	values sectionTorsion // of a torque, or of none
 
-	fy      float64 // of the longitudinal steel as it may be used
-	pull    float64 // Al fy
-	least   float64 // Al,min fy
+	parts   []mechanics.Part
+	yield   units.Stress // the least of the longitudinal steel,
+	fy      float64      // and as it may be used in torsion
+	pull    float64      // Al fy
+	least   float64      // Al,min fy
 	halves  [2]queryHalf
 	surplus float64 // Al left over by bending
 }
@@ -36,7 +40,8 @@ type queryTorsion struct {
 // section. Each half of a stirrup has half its perimeter, and half of Al.
 type queryHalf struct {
 	area    float64
-	bending float64 // of it in tension under the moment
+	first   float64 // moment of that about the top face
+	bending float64 // of it in tension under the moment and the axial force
 	relief  float64 // what flexural compression takes over, 9.5.4.5
 	need    float64
 	broken  string
@@ -46,7 +51,7 @@ type queryHalf struct {
 // asked for cannot be judged.
 func (e *edition) queryTorsion(q *beam.SectionQuery, g *beam.Geometry, web *webSteel, s *sectionShear, f *beam.FlexureStrength) (queryTorsion, []beam.Fault) {
 	var faults []beam.Fault
-	t := queryTorsion{e: e, q: q, web: web, shear: s, strength: e.torsionStrength(&q.Section, g, &q.Concrete, q.Demand.Axial)}
+	t := queryTorsion{e: e, q: q, web: web, shear: s, parts: g.Parts, strength: e.torsionStrength(&q.Section, g, &q.Concrete, q.Demand.Axial)}
 	a := beam.Action{Torque: q.Demand.Torque}
 	if q.Demand.Path == beam.CompatibilityTorque {
 		a.Compatible = a.Torque
@@ -101,37 +106,44 @@ func angleFault(angle float64) (fault beam.Fault, wrong bool) {
 func (t *queryTorsion) longitudinal(f *beam.FlexureStrength) {
 	e, q := t.e, t.q
 	depth := e.lengthIn(q.Section.Depth)
-	yield := q.Layers[0].Yield
+	t.yield = q.Layers[0].Yield
 	for _, l := range q.Layers {
-		yield = yield.Min(l.Yield)
+		t.yield = t.yield.Min(l.Yield)
 		at, area := e.lengthIn(l.Depth), e.areaIn(l.Area)
-		switch {
-		case at > depth/2:
-			t.halves[0].area += area
-		case at < depth/2:
-			t.halves[1].area += area
-		default:
-			t.halves[0].area += area / 2
-			t.halves[1].area += area / 2
+		lower := 0.5 // of a layer at mid-depth
+		if at != depth/2 {
+			lower = 0
+			if at > depth/2 {
+				lower = 1
+			}
 		}
+		t.halves[0].take(lower*area, at)
+		t.halves[1].take((1-lower)*area, at)
 	}
-	t.fy = e.torsionYield(yield)
+	t.fy = e.torsionYield(t.yield)
 	if t.cage.area > 0 && !t.torque.neglected {
 		t.pull, t.least = t.cage.pullFor(t.cage.legFor(t.torque.used))
 	}
 	tension := senseIndex(q.Bending)
+	pulling, pressed := &t.halves[tension], &t.halves[1-tension]
+	if q.Demand.Axial.Compare(units.Force{}) < 0 {
+		t.pullBoth(f, pulling, pressed)
+	} else {
+		pulling.bend(t, f)
+		pressed.press(t, f, math.Abs(e.momentIn(q.Demand.Moment)))
+	}
 	t.surplus = math.Inf(1)
 	for i := range t.halves {
 		h := &t.halves[i]
-		if i == tension {
-			h.bend(t, f)
-		} else {
-			h.press(t, f)
-		}
 		share, least := max(t.pull, t.least)/t.fy/2, t.least/t.fy/2
 		h.need = max(share+h.bending-h.relief, least)
 		t.surplus = min(t.surplus, max(0, 2*(h.area-h.bending+min(h.relief, max(0, share-least)))))
 	}
+}
+
+func (h *queryHalf) take(area, at float64) {
+	h.area += area
+	h.first += area * at
 }
 
 // bend finds the steel that the moment takes of the half in tension: a moment
@@ -142,7 +154,6 @@ func (h *queryHalf) bend(t *queryTorsion, f *beam.FlexureStrength) {
 	moment, design := math.Abs(e.momentIn(d.Moment)), e.momentIn(f.Design)
 	switch {
 	case moment == 0:
-		h.bending = max(0, -e.forceIn(d.Axial)/(e.reduction.tension*t.fy))
 	case !units.AtMost(moment, design):
 		h.broken = noteBeyondBending
 		h.bending = h.area
@@ -151,13 +162,50 @@ func (h *queryHalf) bend(t *queryTorsion, f *beam.FlexureStrength) {
 	}
 }
 
-// press finds the relief of the half in compression.
-func (h *queryHalf) press(t *queryTorsion, f *beam.FlexureStrength) {
-	e, d := t.e, &t.q.Demand
-	h.bending = max(0, -e.forceIn(d.Axial)/(e.reduction.tension*t.fy))
-	if lever := e.lengthIn(f.EffectiveDepth); lever > 0 {
-		h.relief = math.Abs(e.momentIn(d.Moment)) / (creditShare * lever * t.fy)
+// press finds the relief of the half in compression by a moment about the
+// tension steel.
+func (h *queryHalf) press(t *queryTorsion, f *beam.FlexureStrength, moment float64) {
+	if lever := t.e.lengthIn(f.EffectiveDepth); lever > 0 {
+		h.relief = moment / (creditShare * lever * t.fy)
 	}
+}
+
+// pullBoth shares a moment and an axial tension between the halves. Where the
+// tension acts beyond the steel of the half that the moment pulls, that half
+// needs the steel of 22.2 for the moment about it and for the tension. Where it
+// acts between the steel of both, all of the section is in tension: each takes
+// its part by the lever rule, and nothing is relieved.
+func (t *queryTorsion) pullBoth(f *beam.FlexureStrength, pulling, pressed *queryHalf) {
+	e, q := t.e, t.q
+	if pulling.area == 0 || pressed.area == 0 { // refused for that
+		return
+	}
+	moment, tension := math.Abs(e.momentIn(q.Demand.Moment)), -e.forceIn(q.Demand.Axial)
+	if !units.AtMost(moment, e.momentIn(f.Design)) {
+		pulling.broken = noteBeyondBending
+	}
+	z := e.sizing(t.parts, q.Bending, q.Concrete.Strength, t.yield, units.Length{}, f.ExtremeDepth, q.Readings.RoundedYield)
+	top := pressed.first / pressed.area
+	z.depth = pulling.first / pulling.area
+	if z.hogging {
+		z.depth, top = z.height-z.depth, z.height-top
+	}
+	z.extreme = max(z.extreme, z.depth)
+	gross, first := z.concrete(z.height)
+	about := moment - tension*(z.depth-first/gross)
+	if about <= 0 {
+		force := (moment + tension*(first/gross-top)) / (z.depth - top)
+		by := z.reduction.tension * z.fy
+		pulling.bending, pressed.bending = max(0, force)/by, max(0, tension-force)/by
+		return
+	}
+	r := z.tension(about)
+	if !r.ok {
+		pulling.broken, pulling.bending = noteBeyondBending, pulling.area
+		return
+	}
+	pulling.bending = r.area + tension/(r.phi*z.fy)
+	pressed.press(t, f, about)
 }
 
 // answer gives the strength with what is known of it.
@@ -274,6 +322,35 @@ func (t *queryTorsion) checks() []beam.Check {
 		case h.area == 0:
 			refuse(c, "no longitudinal steel lies in this half of the section")
 		}
+	}
+	return append(out, t.arrangement()...)
+}
+
+// arrangement says what of 9.7.5 layers of steel cannot show, and judges what
+// they do: bars of neighbouring layers are no closer to each other than these.
+func (t *queryTorsion) arrangement() []beam.Check {
+	e, name := t.e, t.q.Demand.Name
+	depths := make([]units.Length, len(t.q.Layers))
+	for i, l := range t.q.Layers {
+		depths[i] = l.Depth
+	}
+	slices.SortFunc(depths, units.Length.Compare)
+	var widest units.Length
+	for i := range depths[1:] {
+		widest = widest.Max(depths[i+1].Sub(depths[i]))
+	}
+	around := beam.NotJudgedCheck("torsion.longitudinal-spacing", "9.7.5.1",
+		"layers do not say how far bars are apart across the section: no more than "+e.length.Format(e.lengthOf(e.torsion.around)))
+	if limit := e.lengthOf(e.torsion.around); !widest.AtMost(limit) {
+		around.Compare(widest.Amount(), limit.Amount())
+		around.Reason = "no bars lie between two of the layers"
+	}
+	corners := beam.NotJudgedCheck("torsion.corners", "9.7.5.1", "layers do not say whether a bar lies in each corner of the closed stirrups")
+	diameter := beam.NotJudgedCheck("torsion.bar-diameter", "9.7.5.2",
+		"layers do not say how thick their bars are: at least "+e.length.Format(e.leastTorsionBar(t.q.Stirrups.Spacing)))
+	out := []beam.Check{around, corners, diameter}
+	for i := range out {
+		out[i].Combination = name
 	}
 	return out
 }
