@@ -326,10 +326,11 @@ func (t *queryTorsion) checks() []beam.Check {
 	return append(out, t.arrangement()...)
 }
 
-// arrangement says what of 9.7.5 layers of steel cannot show, and judges what
-// they do: bars of neighbouring layers are no closer to each other than these.
+// arrangement says what of 9.7.5 layers of steel cannot show. Neither do they
+// show all bars: those along the sides may be left out where bending does
+// without them.
 func (t *queryTorsion) arrangement() []beam.Check {
-	e, name := t.e, t.q.Demand.Name
+	e := t.e
 	depths := make([]units.Length, len(t.q.Layers))
 	for i, l := range t.q.Layers {
 		depths[i] = l.Depth
@@ -339,18 +340,19 @@ func (t *queryTorsion) arrangement() []beam.Check {
 	for i := range depths[1:] {
 		widest = widest.Max(depths[i+1].Sub(depths[i]))
 	}
-	around := beam.NotJudgedCheck("torsion.longitudinal-spacing", "9.7.5.1",
-		"layers do not say how far bars are apart across the section: no more than "+e.length.Format(e.lengthOf(e.torsion.around)))
-	if limit := e.lengthOf(e.torsion.around); !widest.AtMost(limit) {
-		around.Compare(widest.Amount(), limit.Amount())
-		around.Reason = "no bars lie between two of the layers"
+	limit := e.lengthOf(e.torsion.around)
+	apart := "layers do not say how far bars are apart round the section: no more than " + e.length.Format(limit)
+	if !widest.AtMost(limit) {
+		apart += "; they leave " + e.length.Format(widest) + " for bars along the sides to lie in"
 	}
-	corners := beam.NotJudgedCheck("torsion.corners", "9.7.5.1", "layers do not say whether a bar lies in each corner of the closed stirrups")
-	diameter := beam.NotJudgedCheck("torsion.bar-diameter", "9.7.5.2",
-		"layers do not say how thick their bars are: at least "+e.length.Format(e.leastTorsionBar(t.q.Stirrups.Spacing)))
-	out := []beam.Check{around, corners, diameter}
+	out := []beam.Check{
+		beam.NotJudgedCheck("torsion.longitudinal-spacing", "9.7.5.1", apart),
+		beam.NotJudgedCheck("torsion.corners", "9.7.5.1", "layers do not say whether a bar lies in each corner of the closed stirrups"),
+		beam.NotJudgedCheck("torsion.bar-diameter", "9.7.5.2",
+			"layers do not say how thick their bars are: at least "+e.length.Format(e.leastTorsionBar(t.q.Stirrups.Spacing))),
+	}
 	for i := range out {
-		out[i].Combination = name
+		out[i].Combination = t.q.Demand.Name
 	}
 	return out
 }
