@@ -19,7 +19,7 @@ type barSet struct {
 	area   units.Area
 	mass   float64 // kg/m
 	sizes  int     // different sizes, 1 or 2
-	uneven float64 // m by which bars beside the web stand closer or wider than those in it
+	widest float64 // m between neighbours of the first layer, of sets with bars beside the web
 
 	judged, passes bool
 	cover          units.Length // with which it was judged
@@ -208,10 +208,10 @@ func mixedSets(dst []barSet, larger, smaller *bars.Size, least units.Area, mostL
 }
 
 // sortSets puts light sets first, and among equals the one with fewer bars, in
-// fewer layers, more evenly spread over web and flange.
+// fewer layers, closer together over web and flange.
 func sortSets(sets []barSet) {
 	slices.SortStableFunc(sets, func(a, b barSet) int {
-		return cmp.Or(cmp.Compare(a.mass, b.mass), cmp.Compare(a.count, b.count), cmp.Compare(a.used, b.used), cmp.Compare(a.uneven, b.uneven))
+		return cmp.Or(cmp.Compare(a.mass, b.mass), cmp.Compare(a.count, b.count), cmp.Compare(a.used, b.used), cmp.Compare(a.widest, b.widest))
 	})
 }
 
@@ -226,14 +226,19 @@ type flangeRoom struct {
 // mostBeside is the most bars that the search puts into the flange on each side.
 const mostBeside = 12
 
-// withFlange replaces sets, all of one size, by sets with every number of bars
-// of a size in the flange beside the web, evenly over the room there is, at
-// spacings that are multiples of a step where that is not too coarse. Those
-// that come to less than an area, for want of more than one bar, are left out.
+// withFlange replaces sets, all of one size, by sets with bars of a size in the
+// flange beside the web too, evenly over the room there is, at spacings that
+// are multiples of a step where that is not too coarse. Of sets with as many
+// bars in all and as many above the first layer, it makes the one whose widest
+// distance between neighbours is least: they weigh the same and bend the same.
+// Those that come to less than an area, for want of more than one bar a side,
+// are left out.
 func (r flangeRoom) withFlange(sets []barSet, size *bars.Size, least units.Area, step units.Length) []barSet {
 	if r.sides == 0 {
 		return sets
 	}
+	type like struct{ count, upper int }
+	at := make(map[like]int)
 	var out []barSet
 	for i := range sets {
 		for m := 1; m <= mostBeside; m++ {
@@ -245,10 +250,19 @@ func (r flangeRoom) withFlange(sets []barSet, size *bars.Size, least units.Area,
 				break
 			}
 			b := sets[i]
+			upper := b.count - b.inLayer(0)
 			b.beside(size, m*r.sides, spacing)
-			b.uneven = spacing.Sub(r.web.Scale(1 / float64(b.inLayer(0)-1))).Abs().In(units.Metre)
-			if !b.area.Add(size.Area.Scale(float64(r.sides))).Less(least) {
+			b.widest = spacing.Max(r.web.Scale(1 / float64(b.inLayer(0)-1))).In(units.Metre)
+			if b.area.Add(size.Area.Scale(float64(r.sides))).Less(least) {
+				continue
+			}
+			k, found := at[like{b.count, upper}]
+			switch {
+			case !found:
+				at[like{b.count, upper}] = len(out)
 				out = append(out, b)
+			case b.widest < out[k].widest:
+				out[k] = b
 			}
 		}
 	}

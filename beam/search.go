@@ -15,7 +15,8 @@ import (
 //     filled from the face, on each face;
 //   - where the code spreads the tension steel of a flange beyond the web, one
 //     to mostBeside bars a side beside it, of the same size (or of the smaller
-//     neighbour if asked), evenly over the room there is;
+//     neighbour if asked), evenly over the room there is: of as many bars, the
+//     set that leaves the least of widest distances;
 //   - where bundles are allowed, sets of bundles of one size and number too, but
 //     none beside the web;
 //   - on a face that is never in tension, two to MaxLegs bars of the smallest

@@ -59,7 +59,10 @@ func (s *search) eachStirrup(tie bars.Size, promising func(mass float64) bool, k
 		}
 		mass := s.uniformMass(tie, legs, uniform)
 		s.best = append(s.best[:0], s.zones...)
-		if mass = s.threeZones(tie, legs, uniform, mass, promising); promising(mass) {
+		if s.prefer != FewestMarks { // by which one zone always ranks before three
+			mass = s.threeZones(tie, legs, uniform, mass, promising)
+		}
+		if promising(mass) {
 			keep(s.best, mass)
 		}
 		if uniform == s.widest {
