@@ -27,7 +27,7 @@ func (c Code) Twists(p *beam.Problem) bool { return c.e.twists(p) }
 
 // Spread is the width over which 24.3.4 distributes tension steel at a flanged
 // face.
-func (c Code) Spread(p *beam.Problem, f beam.Face) units.Length { return c.e.flangeSpread(p, f) }
+func (c Code) Spread(p *beam.Problem, f beam.Face) units.Length { return flangeSpread(p, f) }
 
 // Judge appends the checks of a group.
 func (c Code) Judge(dst []beam.Check, g beam.Group, t *beam.Trial) []beam.Check {

@@ -21,9 +21,9 @@ type flangeSide struct {
 
 // flangeSides are the sides of the flange at a face. A bar keeps the cover of
 // the stirrups to the end of the flange.
-func (e *edition) flangeSides(t *beam.Trial, face beam.Face) (sides [2]flangeSide, any bool) {
+func flangeSides(t *beam.Trial, face beam.Face) (sides [2]flangeSide, any bool) {
 	left, right := t.Brief.Section.Overhangs(face)
-	beyond := e.flangeSpread(t.Problem, face).Sub(t.Brief.Section.Width).Scale(0.5)
+	beyond := flangeSpread(t.Problem, face).Sub(t.Brief.Section.Width).Scale(0.5)
 	radius := t.Steel(face).Largest.Diameter.Scale(0.5)
 	for i, over := range [2]units.Length{left, right} {
 		s := flangeSide{over: over, to: beyond.Min(over)}
@@ -66,9 +66,9 @@ func spreadCounts(t *beam.Trial, f *beam.FaceSteel, sides *[2]flangeSide, row in
 // withinSpread takes off the layers of a face in tension the bars that lie
 // farther out in the flange than 24.3.4 spreads the tension steel. The layers
 // begin with the rows of the face, in order.
-func (e *edition) withinSpread(t *beam.Trial, face beam.Face, layers []mechanics.Layer) []mechanics.Layer {
+func withinSpread(t *beam.Trial, face beam.Face, layers []mechanics.Layer) []mechanics.Layer {
 	f := t.Steel(face)
-	sides, _ := e.flangeSides(t, face)
+	sides, _ := flangeSides(t, face)
 	kept, row := 0, 0
 	for i := range layers {
 		l := layers[i]
@@ -89,19 +89,65 @@ func (e *edition) withinSpread(t *beam.Trial, face beam.Face, layers []mechanics
 }
 
 // tensionArea is the steel of the tension face that counts in bending.
-func (e *edition) tensionArea(t *beam.Trial, s beam.Sense) units.Area {
+func tensionArea(t *beam.Trial, s beam.Sense) units.Area {
+	return tensionSteel(t, s).area
+}
+
+// faceSteel is the steel of a tension face that counts in bending and in shear:
+// all of it but the bars beyond the spread of 24.3.4.
+type faceSteel struct {
+	area           units.Area
+	depth, extreme units.Length // d, to the centroid, and dt, to the bars nearest the face
+}
+
+// tensionSteel finds the steel of the tension face that counts. Where none does,
+// depth and extreme are those of the bars that there are.
+func tensionSteel(t *beam.Trial, s beam.Sense) faceSteel {
 	f := t.Steel(s.TensionFace())
-	area := f.Area
-	if len(f.Flange) == 0 {
-		return area
+	all := faceSteel{area: f.Area, depth: t.EffectiveDepth(s), extreme: t.ExtremeDepth(s)}
+	if !beyondSpread(t, s) {
+		return all
 	}
-	sides, _ := e.flangeSides(t, s.TensionFace())
+	sides, _ := flangeSides(t, s.TensionFace())
+	var area units.Area
+	first, nearest := 0.0, units.Length{}
+	count := func(size *bars.Size, y units.Length) {
+		if area.IsZero() || y.Less(nearest) {
+			nearest = y
+		}
+		area = area.Add(size.Area)
+		first += size.Area.In(units.SquareMetre) * y.In(units.Metre)
+	}
+	for i := range f.Fit.Bars {
+		count(&f.Fit.Bars[i].Size, f.Fit.Bars[i].Y)
+	}
 	for i := range f.Flange {
-		if side, out := beside(t, &f.Flange[i]); !sides[side].counts(out) {
-			area = area.Sub(f.Flange[i].Size.Area)
+		if side, out := beside(t, &f.Flange[i]); sides[side].counts(out) {
+			count(&f.Flange[i].Size, f.Flange[i].Y)
 		}
 	}
-	return area
+	if area.IsZero() {
+		return faceSteel{depth: all.depth, extreme: all.extreme}
+	}
+	h := t.Brief.Section.Depth
+	return faceSteel{area: area, depth: h.Sub(units.Metre.Of(first / area.In(units.SquareMetre))), extreme: h.Sub(nearest)}
+}
+
+// beyondSpread reports whether bars of the tension face lie farther out in the
+// flange than 24.3.4 spreads the tension steel.
+func beyondSpread(t *beam.Trial, s beam.Sense) bool {
+	face := s.TensionFace()
+	f := t.Steel(face)
+	if len(f.Flange) == 0 {
+		return false
+	}
+	sides, _ := flangeSides(t, face)
+	for i := range f.Flange {
+		if side, out := beside(t, &f.Flange[i]); !sides[side].counts(out) {
+			return true
+		}
+	}
+	return false
 }
 
 // nearestBars are the bars nearest a face, from left to right: those beside the
@@ -179,7 +225,7 @@ func (e *edition) judgeFlange(dst []beam.Check, t *beam.Trial, s beam.Sense, a *
 	if left, right := t.Brief.Section.Overhangs(face); left.IsZero() && right.IsZero() {
 		return dst
 	}
-	sides, any := e.flangeSides(t, face)
+	sides, any := flangeSides(t, face)
 	steel := t.Steel(face)
 	spread := checkAt("crack.flange-spread", clause, s, a)
 	spread.Combination = ""
@@ -227,7 +273,7 @@ func (e *edition) judgeOuter(dst []beam.Check, t *beam.Trial, s beam.Sense, a *b
 		c.Outcome, c.Reason = beam.NotJudged, "demands have no clear span: whether the flange is wider than ℓn/10 is not known"
 		return append(dst, c)
 	}
-	if t.Geometry.FaceWidth(face).AtMost(e.flangeSpread(t.Problem, face)) {
+	if t.Geometry.FaceWidth(face).AtMost(flangeSpread(t.Problem, face)) {
 		return dst
 	}
 	var areas [2]units.Area
@@ -294,7 +340,7 @@ func (e *edition) spreadSteps(t *beam.Trial, s beam.Sense, limit, given units.Le
 	} else {
 		shortest, _ := shortestClearSpan(&t.Brief)
 		w.given("ℓn", "shortest clear span", "", e.asLength(e.lengthIn(shortest)))
-		w.find("bs", "width over which the tension steel is spread", "24.3.4", "min(be, ℓn / 10)", e.asLength(e.lengthIn(e.flangeSpread(t.Problem, face))))
+		w.find("bs", "width over which the tension steel is spread", "24.3.4", "min(be, ℓn / 10)", e.asLength(e.lengthIn(flangeSpread(t.Problem, face))))
 	}
 	w.given("s,max", "greatest spacing between centres", "24.3.2", e.asLength(e.lengthIn(limit)))
 	w.note("see the spacing of the bars in the web")

@@ -10,7 +10,16 @@
 // Clause numbers are those of the edition that judges; where the editions
 // number a clause differently both numbers are data too.
 //
+// Covered are bending, one-way shear and torsion of rectangles, tees, ells,
+// inverted tees and outlines given by their corners, solid or hollow, in
+// normalweight and lightweight concrete, with an axial tension or an axial
+// compression below 0.10 f'c Ag acting too; cover, spacing and least steel; least
+// depth.
+//
 // Not covered, and refused by name: deep beams and loads close to supports,
-// significant axial compression, prestress, shotcrete,
-// seismic detailing, steel beyond the tables of chapter 20.
+// greater axial compression, concrete below the least strength of chapter 19,
+// steel beyond the tables of chapter 20. Not covered, and named among the checks
+// as not judged: development, splices and cut-off of bars, bearing, seismic
+// detailing, exposure, fire, slab steel across a flange, ledges. Prestress,
+// openings, shotcrete and strut-and-tie design have no place in a brief.
 package aci318

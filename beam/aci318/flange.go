@@ -53,6 +53,9 @@ func overhangOf(interior bool, thickness, clear, span units.Length) overhang {
 func (r *resolution) flange() {
 	s := &r.b.Section
 	switch {
+	case s.Shape == beam.Polygon:
+		r.confirm("section.outline", "the whole outline works together: a slab that is cast with the web is to be given as tee or ell, and no wider than 6.3.2 counts it",
+			append([]string{"shear.strength", "torsion.threshold"}, flexureChecks...)...)
 	case s.Flange() == 0:
 	case !s.Slab.IsZero() && s.Flange() == beam.Top:
 		r.slab()
@@ -155,7 +158,7 @@ func (r *resolution) determinacy() {
 }
 
 // flangeSpread is the lesser of the effective flange width and ℓn/10 (24.3.4).
-func (e *edition) flangeSpread(p *beam.Problem, f beam.Face) units.Length {
+func flangeSpread(p *beam.Problem, f beam.Face) units.Length {
 	if f == 0 || f != p.Brief.Section.Flange() {
 		return units.Length{}
 	}
@@ -183,6 +186,9 @@ func (e *edition) appendFlange(dst []beam.Check, t *beam.Trial) []beam.Check {
 	if s.Isolated {
 		dst = append(dst, isolatedCheck(s))
 	}
+	if s.Shape == beam.Polygon && !t.Geometry.Overall.AtMost(s.Width) {
+		return append(dst, notJudgedOutline)
+	}
 	switch s.Flange() {
 	case beam.Top:
 		return append(dst, notJudgedTransverse)
@@ -194,6 +200,9 @@ func (e *edition) appendFlange(dst []beam.Check, t *beam.Trial) []beam.Check {
 
 var notJudgedTransverse = beam.NotJudgedCheck("flange.transverse", "9.2.4.3, 7.5.2.3",
 	"slab steel across the web, which carries the overhanging flange as a cantilever, is not part of the input")
+
+var notJudgedOutline = beam.NotJudgedCheck("flange.transverse", "9.2.4.3, 7.5.2.3, 24.3.4",
+	"the outline is wider than the strip of its stirrups: slab steel across that strip, and the spread of tension steel beside it, are asked of flanges, which an outline does not tell; give a slab as tee or ell")
 
 var notJudgedLedges = beam.NotJudgedCheck("ledge.design", "16.5",
 	"the ledges under their own loads (bending, shear friction, punching and bearing, and the stirrups that lift them) are not judged by this version")

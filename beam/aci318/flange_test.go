@@ -222,3 +222,44 @@ func TestFlangesNameWhatIsNotJudged(t *testing.T) {
 	require.Equal(t, beam.NotJudged, find1(t, r, "ledge.design").Outcome)
 	require.Empty(t, checksOf(r.Checks, "flange.transverse"))
 }
+
+// An outline does not tell a slab from a web: that all of it works is open, and
+// what is asked of flanges is named where it is wider than the strip of its
+// stirrups.
+func TestOutlineLeavesItsFlangeOpen(t *testing.T) {
+	tee := polygonOf([2]float64{18, 0}, [2]float64{30, 0}, [2]float64{30, 20}, [2]float64{48, 20}, [2]float64{48, 24}, [2]float64{0, 24}, [2]float64{0, 20}, [2]float64{18, 20})
+	box := polygonOf([2]float64{0, 0}, [2]float64{24, 0}, [2]float64{24, 24}, [2]float64{0, 24})
+	for _, tc := range []struct {
+		section beam.Section
+		wide    bool
+	}{{tee, true}, {box, false}} {
+		b := demandBrief(beam.Demand{Name: "1", Moment: units.KipFoot.Of(-100)})
+		b.Section = tc.section
+		r, _ := check(t, ACI31819(), b, []beam.Row{bottom(2, "#8"), top(3, "#9")})
+		a := assumption(t, r, "section.outline")
+		require.True(t, a.Open)
+		require.Contains(t, a.Assumed, "6.3.2")
+		require.Contains(t, a.UsedIn, "flexure.negative")
+		found := checksOf(r.Checks, "flange.transverse")
+		q := teeQuery()
+		q.Section = tc.section
+		s, err := ACI31819().Strengths(q)
+		require.NoError(t, err)
+		if !tc.wide {
+			require.Empty(t, found)
+			require.Empty(t, s.Notes)
+			continue
+		}
+		require.Len(t, found, 1)
+		require.Equal(t, beam.NotJudged, found[0].Outcome)
+		require.Contains(t, found[0].Clause, "7.5.2.3")
+		require.Contains(t, found[0].Clause, "24.3.4")
+		require.Contains(t, s.Notes[0], "6.3.2")
+	}
+	for _, a := range func() []beam.Assumption {
+		r, _ := check(t, ACI31819(), usBrief(), []beam.Row{bottom(4, "#9"), top(2, "#5")})
+		return r.Assumptions
+	}() {
+		require.NotEqual(t, "section.outline", a.ID)
+	}
+}

@@ -23,8 +23,11 @@ type flexure struct {
 	nominal     units.Moment // Mn
 	design      units.Moment // φMn
 
-	axis  units.Length // c, of which strain comes
-	axial units.Force  // Pn that acts too, compression positive
+	axis    units.Length // c, of which strain comes
+	extreme units.Length // dt, of the extreme layer
+	yield   units.Stress // the greatest of the steel in tension, by which strains are classed
+	axial   units.Force  // Pn that acts too, compression positive
+	all     bool         // the bars beyond the spread of 24.3.4 pull too
 }
 
 // block is the rectangular stress block of 22.2.2.4 as a stress law.
@@ -59,8 +62,8 @@ func bendingOf(s beam.Sense, r *beam.Readings) mechanics.Bending {
 	return b
 }
 
-// classify draws the strength from an equilibrium. yield is that of the
-// extreme layer.
+// classify draws the strength from an equilibrium. yield is the greatest of the
+// steel in tension.
 func (e *edition) classify(u *mechanics.Ultimate, strength, yield units.Stress, r *beam.Readings) flexure {
 	f := flexure{
 		blockFactor: e.blockFactor(strength),
@@ -68,6 +71,8 @@ func (e *edition) classify(u *mechanics.Ultimate, strength, yield units.Stress, 
 		strain:      u.ExtremeStrain,
 		nominal:     u.Nominal,
 		axis:        u.NeutralAxis,
+		extreme:     u.ExtremeDepth,
+		yield:       yield,
 	}
 	f.leastStrain = e.reduction.leastStrain(f.yieldStrain)
 	f.phi, f.class = e.reduction.flexure(f.strain, f.yieldStrain)
@@ -80,7 +85,7 @@ func (e *edition) classify(u *mechanics.Ultimate, strength, yield units.Stress, 
 func (e *edition) trialSection(t *beam.Trial, s beam.Sense) mechanics.Section {
 	layers := t.Layers(s, e.steelModulus())
 	if len(t.Steel(s.TensionFace()).Flange) > 0 {
-		layers = e.withinSpread(t, s.TensionFace(), layers)
+		layers = withinSpread(t, s.TensionFace(), layers)
 	}
 	return mechanics.Section{Parts: t.Geometry.Parts, Layers: layers}
 }
@@ -94,16 +99,29 @@ func (e *edition) trialFlexure(t *beam.Trial, s beam.Sense) (f flexure, ok bool)
 
 // trialUnder is trialFlexure with a factored axial force acting too.
 func (e *edition) trialUnder(t *beam.Trial, s beam.Sense, axial units.Force) (f flexure, ok bool) {
-	b := &t.Brief
 	if t.Steel(s.TensionFace()).Count == 0 {
 		return flexure{}, false
 	}
+	return e.solveTrial(t, s, e.trialSection(t, s), axial)
+}
+
+// trialStrained is trialUnder with every bar of the tension face pulling, also
+// beyond the spread of 24.3.4: bars that are there lower the strain, whether or
+// not the strength counts them.
+func (e *edition) trialStrained(t *beam.Trial, s beam.Sense, axial units.Force) (f flexure, ok bool) {
+	f, ok = e.solveTrial(t, s, mechanics.Section{Parts: t.Geometry.Parts, Layers: t.Layers(s, e.steelModulus())}, axial)
+	f.all = true
+	return f, ok
+}
+
+// solveTrial finds the equilibrium of a trial with the steel of a section.
+func (e *edition) solveTrial(t *beam.Trial, s beam.Sense, section mechanics.Section, axial units.Force) (f flexure, ok bool) {
+	b := &t.Brief
 	law, err := e.reblock(t.Law, b.Concrete.Strength)
 	if err != nil {
 		return flexure{}, false
 	}
 	t.Law = law
-	section := e.trialSection(t, s)
 	f, err = e.solveUnder(&t.Solver, &t.Ultimate, section, law, bendingOf(s, &b.Readings), b.Concrete.Strength, &b.Readings, axial)
 	return f, err == nil
 }
@@ -116,17 +134,16 @@ const mostRounds = 40
 // carries Pn = Pu/φ, with the φ of its own strain (21.2.2).
 func (e *edition) solveUnder(solver *mechanics.Solver, u *mechanics.Ultimate, section mechanics.Section, law mechanics.Law,
 	bending mechanics.Bending, strength units.Stress, r *beam.Readings, axial units.Force) (flexure, error) {
-	sense := beam.Positive
-	if bending.Sense == mechanics.Hogging {
-		sense = beam.Negative
-	}
-	yield, phi := extremeYield(section, sense), e.reduction.tension
+	phi := e.reduction.tension
+	var yield units.Stress
 	var f flexure
 	for range mostRounds {
 		bending.Axial = axial.Scale(1 / phi)
 		if err := solver.Ultimate(u, section, law, bending); err != nil {
 			return flexure{}, err
 		}
+		// Never less than in the round before, so that the rounds settle.
+		yield = yield.Max(tensionYield(section, u))
 		f = e.classify(u, strength, yield, r)
 		f.axial = bending.Axial
 		if axial.IsZero() || math.Abs(f.phi-phi) <= 1e-13 {
@@ -136,6 +153,9 @@ func (e *edition) solveUnder(solver *mechanics.Solver, u *mechanics.Ultimate, se
 	}
 	return f, nil
 }
+
+// noteGrades is how steel of several grades is read.
+const noteGrades = "where steel of several yield strengths pulls, φ, the yield strain and the least strain go by the greatest of them (21.2.2, 9.3.3.1), least steel by the least (9.6.1.2)"
 
 // crossCheckTolerance is the relative difference that two routes to the same
 // strength may show: both are exact but for rounding and the width of a fibre.
@@ -239,7 +259,7 @@ func (e *edition) flexureUnder(section mechanics.Section, strength units.Stress,
 	if out.CrossCheck.Difference > crossCheckTolerance {
 		return beam.FlexureStrength{}, 0, &DisagreementError{Nominal: u.Nominal, Other: out.CrossCheck.Nominal}
 	}
-	if !balanced {
+	if !balanced || out.Design.Compare(units.Moment{}) < 0 {
 		out.Nominal, out.Design = units.Moment{}, units.Moment{}
 	}
 	return out, strain, nil
@@ -256,25 +276,28 @@ func (e *DisagreementError) Error() string {
 	return fmt.Sprintf("aci318: block equilibrium gives a nominal moment of %s, fibre integration %s", e.Nominal, e.Other)
 }
 
-// extremeYield is the yield strength of the layer farthest from the
-// compression face; of several there, the greatest, whose yield strain asks for
-// most.
-func extremeYield(section mechanics.Section, s beam.Sense) units.Stress {
+// tensionYield is the greatest yield strength of the layers in tension, by whose
+// yield strain a section is classed (21.2.2): the steel that asks for most.
+// Where steel of several grades pulls, the grade of the one bar that lies
+// farthest out would class the others, however little it carries.
+func tensionYield(section mechanics.Section, u *mechanics.Ultimate) units.Stress {
 	var fy units.Stress
-	var farthest units.Length
-	depth := section.Depth()
 	for i := range section.Layers {
-		l := &section.Layers[i]
-		d := l.Depth
-		if s == beam.Negative {
-			d = depth.Sub(d)
+		if u.Layers[i].Strain < 0 {
+			fy = fy.Max(section.Layers[i].Steel.Yield)
 		}
-		switch {
-		case i == 0 || !d.AtMost(farthest):
-			fy, farthest = l.Steel.Yield, d
-		case farthest.AtMost(d):
-			fy, farthest = fy.Max(l.Steel.Yield), farthest.Max(d)
-		}
+	}
+	if fy.IsZero() { // an axial compression presses on all of them
+		return greatestLayerYield(section)
+	}
+	return fy
+}
+
+// greatestLayerYield is the greatest yield strength of the layers.
+func greatestLayerYield(section mechanics.Section) units.Stress {
+	var fy units.Stress
+	for i := range section.Layers {
+		fy = fy.Max(section.Layers[i].Steel.Yield)
 	}
 	return fy
 }

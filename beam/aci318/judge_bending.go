@@ -2,6 +2,7 @@ package aci318
 
 import (
 	"soffit.example/beam"
+	"soffit.example/beam/mechanics"
 	"soffit.example/units"
 )
 
@@ -26,6 +27,7 @@ func (e *edition) judgeBending(dst []beam.Check, t *beam.Trial) []beam.Check {
 		dst = e.judgeSense(dst, t, s, &a)
 	}
 	dst = e.judgeTension(dst, t)
+	dst = e.judgeGrades(dst, t)
 	return e.judgeTorsionBars(dst, t)
 }
 
@@ -83,7 +85,7 @@ type usage struct {
 	least      flexure
 	leastUnder beam.Action
 	pulled     bool // an axial tension acts in this sense
-	tried      bool // an axial force was tried, so that the trial holds another equilibrium
+	tried      bool // an axial force or more bars were tried, so that the trial holds another equilibrium
 }
 
 // use finds the worst action of a sense. An axial force takes from the strength
@@ -94,6 +96,10 @@ func (e *edition) use(t *beam.Trial, s beam.Sense, greatest beam.Action) (w usag
 	w.least, w.leastUnder = w.flexure, greatest
 	if !w.ok {
 		return w
+	}
+	beyond := beyondSpread(t, s)
+	if beyond {
+		w.strain(e, t, s, units.Force{}, &greatest)
 	}
 	worst := ratio(greatest.Moment.Abs().In(units.NewtonMetre), w.design.In(units.NewtonMetre))
 	for _, d := range t.Forces.Demands() {
@@ -107,14 +113,30 @@ func (e *edition) use(t *beam.Trial, s beam.Sense, greatest beam.Action) (w usag
 			w.Action, w.ok = d, false
 			return w
 		}
-		if f.strain < w.least.strain {
-			w.least, w.leastUnder = f, d
+		w.strained(&f, &d)
+		if beyond {
+			w.strain(e, t, s, d.Axial, &d)
 		}
 		if u := ratio(d.Moment.Abs().In(units.NewtonMetre), f.design.In(units.NewtonMetre)); u > worst {
 			worst, w.Action, w.flexure = u, d, f
 		}
 	}
 	return w
+}
+
+// strained keeps a strain that falls shorter of the least than what is held.
+func (w *usage) strained(f *flexure, a *beam.Action) {
+	if ratio(w.least.leastStrain, w.least.strain) < ratio(f.leastStrain, f.strain) {
+		w.least, w.leastUnder = *f, *a
+	}
+}
+
+// strain takes into account the strain with every bar pulling.
+func (w *usage) strain(e *edition, t *beam.Trial, s beam.Sense, axial units.Force, a *beam.Action) {
+	w.tried = true
+	if f, ok := e.trialStrained(t, s, axial); ok {
+		w.strained(&f, a)
+	}
 }
 
 func (e *edition) judgeSense(dst []beam.Check, t *beam.Trial, s beam.Sense, greatest *beam.Action) []beam.Check {
@@ -155,7 +177,6 @@ func (e *edition) judgeSense(dst []beam.Check, t *beam.Trial, s beam.Sense, grea
 	if t.Record {
 		dst = append(dst, e.judgeCrossCheck(t, s, a, &u.flexure))
 	}
-	dst = e.judgeGrades(dst, t, s)
 	return e.judgeCracks(dst, t, s, greatest)
 }
 
@@ -171,8 +192,8 @@ func under(u *usage) units.Force {
 // 4/3 of the steel required by analysis where that is less. Under an axial
 // tension the waiver is not used.
 func (e *edition) judgeMinimum(t *beam.Trial, s beam.Sense, a *beam.Action, pulled bool) beam.Check {
-	b, provided := &t.Brief, e.tensionArea(t, s)
-	d := t.EffectiveDepth(s)
+	b, steel := &t.Brief, tensionSteel(t, s)
+	provided, d := steel.area, steel.depth
 	c := checkAt(bendingIDs[s].minimum, "9.6.1.2", s, a)
 	m := e.minimumSteel(b.Concrete.Strength, faceYield(t, s), e.problemWidth(t.Problem, s), d)
 	need := m.area
@@ -210,23 +231,30 @@ func (e *edition) judgeCrossCheck(t *beam.Trial, s beam.Sense, a *beam.Action, f
 	return c
 }
 
-// judgeGrades holds bars of a yield strength of their own against the tables; the
-// brief's own was held against them before.
-func (e *edition) judgeGrades(dst []beam.Check, t *beam.Trial, s beam.Sense) []beam.Check {
-	for i := range t.Steel(s.TensionFace()).Rows {
-		r := &t.Steel(s.TensionFace()).Rows[i]
-		if r.Yield == t.Brief.Reinforcement.Yield {
-			continue
+// judgeGrades holds bars of a yield strength of their own against the tables,
+// whether or not a moment pulls on them; the brief's own was held against them
+// before.
+func (e *edition) judgeGrades(dst []beam.Check, t *beam.Trial) []beam.Check {
+	for _, face := range [2]beam.Face{beam.Bottom, beam.Top} {
+		rows := t.Steel(face).Rows
+		for i := range rows {
+			dst = e.judgeGrade(dst, t, face, rows[i].Yield)
 		}
-		c := beam.Check{ID: "flexure.grade", Clause: e.materials.yieldClause, Face: s.TensionFace()}
-		c.Compare(r.Yield.Amount(), e.stressOf(e.materials.mostYield).Amount())
-		if least := e.stressOf(e.materials.leastYield); !least.AtMost(r.Yield) {
-			c.Clause = "Table 20.2.1.3"
-			c.Compare(least.Amount(), r.Yield.Amount())
-		}
-		dst = append(dst, c)
 	}
 	return dst
+}
+
+func (e *edition) judgeGrade(dst []beam.Check, t *beam.Trial, face beam.Face, yield units.Stress) []beam.Check {
+	if yield == t.Brief.Reinforcement.Yield {
+		return dst
+	}
+	c := beam.Check{ID: "flexure.grade", Clause: e.materials.yieldClause, Face: face}
+	c.Compare(yield.Amount(), e.stressOf(e.materials.mostYield).Amount())
+	if least := e.stressOf(e.materials.leastYield); !least.AtMost(yield) {
+		c.Clause = "Table 20.2.1.3"
+		c.Compare(least.Amount(), yield.Amount())
+	}
+	return append(dst, c)
 }
 
 // judgeCracks compares the widest spacing of the bars nearest the tension face,
@@ -278,50 +306,70 @@ func greatestYield(t *beam.Trial, face beam.Face) units.Stress {
 // faces, for which neither sense of bending has a block of concrete: by statics
 // each face takes its share, at its yield strength (22.4.3.1).
 func (e *edition) judgeTension(dst []beam.Check, t *beam.Trial) []beam.Check {
-	h := e.lengthIn(t.Brief.Section.Depth)
-	var shares [beam.Top + 1]float64
-	var names [beam.Top + 1]string
-	both := false
-	for _, d := range t.Forces.Demands() {
-		pull := -e.forceIn(d.Axial)
-		if pull <= 0 {
-			continue
-		}
-		z := sizing{parts: t.Geometry.Parts, unit: e.length, height: h}
-		gross, first := z.concrete(h)
-		low, high := h, 0.0 // of the steel, from the top; without bars, the faces
-		if t.Bottom.Count > 0 {
-			low -= e.lengthIn(t.Bottom.Centroid)
-		}
-		if t.Top.Count > 0 {
-			high += e.lengthIn(t.Top.Centroid)
-		}
-		bottom := (pull*(first/gross-high) + e.momentIn(d.Moment)) / (low - high)
-		top := pull - bottom
-		if bottom <= 0 || top <= 0 {
-			continue // one face is pressed: bending
-		}
-		both = true
-		if bottom > shares[beam.Bottom] {
-			shares[beam.Bottom], names[beam.Bottom] = bottom, d.Combination
-		}
-		if top > shares[beam.Top] {
-			shares[beam.Top], names[beam.Top] = top, d.Combination
-		}
+	var pull facePulls
+	var names [2]string
+	low, high := t.Brief.Section.Depth, units.Length{} // of the steel, from the top; without bars, the faces
+	if t.Bottom.Count > 0 {
+		low = tensionSteel(t, beam.Positive).depth
 	}
-	if !both {
+	if t.Top.Count > 0 {
+		high = t.Brief.Section.Depth.Sub(tensionSteel(t, beam.Negative).depth)
+	}
+	for _, d := range t.Forces.Demands() {
+		p := e.facePulls(t.Geometry.Parts, d.Axial, d.Moment, low, high)
+		for i := range p.share {
+			if p.pulled && (!pull.pulled || p.share[i] > pull.share[i]) {
+				pull.share[i], names[i] = p.share[i], d.Combination
+			}
+		}
+		pull.pulled = pull.pulled || p.pulled
+	}
+	if !pull.pulled {
 		return dst
 	}
-	for _, face := range [2]beam.Face{beam.Bottom, beam.Top} {
-		sense := beam.Positive
-		if face == beam.Top {
-			sense = beam.Negative
-		}
-		c := beam.Check{ID: "flexure.tension", Clause: "22.4.3.1", Face: face, Combination: names[face],
-			Reason: "the axial tension pulls on the steel of both faces: this face's share, by statics"}
-		strength := e.reduction.tension * e.areaIn(e.tensionArea(t, sense)) * e.stressIn(faceYield(t, sense))
-		c.Compare(e.forceOf(shares[face]).Amount(), e.forceOf(strength).Amount())
-		dst = append(dst, c)
+	for i, sense := range [2]beam.Sense{beam.Positive, beam.Negative} {
+		dst = append(dst, e.pullCheck(&pull, i, tensionArea(t, sense), faceYield(t, sense), names[i]))
 	}
 	return dst
+}
+
+// facePulls are the shares that the steel at the bottom and at the top take of an
+// axial tension.
+type facePulls struct {
+	share  [2]float64
+	pulled bool // there are shares; false: one face is pressed, and bending judges it
+}
+
+// facePulls shares an axial tension and a moment between steel at two depths from
+// the top. A face takes nothing where the other takes all; where the force pulls
+// beyond the steel of one face, the moment bends the section, which is judged as
+// such if it is in that sense.
+func (e *edition) facePulls(parts []mechanics.Part, axial units.Force, moment units.Moment, low, high units.Length) (p facePulls) {
+	pull := -e.forceIn(axial)
+	if pull <= 0 {
+		return p
+	}
+	z := sizing{parts: parts, unit: e.length, height: e.lengthIn(parts[len(parts)-1].Bottom)}
+	gross, first := z.concrete(z.height)
+	top, apart, m := e.lengthIn(high), e.lengthIn(low.Sub(high)), e.momentIn(moment)
+	p.share[0] = (pull*(first/gross-top) + m) / apart
+	p.share[1] = pull - p.share[0]
+	for i, s := range p.share {
+		if units.AtMost(pull+s, pull) { // nothing, but for rounding
+			p.share[i] = 0
+		}
+	}
+	if p.share[0] == 0 && m < 0 || p.share[1] == 0 && m > 0 {
+		return facePulls{}
+	}
+	p.pulled = true
+	return p
+}
+
+// pullCheck holds the share of one face against its steel.
+func (e *edition) pullCheck(p *facePulls, i int, area units.Area, yield units.Stress, name string) beam.Check {
+	c := beam.Check{ID: "flexure.tension", Clause: "22.4.3.1", Face: [2]beam.Face{beam.Bottom, beam.Top}[i], Combination: name,
+		Reason: "the axial tension pulls on the steel of both faces: this face's share, by statics"}
+	c.Compare(e.forceOf(p.share[i]).Amount(), e.forceOf(e.reduction.tension*e.areaIn(area)*e.stressIn(yield)).Amount())
+	return c
 }

@@ -30,6 +30,7 @@ var scopeWords = []string{
 	"bars that are not of ASTM sizes (20.2.1.3), or stronger than Table 20.2.2.4 allows",
 	"openings, prestress and shotcrete",
 	"seismic detailing (chapter 18), and strut-and-tie design (chapter 23)",
+	"not judged, and named so where a result calls for it: development, splices and cut-off of bars (9.7, 25.4, 25.5), bearing on supports (22.8), computed deflections (24.2), slab steel across a flange (7.5.2.3), ledges (16.5)",
 }
 
 // scopeOf names every rule that puts a problem outside the method.

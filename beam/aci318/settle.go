@@ -11,6 +11,7 @@ import (
 // Settle holds what the expressions assumed against the finished beam.
 func (c Code) Settle(t *beam.Trial, checks []beam.Check, note *beam.Register) {
 	c.e.settleTensionControl(t, note)
+	c.e.settleSteel(t, note)
 	c.e.settleLeastStirrups(t, note)
 	c.e.settleSlopes(t, note)
 	c.e.settleCover(t, note)
@@ -46,7 +47,8 @@ func (e *edition) settleTensionControl(t *beam.Trial, note *beam.Register) {
 			continue
 		}
 		need := e.reduction.tensionStrain(f.yieldStrain)
-		found = append(found, fmt.Sprintf("%s bending: strain %.5f against %.5f, %s, φ = %.3f", s, f.strain, need, f.class, f.phi))
+		found = append(found, fmt.Sprintf("%s bending: the extreme layer, at dt = %s (d = %s to the centroid), has a strain of %.5f against %.5f: %s, φ = %.3f",
+			s, e.length.Format(f.extreme), e.length.Format(tensionSteel(t, s).depth), f.strain, need, f.class, f.phi))
 		holds = holds && f.class == tensionControlled
 	}
 	if len(found) == 0 {
@@ -54,6 +56,29 @@ func (e *edition) settleTensionControl(t *beam.Trial, note *beam.Register) {
 		return
 	}
 	note.Settle(assumeTensionControl, strings.Join(found, "; "), holds)
+}
+
+// settleSteel lists the readings that only some layouts call for: of steel of
+// several grades, and of bars beyond the spread of 24.3.4.
+func (e *edition) settleSteel(t *beam.Trial, note *beam.Register) {
+	grades, beyond := false, false
+	for s := beam.Positive; s <= beam.Negative; s++ {
+		if bendsAnywhere(t, s) && t.Steel(s.TensionFace()).Count > 0 {
+			beyond = beyond || beyondSpread(t, s)
+			grades = grades || !oneYield(e.trialSection(t, s))
+		}
+	}
+	read := func(id, assumed string, usedIn ...string) {
+		note.Assume(beam.Assumption{ID: id, Assumed: assumed, UsedIn: append(usedIn, flexureChecks...), Found: "a choice of reading: it holds as taken", Holds: true})
+	}
+	const positive, negative = "flexure.strain.positive", "flexure.strain.negative"
+	if grades {
+		read("reading.grades", noteGrades, positive, negative, "flexure.minimum.positive", "flexure.minimum.negative")
+	}
+	if beyond {
+		read("reading.flange-spread", "bars farther out in the flange than 24.3.4 spreads the tension steel count neither in strength nor as least steel, but lower the strain that is held against 9.3.3.1",
+			positive, negative, "flexure.minimum.positive", "flexure.minimum.negative", "shear.strength")
+	}
 }
 
 // settleLeastStirrups compares the stirrups of every zone with the least that

@@ -102,7 +102,7 @@ func (s *shearEnd) depth(t *beam.Trial, span int) units.Length {
 		if _, bends := t.Forces.Moment(sense, span, from, to); !bends {
 			continue
 		}
-		d := t.EffectiveDepth(sense)
+		d := tensionSteel(t, sense).depth
 		if d.IsZero() {
 			return units.Length{}
 		}

@@ -96,8 +96,8 @@ func (e *edition) newWebZone(t *beam.Trial, span, zone int, spacing units.Length
 		z.loose = new([2]webSteel)
 	}
 	for i, sense := range [2]beam.Sense{beam.Positive, beam.Negative} {
-		s.depth = t.EffectiveDepth(sense)
-		s.area = t.Steel(sense.TensionFace()).Area
+		steel := tensionSteel(t, sense)
+		s.depth, s.area = steel.depth, steel.area
 		z.web[i] = e.newWebSteel(&s)
 		if z.leaning {
 			without := s

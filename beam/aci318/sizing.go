@@ -36,24 +36,35 @@ func (e *edition) sizing(parts []mechanics.Part, s beam.Sense, strength, yield u
 
 // trialSizing is the sizing of a trial's section about the steel that lies at
 // the tension face of a sense. Bars of several grades count with the least of
-// their yield strengths, which asks for no less steel than they need.
+// their yield strengths, which asks for no less steel than they need, and are
+// classed by the greatest.
 func (e *edition) trialSizing(t *beam.Trial, s beam.Sense) sizing {
-	b := &t.Brief
-	return e.sizing(t.Geometry.Parts, s, b.Concrete.Strength, faceYield(t, s), t.EffectiveDepth(s), t.ExtremeDepth(s), b.Readings.RoundedYield)
+	b, steel := &t.Brief, tensionSteel(t, s)
+	least, most := faceYields(t, s)
+	z := e.sizing(t.Geometry.Parts, s, b.Concrete.Strength, least, steel.depth, steel.extreme, b.Readings.RoundedYield)
+	z.yieldStrain = e.yieldStrain(most, b.Readings.RoundedYield)
+	return z
 }
 
 // faceYield is the least yield strength of the bars at the tension face of a
 // sense.
 func faceYield(t *beam.Trial, s beam.Sense) units.Stress {
+	least, _ := faceYields(t, s)
+	return least
+}
+
+// faceYields are the least and the greatest yield strength of the bars at the
+// tension face of a sense.
+func faceYields(t *beam.Trial, s beam.Sense) (least, most units.Stress) {
 	rows := t.Steel(s.TensionFace()).Rows
 	if len(rows) == 0 {
-		return t.Brief.Reinforcement.Yield
+		return t.Brief.Reinforcement.Yield, t.Brief.Reinforcement.Yield
 	}
-	least := rows[0].Yield
+	least, most = rows[0].Yield, rows[0].Yield
 	for i := range rows[1:] {
-		least = least.Min(rows[i+1].Yield)
+		least, most = least.Min(rows[i+1].Yield), most.Max(rows[i+1].Yield)
 	}
-	return least
+	return least, most
 }
 
 // strip is the i-th part of the section from its compression face: from x1 to

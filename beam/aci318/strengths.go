@@ -50,11 +50,11 @@ func (c Code) Strengths(q beam.SectionQuery) (beam.Strengths, error) {
 	if out.Flexure.Equilibria > 1 {
 		out.Notes = append(out.Notes, "with the displaced concrete deducted more than one depth of the neutral axis balances; the least was taken")
 	}
-	if q.Demand.Axial.Compare(units.Force{}) < 0 {
-		out.Notes = append(out.Notes, "under axial tension a section is to be judged in both senses of bending, with the moment that acts")
-		if out.Flexure.Design.IsZero() {
-			out.Notes = append(out.Notes, "nothing balances the section under the axial tension: it has no strength in bending, and the rest is that of the section without the force")
-		}
+	if out.Flexure.Design.IsZero() {
+		out.Notes = append(out.Notes, "nothing balances the section under the axial tension: it has no strength in bending, and the rest is that of the section without the force")
+	}
+	if !oneYield(section) {
+		out.Notes = append(out.Notes, noteGrades)
 	}
 	out.Flexure.MinimumSteel = e.queryLeast(&q, &geometry, &out)
 	e.noteFlange(&q, &geometry, &out)
@@ -95,6 +95,8 @@ func (e *edition) noteFlange(q *beam.SectionQuery, g *beam.Geometry, out *beam.S
 		if out.Checks = append(out.Checks, c); c.Outcome == beam.Fail {
 			out.Notes = append(out.Notes, "the flange does not meet 6.3.2.2, by which an isolated tee may count it")
 		}
+	case s.Shape == beam.Polygon && !g.Overall.AtMost(s.Width):
+		out.Notes = append(out.Notes, "the whole outline is taken to work together: 6.3.2 limits what of a slab does, which is to be given as tee or ell")
 	case s.Flange() == beam.Top:
 		out.Notes = append(out.Notes, "the flange width is taken as given: 6.3.2.1 limits what works with the web")
 	}
@@ -229,10 +231,45 @@ func (e *edition) queryChecks(q *beam.SectionQuery, g *beam.Geometry, out *beam.
 		clause, need, reason := e.queryMinimum(q, g, f)
 		compare(id.minimum, clause, reason, need.Amount(), f.TensionSteel.Amount())
 	}
+	checks = append(checks, e.queryTension(q, g)...)
 	if !d.Shear.IsZero() {
 		checks = append(checks, e.queryShear(q, &out.Shear, web, s)...)
 	}
 	return append(checks, t.checks()...)
+}
+
+// queryTension judges an axial tension that pulls on the steel of both halves of
+// the depth, as judgeTension does; a layer at half the depth is of the lower.
+func (e *edition) queryTension(q *beam.SectionQuery, g *beam.Geometry) []beam.Check {
+	depth := e.lengthIn(q.Section.Depth)
+	var areas, firsts [2]float64
+	var yields [2]units.Stress
+	for _, l := range q.Layers {
+		i, at, area := 0, e.lengthIn(l.Depth), e.areaIn(l.Area)
+		if at < depth/2 {
+			i = 1
+		}
+		if areas[i] == 0 || l.Yield.Less(yields[i]) {
+			yields[i] = l.Yield
+		}
+		areas[i] += area
+		firsts[i] += area * at
+	}
+	at := [2]float64{depth, 0} // without steel, the faces
+	for i := range at {
+		if areas[i] > 0 {
+			at[i] = firsts[i] / areas[i]
+		}
+	}
+	p := e.facePulls(g.Parts, q.Demand.Axial, q.Demand.Moment, e.lengthOf(at[0]), e.lengthOf(at[1]))
+	if !p.pulled {
+		return nil
+	}
+	var checks []beam.Check
+	for i := range at {
+		checks = append(checks, e.pullCheck(&p, i, e.areaOf(areas[i]), yields[i], q.Demand.Name))
+	}
+	return checks
 }
 
 // queryMinimum is the least steel of 9.6.1 at the demand.
@@ -245,6 +282,7 @@ func (e *edition) queryMinimum(q *beam.SectionQuery, g *beam.Geometry, f *beam.F
 		yield = yield.Min(l.Yield)
 	}
 	z := e.sizing(g.Parts, q.Bending, q.Concrete.Strength, yield, f.EffectiveDepth, f.ExtremeDepth, q.Readings.RoundedYield)
+	z.yieldStrain = f.YieldStrain
 	req := z.tension(math.Abs(e.momentIn(q.Demand.Moment)))
 	pulled := q.Demand.Axial.Compare(units.Force{}) < 0 // as in judgeMinimum
 	if waived := e.areaOf(e.minimum.waiver * req.area); req.ok && !pulled && waived.Less(f.MinimumSteel) {

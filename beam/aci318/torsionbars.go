@@ -72,7 +72,7 @@ func (e *edition) newTorsionFaces(t *beam.Trial) torsionFaces {
 		face := &f.faces[i]
 		face.sense = beam.Sense(i + 1)
 		steel := t.Steel(face.sense.TensionFace())
-		face.area, face.web = e.areaIn(e.tensionArea(t, face.sense)), e.areaIn(steel.Fit.Area)
+		face.area, face.web = e.areaIn(tensionArea(t, face.sense)), e.areaIn(steel.Fit.Area)
 		face.fy = e.torsionYield(faceYield(t, face.sense))
 		opposite := beam.Sense(2 - i)
 		d := t.EffectiveDepth(opposite)

@@ -25,7 +25,7 @@ func (e *edition) flexureSteps(t *beam.Trial, s beam.Sense, f *flexure, moment u
 	section := e.trialSection(t, s)
 	w.given("Mu", "factored moment", momentClause(t), e.asMoment(e.momentIn(moment)))
 	e.strengthSteps(w, section, s, &t.Ultimate, b.Concrete.Strength, f)
-	e.phiSteps(w, f, extremeYield(section, s), b.Readings.RoundedYield)
+	e.phiSteps(w, f, b.Readings.RoundedYield)
 	w.find("φMn", "design strength", "9.5.1.1", "φ Mn", e.asMoment(e.momentIn(f.design)))
 	return w
 }
@@ -36,10 +36,10 @@ func (e *edition) strengthSteps(w *working, section mechanics.Section, s beam.Se
 	k := z.blockAt(f.blockFactor * e.lengthIn(u.NeutralAxis))
 	meaning := "yield strength of the bars"
 	if !oneYield(section) {
-		meaning = "yield strength of the extreme layer"
+		meaning = "greatest yield strength of the steel in tension, which classes it"
 	}
 	w.given("f'c", "specified concrete strength", "19.2.1", e.asStress(e.stressIn(strength)))
-	w.given("fy", meaning, "20.2.2.4", e.asStress(e.stressIn(extremeYield(section, s))))
+	w.given("fy", meaning, "20.2.2.4", e.asStress(e.stressIn(f.yield)))
 	e.blockInputs(w, &k, "b")
 	if allYieldInTension(section, u) && oneYield(section) && f.axial.IsZero() {
 		e.yieldingSteps(w, section, u, f, &k)
@@ -368,8 +368,8 @@ func (e *edition) blockFactorStep(w *working, beta1 float64) {
 }
 
 // yieldStrainStep gives εty; fy is given before.
-func (e *edition) yieldStrainStep(w *working, f *flexure, rounded bool, yield units.Stress) {
-	if rounded && e.isGrade60(yield) {
+func (e *edition) yieldStrainStep(w *working, f *flexure, rounded bool) {
+	if rounded && e.isGrade60(f.yield) {
 		w.find("εty", "yield strain by which the section is classed", "21.2.2.1", number(roundedYield), asPlain(f.yieldStrain))
 		w.note("permitted rounding for Grade 60")
 		return
@@ -381,9 +381,9 @@ func (e *edition) yieldStrainStep(w *working, f *flexure, rounded bool, yield un
 }
 
 // phiSteps gives φ by the class of the section.
-func (e *edition) phiSteps(w *working, f *flexure, yield units.Stress, rounded bool) {
+func (e *edition) phiSteps(w *working, f *flexure, rounded bool) {
 	r := &e.reduction
-	e.yieldStrainStep(w, f, rounded, yield)
+	e.yieldStrainStep(w, f, rounded)
 	form := number(r.tension)
 	switch f.class {
 	case compressionControlled:
@@ -399,26 +399,31 @@ func (e *edition) phiSteps(w *working, f *flexure, yield units.Stress, rounded b
 	w.note(f.class)
 }
 
+const noteAllPull = "the bars beyond the spread of 24.3.4 pulling too, which lowers the strain"
+
 // strainSteps is the working of the strain limit.
 func (e *edition) strainSteps(t *beam.Trial, s beam.Sense, f *flexure) *working {
 	w := new(working)
 	b := &t.Brief
-	section := e.trialSection(t, s)
 	w.given("c", "depth of the neutral axis", "22.2.2.4.2", e.asLength(e.lengthIn(f.axis)))
-	if !f.axial.IsZero() {
+	switch {
+	case f.all && !f.axial.IsZero():
+		w.note("with the axial force acting, and " + noteAllPull)
+	case f.all:
+		w.note("with " + noteAllPull)
+	case !f.axial.IsZero():
 		w.note("with the axial force acting")
 	}
-	e.extremeStep(w, e.lengthIn(t.Ultimate.ExtremeDepth), f)
+	e.extremeStep(w, e.lengthIn(f.extreme), f)
 	if e.reduction.fixedLeast > 0 {
 		w.find("εt,min", "least net tensile strain of a beam", "9.3.3.1", number(e.reduction.fixedLeast), asPlain(f.leastStrain))
 		return w
 	}
-	yield := extremeYield(section, s)
-	w.given("fy", "yield strength of the bars", "20.2.2.4", e.asStress(e.stressIn(yield)))
-	if !oneYield(section) {
-		w.note("of the extreme layer")
+	w.given("fy", "yield strength of the bars", "20.2.2.4", e.asStress(e.stressIn(f.yield)))
+	if !oneYield(e.trialSection(t, s)) {
+		w.note("the greatest of the steel in tension")
 	}
-	e.yieldStrainStep(w, f, b.Readings.RoundedYield, yield)
+	e.yieldStrainStep(w, f, b.Readings.RoundedYield)
 	w.find("εt,min", "least net tensile strain of a beam", "9.3.3.1", "εty + "+number(e.reduction.margin), asPlain(f.leastStrain))
 	return w
 }
@@ -443,7 +448,7 @@ func (e *edition) minimumSteps(t *beam.Trial, s beam.Sense, m *minimumSteel, req
 		e.requiredSteps(t, s, w, m.width, req)
 		w.find("As,4/3", "steel that waives 9.6.1.2", "9.6.1.3", "(4 / 3) As,req", e.asArea(e.minimum.waiver*req.area))
 	}
-	w.given("As", "steel provided at the tension face", "", e.asArea(e.areaIn(e.tensionArea(t, s))))
+	w.given("As", "steel provided at the tension face", "", e.asArea(e.areaIn(tensionArea(t, s))))
 	return w
 }
 
