@@ -24,8 +24,11 @@ const (
 )
 
 // castWithSlab reports whether a section is integral with a slab: a tee or an
-// ell, but for an isolated tee, whose flange is its own.
-func castWithSlab(s *beam.Section) bool { return s.Flange() == beam.Top && !s.Isolated }
+// ell that has some of it beside its web, but for an isolated tee, whose flange
+// is its own.
+func castWithSlab(s *beam.Section) bool {
+	return s.Flange() == beam.Top && !s.Isolated && (s.Width.Less(s.FlangeWidth) || !s.Slab.IsZero())
+}
 
 // exemption is the row of Table 9.6.3.1 that a section falls under; zero: none.
 // The row of fibres goes by the shear too, and so comes last.

@@ -140,6 +140,7 @@ func TestExemptionFollowsTheSection(t *testing.T) {
 		want     exemption
 	}{
 		{"tee", tee, beam.Concrete{}, exemptSlab},
+		{"tee no wider than its web", beam.Section{Shape: beam.Tee, Width: in(14), Depth: in(15), FlangeThickness: in(6), FlangeWidth: in(14)}, beam.Concrete{}, 0},
 		{"ell", beam.Section{Shape: beam.Ell, Width: in(14), Depth: in(15), FlangeThickness: in(6), FlangeWidth: in(30)}, beam.Concrete{}, exemptSlab},
 		{"isolated tee", beam.Section{Shape: beam.Tee, Width: in(14), Depth: in(15), FlangeThickness: in(6), FlangeWidth: in(40), Isolated: true}, beam.Concrete{}, 0},
 		{"inverted tee", beam.Section{Shape: beam.InvertedTee, Width: in(14), Depth: in(15), FlangeThickness: in(6), FlangeWidth: in(40)}, beam.Concrete{}, 0},
