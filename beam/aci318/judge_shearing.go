@@ -271,6 +271,7 @@ func (s *shearSpan) judge(dst []beam.Check, breaks []units.Length, k int, spacin
 		z.leanAgainst(s.greatest(breaks, from, to))
 	}
 	for i := range f.Combinations() {
+		z.combination = i
 		z.from, z.near = s.ends[0].start(f, i, s.span)
 		z.to, z.far = s.ends[1].start(f, i, s.span)
 		if z.to.Less(z.from) {

@@ -56,10 +56,11 @@ type webZone struct {
 
 	hanger *hangerSection // nil: nothing hangs on the span
 
-	// The first and last section of the span that are designed for their own
-	// shear under the combination being followed, and what was decided there.
-	from, to  units.Length
-	near, far string
+	// The combination being followed, the first and last section of the span
+	// that are designed for their own shear under it, and what was decided there.
+	combination int
+	from, to    units.Length
+	near, far   string
 
 	legs units.Length // between legs, across the beam
 
@@ -259,6 +260,9 @@ func (z *webZone) follow(i int, from, to units.Length, breaks []units.Length) {
 		}
 	}
 	z.stretch(i, at, to)
+	if z.torsion.on {
+		z.meetTorques(from, to)
+	}
 }
 
 // stretch meets the sections between two places without a change of load
@@ -272,9 +276,6 @@ func (z *webZone) stretch(i int, from, to units.Length) {
 		z.point(a)
 		z.point(b)
 		return
-	}
-	if z.torsion.on {
-		z.turnsTorque(i, from, length, &a, &b)
 	}
 	z.seekBent(from.Add(to).Scale(0.5))
 	s := loadedStretch{i: i, from: from, to: to, shearStretch: newShearStretch(length,
@@ -308,6 +309,9 @@ func (z *webZone) part(sense beam.Sense, s *loadedStretch, p signedPart) {
 		for k := 1; k < sections; k++ {
 			z.station(sense, s, p.from+float64(k)*step)
 		}
+	}
+	if z.torsion.on && s.curved() {
+		z.meetCurve(sense, s, p)
 	}
 	z.station(sense, s, p.to)
 }

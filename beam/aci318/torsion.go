@@ -171,6 +171,7 @@ type sectionTorque struct {
 	used        float64 // Tu, what the section is designed for
 	shed        float64 // what the neighbours must take instead
 	neglected   bool    // below φTth
+	distant     bool    // of a section within bt + d of the one that is judged
 }
 
 // torque is what the torque of an action asks of the section. The part that
@@ -226,21 +227,25 @@ func (e *edition) worstTorque(p *beam.Problem) (worst beam.Action, strength tors
 // eachTorque visits the places between two of a span where a torque may be
 // greatest: between them the torque of each path is linear.
 func eachTorque(f *beam.Forces, span int, from, to units.Length, visit func(a beam.Action)) {
+	for i := range f.Combinations() {
+		combinationTorque(f, i, span, from, to, visit)
+	}
+}
+
+// combinationTorque is eachTorque of one combination, from left to right.
+func combinationTorque(f *beam.Forces, i, span int, from, to units.Length, visit func(a beam.Action)) {
 	if !f.HasTorque(span) {
 		return
 	}
 	var room [48]units.Length
-	breaks := f.Breaks(room[:0], span)
-	for i := range f.Combinations() {
-		visit(f.Action(i, span, from, true))
-		visit(f.Action(i, span, to, false))
-		for _, x := range breaks {
-			if from.Less(x) && x.Less(to) {
-				visit(f.Action(i, span, x, false))
-				visit(f.Action(i, span, x, true))
-			}
+	visit(f.Action(i, span, from, true))
+	for _, x := range f.Breaks(room[:0], span) {
+		if from.Less(x) && x.Less(to) {
+			visit(f.Action(i, span, x, false))
+			visit(f.Action(i, span, x, true))
 		}
 	}
+	visit(f.Action(i, span, to, false))
 }
 
 // twists reports whether some torque of a problem may not be neglected.

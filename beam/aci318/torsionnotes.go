@@ -49,6 +49,9 @@ func (e *edition) settleTorsion(t *beam.Trial, note *beam.Register) {
 	}
 	holds("reading.torsion-angle", "the compression diagonals of the space truss stand at "+number(angle)+" degrees to the axis (22.7.6.1.2)")
 	holds("reading.torsion-shares", "the longitudinal steel of torsion is spread evenly over the perimeter of the stirrups, each bar taking what is nearest to it, with bars along the sides no closer than 9.7.5.1 asks for")
+	if len(t.Forces.Demands()) == 0 {
+		holds("reading.torsion-extent", "stirrups that the torque at a section needs go on for bt + d beyond it, besides those that the shear needs there; torques between a support and the section at d from its face, and torques that are neglected, count as they do at their own section (9.7.6.3.2, 9.4.4.3)")
+	}
 	if e.shear.rowsByStirrups {
 		holds("reading.torsion-shear-row", "stirrups of at least "+e.stirrups.leastClause+" let Vc be by row (a) or (b) of Table 22.5.5.1 although torsion takes a part of them")
 	}

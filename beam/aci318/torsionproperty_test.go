@@ -63,27 +63,56 @@ func TestNoSectionIsWorseInTorsion(t *testing.T) {
 		}
 		f := e.newTorsionFaces(trial)
 		z := e.newWebZone(trial, 1, 0, trial.Zones[0].Spacing)
+		reach := z.torsion.reach
+		z.torsion.reach = units.Length{} // each section by itself,
+		transverse := 0.0                // but for what reaches it
 		ends := shearEnds(trial, 1)
 		for i := range trial.Forces.Combinations() {
 			from, _ := ends[0].start(&trial.Forces, i, 1)
 			to, _ := ends[1].start(&trial.Forces, i, 1)
 			left, right := trial.Faces(1)
-			for k := range 301 {
-				at := left.Add(right.Sub(left).Scale(float64(k) / 300))
-				a := trial.Forces.Action(i, 1, at, k < 300)
-				q := f.strength.torque(e, &a)
-				if q.neglected {
-					continue
+			var sections []beam.Action
+			meet := func(at units.Length, fromRight bool) {
+				a := trial.Forces.Action(i, 1, at, fromRight)
+				if q := f.strength.torque(e, &a); !q.neglected {
+					m := e.momentIn(a.Moment)
+					f.part(&a, m, m, q.used, q.used)
 				}
-				m := e.momentIn(a.Moment)
-				f.part(&a, m, m, q.used, q.used)
 				if !at.Less(from) && !to.Less(at) {
-					z.point(a)
+					sections = append(sections, a)
+				}
+			}
+			for k := range 301 {
+				meet(left.Add(right.Sub(left).Scale(float64(k)/300)), k < 300)
+			}
+			for _, b := range trial.Forces.Breaks(nil, 1) { // where a torque may be greatest
+				if left.Less(b) && b.Less(right) {
+					meet(b, false)
+					meet(b, true)
+				}
+			}
+			z.combination, z.from, z.to = i, from, to
+			for _, a := range sections {
+				z.point(a)
+				near := sectionTorque{}
+				for _, b := range sections {
+					if q := f.strength.torque(e, &b); !q.neglected && b.At.Sub(a.At).Abs().AtMost(reach) {
+						near.used = max(near.used, q.used)
+					}
+				}
+				if near.used > 0 && !a.Moment.IsZero() {
+					web := &z.web[0]
+					if a.Moment.Compare(units.Moment{}) < 0 {
+						web = &z.web[1]
+					}
+					s := web.at(e, shearForces{shear: a.Shear, moment: a.Moment})
+					v := z.torsion.cage.at(near, web, &s, z.torsion.legs, 0)
+					transverse = max(transverse, ratio(v.outer, z.torsion.leg))
 				}
 			}
 		}
 		for id, found := range map[string]float64{
-			"torsion.section": z.torsion.section.utilization, "torsion.transverse": z.torsion.transverse.utilization,
+			"torsion.section": z.torsion.section.utilization, "torsion.transverse": max(transverse, z.torsion.transverse.utilization),
 			"torsion.longitudinal.bottom": f.faces[0].worstRatio, "torsion.longitudinal.top": f.faces[1].worstRatio,
 		} {
 			if found > reported[id]*(1+1e-7) {

@@ -117,13 +117,13 @@ func (c *torsionCage) at(q sectionTorque, web *webSteel, s *sectionShear, legs, 
 	if c.walls {
 		// Shear acts in the walls beside the hollow, where it adds up with the
 		// torque; those above and below have the torque alone (R22.7.7.1).
-		v.beside, v.flat = c.wallStress(q.used, c.beside), c.wallStress(q.used, c.flat)
+		v.beside, v.flat = c.sideStress(q.used), c.wallStress(q.used, c.flat)
 		v.stress = v.shearStress + v.beside
 		if v.flatGoverns = v.flat > v.stress; v.flatGoverns {
 			v.stress = v.flat
 		}
 	} else {
-		v.beside = q.used * c.perimeter / (sectionShare * c.area * c.area)
+		v.beside = c.sideStress(q.used)
 		v.stress = math.Hypot(v.shearStress, v.beside)
 	}
 	v.leg = c.legFor(q.used)
@@ -136,6 +136,15 @@ func (c *torsionCage) at(q sectionTorque, web *webSteel, s *sectionShear, legs, 
 
 // thin reports whether 22.7.7.2 goes by the thickness of a wall.
 func (c *torsionCage) thin(wall float64) bool { return wall < c.area/c.perimeter }
+
+// sideStress is the stress of a torque along the sides: of a hollow section in
+// the walls there.
+func (c *torsionCage) sideStress(torque float64) float64 {
+	if c.walls {
+		return c.wallStress(torque, c.beside)
+	}
+	return torque * c.perimeter / (sectionShare * c.area * c.area)
+}
 
 // wallStress is the stress of a torque in the wall of a hollow section.
 func (c *torsionCage) wallStress(torque, wall float64) float64 {

@@ -159,6 +159,9 @@ func (z *webZone) transverseSteps(w *worstTorsion) []beam.Step {
 	var out working
 	web.concreteSteps(e, &out, &w.shear)
 	strength.torqueSteps(e, &out, &v.sectionTorque)
+	if v.distant {
+		out.note("of a section within bt + d = " + e.length.Format(q.reach))
+	}
 	q.cage.steps(e, &out)
 	q.cage.flowSteps(e, &out)
 	out.find("at", "area per length that the torque needs of one leg", "22.7.6.1(a)",

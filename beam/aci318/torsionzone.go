@@ -9,7 +9,8 @@ import (
 // torque must be designed for.
 type torsionZone struct {
 	on       bool
-	needed   bool // torsion needs stirrups in the zone, or within bt + d of it
+	needed   bool         // torsion needs stirrups in the zone, or within bt + d of it
+	reach    units.Length // bt + d
 	strength torsionStrength
 	cage     torsionCage
 	legs     float64
@@ -48,7 +49,7 @@ const (
 // readyTorsion prepares a zone whose stirrups are spacing apart for torsion.
 func (z *webZone) readyTorsion(spacing units.Length) {
 	e, t, q := z.e, z.t, &z.torsion
-	q.on = true
+	q.on, q.reach = true, torsionReach(t)
 	z.local = true // torque and shear are greatest at different places
 	q.strength = e.problemTorsion(t.Problem)
 	tie := t.Stirrup.Diameter
@@ -75,8 +76,9 @@ func (z *webZone) offerTorsion(sense beam.Sense, a *beam.Action, web *webSteel, 
 	if a.Span == 0 {
 		q.strength.load(z.e, a.Axial)
 	}
-	torque := q.strength.torque(z.e, a)
-	if torque.neglected {
+	own := q.strength.torque(z.e, a)
+	near := z.reaching(a, own)
+	if near.neglected {
 		return
 	}
 	q.needed = true
@@ -84,58 +86,20 @@ func (z *webZone) offerTorsion(sense beam.Sense, a *beam.Action, web *webSteel, 
 	if z.hanger != nil {
 		lift = web.lifting(z.e, s, hungLoad(z.t.Problem, z.span, a.Combination, a.At)).lift
 	}
-	v := q.cage.at(torque, web, s, q.legs, lift)
+	v := q.cage.at(near, web, s, q.legs, lift)
 	if v.broken != "" {
 		q.section.take(beam.NoCapacity, sense, a, &v, s, note)
 		q.transverse.take(beam.NoCapacity, sense, a, &v, s, note)
 		return
 	}
-	q.section.take(ratio(v.stress, v.limit), sense, a, &v, s, note)
 	q.transverse.take(ratio(v.outer, q.leg), sense, a, &v, s, note)
-}
-
-// nearTorsion reports whether torsion needs stirrups between two places of the
-// span, or within bt + d of them (9.7.6.3.2), with bt the width of the strip
-// that the stirrups stand in and d the greater of both faces.
-func (z *webZone) nearTorsion(from, to units.Length) bool {
-	left, right := z.t.Faces(z.span)
-	d := z.t.EffectiveDepth(beam.Positive).Max(z.t.EffectiveDepth(beam.Negative))
-	if d.IsZero() {
-		d = z.t.Brief.Section.Depth
-	}
-	reach := z.t.Brief.Section.Width.Add(d)
-	from, to = from.Sub(reach).Max(left), to.Add(reach).Min(right)
-	if !from.Less(to) {
-		return false
-	}
-	near := false
-	eachTorque(&z.t.Forces, z.span, from, to, func(a beam.Action) {
-		q := z.torsion.strength.torque(z.e, &a)
-		near = near || !q.neglected
-	})
-	return near
-}
-
-// turnsTorque meets the sections of a stretch of the span at which a torque
-// passes one of its limits: there what a section needs is extreme although
-// neither end of the stretch is.
-func (z *webZone) turnsTorque(i int, from units.Length, length float64, a, b *beam.Action) {
-	t := &z.torsion.strength
-	qa, qb := t.torque(z.e, a), t.torque(z.e, b)
-	if qa.neglected && qb.neglected {
+	if own.neglected {
 		return
 	}
-	t0, t1 := z.e.momentIn(a.Torque), z.e.momentIn(b.Torque)
-	c0, c1 := t0-z.e.momentIn(a.Compatible), t1-z.e.momentIn(b.Compatible)
-	least, crack := t.phi*t.threshold, t.phi*t.cracking
-	for _, line := range [3][3]float64{{t0, t1, least}, {c0, c1, least}, {t0, t1, crack}} {
-		for _, level := range [2]float64{line[2], -line[2]} {
-			if (line[0]-level)*(line[1]-level) < 0 {
-				at := from.Add(units.Metre.Of(length * (level - line[0]) / (line[1] - line[0])))
-				z.point(z.t.Forces.Action(i, z.span, at, true))
-			}
-		}
+	if near.distant {
+		v = q.cage.at(own, web, s, q.legs, lift)
 	}
+	q.section.take(ratio(v.stress, v.limit), sense, a, &v, s, note)
 }
 
 // appendTorsion appends the checks on torsion of a stretch.
@@ -152,6 +116,8 @@ func (z *webZone) appendTorsion(dst []beam.Check) []beam.Check {
 	}
 	if q.section.found {
 		dst = z.appendSection(dst)
+	}
+	if q.transverse.found {
 		dst = z.appendTransverse(dst)
 	}
 	dst = z.appendClosed(dst)
@@ -201,6 +167,8 @@ func (z *webZone) appendTransverse(dst []beam.Check) []beam.Check {
 		c.Reason = z.torsion.unfit
 	case w.values.shed > 0:
 		c.Reason = noteShed
+	case w.values.distant:
+		c.Reason = noteReach
 	}
 	if z.t.Record {
 		c.Steps = z.transverseSteps(w)
