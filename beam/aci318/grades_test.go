@@ -172,3 +172,32 @@ func TestStrainOfAllBarsUnderAxialForce(t *testing.T) {
 		require.Equal(t, tc.note, c.Steps[0].Note)
 	}
 }
+
+// Bars along the sides are held against the tables too, each time once, and
+// class the section where they count and pull: #5 of Grade 80 beside bars of
+// Grade 60.
+func TestGradeOfSideBars(t *testing.T) {
+	side := beam.Row{Mark: "W", Bar: "#5", Count: 2, Face: beam.Side, Spacing: in(9)}
+	for _, tc := range []struct {
+		yield float64 // ksi
+		want  beam.Outcome
+	}{{80, beam.Pass}, {110, beam.Fail}, {39, beam.Fail}} {
+		side.Yield = units.KSI.Of(tc.yield)
+		for _, counted := range []bool{false, true} {
+			r, _ := checkUS(t, ACI31819(), []beam.Row{bottom(4, "#9"), top(2, "#4"), side}, func(b *beam.Brief) {
+				b.Section.Depth, b.Readings.CountSideBars = in(40), counted
+			}, beam.Demand{Name: "1", Moment: units.KipFoot.Of(200)})
+			c := find1(t, r, "flexure.grade")
+			require.Equal(t, tc.want, c.Outcome, "%v ksi", tc.yield)
+			require.Equal(t, beam.Side, c.Face)
+			class := 60.0
+			if counted {
+				class = max(class, tc.yield)
+			}
+			require.InEpsilon(t, class/29000+0.003, find1(t, r, "flexure.strain.positive").Demand.SI(), 1e-12)
+		}
+	}
+	side.Yield = units.Stress{}
+	r, _ := checkUS(t, ACI31819(), []beam.Row{bottom(4, "#9"), top(2, "#4"), side}, func(b *beam.Brief) { b.Section.Depth = in(40) }, beam.Demand{Name: "1", Moment: units.KipFoot.Of(200)})
+	require.Empty(t, checksOf(r.Checks, "flexure.grade"))
+}

@@ -241,6 +241,9 @@ func (e *edition) judgeGrades(dst []beam.Check, t *beam.Trial) []beam.Check {
 			dst = e.judgeGrade(dst, t, face, rows[i].Yield)
 		}
 	}
+	if t.Side.Each > 0 {
+		dst = e.judgeGrade(dst, t, beam.Side, t.Side.Yield)
+	}
 	return dst
 }
 
