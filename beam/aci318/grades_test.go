@@ -194,6 +194,9 @@ func TestGradeOfSideBars(t *testing.T) {
 			if counted {
 				class = max(class, tc.yield)
 			}
+			// 24.3.2 along the sides goes by 2/3 of the strongest: cc = 1.875 in.
+			fs := 2.0 / 3 * max(60, tc.yield)
+			require.InEpsilon(t, min(15*40/fs-2.5*1.875, 12*40/fs), valueIn(t, find1(t, r, "side-face.spacing").Capacity, "in"), 1e-9)
 			require.InEpsilon(t, class/29000+0.003, find1(t, r, "flexure.strain.positive").Demand.SI(), 1e-12)
 		}
 	}

@@ -22,8 +22,6 @@ func (e *edition) appendSideFace(dst []beam.Check, t *beam.Trial) []beam.Check {
 			"the beam is deep enough to need bars along its sides, which are not those of the strip in which the stirrups stand: the cover to them changes with the level"))
 	}
 	cc := barCover(t)
-	yield := t.Brief.Reinforcement.Yield
-	most := e.crackSpacing(e.crackStress(yield), cc)
 	judged := false
 	for _, sense := range [2]beam.Sense{beam.Positive, beam.Negative} {
 		face := sense.TensionFace()
@@ -31,6 +29,11 @@ func (e *edition) appendSideFace(dst []beam.Check, t *beam.Trial) []beam.Check {
 		if !bendsAnywhere(t, sense) || steel.Count == 0 {
 			continue
 		}
+		yield := greatestYield(t, face) // of the bars that may be stressed most
+		if t.Side.Each > 0 {
+			yield = yield.Max(t.Side.Yield)
+		}
+		most := e.crackSpacing(e.crackStress(yield), cc)
 		c := beam.Check{ID: "side-face.spacing", Clause: clause, Face: face}
 		c.Compare(sideGap(t, face).Amount(), most.Amount())
 		if t.Side.Each == 0 && c.Outcome == beam.Fail {
