@@ -326,43 +326,55 @@ func (r ring) turned() ring {
 	return t
 }
 
-// clipped is the part of the ring to the left of an upright line; of a ring that
-// every level cuts in one piece.
-func (r ring) clipped(x float64) ring {
-	out := make(ring, 0, len(r)+2)
-	for i, a := range r {
-		b := r[(i+1)%len(r)]
-		if a.x <= x {
-			out = append(out, a)
-		}
-		if (a.x < x && x < b.x) || (b.x < x && x < a.x) {
-			out = append(out, corner{x, a.y + (b.y-a.y)*(x-a.x)/(b.x-a.x)})
-		}
-	}
-	return out
-}
-
-// mirrored is the ring seen from behind.
-func (r ring) mirrored() ring {
-	m := make(ring, len(r))
-	for i, c := range r {
-		m[len(r)-1-i] = corner{-c.x, c.y}
-	}
-	return m
-}
-
 // Clipped is the area inside the outside perimeter, and that perimeter, of a
 // polygon whose overhangs beyond the strip of its Width are cut off at given
 // widths. Its Width and Depth are those that GeometryOf found.
 func (s *Section) Clipped(g *Geometry, left, right units.Length) (units.Area, units.Length) {
-	r := ringOf(s.Outline)
-	from := math.Inf(1)
-	for _, c := range r {
-		from = min(from, c.x)
+	from, sum := math.Inf(1), 0.0
+	s.eachEdge(func(a, b corner) {
+		from = min(from, a.x)
+		sum += a.x*b.y - b.x*a.y
+	})
+	low := from + g.WebLeft.Sub(left).In(units.Metre)
+	high := from + g.WebLeft.Add(s.Width).Add(right).In(units.Metre)
+	// Counter-clockwise the area is the integral of x over y, with x held
+	// between both cuts; and along a cut lies the height of what goes on beyond.
+	area, perimeter, turn := 0.0, 0.0, math.Copysign(1, sum)
+	s.eachEdge(func(a, b corner) {
+		places := [4]float64{0, 1, 1, 1}
+		n := 1
+		for _, x := range [2]float64{low, high} {
+			if (a.x < x) != (b.x < x) {
+				places[n] = (x - a.x) / (b.x - a.x)
+				n++
+			}
+		}
+		if places[2] < places[1] && n == 3 {
+			places[1], places[2] = places[2], places[1]
+		}
+		for k := range n {
+			x := a.x + (b.x-a.x)*(places[k]+places[k+1])/2
+			rise := turn * (b.y - a.y) * (places[k+1] - places[k])
+			area += min(max(x, low), high) * rise
+			switch {
+			case x < low:
+				perimeter -= rise
+			case x > high:
+				perimeter += rise
+			default:
+				perimeter += math.Hypot(b.x-a.x, b.y-a.y) * (places[k+1] - places[k])
+			}
+		}
+	})
+	return units.SquareMetre.Of(area), units.Metre.Of(perimeter)
+}
+
+// eachEdge visits the edges of a polygon's outline, in metres.
+func (s *Section) eachEdge(visit func(a, b corner)) {
+	at := func(p Point) corner { return corner{p.X.In(units.Metre), p.Y.In(units.Metre)} }
+	for i, p := range s.Outline {
+		visit(at(p), at(s.Outline[(i+1)%len(s.Outline)]))
 	}
-	side := from + g.WebLeft.In(units.Metre)
-	r = r.clipped(side + s.Width.Add(right).In(units.Metre)).mirrored().clipped(-(side - left.In(units.Metre)))
-	return units.SquareMetre.Of(r.area()), units.Metre.Of(r.perimeter())
 }
 
 const (

@@ -2,6 +2,7 @@ package beam_test
 
 import (
 	"math"
+	"slices"
 	"testing"
 
 	"github.com/stretchr/testify/require"
@@ -121,6 +122,11 @@ func TestClippedOutlines(t *testing.T) {
 			area, perimeter := s.Clipped(&g, mm(tt.left), mm(tt.right))
 			require.InEpsilon(t, tt.area, area.In(units.SquareMillimetre), 1e-9)
 			require.InEpsilon(t, tt.perimeter, perimeter.In(units.Millimetre), 1e-9)
+			require.Zero(t, testing.AllocsPerRun(10, func() { s.Clipped(&g, mm(tt.left), mm(tt.right)) }))
+			slices.Reverse(s.Outline)
+			area, perimeter = s.Clipped(&g, mm(tt.left), mm(tt.right))
+			require.InEpsilon(t, tt.area, area.In(units.SquareMillimetre), 1e-9, "clockwise")
+			require.InEpsilon(t, tt.perimeter, perimeter.In(units.Millimetre), 1e-9, "clockwise")
 			for i, thick := range tt.thick {
 				require.InDelta(t, thick, g.OverhangThickness[i].In(units.Millimetre), 0.01)
 			}
