@@ -51,7 +51,8 @@ const (
 type torsionShape struct {
 	width, depth        float64 // of the web, or of the strip in which stirrups stand
 	left, right, flange float64 // overhangs as far as they count by 9.2.4.4, and their thickness
-	outline             bool    // of a polygon: the whole outline counts, not the strip alone
+	outline             bool    // of a polygon: its outline counts, not the strip alone,
+	cut                 bool    // without what of its flanges goes beyond 9.2.4.4
 	counted             bool    // flanges, or a polygon beyond its strip, are part of the areas
 	hollow              bool    // of that outline
 	walls               bool    // hollow in its strip alone, or as a whole
@@ -75,7 +76,7 @@ func (s *torsionShape) close(enclosed, perimeter, hollows float64) {
 
 // torsionShape takes the outline with the flanges of 9.2.4.4, or without them
 // where they would lessen Acp²/pcp (of a hollow section Ag²/pcp). What a
-// polygon has beside its strip is taken likewise: all of it or nothing.
+// polygon has beside its strip is taken likewise.
 func (e *edition) torsionShape(s *beam.Section, g *beam.Geometry) torsionShape {
 	web := torsionShape{width: e.lengthIn(s.Width), depth: e.lengthIn(s.Depth)}
 	hollows := max(0, e.areaIn(g.Enclosed.Sub(g.Gross)))
@@ -84,7 +85,12 @@ func (e *edition) torsionShape(s *beam.Section, g *beam.Geometry) torsionShape {
 	switch {
 	case s.Shape == beam.Polygon:
 		with.outline = true
-		with.close(e.areaIn(g.Enclosed), e.lengthIn(g.Perimeter), hollows)
+		left, right, cut := outlineOverhangs(s, g)
+		area, perimeter := g.Enclosed, g.Perimeter
+		if with.cut = cut; cut {
+			area, perimeter = s.Clipped(g, left, right)
+		}
+		with.close(e.areaIn(area), e.lengthIn(perimeter), hollows)
 	case s.Flange() != 0:
 		left, right := torsionOverhangs(s)
 		with.left, with.right, with.flange = e.lengthIn(left), e.lengthIn(right), e.lengthIn(s.FlangeThickness)
@@ -114,6 +120,23 @@ func torsionOverhangs(s *beam.Section) (left, right units.Length) {
 	}
 	most := s.Depth.Sub(s.FlangeThickness).Min(s.FlangeThickness.Scale(flangeDepths))
 	return left.Min(most), right.Min(most)
+}
+
+// outlineOverhangs are the overhangs of a polygon beside its strip as far as they
+// count, and whether anything is cut off them. One that is thinner than half the
+// depth where it joins the strip is a flange, of which 9.2.4.4 counts no more
+// than of a tee's; a thicker one is a part of the web. That half is a judgement.
+func outlineOverhangs(s *beam.Section, g *beam.Geometry) (left, right units.Length, cut bool) {
+	over := [2]units.Length{g.WebLeft, g.Overall.Sub(g.WebLeft).Sub(s.Width)}
+	for i, t := range g.OverhangThickness {
+		if !t.Less(s.Depth.Scale(0.5)) {
+			continue
+		}
+		if most := s.Depth.Sub(t).Min(t.Scale(flangeDepths)); !over[i].AtMost(most) {
+			over[i], cut = most, true
+		}
+	}
+	return over[0], over[1], cut
 }
 
 // torsionStrength is what 22.7 knows of a section before stirrups are looked

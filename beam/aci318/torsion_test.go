@@ -117,3 +117,83 @@ func TestAxialFactorOfTorsionGoesByTheWholeSection(t *testing.T) {
 	require.InEpsilon(t, math.Sqrt(1+100000/(4*s.gross*root)), s.axialFactor, 1e-12)
 	require.Less(t, s.gross, s.enclosed)
 }
+
+// An outline counts with the overhangs of 9.2.4.4, as a tee of its size does.
+func TestOutlineCountsLikeTheTeeThatItIs(t *testing.T) {
+	points := func(xy ...float64) (p []beam.Point) {
+		for i := 0; i < len(xy); i += 2 {
+			p = append(p, beam.Point{X: in(xy[i]), Y: in(xy[i+1])})
+		}
+		return p
+	}
+	concrete := beam.Concrete{Strength: psi(4000)}
+	of := func(s beam.Section) torsionStrength { return torsionOf(t, &us19, s, &concrete, units.Force{}) }
+	tee := func(web, depth, flange, width float64) beam.Section {
+		return beam.Section{Shape: beam.Tee, Width: in(web), Depth: in(depth), FlangeThickness: in(flange), FlangeWidth: in(width)}
+	}
+	drawn := func(web, depth, flange, width float64) beam.Section {
+		l, r := (width-web)/2, (width+web)/2
+		return beam.Section{Shape: beam.Polygon, Outline: points(0, depth, 0, depth-flange, l, depth-flange, l, 0, r, 0, r, depth-flange, width, depth-flange, width, depth)}
+	}
+	for _, v := range [][4]float64{{12, 24, 4, 60}, {12, 24, 4, 44}, {12, 24, 4, 30}, {12, 24, 2, 100}, {24, 24, 8, 80}, {30, 30, 11, 100}} {
+		want, got := of(tee(v[0], v[1], v[2], v[3])), of(drawn(v[0], v[1], v[2], v[3]))
+		require.InEpsilon(t, want.enclosed, got.enclosed, 1e-9, "%v", v)
+		require.InEpsilon(t, want.perimeter, got.perimeter, 1e-9, "%v", v)
+		require.InEpsilon(t, want.threshold, got.threshold, 1e-9, "%v", v)
+	}
+	// 16 in. a side of 4 in.: 288 + 32 × 4 = 416 in2 within 72 + 64 = 136 in.
+	s := of(drawn(12, 24, 4, 60))
+	require.InEpsilon(t, math.Sqrt(4000)*416*416/136, s.threshold, 1e-9)
+	require.True(t, s.counted && s.cut)
+	require.False(t, of(drawn(12, 24, 4, 44)).cut, "just as much as counts")
+
+	// 12 in. of 24 are no flange but a part of the web; less are.
+	stem := func(thick float64) beam.Section { return drawn(12, 24, thick, 60) }
+	require.InEpsilon(t, 12*24+48*12.0, of(stem(12)).enclosed, 1e-9)
+	require.InEpsilon(t, 12*24+2*(24-11.9)*11.9, of(stem(11.9)).enclosed, 1e-9)
+
+	// One side by its own thickness: on the left a flange, on the right a block.
+	s = of(beam.Section{Shape: beam.Polygon, Outline: points(0, 24, 0, 20, 40, 20, 40, 0, 52, 0, 52, 10, 70, 10, 70, 24)})
+	require.InEpsilon(t, 12*24+16*4+18*14.0, s.enclosed, 1e-9)
+	require.InEpsilon(t, 2*(12+16+18+24.0), s.perimeter, 1e-9)
+}
+
+// A torque that the whole outline would let be neglected is designed for where
+// the flange counts as 9.2.4.4 has it, and the working says so.
+func TestOutlineWithAWideFlange(t *testing.T) {
+	for torque, want := range map[float64]beam.Outcome{5.02: beam.Pass, 5.129: beam.NotApplicable} {
+		r := twisted(t, ACI31819(), func(b *beam.Brief, l *beam.Layout) {
+			at := func(x, y float64) beam.Point { return beam.Point{X: in(x), Y: in(y)} }
+			b.Section = beam.Section{Shape: beam.Polygon, Outline: []beam.Point{at(0, 24), at(0, 20), at(24, 20), at(24, 0), at(36, 0), at(36, 20), at(60, 20), at(60, 24)}}
+			b.Demands[0] = beam.Demand{Name: "A", Moment: units.KipFoot.Of(100), Shear: units.Kip.Of(10), Torque: units.KipFoot.Of(torque)}
+			l.Longitudinal = []beam.Row{bottom(3, "#9"), top(2, "#5")}
+		})
+		c := find1(t, r, "torsion.threshold")
+		require.Equal(t, want, c.Outcome, "%g", torque)
+		require.InEpsilon(t, 0.75*math.Sqrt(4000)*416*416/136/12000, valueIn(t, c.Capacity, "kip-ft"), 1e-9)
+		requireEvaluable(t, c)
+		require.Contains(t, notesOf(c), "9.2.4.4")
+		found := false
+		for _, a := range r.Assumptions {
+			found = found || a.ID == "reading.torsion-outline"
+		}
+		require.True(t, found)
+	}
+}
+
+// Judging an outline in torsion allocates nothing either.
+func TestJudgingAnOutlineInTorsionAllocatesNothing(t *testing.T) {
+	at := func(x, y float64) beam.Point { return beam.Point{X: in(x), Y: in(y)} }
+	c := ACI31819()
+	_, trial := twistedTrial(t, c, func(b *beam.Brief, l *beam.Layout) {
+		twistedSpan(40, 9)(b, l)
+		b.Section = beam.Section{Shape: beam.Polygon, Outline: []beam.Point{at(0, 28), at(0, 24), at(24, 24), at(24, 0), at(40, 0), at(40, 24), at(64, 24), at(64, 28)}}
+	})
+	require.True(t, trial.Twisted)
+	trial.Record = false
+	var dst []beam.Check
+	for _, g := range []beam.Group{beam.Shearing, beam.Bending, beam.Whole} {
+		dst = c.Judge(dst[:0], g, trial)
+		require.Zero(t, testing.AllocsPerRun(20, func() { dst = c.Judge(dst[:0], g, trial) }), "group %d", g)
+	}
+}

@@ -35,13 +35,16 @@ func (r *resolution) torsion() {
 	}
 }
 
-// settleTorsion lists how a torque that must be designed for was taken.
+// settleTorsion lists how a torque was taken.
 func (e *edition) settleTorsion(t *beam.Trial, note *beam.Register) {
-	if !t.Twisted {
-		return
-	}
 	holds := func(id, assumed string) {
 		note.Assume(beam.Assumption{ID: id, Assumed: assumed, UsedIn: torsionChecks, Found: "a choice of reading: it holds as taken", Holds: true})
+	}
+	if torqueActs(&t.Forces) && e.problemTorsion(t.Problem).cut {
+		holds("reading.torsion-outline", "an overhang of the outline that is thinner than half the depth where it joins the web counts in Acp and pcp as a flange (9.2.4.4), a thicker one as a part of the web")
+	}
+	if !t.Twisted {
+		return
 	}
 	angle := t.Brief.Readings.TorsionAngle
 	if angle == 0 {

@@ -7,6 +7,9 @@ func (t *torsionStrength) outlineSteps(e *edition, out *working) {
 	const area, perimeter = "area enclosed by the outside perimeter", "outside perimeter"
 	if t.outline && t.counted {
 		out.given("Acp", area, "22.7.4.1", e.asArea(t.enclosed))
+		if t.cut {
+			out.note("overhangs thinner than half the depth count as far as the web projects beyond them, and no more than four times their thickness (9.2.4.4)")
+		}
 		out.given("pcp", perimeter, "22.7.4.1", e.asLength(t.perimeter))
 		return
 	}
