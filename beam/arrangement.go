@@ -52,6 +52,9 @@ func (c *Check) Describe(sys units.System) string {
 	case NotApplicable, NotJudged:
 		return fmt.Sprintf("%s: %s (%s): %s", c.ID, c.Outcome, c.Clause, c.Reason)
 	}
+	if c.Outcome == Fail && c.Utilization >= NoCapacity && c.Reason != "" {
+		return fmt.Sprintf("%s: fails (%s): %s", c.ID, c.Clause, c.Reason)
+	}
 	relation := "<="
 	if c.Outcome == Fail {
 		relation = ">"
@@ -68,6 +71,9 @@ func (c *Check) Describe(sys units.System) string {
 func Short(sys units.System, a units.Amount) string {
 	v := sys.Float(a)
 	digits := 0
+	if v != 0 && math.Abs(v) < 1e-6 {
+		return strings.TrimSpace(strconv.FormatFloat(v, 'e', 1, 64) + " " + sys.Unit(a.Dimension()))
+	}
 	if v != 0 {
 		digits = max(0, 4-int(math.Floor(math.Log10(math.Abs(v)))))
 	}

@@ -312,6 +312,9 @@ func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
 				f.add(path, "one row of side bars", "a second row of side bars is given")
 				continue
 			}
+			if r.Layer != 0 || r.Flange || r.Bundled > 1 || r.InCompression {
+				f.add(path, "bars, count, spacing and yield", "a row of side bars is given what belongs to rows of a face: a layer, a flange, bundles or compression")
+			}
 			t.Side = SideSteel{Size: size, Each: r.Count, Spacing: r.Spacing, Yield: r.yield(p), TensionFace: Bottom}
 			if !(r.Spacing.Amount().SI() > 0) {
 				f.add(path+"/spacing", "above zero", "side bars need the distance between them, and it is %s", p.System.Format(r.Spacing.Amount()))

@@ -50,7 +50,7 @@ func cures(ctx context.Context, code Code, brief Brief, r *Result) ([]Cure, erro
 			b := brief.clone()
 			from, to := change.apply(&b, k)
 			b.Preferences.KeepBest, b.Preferences.Depths = -1, nil
-			c, err := design(ctx, code, b)
+			c, err := design(ctx, code, b, true)
 			if err != nil {
 				if ctx.Err() != nil {
 					return false, err

@@ -22,7 +22,7 @@ import (
 // The error is an *InputError that lists every fault of the brief, or the
 // context's. A beam that fails or lies out of scope is no error.
 func Design(ctx context.Context, code Code, brief Brief) (*Result, error) {
-	r, err := design(ctx, code, brief)
+	r, err := design(ctx, code, brief, false)
 	if err != nil || r.Verdict != Unsatisfied || brief.Preferences.NoCures {
 		return r, err
 	}
@@ -53,12 +53,14 @@ func CheckLayout(ctx context.Context, code Code, brief Brief, layout Layout) (*R
 	return p.finish(layout)
 }
 
-// design is Design without the cures.
-func design(ctx context.Context, code Code, brief Brief) (*Result, error) {
+// design is Design without the cures. With any it takes the first layout that
+// passes for the best.
+func design(ctx context.Context, code Code, brief Brief, any bool) (*Result, error) {
 	first, err := prepare(code, brief)
 	if err != nil {
 		return nil, err
 	}
+	first.any = any
 	best, err := searchDepths(ctx, first)
 	if err != nil {
 		return nil, err

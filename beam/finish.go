@@ -221,7 +221,11 @@ func (p *prepared) cautions(r *Result) []string {
 	for _, a := range r.Assumptions {
 		switch {
 		case a.Open:
-			c = append(c, "Assumed, for the engineer to confirm: "+a.Assumed)
+			said := "Assumed, for the engineer to confirm: " + a.Assumed
+			if a.Found != "" {
+				said += "; found: " + a.Found
+			}
+			c = append(c, said)
 		case !a.Holds && a.Decisive:
 			c = append(c, "Assumed and refuted: "+a.Assumed+"; found: "+a.Found)
 		}

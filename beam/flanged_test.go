@@ -449,3 +449,58 @@ func inches(xy ...float64) (out []beam.Point) {
 	}
 	return out
 }
+
+// Loads are refused what belongs to loads of other shapes, which they would
+// otherwise be thought to carry.
+func TestForeignFieldsOfLoads(t *testing.T) {
+	w, f, m := units.KipPerFoot.Of(1), units.Kip.Of(1), units.KipFoot.Of(1)
+	ft := units.Foot.Of(1)
+	tests := []struct {
+		load beam.Load
+		path string
+	}{
+		{beam.Load{Shape: beam.UniformTorque, Intensity: w}, "intensity"},
+		{beam.Load{Shape: beam.PointLoad, Intensity: w}, "intensity"},
+		{beam.Load{Shape: beam.Uniform, Intensity: w, Force: f}, "force"},
+		{beam.Load{Shape: beam.Uniform, Intensity: w, Moment: m}, "moment"},
+		{beam.Load{Shape: beam.Uniform, Intensity: w, At: ft}, "at"},
+		{beam.Load{Shape: beam.Uniform, Intensity: w, From: ft}, "from"},
+		{beam.Load{Shape: beam.PointLoad, Force: f, To: ft}, "to"},
+		{beam.Load{Shape: beam.Uniform, Intensity: w, IntensityEnd: w}, "intensity_end"},
+		{beam.Load{Shape: beam.Uniform, Intensity: w, Varies: true}, "intensity_end"},
+		{beam.Load{Shape: beam.Couple, Moment: m, Path: beam.EquilibriumTorque}, "path"},
+	}
+	for _, tt := range tests {
+		b := plain()
+		tt.load.Case = beam.Dead
+		b.Loads = append(b.Loads, tt.load)
+		var wrong *beam.InputError
+		require.ErrorAs(t, beam.Validate(aci318.ACI31819(), b), &wrong, "%s", tt.path)
+		require.Len(t, wrong.Faults, 1)
+		require.Equal(t, "/loads/2/"+tt.path, wrong.Faults[0].Path)
+	}
+}
+
+// A support's torque is what the span brings to it: 1.4 times half of 30 kip-ft
+// at each end of a span held at both.
+func TestReactionsHoldTorques(t *testing.T) {
+	b := plain()
+	b.Loads = append(b.Loads, beam.Load{Case: beam.Dead, Shape: beam.UniformTorque, Moment: units.KipFoot.Of(-30)})
+	r := design(t, b)
+	for _, s := range r.Reactions {
+		require.InEpsilon(t, 1.4*15, s.Torque.In(units.KipFoot), 1e-9)
+		require.Equal(t, "1.4D", s.TorqueBy)
+	}
+}
+
+// A section that is too small for its torque is given up soon, with what would
+// cure it.
+func TestHopelessTorqueIsGivenUpSoon(t *testing.T) {
+	b := plain()
+	b.Loads = append(b.Loads, beam.Load{Case: beam.Dead, Shape: beam.UniformTorque, Moment: units.KipFoot.Of(400)})
+	r := design(t, b)
+	require.Equal(t, beam.Unsatisfied, r.Verdict)
+	require.Contains(t, r.Binding, "torsion.section")
+	require.Less(t, len(r.Rejected), 2000)
+	require.NotEmpty(t, r.Cures)
+}

@@ -38,6 +38,10 @@ type Reaction struct {
 	MostBy, LeastBy string // combinations
 	Moment          units.Moment
 	MomentBy        string
+	// Torque is the greatest that the support must hold against twist, whichever
+	// way it turns.
+	Torque   units.Moment
+	TorqueBy string
 }
 
 // spanForces are the forces along one span.
@@ -341,9 +345,27 @@ func memberForces(b *Brief, selfWeight units.LineLoad, kept []Combination) (Forc
 			}
 			r.Moment, r.MomentBy = m.Moment.Abs(), m.ID
 		}
+		f.twistAt(&r, b.Spans)
 		f.reactions = append(f.reactions, r)
 	}
 	return f, nil
+}
+
+// twistAt finds the torque that a support holds: what the spans on either side
+// bring to it.
+func (f *Forces) twistAt(r *Reaction, spans []units.Length) {
+	for i := range f.Combinations() {
+		var held units.Moment
+		if r.Support <= len(f.spans) {
+			held = f.Action(i, r.Support, units.Length{}, true).Torque
+		}
+		if k := r.Support - 1; k >= 1 {
+			held = held.Sub(f.Action(i, k, spans[k-1], false).Torque)
+		}
+		if r.Torque.Less(held.Abs()) {
+			r.Torque, r.TorqueBy = held.Abs(), f.spans[0].lines[i].ID()
+		}
+	}
 }
 
 // addTwists takes the torques among the loads, which the analysis of bending

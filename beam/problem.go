@@ -75,6 +75,7 @@ type prepared struct {
 	assumedDepth [Negative + 1]units.Length
 	// assumedWeight is the self-weight of the first section tried.
 	assumedWeight units.LineLoad
+	any           bool // the first layout that passes will do
 }
 
 // prepare resolves a brief under a code and analyses it. The error is an

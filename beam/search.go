@@ -31,7 +31,10 @@ import (
 //     satisfy: of each size the fewest bars, in one layer, that do.
 //
 // Within that space it is exhaustive: what it skips could not be ranked among
-// the layouts kept, or is below the code's own bound on tension steel.
+// the layouts kept, or is below the code's own bound on tension steel. It gives
+// a stirrup size up early only where nothing passes with the first pairs tried,
+// the lightest, nor with the heaviest bars that pass on their own faces: the
+// section is then too small for the shear or the torque, whatever the bars.
 type search struct {
 	p      *prepared
 	prefer Preference
@@ -133,6 +136,9 @@ func (s *search) run(ctx context.Context) error {
 		if err := s.pairs(ctx, tie, bottoms, tops); err != nil {
 			return err
 		}
+		if s.done() {
+			return nil
+		}
 	}
 	if len(s.kept) > 0 {
 		return nil
@@ -150,6 +156,9 @@ func (s *search) run(ctx context.Context) error {
 	}
 	return nil
 }
+
+// done reports whether a layout is found that will do.
+func (s *search) done() bool { return s.p.any && len(s.kept) > 0 }
 
 func (s *search) bent(sense Sense) bool { return s.p.bent(sense) }
 
@@ -372,6 +381,7 @@ func (s *search) worst() float64 {
 func (s *search) pairs(ctx context.Context, tie bars.Size, bottoms, tops []barSet) error {
 	s.t.enclose(tie, s.main[len(s.main)-1]) // the greatest cover, and so the shortest stirrups
 	lightest := s.leastStirrups(tie, s.p.Brief.Section.Depth)
+	patience := hopelessPairs
 	for i := range bottoms {
 		if err := ctx.Err(); err != nil {
 			return err
@@ -388,7 +398,35 @@ func (s *search) pairs(ctx context.Context, tie bars.Size, bottoms, tops []barSe
 			if !s.accepts(Bottom, tie, b) {
 				break
 			}
-			s.shear(tie, b, t, 0)
+			if s.shear(tie, b, t, 0) {
+				patience = math.MaxInt
+			}
+			if s.done() {
+				return nil
+			}
+			if patience--; patience == 0 && !s.heaviest(tie, bottoms, tops) {
+				return nil
+			}
+		}
+	}
+	return nil
+}
+
+// hopelessPairs is how many pairs are tried before those of the most steel
+// must show that stirrups can do at all.
+const hopelessPairs = 24
+
+// heaviest reports whether stirrups do for the heaviest sets that pass on their
+// own faces, with which the concrete bears the most shear.
+func (s *search) heaviest(tie bars.Size, bottoms, tops []barSet) bool {
+	b, t := s.heaviestAccepted(Bottom, tie, bottoms), s.heaviestAccepted(Top, tie, tops)
+	return b == nil || t == nil || s.shear(tie, b, t, 0)
+}
+
+func (s *search) heaviestAccepted(face Face, tie bars.Size, sets []barSet) *barSet {
+	for i := len(sets) - 1; i >= 0; i-- {
+		if s.accepts(face, tie, &sets[i]) {
+			return &sets[i]
 		}
 	}
 	return nil
@@ -430,6 +468,9 @@ func (s *search) compressed(ctx context.Context, tie bars.Size, face Face, hopel
 		}
 		for _, of := range others {
 			s.compress(tie, face, b, of, lightest)
+		}
+		if s.done() {
+			return nil
 		}
 	}
 	return nil

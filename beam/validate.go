@@ -258,6 +258,7 @@ func (l *Load) check(f *faults, path string, span units.Length) {
 	moment := func(what string) {
 		f.within(path+"/moment", what, l.Moment.Amount(), f.mostMoment.Neg().Amount(), f.mostMoment.Amount())
 	}
+	l.checkForeign(f, path)
 	switch l.Shape {
 	case Uniform:
 		intensity("intensity", l.Intensity)
@@ -286,6 +287,30 @@ func (l *Load) check(f *faults, path string, span units.Length) {
 		f.word(path+"/path", "path of the torque", l.Path.String(), l.Path == 0, torquePathWords)
 	default:
 		f.add(path+"/shape", strings.Join(loadShapeWords, ", "), "load shape is missing or not known")
+	}
+}
+
+// checkForeign reports fields that say something of a load of another shape.
+func (l *Load) checkForeign(f *faults, path string) {
+	torque := l.Shape == Torque || l.Shape == UniformTorque
+	at := l.Shape == PointLoad || l.Shape == Couple || l.Shape == Torque
+	spread := l.Shape == Uniform || l.Shape == Partial
+	for _, field := range [...]struct {
+		name    string
+		foreign bool
+	}{
+		{"from", l.Shape != Partial && !l.From.IsZero()},
+		{"to", l.Shape != Partial && !l.To.IsZero()},
+		{"at", !at && !l.At.IsZero()},
+		{"intensity", !spread && !l.Intensity.IsZero()},
+		{"intensity_end", l.Shape != Partial && (l.Varies || !l.IntensityEnd.IsZero())},
+		{"force", l.Shape != PointLoad && !l.Force.IsZero()},
+		{"moment", l.Shape != Couple && !torque && !l.Moment.IsZero()},
+		{"path", !torque && l.Path != 0},
+	} {
+		if field.foreign && l.Shape.String() != "" {
+			f.add(path+"/"+field.name, "", "%s does not belong to a %s load", field.name, l.Shape)
+		}
 	}
 }
 
