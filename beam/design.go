@@ -304,7 +304,7 @@ func (s *search) addSideBars(l *Layout) (passes bool) {
 		size := &sizes[i]
 		one := size.MassPerLength.In(units.KilogramPerMetre)
 		for n := 1; n <= sideBarsMost && (fewest > 0 || one*float64(n) < lightest); n++ {
-			t.Side = SideSteel{Size: *size, Each: n, Spacing: reach.Scale(1 / float64(n+1)), TensionFace: Bottom}
+			t.Side = SideSteel{Size: *size, Each: n, Spacing: reach.Scale(1 / float64(n+1)), Yield: t.Brief.Reinforcement.Yield, TensionFace: Bottom}
 			fails := s.wholeFails(t)
 			if fails < fewest || fails == fewest && best.Each > 0 && one*float64(n) < lightest {
 				best, fewest, lightest = t.Side, fails, one*float64(n)

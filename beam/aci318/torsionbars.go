@@ -366,7 +366,11 @@ func (e *edition) appendTorsionSides(dst []beam.Check, t *beam.Trial) []beam.Che
 	c := beam.Check{ID: "torsion.longitudinal.side", Clause: "9.5.4.3", Face: beam.Side}
 	n := &f.side.need
 	side := t.Side.Size.Area.Scale(float64(t.Side.Each))
-	fy := e.torsionYield(t.Brief.Reinforcement.Yield)
+	yield := t.Brief.Reinforcement.Yield
+	if t.Side.Each > 0 {
+		yield = t.Side.Yield
+	}
+	fy := e.torsionYield(yield)
 	switch {
 	case !f.side.found:
 		c.Outcome, c.Reason = beam.NotApplicable, noteNeglected

@@ -627,3 +627,20 @@ func TestWidestDistanceRoundTheSection(t *testing.T) {
 	require.Equal(t, beam.Bottom, c.Face)
 	require.Greater(t, valueIn(t, c.Demand, "in"), 30.0)
 }
+
+// The bars along the sides count with their own yield strength, as it may be
+// used in torsion.
+func TestSideBarsOfTheirOwnGrade(t *testing.T) {
+	need := func(yield float64) *beam.Check {
+		r := twisted(t, ACI31819(), func(_ *beam.Brief, l *beam.Layout) { l.Longitudinal[2].Yield = psi(yield) })
+		return find1(t, r, "torsion.longitudinal.side")
+	}
+	sixty := valueIn(t, need(0).Demand, "in2")
+	require.InEpsilon(t, ownLong(60000)*24.5*2/3/74, sixty, 1e-9)
+	for yield, want := range map[float64]float64{60000: sixty, 80000: sixty, 40000: 1.5 * sixty, 20000: 3 * sixty} {
+		c := need(yield)
+		require.InEpsilon(t, want, valueIn(t, c.Demand, "in2"), 1e-9, "%g", yield)
+		require.Equal(t, want > 0.62, c.Outcome == beam.Fail, "%g", yield)
+		requireEvaluable(t, c)
+	}
+}
