@@ -79,7 +79,7 @@ func TestCurveEndsAtTheUltimate(t *testing.T) {
 	rng := rand.New(rand.NewPCG(5, 8))
 	laws := randomLaws(t)
 	var solver mechanics.Solver
-	for range 300 {
+	for range cases(300) {
 		s, bending := randomSection(rng)
 		law := laws[rng.IntN(len(laws))]
 		u, err := s.Ultimate(law, bending)
@@ -100,8 +100,8 @@ func TestCurveEndsAtTheUltimate(t *testing.T) {
 func TestTwoRoutesAgreeAlongTheCurve(t *testing.T) {
 	rng := rand.New(rand.NewPCG(12, 34))
 	laws := randomLaws(t)
-	solved := 0
-	for range 4000 {
+	sections, solved := cases(4000), 0
+	for range sections {
 		s, bending := randomSection(rng)
 		law := laws[rng.IntN(len(laws))]
 		strain := law.Ultimate() * (0.4 + 0.6*rng.Float64())
@@ -117,7 +117,7 @@ func TestTwoRoutesAgreeAlongTheCurve(t *testing.T) {
 		solved++
 		require.LessOrEqual(t, compareRoutes(&u, &f, s.Depth()), 1e-9, "%+v %+v", s, bending)
 	}
-	require.Greater(t, solved, 3500)
+	require.Greater(t, solved, sections*7/8)
 }
 
 // The sections of a curve are sections of one beam: more strain of the
@@ -130,7 +130,7 @@ func TestCurvatureGrowsWithStrain(t *testing.T) {
 		strains = append(strains, 0.00005*float64(i+1))
 	}
 	rng := rand.New(rand.NewPCG(7, 7))
-	for range 300 {
+	for range cases(300) {
 		s, bending := randomSection(rng)
 		bending.Axial = units.Force{}
 		points := curve(t, s, law, bending, strains...)
@@ -195,7 +195,7 @@ func TestAtCurvature(t *testing.T) {
 	require.NoError(t, err)
 	var solver mechanics.Solver
 	rng := rand.New(rand.NewPCG(3, 9))
-	for range 200 {
+	for range cases(200) {
 		s, bending := randomSection(rng)
 		bending.Axial = bending.Axial.Max(units.Force{}).Scale(0.3)
 		strain := 0.0035 * (0.3 + 0.7*rng.Float64())

@@ -38,6 +38,14 @@ func layerSI(depth, area, yield float64) mechanics.Layer {
 	return mechanics.Layer{Depth: mm(depth), Area: mm2(area), Steel: mechanics.Steel{Modulus: mpa(200000), Yield: mpa(yield)}}
 }
 
+// cases is how many random cases a test tries: a twentieth when tests run short.
+func cases(n int) int {
+	if testing.Short() {
+		return max(1, n/20)
+	}
+	return n
+}
+
 func solve(t testing.TB, s mechanics.Section, law mechanics.Law, b mechanics.Bending) mechanics.Ultimate {
 	t.Helper()
 	u, err := s.Ultimate(law, b)

@@ -46,7 +46,7 @@ func TestRequiredTensionOfARectangle(t *testing.T) {
 	laws := randomLaws(t)
 	rng := rand.New(rand.NewPCG(1, 2))
 	var solver mechanics.Solver
-	for range 500 {
+	for range cases(500) {
 		law := laws[rng.IntN(len(laws))]
 		width, d := mm(150+600*rng.Float64()), mm(200+900*rng.Float64())
 		mean, lever := law.Resultant()
@@ -66,7 +66,7 @@ func TestRequiredTensionPutBackInAnyShape(t *testing.T) {
 	rng := rand.New(rand.NewPCG(11, 9))
 	var solver mechanics.Solver
 	reached := 0
-	for range 5000 {
+	for range cases(5000) {
 		s, bending := randomSection(rng)
 		law := laws[rng.IntN(len(laws))]
 		bending.Axial = bending.Axial.Scale(0.2)
@@ -98,7 +98,7 @@ func TestRequiredTensionPutBackInAnyShape(t *testing.T) {
 		require.InDelta(t, 0, u.Nominal.Sub(moment).Ratio(scale), 1e-9, "%+v %+v", s, bending)
 		require.InDelta(t, 0, u.Residual.Ratio(u.Concrete), 1e-9)
 	}
-	require.Greater(t, reached, 3000)
+	require.Greater(t, reached, cases(3000))
 }
 
 // The general search of one layer comes to the same area.
@@ -269,7 +269,7 @@ func TestRequiredBothPutBackInAnyShape(t *testing.T) {
 	var solver mechanics.Solver
 	var u mechanics.Ultimate
 	doubly, single, others := 0, 0, 0
-	for range 4000 {
+	for range cases(4000) {
 		s, bending := randomSection(rng)
 		law := laws[rng.IntN(len(laws))]
 		bending.Axial = bending.Axial.Scale(0.1)
@@ -323,9 +323,9 @@ func TestRequiredBothPutBackInAnyShape(t *testing.T) {
 			require.InEpsilon(t, strain, u.ExtremeStrain, 1e-9)
 		}
 	}
-	require.Greater(t, others, 0)
-	require.Greater(t, doubly, 1000)
-	require.Greater(t, single, 2000)
+	require.True(t, others > 0 || testing.Short())
+	require.Greater(t, doubly, cases(1000))
+	require.Greater(t, single, cases(2000))
 }
 
 // An axial force beyond what the concrete balances at the limit takes compression
