@@ -132,12 +132,24 @@ func TestTorsionStrengthsThatAreNone(t *testing.T) {
 		t.Run(tc.name, func(t *testing.T) {
 			s := twistedStrengths(t, ACI31819(), tc.edit)
 			require.Equal(t, beam.Fail, checkOf(t, s.Checks, tc.id).Outcome)
+			for _, c := range s.Checks {
+				require.Equal(t, "1", c.Combination, c.ID)
+				switch c.ID {
+				case "torsion.longitudinal.bottom":
+					require.Equal(t, beam.Bottom, c.Face)
+				case "torsion.longitudinal.top":
+					require.Equal(t, beam.Top, c.Face)
+				}
+			}
 			require.False(t, math.IsNaN(s.Torsion.Design.In(units.KipFoot)) || math.IsInf(s.Torsion.Design.In(units.KipFoot), 0))
 		})
 	}
 	open := twistedStrengths(t, ACI31819(), func(q *beam.SectionQuery) { q.Stirrups.Open = true })
 	require.Zero(t, open.Torsion.Nominal)
 	require.Equal(t, []string{noteOpen}, open.Torsion.Notes)
+	require.Equal(t, noteOpen, checkOf(t, open.Checks, "torsion.transverse").Reason)
+	beyond := twistedStrengths(t, ACI31819(), func(q *beam.SectionQuery) { q.Demand.Moment = units.KipFoot.Of(500) })
+	require.Equal(t, noteBeyondBending, checkOf(t, beyond.Checks, "torsion.longitudinal.bottom").Reason)
 }
 
 // A torque of compatibility is cut to φTcr, and the rest is reported.
@@ -221,7 +233,9 @@ func TestTorsionStrengthsUnderAxialTension(t *testing.T) {
 	for id := range need {
 		require.InEpsilon(t, 50/54.0+half, valueIn(t, checkOf(t, s.Checks, id).Demand, "in2"), 1e-9, id)
 	}
-	require.Equal(t, beam.Fail, checkOf(t, pulled(170, 20, 2, 4).Checks, "torsion.longitudinal.bottom").Outcome, "more than the section bears")
+	beyond := checkOf(t, pulled(190, 20, 2.2, 4).Checks, "torsion.longitudinal.bottom")
+	require.Equal(t, noteBeyondBending, beyond.Reason, "more than the section bears")
+	require.Empty(t, checkOf(t, pulled(100, 20, 2.2, 4).Checks, "torsion.longitudinal.bottom").Reason)
 }
 
 // Layers do not show where bars lie round the section: that is said, and what
