@@ -59,6 +59,12 @@ func wrongUnit(d Dimension, text, symbol string) *ParseError {
 	if len(others) > 0 {
 		return refuse(d, text, "has the unit %q, which is of %s; units of %s are %s", symbol, orList(others), d, list)
 	}
+	if i := strings.LastIndexByte(symbol, '/'); i > 0 {
+		_, whole := d.find(symbol[:i])
+		if _, per := DimLength.find(symbol[i+1:]); whole && per {
+			return refuse(d, text, "has the unit %q, which is of %s over length (multiply by the length that it acts on); units of %s are %s", symbol, d, d, list)
+		}
+	}
 	for _, s := range accepted {
 		if strings.EqualFold(s, symbol) {
 			return refuse(d, text, "has the unknown unit %q (write %q: symbols are case-sensitive); units of %s are %s", symbol, s, d, list)

@@ -127,6 +127,7 @@ func TestParseRefuses(t *testing.T) {
 		{"decimal comma", "0,5 m", `has "," in its number, which is written with digits and one decimal point; write ` + eg},
 		{"two points", "1.2.3 mm", `has "." in its number, which is written with digits and one decimal point; write ` + eg},
 		{"unknown unit", "24 inches", `has the unknown unit "inches"; units of length are ` + list},
+		{"a length", "24 in/ft", `has the unit "in/ft", which is of length over length (multiply by the length that it acts on); units of length are ` + list},
 		{"wrong case", "24 MM", `has the unknown unit "MM" (write "mm": symbols are case-sensitive); units of length are ` + list},
 		{"wrong dimension", "24 psi", `has the unit "psi", which is of stress; units of length are ` + list},
 		{"wrong dimension, alias", "24 plf", `has the unit "plf", which is of line load; units of length are ` + list},
