@@ -93,6 +93,7 @@ func onTorques() []badInput {
 		{name: "unknown path", replace: dead, with: `"shape": "torque", "moment": "5 kip-ft", "at": "9 ft", "path": "primary"`, pointer: "/loads/0/path", detail: `path is "primary"`, allowed: "equilibrium, compatibility"},
 		{name: "torque without place", replace: dead, with: `"shape": "torque", "moment": "5 kip-ft"`, pointer: "/loads/0/at", detail: "at is missing; a torque load needs it"},
 		{name: "spread torque with a place", replace: dead, with: `"shape": "uniform-torque", "moment": "5 kip-ft", "at": "9 ft"`, pointer: "/loads/0/at", detail: "at does not belong to a uniform-torque load, which has moment, path"},
+		{name: "torque a length", replace: dead, with: `"shape": "uniform-torque", "moment": "5 kip-ft/ft"`, pointer: "/loads/0/moment", detail: "is of moment over length (multiply by the length that it acts on)", allowed: "a moment in"},
 		{name: "torque as force", replace: dead, with: `"shape": "torque", "moment": "5 kip", "at": "9 ft"`, pointer: "/loads/0/moment", detail: `has the unit "kip"`, allowed: "a moment in"},
 		{name: "path of no torque", request: goodDemands, replace: `"shear": "45 kip"`, with: `"shear": "45 kip", "path": "compatibility"`, pointer: "/demands/1/path", detail: "path belongs to a torque, and none is given"},
 		{name: "unknown path of a demand", request: goodDemands, replace: `"shear": "45 kip"`, with: `"torque": "45 kip-ft", "path": "x"`, pointer: "/demands/1/path", detail: `path is "x"`, allowed: "equilibrium, compatibility"},

@@ -152,38 +152,34 @@ const (
 	aMoment   = `a moment, e.g. "50 kip-ft" or "70 kN-m"`
 )
 
-// belong notes which members a thing of a kind lacks of those that it needs,
-// and which are given that it does not have.
-func (in *intake) belong(at, thing string, members []member, needs, may string) {
+// rule says which members things of a kind need, and which others they may
+// have.
+type rule struct{ needs, may string }
+
+// belong notes which members a thing lacks of those that its rule needs, and
+// which are given that it does not have.
+func (in *intake) belong(at, thing string, r rule, members []member) {
 	for _, m := range members {
-		needed := hasWord(needs, m.name)
+		needed := hasWord(r.needs, m.name)
 		switch {
 		case needed && !m.given:
 			in.fault(at+"/"+m.name, m.what, "is missing; %s needs it", thing)
-		case m.given && !needed && !hasWord(may, m.name):
-			in.fault(at+"/"+m.name, "", "does not belong to %s, which has %s", thing, listed(needs+" "+may))
+		case m.given && !needed && !hasWord(r.may, m.name):
+			in.fault(at+"/"+m.name, "", "does not belong to %s, which has %s", thing, listed(r.needs+" "+r.may))
 		}
 	}
 }
 
-// loadMembers says which members that place and size a load a load of a shape
-// needs, and which it may have.
-func loadMembers(shape beam.LoadShape) (needs, may string) {
-	switch shape {
-	case beam.Uniform:
-		return "intensity", ""
-	case beam.Partial:
-		return "from to intensity", "intensity_end"
-	case beam.PointLoad:
-		return "at force", ""
-	case beam.Couple:
-		return "at moment", ""
-	case beam.Torque:
-		return "at moment", "path"
-	case beam.UniformTorque:
-		return "moment", "path"
-	}
-	return "", "from to at intensity intensity_end force moment path" // the shape has a fault of its own
+// loadRules are the rules of loads by shape, for the members that place and
+// size them. A shape that is not known has a fault of its own.
+var loadRules = [...]rule{
+	0:                  {may: "from to at intensity intensity_end force moment path"},
+	beam.Uniform:       {needs: "intensity"},
+	beam.Partial:       {needs: "from to intensity", may: "intensity_end"},
+	beam.PointLoad:     {needs: "at force"},
+	beam.Couple:        {needs: "at moment"},
+	beam.Torque:        {needs: "at moment", may: "path"},
+	beam.UniformTorque: {needs: "moment", may: "path"},
 }
 
 func (in *intake) load(w *wire.Load, at string) beam.Load {
@@ -200,8 +196,7 @@ func (in *intake) load(w *wire.Load, at string) beam.Load {
 	case l.Case == beam.Dead:
 		l.Sustained = 1
 	}
-	needs, may := loadMembers(l.Shape)
-	in.belong(at, "a "+w.Shape+" load", []member{
+	in.belong(at, "a "+w.Shape+" load", loadRules[l.Shape], []member{
 		{"from", aLength, w.From != nil},
 		{"to", aLength, w.To != nil},
 		{"at", aLength, w.At != nil},
@@ -210,7 +205,7 @@ func (in *intake) load(w *wire.Load, at string) beam.Load {
 		{"force", aForce, w.Force != nil},
 		{"moment", aMoment, w.Moment != nil},
 		{"path", "", w.Path != nil},
-	}, needs, may)
+	})
 	return l
 }
 

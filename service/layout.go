@@ -22,18 +22,17 @@ func (in *intake) layout(w *wire.Layout, b *beam.Brief, at string) beam.Layout {
 	return l
 }
 
-// rowMembers says which members a row needs where it lies, and which it may
-// have.
-func rowMembers(face beam.Face, flange bool) (thing, needs, may string) {
+// rowRule is the rule of a row by where it lies, in words too.
+func rowRule(face beam.Face, flange bool) (thing string, r rule) {
 	switch {
 	case face == beam.Side:
-		return "a row of side bars", "spacing", ""
+		return "a row of side bars", rule{needs: "spacing"}
 	case flange:
-		return "a row in a flange", "flange spacing", "layer yield in_compression"
+		return "a row in a flange", rule{needs: "flange spacing", may: "layer yield in_compression"}
 	case face != 0:
-		return "a row in the web", "", "flange layer bundled yield in_compression"
+		return "a row in the web", rule{may: "flange layer bundled yield in_compression"}
 	}
-	return "", "", "flange layer spacing bundled yield in_compression" // the face has a fault of its own
+	return "", rule{may: "flange layer spacing bundled yield in_compression"} // the face has a fault of its own
 }
 
 func (in *intake) row(w *wire.Row, at string) beam.Row {
@@ -46,15 +45,15 @@ func (in *intake) row(w *wire.Row, at string) beam.Row {
 	if w.Layer == nil && r.Face != beam.Side {
 		r.Layer = 1
 	}
-	thing, needs, may := rowMembers(r.Face, r.Flange)
-	in.belong(at, thing, []member{
+	thing, belongs := rowRule(r.Face, r.Flange)
+	in.belong(at, thing, belongs, []member{
 		{"flange", "", w.Flange != nil},
 		{"layer", "", w.Layer != nil},
 		{"spacing", `a length, e.g. "5 in" or "120 mm"`, w.Spacing != nil},
 		{"bundled", "", w.Bundled != nil},
 		{"yield", "", w.Yield != nil},
 		{"in_compression", "", w.InCompression != nil},
-	}, needs, may)
+	})
 	if w.From != nil && w.To == nil {
 		in.fault(at+"/to", aLength, "is missing, and from is given")
 	}

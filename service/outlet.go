@@ -49,6 +49,10 @@ func (o *outlet) surface(q units.Area) units.Measure {
 	return units.SquareMetre.Express(q)
 }
 
+// mostRejected is how many rejected arrangements a reply has room for: a beam
+// that is too small can have tens of thousands.
+const mostRejected = 500
+
 func (o *outlet) design(r *beam.Result, inputHash string) wire.Design {
 	d := wire.Design{
 		Engine: engine(r.Engine), Code: r.Code, Reference: r.Reference, ReportIn: o.system, InputHash: inputHash,
@@ -80,6 +84,7 @@ func (o *outlet) design(r *beam.Result, inputHash string) wire.Design {
 		d.Reactions[i] = wire.Reaction{
 			Support: s.Support, Most: express(o, s.Most), Least: express(o, s.Least),
 			CombinationMost: s.MostBy, CombinationLeast: s.LeastBy, Moment: optional(o, s.Moment),
+			Torque: optional(o, s.Torque), CombinationTorque: s.TorqueBy,
 		}
 	}
 	d.NotJudged = []string{}
@@ -101,8 +106,9 @@ func (o *outlet) design(r *beam.Result, inputHash string) wire.Design {
 			WhyNotFirst: a.WhyNotFirst,
 		}
 	}
-	d.Rejected = make([]wire.Rejected, len(r.Rejected))
-	for i := range r.Rejected {
+	d.Rejected = make([]wire.Rejected, min(len(r.Rejected), mostRejected))
+	d.RejectedMore = len(r.Rejected) - len(d.Rejected)
+	for i := range d.Rejected {
 		d.Rejected[i] = wire.Rejected{Arrangement: r.Rejected[i].Arrangement.Describe(o.system), Failed: o.describe(r.Rejected[i].Failed)}
 	}
 	d.Cures = make([]wire.Cure, len(r.Cures))

@@ -5,22 +5,16 @@ import (
 	"soffit.example/service/internal/wire"
 )
 
-// sectionMembers says which members a section of a shape needs, and which it
-// may have, but for the width of a flange, which has two ways.
-func sectionMembers(shape beam.Shape) (needs, may string) {
-	switch shape {
-	case beam.Rectangular:
-		return "width depth", ""
-	case beam.Tee:
-		return "web_width depth flange_thickness", "flange_width slab isolated"
-	case beam.Ell:
-		return "web_width depth flange_thickness", "flange_width slab"
-	case beam.InvertedTee:
-		return "web_width depth flange_thickness flange_width", ""
-	case beam.Polygon:
-		return "outline", "voids"
-	}
-	return "", "width web_width depth flange_thickness flange_width slab isolated outline voids" // the shape has a fault of its own
+// sectionRules are the rules of sections by shape, but for the width of a
+// flange, which is said in one of two ways. A shape that is not known has a
+// fault of its own.
+var sectionRules = [...]rule{
+	0:                {may: "width web_width depth flange_thickness flange_width slab isolated outline voids"},
+	beam.Rectangular: {needs: "width depth"},
+	beam.Tee:         {needs: "web_width depth flange_thickness", may: "flange_width slab isolated"},
+	beam.Ell:         {needs: "web_width depth flange_thickness", may: "flange_width slab"},
+	beam.InvertedTee: {needs: "web_width depth flange_thickness flange_width"},
+	beam.Polygon:     {needs: "outline", may: "voids"},
 }
 
 func (in *intake) section(w *wire.Section, at string) beam.Section {
@@ -39,12 +33,11 @@ func (in *intake) section(w *wire.Section, at string) beam.Section {
 	for _, v := range w.Voids {
 		s.Voids = append(s.Voids, points(v))
 	}
-	needs, may := sectionMembers(s.Shape)
 	thing := "a " + w.Shape
 	if s.Shape == beam.Ell || s.Shape == beam.InvertedTee {
 		thing = "an " + w.Shape
 	}
-	in.belong(at, thing+" section", []member{
+	in.belong(at, thing+" section", sectionRules[s.Shape], []member{
 		{"width", aSize, w.Width != nil},
 		{"web_width", aSize, w.WebWidth != nil},
 		{"depth", aSize, w.Depth != nil},
@@ -54,7 +47,7 @@ func (in *intake) section(w *wire.Section, at string) beam.Section {
 		{"isolated", "", w.Isolated != nil},
 		{"outline", `a list of corners, e.g. {"x": "0 in", "y": "24 in"}`, w.Outline != nil},
 		{"voids", "", w.Voids != nil},
-	}, needs, may)
+	})
 	if s.Shape == beam.Tee || s.Shape == beam.Ell {
 		in.flange(w, at)
 	}

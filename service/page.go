@@ -37,13 +37,16 @@ func doors() []door {
 	}
 }
 
-// shapeRow is a row of the page: the members of one shape of section.
+// shapeRow is a row of the page: the members of one shape of section or load.
 type shapeRow struct{ Shape, Needs, May string }
 
-func shapes() (rows []shapeRow) {
-	for s := beam.Shape(1); s.String() != ""; s++ {
-		needs, may := sectionMembers(s)
-		rows = append(rows, shapeRow{s.String(), listed(needs), listed(may + " joist")})
+// shapes lists the rules by shape; all admits what every shape may have.
+func shapes[S interface {
+	~uint8
+	String() string
+}](rules []rule, all string) (rows []shapeRow) {
+	for i, r := range rules[1:] {
+		rows = append(rows, shapeRow{S(i + 1).String(), listed(r.needs), listed(r.may + " " + all)})
 	}
 	return rows
 }
@@ -69,7 +72,8 @@ func (s *Service) page() (*document, error) {
 	}
 	var b bytes.Buffer
 	err = t.Execute(&b, map[string]any{
-		"Style": template.CSS(pageStyle), "Version": beam.Version, "Doors": doors(), "Problems": problems, "Codes": s.codeList().Codes, "Shapes": shapes(),
+		"Style": template.CSS(pageStyle), "Version": beam.Version, "Doors": doors(), "Problems": problems, "Codes": s.codeList().Codes,
+		"Shapes": shapes[beam.Shape](sectionRules[:], "joist"), "Loads": shapes[beam.LoadShape](loadRules[:], ""),
 	})
 	if err != nil {
 		return nil, fmt.Errorf("service: page: %w", err)

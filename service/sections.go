@@ -46,7 +46,7 @@ func (s *Service) strengths(w http.ResponseWriter, r *http.Request) error {
 	if err != nil {
 		return err
 	}
-	out := outlet{system: reportIn(request.ReportIn, code.Edition().System), full: request.Detail != nil}
+	out := outlet{system: reportIn(request.ReportIn, code.Edition().System)}
 	answer := out.strengths(&found)
 	if answer.Flexure != nil {
 		section := query.Section

@@ -175,6 +175,7 @@ func TestWhatIsShownToReadersWorks(t *testing.T) {
 		requests := requestsOn(t, page)
 		require.Contains(t, requests, "/v1/designs", name)
 		require.Contains(t, requests, "/v1/strengths", name)
+		require.Contains(t, requests, "/v1/checks", name)
 		for path, bodies := range requests {
 			for _, body := range bodies {
 				w := send(s, "POST", path, body)
@@ -243,6 +244,25 @@ func TestALayoutGoesRound(t *testing.T) {
 	require.JSONEq(t, echo, string(second["layout"]))
 	require.JSONEq(t, string(first["checks"]), string(second["checks"]))
 	require.JSONEq(t, string(first["bars"]), string(second["bars"]))
+}
+
+// A list of a layout that is left out is empty.
+func TestALayoutNeedNotListWhatItHasNone(t *testing.T) {
+	s := newService(t)
+	bare := strings.Replace(goodCheck, `,
+  "transverse": [{"bar": "#3", "legs": 2, "spacing": "9 in"}]`, "", 1)
+	said := strings.Replace(bare, `"longitudinal":`, `"transverse": [], "bent": [], "longitudinal":`, 1)
+	require.NotEqual(t, goodCheck, bare)
+	out := func(body string) map[string]json.RawMessage {
+		w := send(s, "POST", "/v1/checks", body)
+		require.Equal(t, http.StatusOK, w.Code, w.Body.String())
+		reply := decode[map[string]json.RawMessage](t, w)
+		delete(reply, "input_hash")
+		return reply
+	}
+	got := out(bare)
+	require.Equal(t, `"unsatisfied"`, string(got["verdict"]))
+	require.Equal(t, out(said), got)
 }
 
 func TestReportInChangesUnitsAlone(t *testing.T) {

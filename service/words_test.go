@@ -72,6 +72,12 @@ func TestTheDoorAdmitsTheWordsOfTheModel(t *testing.T) {
 	require.Equal(t, supports, wordsOf(t, wire.Support{}, "kind"))
 }
 
+// Every shape has its rule, so that none is looked up in vain.
+func TestEveryShapeHasItsRule(t *testing.T) {
+	require.Len(t, sectionRules[1:], len(enumeration[beam.Shape]()))
+	require.Len(t, loadRules[1:], len(enumeration[beam.LoadShape]()))
+}
+
 // A layout that comes out can go in: replies have no member that requests
 // lack.
 func TestLayoutsGoRound(t *testing.T) {

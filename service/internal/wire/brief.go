@@ -97,10 +97,10 @@ type Support struct {
 // Load is one load of one case. Which members belong to it depends on shape:
 // uniform (intensity), partial (intensity, from, to, and intensity_end if it
 // varies), point (force, at), couple (moment, at), torque (moment, at, and
-// path), uniform-torque (moment, over the span, and path).
+// path), uniform-torque (moment, the total over the span, and path).
 type Load struct {
 	Case         string          `json:"case" validate:"oneof=dead live roof-live snow rain wind earthquake" doc:"Origin of the load."`
-	Shape        string          `json:"shape" validate:"oneof=uniform partial point couple torque uniform-torque" doc:"How the load is spread, which decides what else belongs to it: uniform (intensity); partial (intensity, from, to, and intensity_end if it varies); point (force, at); couple (moment, at); torque (moment, at, and path); uniform-torque (moment, over the span, and path)."`
+	Shape        string          `json:"shape" validate:"oneof=uniform partial point couple torque uniform-torque" doc:"How the load is spread, which decides what else belongs to it: uniform (intensity); partial (intensity, from, to, and intensity_end if it varies); point (force, at); couple (moment, at); torque (moment, at, and path); uniform-torque (moment, the total over the span, and path)."`
 	Span         *int            `json:"span,omitzero" validate:"omitnil,min=1,max=20" doc:"Number of the span from the left, from 1. Default: every span."`
 	From         *units.Length   `json:"from,omitzero" doc:"Start of a partial load, from the span's left end."`
 	To           *units.Length   `json:"to,omitzero" doc:"End of a partial load, beyond from."`
@@ -108,7 +108,7 @@ type Load struct {
 	Intensity    *units.LineLoad `json:"intensity,omitzero" doc:"Load a length, downward positive; of a partial load that varies, at from."`
 	IntensityEnd *units.LineLoad `json:"intensity_end,omitzero" doc:"Load a length at to, of a partial load that varies."`
 	Force        *units.Force    `json:"force,omitzero" doc:"Force, downward positive."`
-	Moment       *units.Moment   `json:"moment,omitzero" doc:"Moment of a couple, clockwise positive, or of a torque about the beam's axis."`
+	Moment       *units.Moment   `json:"moment,omitzero" doc:"Moment of a couple, clockwise positive; or of a torque about the beam's axis, clockwise positive as seen from the left end. Of a uniform-torque it is the total over the span: a torque a length times the span."`
 	Sustained    *float64        `json:"sustained,omitzero" validate:"omitnil,min=0,max=1" doc:"Share of the load that stays. Default: 1 for dead loads, otherwise 0."`
 	Hung         *bool           `json:"hung,omitzero" doc:"true: the load acts at or below the soffit."`
 	Path         *string         `json:"path,omitzero" validate:"omitnil,oneof=equilibrium compatibility" doc:"Why a torque acts. equilibrium: nothing else can carry it. compatibility: it comes from the twist that neighbours impose, and part of it may be shed to them. Default: equilibrium."`
@@ -119,7 +119,7 @@ type Demand struct {
 	Name   string        `json:"name,omitzero" validate:"max=100" doc:"Name of the combination."`
 	Moment *units.Moment `json:"moment,omitzero" doc:"Bending moment, sagging positive."`
 	Shear  *units.Force  `json:"shear,omitzero" doc:"Shear force."`
-	Torque *units.Moment `json:"torque,omitzero" doc:"Torsional moment."`
+	Torque *units.Moment `json:"torque,omitzero" doc:"Torsional moment. Its sign does not matter."`
 	Path   *string       `json:"path,omitzero" validate:"omitnil,oneof=equilibrium compatibility" doc:"Why the torque acts. equilibrium: nothing else can carry it. compatibility: part of it may be shed to neighbours. Default: equilibrium."`
 	Axial  *units.Force  `json:"axial,omitzero" doc:"Axial force, compression positive."`
 }
@@ -152,10 +152,11 @@ type CheckRequest struct {
 	Layout Layout `json:"layout" doc:"The bars and stirrups to be judged, as /v1/designs returns them."`
 }
 
-// Layout is a set of bars and stirrups.
+// Layout is a set of bars and stirrups. Bars that must be listed and that
+// there are none of are an empty list.
 type Layout struct {
 	Longitudinal []Row  `json:"longitudinal" validate:"max=40,dive" doc:"Groups of like bars."`
-	Transverse   []Zone `json:"transverse" validate:"max=40,dive" doc:"Runs of like stirrups."`
+	Transverse   []Zone `json:"transverse,omitzero" validate:"max=40,dive" doc:"Runs of like stirrups. Default: none."`
 	Bent         []Bent `json:"bent,omitzero" validate:"max=40,dive" doc:"Bars bent across the web to carry shear. Default: none."`
 }
 

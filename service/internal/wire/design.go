@@ -23,7 +23,8 @@ type Design struct {
 	Assumptions  []Assumption  `json:"assumptions" doc:"What was taken for granted on the way, and what the finished design found."`
 	Combinations Combinations  `json:"combinations" doc:"Load combinations used and dropped."`
 	Alternatives []Alternative `json:"alternatives" doc:"Layouts that pass too."`
-	Rejected     []Rejected    `json:"rejected" doc:"Arrangements that were tried, with every check they failed."`
+	Rejected     []Rejected    `json:"rejected" doc:"Arrangements that were tried, with every check they failed: the first 500."`
+	RejectedMore int           `json:"rejected_more,omitzero" doc:"Arrangements that were rejected besides and are left out here. Absent: none."`
 	Binding      []string      `json:"binding" doc:"Where nothing fits: the limits that stand in the way."`
 	Cures        []Cure        `json:"cures" doc:"Where nothing fits: changes of the brief that were tried and found to do."`
 
@@ -34,12 +35,14 @@ type Design struct {
 
 // Reaction is what the combinations ask of one support.
 type Reaction struct {
-	Support          int            `json:"support" doc:"Its place from the left, counted from 1."`
-	Most             units.Measure  `json:"most" doc:"Greatest force, positive upward."`
-	Least            units.Measure  `json:"least" doc:"Least force; negative is uplift."`
-	CombinationMost  string         `json:"combination_most" doc:"Combination of the greatest force."`
-	CombinationLeast string         `json:"combination_least" doc:"Combination of the least force."`
-	Moment           *units.Measure `json:"moment,omitzero" doc:"Of a fixed end: the greatest moment that it must hold."`
+	Support           int            `json:"support" doc:"Its place from the left, counted from 1."`
+	Most              units.Measure  `json:"most" doc:"Greatest force, positive upward."`
+	Least             units.Measure  `json:"least" doc:"Least force; negative is uplift."`
+	CombinationMost   string         `json:"combination_most" doc:"Combination of the greatest force."`
+	CombinationLeast  string         `json:"combination_least" doc:"Combination of the least force."`
+	Moment            *units.Measure `json:"moment,omitzero" doc:"Of a fixed end: the greatest moment that it must hold."`
+	Torque            *units.Measure `json:"torque,omitzero" doc:"The greatest torque that the support must hold against twist, whichever way it turns. Absent: none."`
+	CombinationTorque string         `json:"combination_torque,omitzero" doc:"Combination of that torque."`
 }
 
 // Engine says what computed a reply.
@@ -164,7 +167,7 @@ type Check struct {
 	Utilization *float64       `json:"utilization,omitzero" doc:"Demand over capacity. A limit met exactly passes."`
 	Verdict     string         `json:"verdict" enum:"pass fail not-applicable not-judged" doc:"not-judged: within the code, not within this version or this input; never counted as passed."`
 	Reason      string         `json:"reason,omitzero" doc:"Why not applicable or not judged, or what was decided on the way."`
-	Working     []Step         `json:"working,omitzero" doc:"The working, in order, where full detail was asked for."`
+	Working     []Step         `json:"working,omitzero" doc:"The working, in order, where full detail was asked for. Strengths have none: their values are members of the reply."`
 }
 
 // Step is one line of the working.

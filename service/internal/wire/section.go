@@ -6,7 +6,6 @@ import "soffit.example/units"
 type StrengthsRequest struct {
 	Code     string           `json:"code" validate:"min=1,max=60" doc:"Id of a design code, as /v1/codes lists them."`
 	ReportIn *string          `json:"report_in,omitzero" validate:"omitnil,oneof=us si" doc:"Units of the reply. Default: those of the design code."`
-	Detail   *string          `json:"detail,omitzero" validate:"omitnil,oneof=full" doc:"full adds its working to each check."`
 	Section  Section          `json:"section" doc:"Outline of the concrete section."`
 	Concrete Concrete         `json:"concrete" doc:"The concrete as specified."`
 	Bending  *string          `json:"bending,omitzero" validate:"omitnil,oneof=positive negative" doc:"Sense of bending; positive has tension at the bottom. Default: positive."`
