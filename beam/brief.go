@@ -64,7 +64,8 @@ type Support struct {
 	Hung  bool         // the reaction pulls on the end region: the beam hangs here, or frames into a girder
 }
 
-// Load is one load of one case. Which fields count depends on Shape.
+// Load is one load of one case. Which fields belong to it depends on Shape, as
+// each LoadShape says; a field that does not is refused.
 type Load struct {
 	Case         LoadCase
 	Shape        LoadShape
@@ -75,7 +76,7 @@ type Load struct {
 	IntensityEnd units.LineLoad // at To; used when Varies
 	Varies       bool           // IntensityEnd is given
 	Force        units.Force
-	Moment       units.Moment // a couple, clockwise positive; a torque about the beam's axis
+	Moment       units.Moment // a couple, clockwise positive; a torque, clockwise positive as seen from the left end
 	Hung         bool         // applied at or below the soffit
 	Sustained    float64      // share of the load that stays, 0 to 1; for deflection, which is not judged yet
 	Path         TorquePath   // of a torque; zero: equilibrium
@@ -86,9 +87,9 @@ type Demand struct {
 	Name   string
 	Moment units.Moment
 	Shear  units.Force
-	Torque units.Moment
-	Path   TorquePath  // of Torque; zero: equilibrium
-	Axial  units.Force // compression positive
+	Torque units.Moment // its sign does not matter
+	Path   TorquePath   // of Torque; zero: equilibrium
+	Axial  units.Force  // compression positive
 }
 
 // Serviceability says what the deflection must protect.

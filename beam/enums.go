@@ -75,16 +75,17 @@ func LoadCases() []LoadCase {
 	return []LoadCase{Dead, Live, RoofLive, Snow, Rain, Wind, Earthquake}
 }
 
-// LoadShape is how a load is spread along a span.
+// LoadShape is how a load is spread along a span, and which fields of Load
+// place and size it.
 type LoadShape uint8
 
 const (
-	Uniform LoadShape = iota + 1
-	Partial
-	PointLoad
-	Couple
-	Torque
-	UniformTorque
+	Uniform       LoadShape = iota + 1 // Intensity, from end to end
+	Partial                            // Intensity, From, To; IntensityEnd where it Varies
+	PointLoad                          // Force, At
+	Couple                             // Moment, At
+	Torque                             // Moment, At, Path
+	UniformTorque                      // Moment, the total over the span, evenly spread: a torque a length times the span; Path
 )
 
 // TorquePath says why a torque acts, which decides whether it may be shed.
