@@ -14,7 +14,6 @@ import (
 
 	"soffit.example/beam"
 	"soffit.example/beam/aci318"
-	"soffit.example/beam/statics"
 	"soffit.example/beam/working"
 	"soffit.example/units"
 )
@@ -36,8 +35,8 @@ func brief(live units.LineLoad) beam.Brief {
 		Exposure:      beam.Weather,
 		Spans:         []units.Length{units.Metre.Of(6.6)},
 		Supports: []beam.Support{
-			{Kind: statics.Pinned, Width: units.Millimetre.Of(300)},
-			{Kind: statics.Roller, Width: units.Millimetre.Of(300)},
+			{Kind: beam.Pinned, Width: units.Millimetre.Of(300)},
+			{Kind: beam.Roller, Width: units.Millimetre.Of(300)},
 		},
 		Loads: []beam.Load{
 			{Case: beam.Dead, Shape: beam.Uniform, Intensity: units.KilonewtonPerMetre.Of(14)},

@@ -15,7 +15,6 @@ import (
 
 	"soffit.example/beam"
 	"soffit.example/beam/aci318"
-	"soffit.example/beam/statics"
 	"soffit.example/units"
 )
 
@@ -38,8 +37,8 @@ func brief() beam.Brief {
 		Exposure:      beam.Interior,
 		Spans:         []units.Length{units.Foot.Of(25)},
 		Supports: []beam.Support{
-			{Kind: statics.Pinned, Width: units.Inch.Of(14)},
-			{Kind: statics.Roller, Width: units.Inch.Of(14)},
+			{Kind: beam.Pinned, Width: units.Inch.Of(14)},
+			{Kind: beam.Roller, Width: units.Inch.Of(14)},
 		},
 		Loads: []beam.Load{
 			{Case: beam.Dead, Shape: beam.Uniform, Intensity: units.KipPerFoot.Of(0.95)},
