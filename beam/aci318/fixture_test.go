@@ -8,6 +8,7 @@ import (
 
 	"soffit.example/bars"
 	"soffit.example/beam"
+	"soffit.example/beam/mechanics"
 	"soffit.example/beam/statics"
 	"soffit.example/units"
 )
@@ -160,4 +161,41 @@ func valueIn(t testing.TB, a units.Amount, unit string) float64 {
 	v, err := a.In(unit)
 	require.NoError(t, err)
 	return v
+}
+
+// flexureStrength is the full account of a section's strength in bending, least steel
+// among it.
+// Layers are measured from the top face, whichever the sense.
+func (e *edition) flexureStrength(section mechanics.Section, strength units.Stress, s beam.Sense, r *beam.Readings) (beam.FlexureStrength, error) {
+	f, _, err := e.flexureUnder(section, strength, s, r, units.Force{})
+	if err != nil {
+		return f, err
+	}
+	yield := section.Layers[0].Steel.Yield
+	for _, l := range section.Layers {
+		yield = yield.Min(l.Steel.Yield)
+	}
+	m := e.minimumSteel(strength, yield, e.minimumWidth(webWidth(section), tensionWidth(section, s), true), f.EffectiveDepth)
+	f.MinimumSteel = e.areaOf(m.area)
+	return f, nil
+}
+
+// webWidth is the least width of the section, by which least steel is measured.
+func webWidth(section mechanics.Section) units.Length {
+	least := section.Parts[0].Width
+	for _, p := range section.Parts {
+		top, bottom := p.Widths()
+		least = least.Min(top).Min(bottom)
+	}
+	return least
+}
+
+// tensionWidth is the width of the tension face.
+func tensionWidth(section mechanics.Section, s beam.Sense) units.Length {
+	if s == beam.Negative {
+		top, _ := section.Parts[0].Widths()
+		return top
+	}
+	_, bottom := section.Parts[len(section.Parts)-1].Widths()
+	return bottom
 }

@@ -200,17 +200,12 @@ func tensionSide(u *mechanics.Ultimate, section mechanics.Section) (units.Area, 
 	return area, units.Metre.Of(moment / area.In(units.SquareMetre))
 }
 
-// flexureStrength is the full account of a section's strength in bending.
-// Layers are measured from the top face, whichever the sense.
-func (e *edition) flexureStrength(section mechanics.Section, strength units.Stress, s beam.Sense, r *beam.Readings) (beam.FlexureStrength, error) {
-	f, _, err := e.flexureUnder(section, strength, s, r, units.Force{})
-	return f, err
-}
-
-// flexureUnder is flexureStrength with a factored axial force acting too: the
-// lesser strength of those with and without it, with its own strain; zero where
+// flexureUnder is the full account of a section's strength in bending, but for
+// least steel, under a factored axial force: the lesser strength of those with and
+// without it, with its own strain; zero where
 // nothing balances the section under the force. strain is the lesser of the two
-// strains, to be held against 9.3.3.1.
+// strains, to be held against 9.3.3.1. Layers are measured from the top face,
+// whichever the sense.
 func (e *edition) flexureUnder(section mechanics.Section, strength units.Stress, s beam.Sense, r *beam.Readings, axial units.Force) (out beam.FlexureStrength, strain float64, err error) {
 	law, err := e.block(strength)
 	if err != nil {
@@ -251,8 +246,6 @@ func (e *edition) flexureUnder(section mechanics.Section, strength units.Stress,
 	for i, l := range u.Layers {
 		out.Layers[i] = beam.LayerState{Strain: -l.Strain, Stress: l.Stress.Neg(), Force: l.Force.Neg()}
 	}
-	m := e.minimumSteel(strength, leastYield(section), e.minimumWidth(webWidth(section), tensionWidth(section, s), true), depth)
-	out.MinimumSteel = e.areaOf(m.area)
 	if out.CrossCheck, err = crossCheck(section, law, bending, u.Nominal); err != nil {
 		return beam.FlexureStrength{}, 0, fmt.Errorf("second route to the strength in bending: %w", err)
 	}
@@ -300,35 +293,6 @@ func greatestLayerYield(section mechanics.Section) units.Stress {
 		fy = fy.Max(section.Layers[i].Steel.Yield)
 	}
 	return fy
-}
-
-// webWidth is the least width of the section, by which least steel is measured.
-func webWidth(section mechanics.Section) units.Length {
-	least := section.Parts[0].Width
-	for _, p := range section.Parts {
-		top, bottom := p.Widths()
-		least = least.Min(top).Min(bottom)
-	}
-	return least
-}
-
-// tensionWidth is the width of the tension face.
-func tensionWidth(section mechanics.Section, s beam.Sense) units.Length {
-	if s == beam.Negative {
-		top, _ := section.Parts[0].Widths()
-		return top
-	}
-	_, bottom := section.Parts[len(section.Parts)-1].Widths()
-	return bottom
-}
-
-// leastYield is the least yield strength of the layers.
-func leastYield(section mechanics.Section) units.Stress {
-	least := section.Layers[0].Steel.Yield
-	for _, l := range section.Layers {
-		least = least.Min(l.Steel.Yield)
-	}
-	return least
 }
 
 // noEquilibrium reports whether an error says that nothing balances the

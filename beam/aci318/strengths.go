@@ -77,12 +77,17 @@ func (e *edition) queryLeast(q *beam.SectionQuery, g *beam.Geometry, out *beam.S
 	if w.flanged {
 		out.Notes = append(out.Notes, "least steel goes by the lesser of bf and 2bw, as of a statically determinate beam with its flange in tension; in an indeterminate beam it goes by bw (9.6.1.2)")
 	}
-	yield := q.Layers[0].Yield
-	for _, l := range q.Layers {
-		yield = yield.Min(l.Yield)
-	}
-	m := e.minimumSteel(q.Concrete.Strength, yield, w, out.Flexure.EffectiveDepth)
+	m := e.minimumSteel(q.Concrete.Strength, leastYield(q), w, out.Flexure.EffectiveDepth)
 	return e.areaOf(m.area)
+}
+
+// leastYield is the least yield strength of the layers.
+func leastYield(q *beam.SectionQuery) units.Stress {
+	least := q.Layers[0].Yield
+	for i := range q.Layers {
+		least = least.Min(q.Layers[i].Yield)
+	}
+	return least
 }
 
 // noteFlange says what a flange takes for granted, and judges an isolated tee.
@@ -277,11 +282,7 @@ func (e *edition) queryMinimum(q *beam.SectionQuery, g *beam.Geometry, f *beam.F
 	if f.MinimumSteel.AtMost(f.TensionSteel) {
 		return "9.6.1.2", f.MinimumSteel, ""
 	}
-	yield := q.Layers[0].Yield
-	for _, l := range q.Layers {
-		yield = yield.Min(l.Yield)
-	}
-	z := e.sizing(g.Parts, q.Bending, q.Concrete.Strength, yield, f.EffectiveDepth, f.ExtremeDepth, q.Readings.RoundedYield)
+	z := e.sizing(g.Parts, q.Bending, q.Concrete.Strength, leastYield(q), f.EffectiveDepth, f.ExtremeDepth, q.Readings.RoundedYield)
 	z.yieldStrain = f.YieldStrain
 	req := z.tension(math.Abs(e.momentIn(q.Demand.Moment)))
 	pulled := q.Demand.Axial.Compare(units.Force{}) < 0 // as in judgeMinimum
