@@ -60,12 +60,30 @@ func Random(seed, n uint64) Sample {
 
 // Small makes a sound brief whose preferences leave few arrangements, so that
 // all of them can be gone through.
-func Small(seed, n uint64) Sample {
+func Small(seed, n uint64) Sample { return small(seed, n, plain) }
+
+// SmallFlanged makes such a brief for a tee or an inverted tee, most of them
+// with tension in the flange.
+func SmallFlanged(seed, n uint64) Sample { return small(seed, n, flanged) }
+
+// SmallTwisted makes such a brief with a torque that must be designed for.
+func SmallTwisted(seed, n uint64) Sample { return small(seed, n, twisted) }
+
+func small(seed, n uint64, of smallness) Sample {
 	m := newMaker(seed, n)
-	m.small = true
+	m.small, m.of = true, of
 	m.fill(m.IntN(20) == 0)
 	return Sample{Code: m.code, Kind: Sound, Brief: m.b}
 }
+
+// smallness is what a small brief is for.
+type smallness uint8
+
+const (
+	plain smallness = iota
+	flanged
+	twisted
+)
 
 // maker makes one brief.
 type maker struct {
@@ -74,10 +92,14 @@ type maker struct {
 	si    bool
 	y19   bool
 	small bool
+	of    smallness
 	b     beam.Brief
 
-	width, depth float64 // in inches or mm
+	width, depth float64 // of the web, in inches or mm
+	area         float64 // of the section, about
 	fc, fy       float64 // in psi or MPa
+	twist        float64 // greatest torque over the greatest that may be neglected; zero: none
+	path         beam.TorquePath
 }
 
 func newMaker(seed, n uint64) *maker {
@@ -122,8 +144,10 @@ func (m *maker) either(us, si float64) float64 {
 func (m *maker) fill(hopeless bool) {
 	b := &m.b
 	b.Reference = "R-" + string(rune('A'+m.IntN(26)))
-	m.section()
+	member := !m.chance(25)
+	m.section(member)
 	m.materials()
+	m.torsion()
 	load := m.between(0.05, 0.95)
 	if m.small {
 		load = m.between(0.05, 0.7)
@@ -131,32 +155,22 @@ func (m *maker) fill(hopeless bool) {
 	if m.chance(15) {
 		load = m.between(0.9, 1.6)
 	}
+	if m.twist > 1 {
+		load *= m.between(0.3, 0.9)
+	}
 	if hopeless {
 		load = m.between(2.5, 40)
 	}
 	// A moment of that share of what the section carries singly reinforced.
 	moment := load * 0.19 * m.fc * m.width * math.Pow(0.88*m.depth, 2) * 0.9 // lb-in or N-mm
-	if m.chance(25) {
-		m.demands(moment)
-	} else {
+	if member {
 		m.member(moment)
+	} else {
+		m.demands(moment)
 	}
 	m.surroundings()
 	m.preferences()
 	m.readings()
-}
-
-func (m *maker) section() {
-	m.width = m.either(step(m.between(8, 26), 1), step(m.between(200, 650), 25))
-	ratio := m.between(0.9, 2.8)
-	if m.small {
-		ratio = min(ratio, m.either(38, 950)/m.width)
-	}
-	m.depth = step(m.width*ratio, m.either(1, 25))
-	if m.chance(4) {
-		m.depth = m.either(step(m.between(7, 11), 1), step(m.between(175, 275), 25))
-	}
-	m.b.Section = beam.Section{Shape: beam.Rectangular, Width: m.length(m.width), Depth: m.length(m.depth)}
 }
 
 func (m *maker) materials() {
@@ -178,13 +192,11 @@ func (m *maker) materials() {
 	if m.chance(30) {
 		c.Density = density(step(m.between(142, 155), 1), step(m.between(2300, 2500), 10))
 	}
-	if m.chance(12) {
-		c.Kind = pick(m, beam.SandLightweight, beam.AllLightweight)
-		w := m.between(0, 1)
-		if !m.y19 {
-			w *= 0.8 // lightweight ends at 115 lb/ft3 in 318-14
-		}
-		c.Density = density(step(95+w*25, 1), step(1500+w*400, 10))
+	if m.chance(15) {
+		m.lightweight(density)
+	}
+	if !m.small && m.chance(6) {
+		c.Fibres = true
 	}
 	if m.chance(50) {
 		c.Aggregate = m.length(m.either(pick(m, 0.375, 0.5, 0.75, 0.75, 1, 1.5), pick(m, 10.0, 14, 20, 20, 25, 40)))
@@ -210,6 +222,54 @@ func (m *maker) materials() {
 	}
 }
 
+// lightweight draws a lightweight concrete by any of the ways to its λ.
+func (m *maker) lightweight(density func(us, si float64) units.Density) {
+	c := &m.b.Concrete
+	c.Kind = pick(m, beam.SandLightweight, beam.AllLightweight)
+	w := m.between(0, 1)
+	if !m.y19 {
+		w *= 0.8 // lightweight ends at 115 lb/ft3 in 318-14
+	}
+	c.Density = density(step(95+w*25, 1), step(1500+w*400, 10))
+	if m.small {
+		return
+	}
+	if m.chance(50) {
+		c.Kind = pick(m, beam.FineBlend, beam.CoarseBlend)
+		c.Normal = step(m.between(0, 1), 0.05)
+	}
+	if m.chance(30) {
+		c.Splitting = m.stress(m.between(0.65, 1.1) * m.either(6.7, 0.56) * math.Sqrt(m.fc))
+	}
+}
+
+// torsion decides how large the torques are.
+func (m *maker) torsion() {
+	if m.small {
+		if m.of == twisted {
+			m.twist = m.between(1.1, 5)
+			m.path = pick(m, beam.EquilibriumTorque, beam.CompatibilityTorque)
+		}
+		return
+	}
+	switch r := m.IntN(100); {
+	case r < 42:
+	case r < 55:
+		m.twist = m.between(0.1, 0.95)
+	case r < 80:
+		m.twist = m.between(1, 4.5)
+	default:
+		m.twist = m.between(3, 8)
+	}
+	m.path = pick(m, 0, beam.EquilibriumTorque, beam.CompatibilityTorque, beam.CompatibilityTorque)
+	if m.path == beam.CompatibilityTorque && m.chance(30) {
+		m.twist *= m.between(1, 3)
+	}
+	if m.chance(20) {
+		m.b.Readings.TorsionAngle = pick(m, 30.0, 36, 37.5, 45, 50, 60)
+	}
+}
+
 func (m *maker) surroundings() {
 	b := &m.b
 	b.Exposure = pick(m, beam.Interior, beam.Interior, beam.Interior, beam.Weather, beam.Ground)
@@ -220,7 +280,7 @@ func (m *maker) surroundings() {
 		}
 	}
 	if m.chance(30) {
-		b.Braced = m.length(m.width * m.between(5, 54))
+		b.Braced = m.length(m.width * m.between(5, 52))
 	}
 	if m.chance(60) {
 		b.Serviceability.Attached = pick(m, beam.NothingAttached, beam.Robust, beam.Fragile)
@@ -231,6 +291,9 @@ func (m *maker) surroundings() {
 func (m *maker) readings() {
 	r := &m.b.Readings
 	r.IgnoreDisplaced, r.RoundedYield, r.TuckedCorner = m.chance(20), m.chance(20), m.chance(20)
+	if !m.small {
+		r.CountSideBars = m.chance(10)
+	}
 	if m.chance(30) {
 		r.ShearRow = pick(m, beam.LargerRow, beam.RowA, beam.RowB)
 	}
@@ -267,6 +330,13 @@ func (m *maker) preferences() {
 		p.MaxLegs = pick(m, 2, 3, 4)
 		p.MaxZones = pick(m, 1, 3)
 		p.Mixed = m.chance(25)
+		if m.of != plain {
+			p.Bars, p.MaxLayers, p.Mixed = p.Bars[:min(2, len(p.Bars))], 1, false
+			p.Stirrups = p.Stirrups[:1]
+			if m.of == twisted {
+				p.MaxLegs, p.MaxZones = pick(m, 2, 3), 1
+			}
+		}
 		p.SpacingBy = m.length(m.either(pick(m, 1.0, 1.5, 2), pick(m, 25.0, 40, 50)))
 		p.Prefer, p.KeepBest = beam.LeastSteel, -1
 		return
@@ -285,7 +355,14 @@ func (m *maker) preferences() {
 	p.Mixed = m.chance(20)
 	p.Prefer = pick(m, 0, beam.LeastSteel, beam.FewestBars, beam.OneSize, beam.Shallowest, beam.FewestMarks)
 	p.KeepBest = pick(m, 0, -1, 1, 3)
-	if m.chance(15) {
+	if m.b.Section.Flange() != 0 || m.twist > 1 { // bars in the flange, and any at the other face, multiply what there is to try
+		p.Bars = m.some(bars, 2)
+		p.MaxLayers, p.MaxLegs = min(p.MaxLayers, 2), pick(m, 2, 3)
+	}
+	if m.chance(12) {
+		p.Bundles = pick(m, 2, 3, 4)
+	}
+	if m.chance(15) && m.b.Section.Shape != beam.Polygon {
 		p.Depths = []units.Length{m.length(m.depth + m.either(4, 100)), m.length(m.depth + m.either(2, 50))}
 	}
 	if m.chance(20) {
@@ -308,10 +385,14 @@ func (m *maker) demands(moment float64) {
 		switch {
 		case m.chance(8):
 			d.Moment = units.Moment{}
-		case m.chance(8):
-			d.Axial = m.forceOf(0.05 * m.between(0, 1.5) * m.fc * m.width * m.depth)
-		case m.chance(6):
-			d.Torque = m.momentOf(m.torque() * m.between(-0.7, 0.7))
+		case m.chance(12):
+			d.Axial = m.forceOf(0.05 * m.between(-0.6, 1.5) * m.fc * m.area)
+		}
+		if m.twist > 0 && (i == 0 || m.chance(60)) {
+			d.Path, d.Torque = m.path, m.momentOf(m.torque()*m.twist*m.between(0.3, 1)*pick(m, 1.0, -1))
+			if m.chance(15) {
+				d.Path = pick(m, beam.EquilibriumTorque, beam.CompatibilityTorque)
+			}
 		}
 		m.b.Demands = append(m.b.Demands, d)
 	}
@@ -366,6 +447,10 @@ func (m *maker) member(moment float64) {
 	if m.small {
 		slender *= 0.85
 	}
+	if m.of == flanged && m.b.Section.Shape == beam.Tee && share == 8 {
+		// The flange is to be in tension.
+		kinds, slender, share = [2]statics.SupportKind{statics.Fixed, statics.Free}, m.between(3, 7), 2
+	}
 	span := step(slender*m.depth, m.either(6, 100))
 	b.Spans = []units.Length{m.length(span)}
 	b.Supports = make([]beam.Support, 2)
@@ -378,13 +463,50 @@ func (m *maker) member(moment float64) {
 		s.Hung = s.Kind != statics.Free && m.chance(4)
 	}
 	total := moment * share / (span * span) / 1.4 // lb/in or N/mm, of service loads
-	own := m.either(150.0/1728, 2450*9.80665e-9) * m.width * m.depth
+	own := m.either(150.0/1728, 2450*9.80665e-9) * m.area
 	if m.chance(8) {
 		b.NoSelfWeight = true
 	} else {
 		total = math.Max(total-own, 0)
 	}
 	m.loads(total, span)
+	m.twists(span)
+}
+
+// twists adds the torques, whose greatest factored sum is about the one drawn.
+func (m *maker) twists(span float64) {
+	if m.twist == 0 {
+		return
+	}
+	b := &m.b
+	held := 2.0 // ends that hold
+	for _, s := range b.Supports {
+		if s.Kind == statics.Free {
+			held = 1
+		}
+	}
+	n := 1 + m.IntN(2)
+	for i := range n {
+		l := beam.Load{
+			Case: pick(m, beam.Dead, beam.Live, beam.Live, beam.Snow), Shape: beam.UniformTorque, Path: m.path,
+			Moment: m.momentOf(m.torque() * m.twist / 1.4 / float64(n) * held),
+		}
+		if m.chance(10) {
+			l.Path = pick(m, beam.EquilibriumTorque, beam.CompatibilityTorque)
+		}
+		if m.chance(45) {
+			at := m.between(0, 1)
+			l.Shape = beam.Torque
+			l.At = m.length(step(at*span, m.either(1, 10)))
+			if held == 2 {
+				l.Moment = l.Moment.Scale(0.5 / max(at, 1-at))
+			}
+		}
+		if m.chance(25) || i > 0 && m.chance(50) {
+			l.Moment = l.Moment.Neg()
+		}
+		b.Loads = append(b.Loads, l)
+	}
 }
 
 func (m *maker) loads(total, span float64) {

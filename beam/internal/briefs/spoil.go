@@ -22,24 +22,17 @@ func (m *maker) breakScope(b *beam.Brief) {
 		b.Reinforcement.Catalog = pick(m, "en-10080", "csa-g30-18", "as-nzs-4671")
 		b.Preferences.Bars, b.Preferences.Stirrups = nil, nil
 	case r == 4 && member:
-		b.Spans[0] = b.Section.Depth.Scale(m.between(0.8, 1.9))
+		b.Spans[0] = m.length(m.depth * m.between(0.8, 1.9))
 		b.Loads = b.Loads[:0]
 		b.Supports[0].Width, b.Supports[1].Width = units.Length{}, units.Length{}
 		b.NoSelfWeight = false
 	case r == 5 && member:
 		b.Loads = append(b.Loads, beam.Load{
 			Case: beam.Live, Shape: beam.PointLoad, Force: m.forceOf(m.either(10e3, 40e3)),
-			At: b.Section.Depth.Scale(m.between(1.1, 1.8)).Min(b.Spans[0].Scale(0.9)),
+			At: m.length(m.depth * m.between(1.1, 1.8)).Min(b.Spans[0].Scale(0.9)),
 		})
-	case r == 6 && member:
-		b.Loads = append(b.Loads, beam.Load{
-			Case: beam.Dead, Shape: pick(m, beam.Torque, beam.UniformTorque),
-			Moment: m.momentOf(m.torque() * m.between(0.2, 4)), At: b.Spans[0].Scale(m.Float64()),
-		})
-	case !member && r < 7:
-		b.Demands[0].Axial = m.forceOf(m.fc * m.width * m.depth * m.between(-0.3, 0.4))
 	case !member:
-		b.Demands[0].Torque = m.momentOf(m.torque() * m.between(0.6, 3))
+		b.Demands[0].Axial = m.forceOf(m.fc * m.area * m.between(0.12, 0.4))
 	default:
 		b.Preferences.Stirrups = []string{"#9"}
 		if b.Reinforcement.Catalog == "astm-metric" {
@@ -58,7 +51,7 @@ func (m *maker) torque() float64 {
 func (m *maker) spoil(b *beam.Brief) {
 	odd := pick(m, math.NaN(), math.Inf(1), math.Inf(-1), 0, -1, 1e300, -1e300, 1e-300, 5e-324, math.MaxFloat64)
 	member := len(b.Spans) > 0
-	switch r := m.IntN(24); {
+	switch r := m.IntN(28); {
 	case r == 0:
 		b.Section.Width = units.Metre.Of(odd)
 	case r == 1:
@@ -105,9 +98,18 @@ func (m *maker) spoil(b *beam.Brief) {
 		b.Readings.ShearRow, b.Readings.ShearMethod = beam.ShearRow(m.IntN(256)), beam.ShearMethod(m.IntN(256))
 	case r == 21:
 		b.Preferences.Prefer = beam.Preference(pick(m, 6, 7, 255))
-	case !member:
-		b.Demands[0].Shear = units.Newton.Of(odd)
 	case r == 22:
+		m.spoilSection(&b.Section, odd)
+	case r == 23:
+		b.Readings.TorsionAngle = pick(m, odd, 29, 61, 90)
+		if b.Readings.TorsionAngle == 0 {
+			b.Readings.TorsionAngle = -45
+		}
+	case r == 24:
+		b.Concrete.Kind, b.Concrete.Normal = beam.FineBlend, pick(m, math.NaN(), 1.1, -0.1)
+	case !member:
+		b.Demands[0].Torque = units.NewtonMetre.Of(odd)
+	case r == 25:
 		pick(m,
 			func() { b.Spans[0] = units.Metre.Of(odd) },
 			func() { b.Spans = nil },
@@ -131,5 +133,44 @@ func (m *maker) spoil(b *beam.Brief) {
 			func() { l.Shape, l.Moment = beam.Torque, units.NewtonMetre.Of(odd) },
 		)()
 		b.Loads = append(b.Loads, l)
+	}
+}
+
+// spoilSection makes an outline that no beam has.
+func (m *maker) spoilSection(s *beam.Section, odd float64) {
+	box := func(x, y, w, h float64) []beam.Point {
+		return m.points([]float64{x, y, x + w, y, x + w, y + h, x, y + h})
+	}
+	w, h := m.width, m.depth
+	polygon := beam.Section{Shape: beam.Polygon, Outline: box(0, 0, w, h)}
+	switch m.IntN(11) {
+	case 0:
+		s.Outline = polygon.Outline[:2]
+		s.Shape = beam.Polygon
+	case 1: // crosses itself
+		polygon.Outline[1], polygon.Outline[2] = polygon.Outline[2], polygon.Outline[1]
+		*s = polygon
+	case 2: // a hollow that reaches out
+		polygon.Voids = [][]beam.Point{box(0.3*w, 0.3*h, w, h)}
+		*s = polygon
+	case 3: // a hollow without an area
+		polygon.Voids = [][]beam.Point{box(0.3*w, 0.3*h, 0, 0.3*h)}
+		*s = polygon
+	case 4: // nothing stands upright all the way
+		*s = beam.Section{Shape: beam.Polygon, Outline: m.points([]float64{0, 0, w, 0, 4 * w, h, 3 * w, h})}
+	case 5:
+		polygon.Outline[0].X = units.Metre.Of(pick(m, math.NaN(), math.Inf(1), 1e300))
+		*s = polygon
+	case 6:
+		*s = polygon
+		s.Width = m.length(w)
+	case 7:
+		*s = beam.Section{Shape: beam.Tee, Width: m.length(w), Depth: m.length(h), FlangeThickness: m.length(h), FlangeWidth: m.length(2 * w)}
+	case 8:
+		*s = beam.Section{Shape: beam.InvertedTee, Width: m.length(w), Depth: m.length(h), FlangeThickness: m.length(h / 4), FlangeWidth: m.length(w / 2)}
+	case 9:
+		*s = beam.Section{Shape: beam.Tee, Width: m.length(w), Depth: m.length(h), FlangeThickness: units.Metre.Of(odd), FlangeWidth: m.length(2 * w)}
+	default:
+		*s = beam.Section{Shape: beam.Ell, Width: m.length(w), Depth: m.length(h), FlangeThickness: m.length(h / 4), Slab: beam.Slab{ClearLeft: m.length(w), ClearRight: m.length(w)}}
 	}
 }

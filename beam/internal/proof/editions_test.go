@@ -52,6 +52,7 @@ func TestInchAndMetricEditions(t *testing.T) {
 		b.Cover, b.Concrete.Aggregate = units.Inch.Of(1.5), units.Inch.Of(0.75)
 		b.Concrete.Density, b.Concrete.Kind = units.PoundPerCubicFoot.Of(150), beam.Normalweight
 		b.Concrete.Strength = b.Concrete.Strength.Min(units.KSI.Of(10))
+		b.Concrete.Splitting, b.Concrete.Normal, b.Concrete.Fibres = units.Stress{}, 0, false
 		b.Readings.RoundedYield = false
 		twin := codes[strings.Replace(s.Code, "318-", "318M-", 1)]
 		inch, err := beam.Design(context.Background(), codes[s.Code], b)
@@ -59,7 +60,7 @@ func TestInchAndMetricEditions(t *testing.T) {
 		if inch.Verdict != beam.Satisfied {
 			t.Skip("not satisfied")
 		}
-		b.Section = inch.Section
+		b = designedAs(b, inch.Section.Depth)
 		metric, err := beam.CheckLayout(context.Background(), twin, b, inch.Layout)
 		require.NoError(t, err)
 		if sameRow(inch, metric) {

@@ -45,7 +45,7 @@ func TestCheckAgrees(t *testing.T) {
 			t.Skip("no layout")
 		}
 		b := s.Brief
-		b.Section = r.Section
+		b = designedAs(b, r.Section.Depth)
 		again, err := beam.CheckLayout(context.Background(), codes[s.Code], b, r.Layout)
 		require.NoError(t, err)
 		require.Equal(t, r.Verdict, again.Verdict)
@@ -55,7 +55,7 @@ func TestCheckAgrees(t *testing.T) {
 		require.Equal(t, r.Quantities, again.Quantities)
 		for _, a := range r.Alternatives {
 			require.Equal(t, beam.Satisfied, r.Verdict, "alternatives of a beam that is not satisfied")
-			b.Section.Depth = a.Depth
+			b = designedAs(b, a.Depth)
 			other, err := beam.CheckLayout(context.Background(), codes[s.Code], b, a.Layout)
 			require.NoError(t, err)
 			require.Equalf(t, beam.Satisfied, other.Verdict, "alternative: %v", other.Binding)
@@ -118,7 +118,21 @@ func converted(b beam.Brief) beam.Brief {
 	stress := func(s units.Stress) units.Stress {
 		return units.KSI.Of(units.Megapascal.Of(s.In(units.Megapascal)).In(units.KSI))
 	}
-	b.Section.Width, b.Section.Depth = length(b.Section.Width), length(b.Section.Depth)
+	x := &b.Section
+	x.Width, x.Depth, x.FlangeThickness, x.FlangeWidth = length(x.Width), length(x.Depth), length(x.FlangeThickness), length(x.FlangeWidth)
+	x.Slab = beam.Slab{ClearLeft: length(x.Slab.ClearLeft), ClearRight: length(x.Slab.ClearRight)}
+	corners := func(of []beam.Point) []beam.Point {
+		of = slices.Clone(of)
+		for i := range of {
+			of[i] = beam.Point{X: length(of[i].X), Y: length(of[i].Y)}
+		}
+		return of
+	}
+	x.Outline, x.Voids = corners(x.Outline), slices.Clone(x.Voids)
+	for i := range x.Voids {
+		x.Voids[i] = corners(x.Voids[i])
+	}
+	b.Concrete.Splitting = stress(b.Concrete.Splitting)
 	b.Concrete.Strength = stress(b.Concrete.Strength)
 	b.Reinforcement.Yield, b.Reinforcement.StirrupYield = stress(b.Reinforcement.Yield), stress(b.Reinforcement.StirrupYield)
 	b.Concrete.Aggregate, b.Cover = length(b.Concrete.Aggregate), length(b.Cover)
@@ -141,6 +155,7 @@ func converted(b beam.Brief) beam.Brief {
 	for i := range b.Demands {
 		d := &b.Demands[i]
 		d.Moment = units.KipFoot.Of(units.KilonewtonMetre.Of(d.Moment.In(units.KilonewtonMetre)).In(units.KipFoot))
+		d.Torque = units.KipFoot.Of(units.KilonewtonMetre.Of(d.Torque.In(units.KilonewtonMetre)).In(units.KipFoot))
 		d.Shear = units.Kip.Of(units.Kilonewton.Of(d.Shear.In(units.Kilonewton)).In(units.Kip))
 		d.Axial = units.Kip.Of(units.Kilonewton.Of(d.Axial.In(units.Kilonewton)).In(units.Kip))
 	}
@@ -167,7 +182,7 @@ func TestCloserStirrupsStillPass(t *testing.T) {
 			t.Skip("not satisfied")
 		}
 		b := s.Brief
-		b.Section = r.Section
+		b = designedAs(b, r.Section.Depth)
 		l := r.Layout
 		l.Transverse = slices.Clone(l.Transverse)
 		for i := range l.Transverse {
@@ -228,8 +243,8 @@ func TestCuresCure(t *testing.T) {
 func TestDepthsAreTried(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {
 		s := anySample(t)
-		if s.Kind != briefs.Sound {
-			t.Skip("not sound")
+		if s.Kind != briefs.Sound || s.Brief.Section.Shape == beam.Polygon {
+			t.Skip("not sound, or of no other depth")
 		}
 		b := s.Brief
 		b.Preferences.Depths = nil

@@ -8,6 +8,8 @@ import (
 	"os"
 	"reflect"
 	"runtime"
+	"slices"
+	"strings"
 	"sync"
 	"testing"
 
@@ -17,6 +19,7 @@ import (
 	"soffit.example/beam/aci318"
 	"soffit.example/beam/internal/briefs"
 	"soffit.example/beam/internal/rederive"
+	"soffit.example/units"
 )
 
 // seed of every random brief here.
@@ -33,6 +36,15 @@ var codes = func() map[string]beam.Code {
 	}
 	return m
 }()
+
+// designedAs is a brief at the depth that was chosen; that of a polygon is its
+// outline's.
+func designedAs(b beam.Brief, depth units.Length) beam.Brief {
+	if b.Section.Shape != beam.Polygon {
+		b.Section.Depth = depth
+	}
+	return b
+}
 
 // parallel runs fn for numbers 0 to n-1 on all processors and returns what it
 // said, in order.
@@ -57,10 +69,13 @@ func parallel[T any](n int, fn func(i int) T) []T {
 
 // answer is what came of one brief.
 type answer struct {
-	outcome  string   // verdict, or "input error"
-	faults   []string // what is wrong with the answer
-	again    int      // layouts judged by both
-	loose    []string // layouts that CheckLayout fails and the re-derivation does not
+	outcome  string            // verdict, or "input error"
+	faults   []string          // what is wrong with the answer
+	again    int               // layouts judged by both
+	loose    []string          // layouts that CheckLayout fails and the re-derivation does not
+	agreed   map[string][2]int // by check: how often both find it passing, and failing
+	stricter map[string]int    // how often CheckLayout alone finds it failing
+	routes   int               // strengths found by both
 	mutants  int
 	rejected int // mutants that both find wrong
 }
@@ -76,21 +91,41 @@ func TestRandomBriefs(t *testing.T) {
 	}
 	answers := parallel(n, func(i int) answer { return put(uint64(i)) })
 	outcomes := map[string]int{}
-	mutants, rejected, again, loose := 0, 0, 0, map[string]int{}
+	mutants, rejected, again, routes, loose := 0, 0, 0, 0, map[string]int{}
+	agreed, stricter := map[string][2]int{}, map[string]int{}
 	for i, a := range answers {
 		s := briefs.Random(seed, uint64(i))
 		outcomes[s.Kind.String()+": "+a.outcome]++
 		for _, f := range a.faults {
 			t.Errorf("brief %d (%s, %s): %s", i, s.Code, s.Kind, f)
 		}
-		mutants, rejected, again = mutants+a.mutants, rejected+a.rejected, again+a.again
+		mutants, rejected, again, routes = mutants+a.mutants, rejected+a.rejected, again+a.again, routes+a.routes
 		for _, l := range a.loose {
 			loose[l]++
+		}
+		for id, n := range a.agreed {
+			sum := agreed[id]
+			agreed[id] = [2]int{sum[0] + n[0], sum[1] + n[1]}
+		}
+		for id, n := range a.stricter {
+			stricter[id] += n
 		}
 	}
 	t.Logf("%d briefs: %v", n, outcomes)
 	t.Logf("%d layouts judged by both, of them %d made worse and %d of those found wrong by both", again, mutants, rejected)
 	t.Logf("failed by CheckLayout, not by the re-derivation, by first failing check: %v", loose)
+	t.Logf("%d nominal strengths by two routes", routes)
+	t.Logf("found by both to pass and to fail, by check: %v", agreed)
+	for _, id := range []string{
+		"crack.flange-spacing", "crack.flange-spread", "crack.spacing", "fit.flange", "flexure.minimum.negative", "flexure.minimum.positive",
+		"flexure.negative", "flexure.positive", "flexure.strain.negative", "flexure.strain.positive", "hanger.stirrups", "shear.minimum-stirrups",
+		"shear.section-limit", "shear.spacing-across", "shear.spacing-along", "shear.strength", "spacing.clear", "torsion.closed",
+		"torsion.longitudinal-spacing", "torsion.longitudinal.bottom", "torsion.longitudinal.side", "torsion.longitudinal.top",
+		"torsion.minimum-stirrups", "torsion.section", "torsion.spacing-along", "torsion.transverse", "torsion.wall",
+	} {
+		require.Positivef(t, agreed[id][1], "nothing in which both find that %s fails", id)
+	}
+	t.Logf("found by CheckLayout alone to fail: %v", stricter)
 	require.Greater(t, outcomes["sound: satisfied"], n/5)
 	require.Greater(t, outcomes["hopeless: unsatisfied"], n/50)
 	require.Greater(t, outcomes["outside: out-of-scope"], n/20)
@@ -137,15 +172,19 @@ func put(i uint64) (a answer) {
 	switch r.Verdict {
 	case beam.Satisfied:
 		brief := s.Brief
-		brief.Section = r.Section
+		brief = designedAs(brief, r.Section.Depth)
 		a.compare(code, s.Code, brief, r.Layout, wrong)
 		for k := range r.Alternatives {
 			other := brief
-			other.Section.Depth = r.Alternatives[k].Depth
+			other = designedAs(other, r.Alternatives[k].Depth)
 			a.compare(code, s.Code, other, r.Alternatives[k].Layout, wrong)
 		}
 		for k, m := range mutations(r.Layout, brief) {
-			if (int(i)+k)%3 == 0 { // a sample
+			every := 5 // a sample
+			if full() {
+				every = 3
+			}
+			if (int(i)+k)%every == 0 {
 				a.mutants++
 				if !a.compare(code, s.Code, brief, m, wrong) {
 					a.rejected++
@@ -155,7 +194,7 @@ func put(i uint64) (a answer) {
 	case beam.Unsatisfied:
 		if len(r.Layout.Longitudinal) > 0 {
 			brief := s.Brief
-			brief.Section = r.Section
+			brief = designedAs(brief, r.Section.Depth)
 			a.compare(code, s.Code, brief, r.Layout, wrong)
 		}
 	}
@@ -182,6 +221,8 @@ func (a *answer) compare(code beam.Code, id string, b beam.Brief, l beam.Layout,
 		wrong("re-derivation: %v", err)
 		return false
 	}
+	a.agree(checked, report, l, wrong)
+	a.sameStrength(id, checked, report, wrong)
 	switch {
 	case checked.Verdict == beam.Satisfied && !report.OK():
 		wrong("CheckLayout says satisfied, the re-derivation finds %v; cover %v, layout %s", report, b.Cover, describe(l))
@@ -194,6 +235,70 @@ func (a *answer) compare(code beam.Code, id string, b beam.Brief, l beam.Layout,
 		}
 	}
 	return report.OK()
+}
+
+// agree holds the checks of both against each other, id by id: none that
+// CheckLayout passes may be found failing.
+func (a *answer) agree(checked *beam.Result, report *rederive.Report, l beam.Layout, wrong func(string, ...any)) {
+	if a.agreed == nil {
+		a.agreed, a.stricter = map[string][2]int{}, map[string]int{}
+	}
+	most := map[string]float64{}
+	for i := range checked.Checks {
+		if c := &checked.Checks[i]; judged(c) {
+			most[c.ID] = math.Max(most[c.ID], c.Utilization)
+		}
+	}
+	if most["shear.stirrup-angle"] > 1 {
+		return // what such stirrups are good for is anybody's guess
+	}
+	for id, u := range most {
+		other, both := report.Judged[id]
+		switch fails := u > 1+1e-9; {
+		case !both, id == "shear.spacing-along" && inclined(l): // asked only of those that lean against the shear
+		case fails && other > 1:
+			n := a.agreed[id]
+			a.agreed[id] = [2]int{n[0], n[1] + 1}
+		case fails:
+			if u > 1.002 {
+				a.stricter[id]++
+			}
+		case other > 1+2e-6:
+			wrong("%s passes at %g, the re-derivation finds %g; %v; layout %s", id, u, other, report, describe(l))
+		default:
+			n := a.agreed[id]
+			a.agreed[id] = [2]int{n[0] + 1, n[1]}
+		}
+	}
+}
+
+func inclined(l beam.Layout) bool {
+	return slices.ContainsFunc(l.Transverse, func(z beam.Zone) bool { return z.Angle != 0 && z.Angle != 90 })
+}
+
+// sameStrength compares nominal strengths by two routes, the library's polynomials
+// and the summation of the re-derivation. Where more than one equilibrium
+// exists both take the first.
+func (a *answer) sameStrength(id string, checked *beam.Result, report *rederive.Report, wrong func(string, ...any)) {
+	unit := units.PoundInch
+	if strings.Contains(id, "M-") {
+		unit = units.NewtonMillimetre
+	}
+	for i := range checked.Flexure {
+		f := &checked.Flexure[i]
+		if f.Sense == 0 {
+			wrong("a strength of no sense: %+v", *f)
+			continue
+		}
+		other := report.Nominal[f.Sense-1]
+		if other == 0 {
+			continue
+		}
+		a.routes++
+		if got := f.Nominal.In(unit); math.Abs(got/other-1) > 1e-6 {
+			wrong("Mn is %.9g, by the re-derivation %.9g (%s); layout %s", got, other, f.Sense, describe(checked.Layout))
+		}
+	}
 }
 
 // unclassified lists what an answer leaves unsaid.

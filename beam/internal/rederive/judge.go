@@ -7,24 +7,29 @@ import (
 
 	"soffit.example/bars"
 	"soffit.example/beam"
-	"soffit.example/beam/statics"
 )
 
 // Violation is one thing found wrong.
 type Violation struct {
-	Rule        string // topic and clause: "shear strength 22.5.1.1"
+	Rule        string // the id of the library's check of the same thing, or words
 	Utilization float64
 	Detail      string
 }
 
 // SideFace is the rule on bars along the side faces.
-const SideFace = "side face 9.7.2.3"
+const SideFace = "side-face.spacing"
+
+// SideSpacing is the rule on how far apart bars along the sides may be in
+// torsion.
+const SideSpacing = "torsion.longitudinal-spacing at the sides"
 
 // Report is what was found. Scope lists reasons why the sectional method does
 // not apply at all.
 type Report struct {
 	Violations []Violation
-	Scope      []string
+	// Judged is the greatest utilization found of each rule.
+	Judged map[string]float64
+	Scope  []string
 	// Greatest moments found, for comparison: sagging and hogging, in the
 	// units of the edition.
 	Moments [2]float64
@@ -33,6 +38,7 @@ type Report struct {
 	// Clear cover to the stirrups and the greater effective depth of the two
 	// faces, in metres.
 	Cover, Deepest float64
+	Corner         float64 // of a corner bar at the bottom: its centre from the side, in metres
 	// Tight is the least clear gap between bars of a layer over the gap
 	// required, at the bottom and at the top.
 	Tight [2]float64
@@ -56,7 +62,8 @@ type judge struct {
 	catalog bars.Catalog
 	report  *Report
 
-	bw, h, fc, fy, fyt float64
+	s                  *shape
+	bw, h, fc, fy, fyt float64 // bw of the strip in which the stirrups stand
 	lambda             float64
 	stone              float64
 	cage               cage
@@ -65,6 +72,8 @@ type judge struct {
 	beds               [2]*bed // bottom and top
 	zones              []zone
 	member             *member
+	twist              *twist
+	required           [2][]float64 // moments that shares of the steel carry
 	all                []section
 	bent               [2]bool
 	moments            [2]float64
@@ -78,6 +87,7 @@ type zone struct {
 	db, area    float64
 	number      int
 	closed      bool
+	angle       float64 // radians
 }
 
 // Beam is a brief with its forces found, ready to judge layouts. It is safe
@@ -98,6 +108,7 @@ func Prepare(id string, b beam.Brief) (*Beam, error) {
 	}
 	j := judge{printed: &p, b: &b, catalog: catalog, report: &Report{}}
 	j.materials()
+	j.twist = j.twisting()
 	j.forces()
 	j.scope()
 	return &Beam{j}, nil
@@ -107,11 +118,14 @@ func Prepare(id string, b beam.Brief) (*Beam, error) {
 // hogging.
 func (b *Beam) Bent() [2]bool { return b.ready.bent }
 
+// Twisted reports whether some torque must be designed for.
+func (b *Beam) Twisted() bool { return b.ready.twisted() }
+
 // with is a judge of one layout.
 func (b *Beam) with(l *beam.Layout) (*judge, error) {
 	j := b.ready
 	j.l = l
-	j.report = &Report{Moments: j.moments, Scope: slices.Clone(j.report.Scope)}
+	j.report = &Report{Moments: j.moments, Scope: slices.Clone(j.report.Scope), Judged: map[string]float64{}}
 	if err := j.place(); err != nil {
 		return nil, err
 	}
@@ -120,6 +134,9 @@ func (b *Beam) with(l *beam.Layout) (*judge, error) {
 		metres = 0.0254
 	}
 	j.report.Cover = j.cover * metres
+	if bed := j.beds[0]; bed.count > 0 {
+		j.report.Corner = bed.layers[0][0].x * metres
+	}
 	for k, bed := range j.beds {
 		j.report.Tight[k] = bed.tight
 		if bed.count > 0 {
@@ -142,8 +159,11 @@ func (b *Beam) Judge(l beam.Layout) (*Report, error) {
 	j.bending(0)
 	j.bending(1)
 	j.shear()
+	j.torsion()
+	j.hangers()
 	j.ties()
 	j.whole()
+	j.ribs()
 	j.sides()
 	return j.report, nil
 }
@@ -188,16 +208,19 @@ func (j *judge) check(rule string, demand, capacity float64, detail string, args
 	u := math.Inf(1)
 	switch {
 	case demand <= 0:
-		return
+		u = 0
 	case capacity > 0:
 		u = demand / capacity
 	}
 	if u > 1+slack {
 		j.wrong(rule, u, detail, args...)
+		return
 	}
+	j.report.Judged[rule] = math.Max(j.report.Judged[rule], u)
 }
 
 func (j *judge) wrong(rule string, u float64, detail string, args ...any) {
+	j.report.Judged[rule] = math.Max(j.report.Judged[rule], u)
 	j.report.Violations = append(j.report.Violations, Violation{rule, u, fmt.Sprintf(detail, args...)})
 }
 
@@ -207,7 +230,6 @@ func (j *judge) outOfScope(format string, args ...any) {
 
 func (j *judge) materials() {
 	b := j.b
-	j.bw, j.h = j.length(b.Section.Width), j.length(b.Section.Depth)
 	j.fc, j.fy = j.stress(b.Concrete.Strength), j.stress(b.Reinforcement.Yield)
 	j.fyt = j.fy
 	if !b.Reinforcement.StirrupYield.IsZero() {
@@ -218,20 +240,46 @@ func (j *judge) materials() {
 	if !b.Concrete.Aggregate.IsZero() {
 		j.stone = j.length(b.Concrete.Aggregate)
 	}
-	j.lambda = 1
-	if light := b.Concrete.Kind == beam.SandLightweight || b.Concrete.Kind == beam.AllLightweight; light {
-		wc := j.unitWeight(b.Concrete.Density)
-		switch {
-		case !j.y19 && b.Concrete.Kind == beam.SandLightweight:
-			j.lambda = 0.85
-		case !j.y19:
-			j.lambda = 0.75
-		case wc <= j.lambdaLow:
-			j.lambda = 0.75
-		case wc <= j.lambdaHigh:
-			j.lambda = math.Min(1, j.lambdaBy*wc)
-		}
+	j.lambda = j.lightness()
+	j.s = j.shapeOf(b)
+	j.bw, j.h = j.s.strip, j.s.h
+}
+
+// lightness is λ: of 318-14 by the kind of aggregate or the splitting strength
+// (19.2.4.2, 19.2.4.3), of 318-19 by the density (Table 19.2.4.1(a)) or, of
+// blends, by the kind where that is more (Table 19.2.4.1(b)).
+func (j *judge) lightness() float64 {
+	c := &j.b.Concrete
+	kind := 1.0
+	switch c.Kind {
+	case beam.SandLightweight:
+		kind = 0.85
+	case beam.AllLightweight:
+		kind = 0.75
+	case beam.FineBlend:
+		kind = 0.75 + 0.10*c.Normal
+	case beam.CoarseBlend:
+		kind = 0.85 + 0.15*c.Normal
+	default:
+		return 1
 	}
+	if !j.y19 {
+		if !c.Splitting.IsZero() {
+			return math.Min(1, j.stress(c.Splitting)/(j.split*math.Sqrt(j.fc)))
+		}
+		return kind
+	}
+	dense := 1.0
+	switch wc := j.unitWeight(c.Density); {
+	case wc <= j.lambdaLow:
+		dense = 0.75
+	case wc <= j.lambdaHigh:
+		dense = math.Min(1, j.lambdaBy*wc)
+	}
+	if c.Kind == beam.FineBlend || c.Kind == beam.CoarseBlend {
+		return math.Max(dense, kind)
+	}
+	return dense
 }
 
 // tableCover is the clear cover that a bar of a number needs.
@@ -250,7 +298,7 @@ func (j *judge) tableCover(number int) float64 {
 
 // place takes the layout apart and finds where its bars lie.
 func (j *judge) place() error {
-	largest, stirrup := 0, 0
+	largest, stirrup, bundle := 0, 0, 0.0
 	var thickest float64
 	for i := range j.l.Longitudinal {
 		r := &j.l.Longitudinal[i]
@@ -264,6 +312,9 @@ func (j *judge) place() error {
 		}
 		if r.Face != beam.Side {
 			largest = max(largest, n)
+			if r.Bundled > 1 {
+				bundle = math.Max(bundle, j.aroundBundle(j.length(s.Diameter)*math.Sqrt(float64(r.Bundled))))
+			}
 		}
 	}
 	for i := range j.l.Transverse {
@@ -275,11 +326,15 @@ func (j *judge) place() error {
 		d := j.length(s.Diameter)
 		n := j.number(d)
 		if n < 3 || n > 8 {
-			j.wrong("stirrup size 25.3.2", float64(n)/8, "%s", z.Bar)
+			j.wrong("shear.stirrup-size", float64(n)/8, "%s", z.Bar)
 		}
 		spaced := zone{
 			from: j.length(z.From), to: j.length(z.To), s: j.length(z.Spacing), legs: z.Legs,
-			db: d, area: j.area(s.Area) * float64(z.Legs), number: n, closed: z.Form != "open",
+			db: d, area: j.area(s.Area) * float64(z.Legs), number: n, closed: z.Form != "open", angle: math.Pi / 2,
+		}
+		if z.Angle != 0 {
+			spaced.angle = z.Angle * math.Pi / 180
+			j.check("shear.stirrup-angle", 45, z.Angle, "zone %d", i)
 		}
 		if z.Count > 0 {
 			spaced.to = math.Min(spaced.to, spaced.from+float64(z.Count)*spaced.s)
@@ -301,16 +356,16 @@ func (j *judge) place() error {
 		j.cover = j.length(j.b.Cover)
 		j.ownCover = thickest > 0 && j.cover >= j.tableCover(stirrup)*(1-slack)
 	case thickest == 0:
-		j.cover = j.tableCover(largest)
+		j.cover = math.Max(j.tableCover(largest), bundle)
 	default:
-		j.cover = math.Max(j.tableCover(stirrup), j.tableCover(largest)-thickest)
+		j.cover = math.Max(j.tableCover(stirrup), math.Max(j.tableCover(largest), bundle)-thickest)
 	}
 	j.cage.width, j.cage.depth, j.cage.inner = j.bw, j.h, j.cover+thickest
 	j.cage.tucked = j.b.Readings.TuckedCorner
 	j.cage.least = math.Max(j.gap, 4.0/3*j.stone)
 	j.cage.between = j.cage.least // layers keep the distance that 26.4.2.1(a) asks of the aggregate too
 	for k, face := range [2]beam.Face{beam.Bottom, beam.Top} {
-		bed, err := j.lay(&j.cage, j.catalog, j.l, face)
+		bed, err := j.lay(face)
 		if err != nil {
 			return err
 		}
@@ -328,7 +383,7 @@ func (j *judge) forces() {
 			if !j.b.Concrete.Density.IsZero() {
 				density = j.unitWeight(j.b.Concrete.Density)
 			}
-			own = j.ownWeight(density, j.bw*j.h)
+			own = j.ownWeight(density, j.s.gross)
 		}
 		j.member = newMember(j.printed, j.b, own)
 		j.all = j.member.stations()
@@ -345,138 +400,6 @@ func (j *judge) forces() {
 	}
 }
 
-// scope finds what the sectional method does not cover.
-func (j *judge) scope() {
-	if j.fc < j.fcLeast*(1-slack) {
-		j.outOfScope("f'c of %g", j.fc)
-	}
-	if j.fy < j.fyLeast*(1-slack) || j.fy > j.fyMost*(1+slack) {
-		j.outOfScope("fy of %g", j.fy)
-	}
-	if j.b.Reinforcement.Catalog != "astm-inch" && j.b.Reinforcement.Catalog != "astm-metric" {
-		j.outOfScope("catalog %s", j.b.Reinforcement.Catalog)
-	}
-	for i := range j.b.Demands {
-		d := &j.b.Demands[i]
-		if n := j.force(d.Axial); n < 0 || n >= 0.1*j.fc*j.bw*j.h*(1+slack) {
-			j.outOfScope("axial force of %g", n)
-		}
-		j.torque(j.moment(d.Torque), j.force(d.Axial))
-	}
-	if j.member == nil {
-		return
-	}
-	m := j.member
-	clear, times := m.faceR-m.faceL, 4.0
-	if m.left == statics.Free || m.right == statics.Free {
-		times = 2 // of a cantilever: half of a span between supports
-	}
-	if clear <= times*j.h*(1-slack) {
-		j.outOfScope("deep: %g of clear span on %g of depth", clear, j.h)
-	}
-	for i := range j.b.Loads {
-		l := &j.b.Loads[i]
-		if l.Shape != beam.PointLoad || l.Force.IsZero() || l.Hung {
-			continue
-		}
-		at := j.length(l.At)
-		for end, from := range [2]float64{at - m.faceL, m.faceR - at} {
-			s := &j.b.Supports[end]
-			if s.Kind != statics.Free && !s.Hung && from > 1e-9*m.length && from <= 2*j.h*(1-slack) {
-				j.outOfScope("a concentrated load %g from a face", from)
-			}
-		}
-	}
-	j.twist()
-}
-
-// torque compares a torque with what may be neglected (9.5.4.1, 22.7.4.1).
-func (j *judge) torque(t, nu float64) {
-	if t == 0 {
-		return
-	}
-	lr := j.lambda * math.Min(math.Sqrt(j.fc), j.rootMost)
-	acp, pcp := j.bw*j.h, 2*(j.bw+j.h)
-	axial := 4.0
-	if !j.us {
-		axial = 0.33
-	}
-	threshold := j.torsion * lr * acp * acp / pcp * math.Sqrt(math.Max(0, 1+nu/(axial*acp*lr)))
-	if math.Abs(t) >= 0.75*threshold*(1+slack) {
-		j.outOfScope("torque of %g against %g", t, 0.75*threshold)
-	}
-}
-
-// twist follows the torques along the span.
-func (j *judge) twist() {
-	m := j.member
-	var cases [beam.Earthquake + 1]func(x float64) float64
-	any := false
-	for k := range cases {
-		var points []place
-		spread := 0.0
-		for i := range j.b.Loads {
-			l := &j.b.Loads[i]
-			if int(l.Case) != k {
-				continue
-			}
-			switch l.Shape {
-			case beam.Torque:
-				points = append(points, place{j.length(l.At), j.moment(l.Moment)})
-			case beam.UniformTorque:
-				spread += j.moment(l.Moment)
-			}
-		}
-		if len(points) == 0 && spread == 0 {
-			continue
-		}
-		any = true
-		// Twist of a prismatic bar with both ends held vanishes over its length.
-		held := [2]bool{m.left != statics.Free, m.right != statics.Free}
-		start := 0.0
-		for _, p := range points {
-			switch {
-			case held[0] && held[1]:
-				start += p.size * (m.length - p.at) / m.length
-			case held[0]:
-				start += p.size
-			}
-		}
-		switch {
-		case held[0] && held[1]:
-			start += spread / 2
-		case held[0]:
-			start += spread
-		}
-		cases[k] = func(x float64) float64 {
-			t := start - spread*x/m.length
-			for _, p := range points {
-				if p.at < x {
-					t -= p.size
-				}
-			}
-			return t
-		}
-	}
-	if !any {
-		return
-	}
-	most := 0.0
-	for i := range m.combos {
-		for n := 0; n <= 256; n++ {
-			x := m.faceL + (m.faceR-m.faceL)*float64(n)/256
-			t := 0.0
-			for k, f := range m.combos[i].factors {
-				if f != 0 && cases[k] != nil {
-					t += f * cases[k](x)
-				}
-			}
-			most = math.Max(most, math.Abs(t))
-		}
-	}
-	j.torque(most, 0)
-}
-
 // apart sees that the bars of opposite faces lie clear of each other.
 func (j *judge) apart() {
 	sum := 0.0
@@ -484,12 +407,12 @@ func (j *judge) apart() {
 		top := 0.0
 		for _, row := range b.layers {
 			for _, o := range row {
-				top = math.Max(top, o.y+o.r)
+				top = math.Max(top, o.y+o.high())
 			}
 		}
 		sum += top
 	}
-	j.check("bars of opposite faces", sum, j.h, "they meet")
+	j.check("fit.depth", sum, j.h, "they meet")
 }
 
 // fit judges how the bars of a face lie.
@@ -497,7 +420,7 @@ func (j *judge) fit(k int) {
 	b := j.beds[k]
 	if b.count == 0 {
 		if len(j.zones) > 0 {
-			j.wrong("bars in bends 25.7.1.2", 2, "face %d has no bars", k)
+			j.wrong("bars.corners", 2, "face %d has no bars", k)
 		}
 		return
 	}
@@ -506,179 +429,56 @@ func (j *judge) fit(k int) {
 	for _, row := range b.layers {
 		for _, o := range row {
 			if j.ownCover {
-				j.check("cover of bars 20.5.1.3", j.tableCover(o.number), min(o.y, o.x, j.bw-o.x)-o.r, "number %d", o.number)
+				j.check("cover.bar", j.tableCover(o.number), min(o.y-o.low(), min(o.x, j.bw-o.x)-o.wide()-o.real()), "number %d", o.number)
 			}
 		}
 	}
+	j.bundles(b)
 	for _, f := range b.faults {
-		j.wrong("fit 25.2, 25.3", 2, "%s", f)
+		j.wrong(f.rule, 2, "face %d: %s", k, f.what)
 	}
-	j.check("clear spacing 25.2.1", 1, b.tight, "face %d", k)
+	if b.tight > 0 {
+		j.check("spacing.clear", 1, b.tight, "face %d", k)
+	}
 	if len(j.zones) > 0 && len(b.layers[0]) < 2 {
-		j.wrong("bars in bends 25.7.1.2", 2, "one bar at face %d", k)
+		j.wrong("bars.corners", 2, "one bar at face %d", k)
 	}
 	if len(b.layers) > 1 {
-		j.check("aggregate between layers 26.4.2.1", j.stone, 0.75*j.cage.between, "face %d", k)
+		j.check("aggregate.clear-spacing", j.stone, 0.75*j.cage.between, "face %d", k)
 	}
-	j.check("aggregate in the form 26.4.2.1", j.stone, j.bw/5, "")
+	j.check("aggregate.form-width", j.stone, j.bw/5, "")
 	for _, z := range j.zones {
 		if z.legs > 2 {
-			j.check("bars at legs 25.7.1.2", float64(z.legs), float64(len(b.layers[0])), "face %d", k)
+			j.check("shear.leg-bars", float64(z.legs), float64(len(b.layers[0])), "face %d", k)
 		}
 	}
 }
 
-// bending judges one sense: 0 sagging, 1 hogging.
-func (j *judge) bending(k int) {
-	if !j.bent[k] {
-		return
-	}
-	tension, pressed := j.beds[k], j.beds[1-k]
-	mu := j.moments[k]
-	if tension.count == 0 {
-		j.wrong("flexure 9.5.1.1", math.Inf(1), "no bars at tension face %d", k)
-		return
-	}
-	steel := func(share float64, compression bool) []steelAt {
-		var out []steelAt
-		for _, row := range tension.layers {
-			for _, o := range row {
-				out = append(out, steelAt{j.h - o.y, share * o.area})
-			}
-		}
-		if compression && pressed.relied {
-			for _, row := range pressed.layers {
-				for _, o := range row {
-					out = append(out, steelAt{o.y, o.area})
-				}
-			}
-		}
-		return out
-	}
-	g := &j.b.Readings
-	s := j.strength(j.bw, j.h, j.fc, j.fy, steel(1, true), !g.IgnoreDisplaced, g.RoundedYield)
-	if !s.ok {
-		j.wrong("flexure 9.5.1.1", math.Inf(1), "no equilibrium")
-		return
-	}
-	j.report.Nominal[k] = s.mn
-	j.check("flexure 9.5.1.1", mu, s.phi*s.mn, "sense %d: Mu %.5g, φ %.4g, Mn %.5g", k, mu, s.phi, s.mn)
-	j.check("least strain 9.3.3.1", s.leastEt, s.strain, "sense %d", k)
-
-	d := j.h - tension.centroid
-	fy := j.fy
-	if j.asCap > 0 {
-		fy = math.Min(fy, j.asCap)
-	}
-	least := math.Max(j.asRoot*math.Sqrt(j.fc), j.asFloor) / fy * j.bw * d
-	if tension.area < least*(1-slack) {
-		// 9.6.1.3: enough if three quarters of the steel would do.
-		q := j.strength(j.bw, j.h, j.fc, j.fy, steel(0.75, false), !g.IgnoreDisplaced, g.RoundedYield)
-		if !q.ok || q.phi*q.mn < mu*(1-slack) {
-			j.wrong("least steel 9.6.1", least/tension.area, "sense %d: %.5g of %.5g", k, tension.area, least)
-		}
-	}
-
-	limit := j.crack(tension.cover)
-	if len(tension.layers[0]) == 1 {
-		j.check("crack control 24.3.3", j.bw, limit, "sense %d", k)
-	} else {
-		j.check("crack control 24.3.2", tension.widest, limit, "sense %d", k)
-	}
-}
-
-// crack is the greatest spacing of 24.3.2 with fs of 2/3 fy.
-func (j *judge) crack(cc float64) float64 {
-	k := j.crackStress / (2.0 / 3 * j.fy)
-	return math.Min(j.crack15*k-2.5*cc, j.crack12*k)
-}
-
-// whole judges the limits of the member as such.
-func (j *judge) whole() {
-	if !j.b.Braced.IsZero() {
-		j.check("bracing 9.2.3.1", j.length(j.b.Braced), 50*j.bw, "")
-	}
-	if j.member == nil {
-		return
-	}
-	m := j.member
-	l, over := m.length, 16.0
-	fixed := 0
-	for _, s := range [2]statics.SupportKind{m.left, m.right} {
-		if s == statics.Fixed {
-			fixed++
-		}
-	}
-	switch {
-	case m.left == statics.Free || m.right == statics.Free:
-		l, over = m.faceR-m.faceL, 8
-	case fixed == 2:
-		over = 21
-	case fixed == 1:
-		over = 18.5
-	}
-	least := l / over * (0.4 + j.fy/j.depthFy)
-	if j.b.Concrete.Kind == beam.SandLightweight || j.b.Concrete.Kind == beam.AllLightweight {
-		if wc := j.unitWeight(j.b.Concrete.Density); wc >= j.lightLow && wc <= j.lightHigh {
-			least *= math.Max(j.light-j.lightSlope*wc, j.lightMost)
-		}
-	}
-	j.check("least depth 9.3.1.1", least, j.h, "")
-}
-
-// sides judges the bars along the side faces of deep beams (9.7.2.3).
-func (j *judge) sides() {
-	if j.h <= j.deep*(1+slack) {
-		return
-	}
-	limit := j.crack(j.cover + j.dst)
-	for k := range j.beds {
-		if !j.bent[k] || j.beds[k].count == 0 {
-			continue
-		}
-		var heights []float64 // of bars along the side, from the face in tension
-		for _, row := range j.beds[k].layers {
-			if len(row) > 1 { // a single bar lies in the middle of the width
-				heights = append(heights, row[0].y)
-			}
-		}
-		last := j.beds[0].nearest // the highest layer at the bottom with bars at the legs
-		for _, row := range j.beds[0].layers {
-			for _, o := range row {
-				if len(row) > 1 {
-					last = math.Max(last, o.y)
-				}
-			}
-		}
-		for i := range j.l.Longitudinal {
-			r := &j.l.Longitudinal[i]
-			if r.Face != beam.Side {
+// bundles judges bars in contact (25.6.1, 20.5.1.3.5).
+func (j *judge) bundles(b *bed) {
+	for _, row := range b.layers {
+		for _, o := range row {
+			if o.n == 1 {
 				continue
 			}
-			for n := 1; n <= r.Count; n++ {
-				y := last + float64(n)*j.length(r.Spacing)
-				if y >= j.h {
-					j.wrong(SideFace, 2, "a bar at %.5g lies outside the beam", y)
-				}
-				if k == 1 {
-					y = j.h - y
-				}
-				heights = append(heights, y)
+			if o.number > 11 {
+				j.wrong("bundle.bar-size", float64(o.number)/11, "number %d", o.number)
 			}
-		}
-		at := j.beds[k].nearest
-		for at < j.h/2 {
-			next := math.Inf(1)
-			for _, y := range heights {
-				if y > at*(1+1e-9) {
-					next = math.Min(next, y)
-				}
+			if len(j.zones) == 0 {
+				j.wrong("bundle.enclosed", 2, "no stirrups")
 			}
-			if math.Min(next, j.h/2)-at > limit*(1+slack) {
-				j.wrong(SideFace, (math.Min(next, j.h/2)-at)/limit, "sense %d: from %.5g to %.5g", k, at, next)
-				break
+			if j.b.Cover.IsZero() {
+				j.check("cover.bundle", j.aroundBundle(2*o.r), o.y-o.low(), "%d of number %d", o.n, o.number)
 			}
-			at = next
 		}
 	}
+}
+
+// aroundBundle is the clear cover of a bundle that counts as one bar of a
+// diameter (20.5.1.3.5).
+func (j *judge) aroundBundle(diameter float64) float64 {
+	if j.b.Exposure == beam.Ground {
+		return j.coverGround
+	}
+	return math.Min(diameter, j.bundleCover)
 }

@@ -32,7 +32,15 @@ type printed struct {
 	coverIn, coverOut, coverOut6     float64
 	coverGround                      float64
 	tieGap                           float64 // 6 in of 25.7.2.3
-	torsion                          float64
+	tth, tcr, tAxial                 float64 // 22.7.4.1, 22.7.5.1
+	al, alFloor                      float64 // 9.6.4.3
+	thin, round                      float64 // 9.7.5: least bar, greatest spacing round the perimeter
+	sTwist                           float64 // 9.7.6.3.3
+	split                            float64 // fct/√f'c of λ = 1
+	shallowT, fcFibre                float64 // 9.6.3.1
+	single                           float64 // 3√f'c of single bent bars
+	rib, ribClear, ribSlab, ribFill  float64 // 9.8
+	bundleCover                      float64 // 2 in of 20.5.1.3.5
 	hook, hookYield                  float64 // 25.7.1.3
 	density, aggregate               float64 // taken where the brief is silent
 	light, lightSlope, lightMost     float64 // 9.3.1.1.2
@@ -50,7 +58,9 @@ var inch = printed{
 	row: 8, vcMost: 5, trig: 1, size: 1.0 / 10,
 	heavy: 4, avRoot: 0.75, avFloor: 50, sMost: 24, sMostHeavy: 12, shallow: 10,
 	gap: 1, crack15: 15, crack12: 12, crackStress: 40000, deep: 36,
-	coverIn: 1.5, coverOut: 1.5, coverOut6: 2, coverGround: 3, tieGap: 6, torsion: 1,
+	coverIn: 1.5, coverOut: 1.5, coverOut6: 2, coverGround: 3, tieGap: 6,
+	tth: 1, tcr: 4, tAxial: 4, al: 5, alFloor: 25, thin: 0.375, round: 12, sTwist: 12,
+	split: 6.7, shallowT: 24, fcFibre: 6000, single: 3, rib: 4, ribClear: 30, ribSlab: 2, ribFill: 1.5, bundleCover: 2,
 	hook: 0.014, hookYield: 40000, density: 150, aggregate: 0.75,
 	light: 1.65, lightSlope: 0.005, lightMost: 1.09, lightLow: 90, lightHigh: 115, depthFy: 100000,
 	lambdaLow: 100, lambdaHigh: 135, lambdaBy: 0.0075,
@@ -64,7 +74,9 @@ var metric = printed{
 	row: 0.66, vcMost: 0.42, trig: 0.083, size: 0.004,
 	heavy: 0.33, avRoot: 0.062, avFloor: 0.35, sMost: 600, sMostHeavy: 300, shallow: 250,
 	gap: 25, crack15: 380, crack12: 300, crackStress: 280, deep: 900,
-	coverIn: 40, coverOut: 40, coverOut6: 50, coverGround: 75, tieGap: 150, torsion: 0.083,
+	coverIn: 40, coverOut: 40, coverOut6: 50, coverGround: 75, tieGap: 150,
+	tth: 0.083, tcr: 0.33, tAxial: 0.33, al: 0.42, alFloor: 0.175, thin: 10, round: 300, sTwist: 300,
+	split: 0.56, shallowT: 600, fcFibre: 40, single: 0.25, rib: 100, ribClear: 750, ribSlab: 50, ribFill: 40, bundleCover: 50,
 	hook: 0.17, hookYield: 280, density: 2450, aggregate: 20,
 	light: 1.65, lightSlope: 0.0003, lightMost: 1.09, lightLow: 1440, lightHigh: 1840, depthFy: 700,
 	lambdaLow: 1600, lambdaHigh: 2160, lambdaBy: 0.00047,

@@ -7,7 +7,13 @@ type web struct {
 	p                *printed
 	fc, lambda       float64
 	bw, h, d, as     float64
+	ag               float64
 	fyt              float64
+	angle            float64 // of the stirrups, radians
+	integral         float64 // greatest depth of a beam integral with a slab that is exempt; zero: none
+	fibres           bool    // in place of least stirrups
+	joist            bool
+	bent             float64 // Vs of bent bars where the section is (22.5.8.6)
 	av, s            float64 // no stirrups: zero
 	across           float64 // widest distance between legs
 	detailed         bool
@@ -31,20 +37,29 @@ func (w *web) prepare() {
 	w.avMin = math.Max(p.avRoot*w.root, p.avFloor) * w.bw / w.fyt
 	w.enough = w.s > 0 && w.av/w.s >= w.avMin*(1-1e-9)
 	w.rho = w.as / (w.bw * w.d)
-	w.small = w.h <= p.shallow*(1+1e-9)
+	w.small = w.joist || w.h <= math.Max(p.shallow, w.integral)*(1+1e-9)
 	w.limitAlong, w.limitAlongHeavy = math.Min(w.d/2, p.sMost), math.Min(w.d/4, p.sMostHeavy)
 	w.limitAcross, w.limitAcrossHeavy = math.Min(w.d, p.sMost), math.Min(w.d/2, p.sMostHeavy)
 }
 
-// concrete is Vc, with stirrups counted as at least the least or not.
+// concrete is Vc, with stirrups counted as at least the least or not; of a
+// joist by a tenth more (9.8.1.5).
 func (w *web) concrete(v, m, nu float64, enough bool) float64 {
+	vc := w.plain(v, m, nu, enough)
+	if w.joist {
+		vc *= 1.1
+	}
+	return vc
+}
+
+func (w *web) plain(v, m, nu float64, enough bool) float64 {
 	p, bd := w.p, w.bw*w.d
 	root := w.root
 	if !enough {
 		root = math.Min(root, p.rootMost)
 	}
 	lr := w.lambda * root
-	ag := w.bw * w.h
+	ag := w.ag
 	if p.y19 {
 		axial := math.Min(nu/(6*ag), 0.05*w.fc)
 		cube := math.Cbrt(w.rho)
@@ -102,6 +117,14 @@ func (w *web) at(v, m, nu float64) shearing {
 	return out
 }
 
+// steel is Vs of stirrups (22.5.8.5).
+func (w *web) steel() float64 {
+	if w.angle != 0 && w.angle < math.Pi/2 {
+		return w.av * w.fyt * (math.Sin(w.angle) + math.Cos(w.angle)) * w.d / w.s
+	}
+	return w.av * w.fyt * w.d / w.s
+}
+
 func (s shearing) most() float64 { return max(s.strength, s.limit, s.least, s.along, s.across) }
 
 func (w *web) judge(v, m, nu float64) shearing {
@@ -113,8 +136,9 @@ func (w *web) judge(v, m, nu float64) shearing {
 	vc := w.concrete(v, m, nu, w.enough)
 	vs := 0.0
 	if w.s > 0 {
-		vs = w.av * w.fyt * w.d / w.s
+		vs = w.steel()
 	}
+	vs += w.bent
 	over := func(a, b float64) float64 {
 		if b <= 0 {
 			return math.Inf(1)
@@ -127,8 +151,8 @@ func (w *web) judge(v, m, nu float64) shearing {
 	if p.y19 {
 		trigger = w.phi * p.trig * w.lambda * math.Min(w.root, p.rootMost) * bd
 	}
-	if w.small {
-		trigger = w.phi * bare
+	if w.small || w.fibres && w.h <= p.shallowT*(1+1e-9) && v <= w.phi*p.vc*w.root*bd*(1+1e-9) {
+		trigger = math.Max(trigger, w.phi*bare)
 	}
 	required := v > trigger*(1+1e-6) || v > w.phi*vc*(1+1e-6)
 	if !required {
@@ -141,7 +165,7 @@ func (w *web) judge(v, m, nu float64) shearing {
 	if v > trigger*(1+1e-6) {
 		out.least = w.avMin / (w.av / w.s)
 	}
-	needed := v/w.phi - vc
+	needed := v/w.phi - vc // of stirrups and bent bars
 	if needed > p.heavy*w.root*bd*(1+1e-6) {
 		out.along, out.across = over(w.s, w.limitAlongHeavy), over(w.across, w.limitAcrossHeavy)
 	} else {

@@ -15,6 +15,7 @@ type member struct {
 	faceR       float64
 	left, right statics.SupportKind
 	cases       [beam.Earthquake + 1]*caseLoads
+	torques     []torque
 	breaks      []float64
 	combos      []combo
 }
@@ -154,6 +155,13 @@ func newMember(p *printed, b *beam.Brief, ownWeight float64) *member {
 		case beam.Couple:
 			c.couples = append(c.couples, place{at, p.moment(l.Moment)})
 			m.breaks = append(m.breaks, at)
+		case beam.Torque, beam.UniformTorque:
+			m.torques = append(m.torques, torque{
+				at: at, size: p.moment(l.Moment), spread: l.Shape == beam.UniformTorque, shed: l.Path == beam.CompatibilityTorque, of: l.Case,
+			})
+			if l.Shape == beam.Torque {
+				m.breaks = append(m.breaks, at)
+			}
 		}
 	}
 	slices.Sort(m.breaks)
@@ -169,7 +177,9 @@ func newMember(p *printed, b *beam.Brief, ownWeight float64) *member {
 
 // combine lists 5.3.1 for the cases that are loaded.
 func (m *member) combine() {
-	has := func(c beam.LoadCase) bool { return m.cases[c] != nil }
+	has := func(c beam.LoadCase) bool {
+		return m.cases[c] != nil || slices.ContainsFunc(m.torques, func(t torque) bool { return t.of == c })
+	}
 	add := func(name string, factors map[beam.LoadCase]float64) {
 		c := combo{name: name}
 		for k, f := range factors {
@@ -303,4 +313,48 @@ func (m *member) greatest(all []section, sign float64) (most, scale float64) {
 		}
 	}
 	return math.Max(most, f((a+b)/2)), scale
+}
+
+// torque is a twisting moment about the axis: at a place, or spread evenly.
+type torque struct {
+	at, size float64
+	spread   bool
+	shed     bool // compatibility imposes it
+	of       beam.LoadCase
+}
+
+// twisting is the torque of a combination at a place, and the part of it that
+// may be shed. The twist of a prismatic bar with both ends held vanishes over
+// its length, so that each end takes the share of the distance from the other.
+func (m *member) twisting(c *combo, x float64, right bool) (all, shed float64) {
+	for _, t := range m.torques {
+		f := c.factors[t.of]
+		if f == 0 {
+			continue
+		}
+		start := 0.0 // what the left end takes
+		at := t.at
+		if t.spread {
+			at = m.length / 2
+		}
+		switch {
+		case m.left != statics.Free && m.right != statics.Free:
+			start = (m.length - at) / m.length
+		case m.left != statics.Free:
+			start = 1
+		}
+		passed := 0.0
+		switch {
+		case t.spread:
+			passed = x / m.length
+		case t.at < x || right && t.at == x:
+			passed = 1
+		}
+		v := f * t.size * (start - passed)
+		all += v
+		if t.shed {
+			shed += v
+		}
+	}
+	return all, shed
 }
