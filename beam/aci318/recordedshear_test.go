@@ -132,7 +132,11 @@ func recordedTorsion() []recorded {
 		return with(usBrief(), func(s *beam.Brief) {
 			s.Section, s.Cover = b.Section, b.Cover
 			s.Supports[0].Kind, s.Supports[1].Kind = statics.Fixed, statics.Fixed
-			s.Loads = append(s.Loads, beam.Load{Case: beam.Dead, Shape: shape, Moment: units.KipFoot.Of(torque), At: in(110), Path: path})
+			l := beam.Load{Case: beam.Dead, Shape: shape, Moment: units.KipFoot.Of(torque), Path: path}
+			if shape == beam.Torque {
+				l.At = in(110)
+			}
+			s.Loads = append(s.Loads, l)
 		})
 	}
 	rows := []beam.Row{bottom(4, "#8"), top(4, "#8"), side}
