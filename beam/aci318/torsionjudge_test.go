@@ -644,3 +644,42 @@ func TestSideBarsOfTheirOwnGrade(t *testing.T) {
 		requireEvaluable(t, c)
 	}
 }
+
+// Mirrored, the stirrups of the greater torque go on to the left; and of a
+// torque that falls evenly those of the section bt + d before a zone reach it.
+func TestStirrupsGoOnEitherWay(t *testing.T) {
+	leg := func(torque float64) float64 {
+		return torque * 12000 / (2 * 0.75 * 0.85 * 12.5 * 24.5 * 60000)
+	}
+	zones := func(at float64, edit func(b *beam.Brief)) (out []float64) {
+		r := twisted(t, ACI31819(), func(b *beam.Brief, l *beam.Layout) {
+			twistedSpan(60/1.4, 18)(b, l)
+			if edit != nil {
+				edit(b)
+			}
+			rest := l.Transverse[0]
+			l.Transverse[0].To, rest.From, rest.Mark = in(at), in(at), "R"
+			l.Transverse = append(l.Transverse, rest)
+		})
+		for i := range r.Checks {
+			if c := &r.Checks[i]; c.ID == "torsion.transverse" {
+				out = append(out, valueIn(t, c.Demand, "in2/in"))
+			}
+		}
+		return out
+	}
+	require.InEpsilon(t, leg(45), zones(216-41.62, nil)[0], 1e-9)
+	require.InEpsilon(t, leg(15), zones(216-41.63, nil)[0], 1e-9)
+
+	// 1.4 × 60 kip-ft over a cantilever of 24 ft: the first zone has the torque at
+	// d from the face, the second that at 100 - 41.625 in.
+	even := func(b *beam.Brief) {
+		b.Loads[1] = beam.Load{Case: beam.Dead, Shape: beam.UniformTorque, Moment: units.KipFoot.Of(60)}
+		b.Supports[1].Kind, b.Supports[1].Width = statics.Free, units.Length{}
+		b.Supports[0].Kind = statics.Fixed
+		b.Loads[0].Intensity = units.KipPerFoot.Of(0.01)
+	}
+	got := zones(100, even)
+	require.InEpsilon(t, leg(84*(288-31.625)/288), got[0], 1e-9, "d is that of the top bars")
+	require.InEpsilon(t, leg(84*(288-100+41.625)/288), got[1], 1e-9)
+}

@@ -148,6 +148,10 @@ func TestTorsionStrengthsThatAreNone(t *testing.T) {
 	require.Zero(t, open.Torsion.Nominal)
 	require.Equal(t, []string{noteOpen}, open.Torsion.Notes)
 	require.Equal(t, noteOpen, checkOf(t, open.Checks, "torsion.transverse").Reason)
+	none := twistedStrengths(t, ACI31819(), func(q *beam.SectionQuery) { q.Layers = q.Layers[:1] })
+	require.Equal(t, "no longitudinal steel lies in this half of the section", checkOf(t, none.Checks, "torsion.longitudinal.top").Reason)
+	bare := twistedStrengths(t, ACI31819(), func(q *beam.SectionQuery) { q.Stirrups = nil })
+	require.Equal(t, []string{"without closed stirrups a section has no strength in torsion beyond its threshold"}, bare.Torsion.Notes)
 	beyond := twistedStrengths(t, ACI31819(), func(q *beam.SectionQuery) { q.Demand.Moment = units.KipFoot.Of(500) })
 	require.Equal(t, noteBeyondBending, checkOf(t, beyond.Checks, "torsion.longitudinal.bottom").Reason)
 }
@@ -259,4 +263,17 @@ func TestTorsionStrengthsNameWhatLayersDoNotShow(t *testing.T) {
 	for _, c := range s.Checks {
 		require.NotContains(t, arrangement, c.ID, "a torque that is neglected asks for none of it")
 	}
+}
+
+// Layers of several grades count with the least of their yield strengths, and an
+// angle of 90 degrees is upright.
+func TestTorsionStrengthsOfSeveralGrades(t *testing.T) {
+	whole := twistedStrengths(t, ACI31819(), nil)
+	for i := range 3 {
+		s := twistedStrengths(t, ACI31819(), func(q *beam.SectionQuery) { q.Layers[i].Yield, q.Stirrups.Angle = psi(40000), 90 })
+		require.InEpsilon(t, 1.5*whole.Torsion.Longitudinal.In(units.SquareInch), s.Torsion.Longitudinal.In(units.SquareInch), 1e-9, "layer %d", i)
+		require.Equal(t, beam.Pass, checkOf(t, s.Checks, "torsion.closed").Outcome)
+	}
+	leaning := twistedStrengths(t, ACI31819(), func(q *beam.SectionQuery) { q.Stirrups.Angle = 89 })
+	require.Equal(t, noteTorsionInclined, checkOf(t, leaning.Checks, "torsion.closed").Reason)
 }
