@@ -155,7 +155,11 @@ func (s *Solver) solve(dst *Ultimate) {
 			// Under a block the force rises with the neutral-axis depth
 			// between any two jumps, so that ends alike enclose no root.
 			start, end := g[0]+hi*(g[1]+hi*g[2]), g[0]+lo*(g[1]+lo*g[2])
-			if s.power > 1 {
+			switch {
+			case lo == 0: // the terms below are rounding, see search
+				end = g[s.power]
+				start = end + hi*g[s.power+1]
+			case s.power > 1:
 				start, end = g.at(hi), g.at(lo)
 			}
 			if !block || !(start*end > 0) || start*before < 0 {

@@ -160,7 +160,7 @@ func TestSectionsSideBySideAddUp(t *testing.T) {
 	rapid.Check(t, func(t *rapid.T) {
 		d := draftOf(t)
 		share := rapid.Float64Range(0.1, 5).Draw(t, "share")
-		axial := units.Kilonewton.Of(rapid.Float64Range(0, 200).Draw(t, "axial"))
+		axial := units.Kilonewton.Of(rapid.Float64Range(0, 80).Draw(t, "axial")) // the least section takes 90
 		both := d
 		both.widths, both.belows = slices.Clone(d.widths), slices.Clone(d.belows)
 		for i := range both.widths {
@@ -318,5 +318,39 @@ func TestCrackedNeutralAxis(t *testing.T) {
 			size += weight * d.areas[i] * math.Abs(x-at)
 		}
 		require.InDelta(t, 0, first/size, 1e-10)
+	})
+}
+
+// The balance of forces jumps only down, where the edge of a block passes a bar,
+// and ends at the limits of the axial force: between them it is met.
+func TestEveryForceBetweenTheLimitsBalances(t *testing.T) {
+	rapid.Check(t, func(t *rapid.T) {
+		d := draftOf(t)
+		s := d.section()
+		law, err := mechanics.RectangularBlock(mpa(d.intensity), d.beta1, 0.003)
+		require.NoError(t, err)
+		b := mechanics.Bending{
+			Sense:     rapid.SampledFrom([]mechanics.Sense{mechanics.Sagging, mechanics.Hogging}).Draw(t, "sense"),
+			Displaced: rapid.SampledFrom([]mechanics.Displaced{mechanics.Deduct, mechanics.Ignore}).Draw(t, "displaced"),
+			Axial:     units.Newton.Of(1e12),
+		}
+		if rapid.Bool().Draw(t, "steel in the faces") {
+			s.Layers[0].Depth = units.Length{}
+			s.Layers[len(s.Layers)-1].Depth = s.Depth()
+		}
+		_, err = s.Ultimate(law, b)
+		var none *mechanics.NoEquilibriumError
+		require.ErrorAs(t, err, &none)
+		least, most := none.Least, none.Most
+		share := rapid.OneOf(rapid.Float64Range(0.001, 0.999), rapid.Float64Range(0.999, 0.999999)).Draw(t, "share")
+		b.Axial = least.Add(most.Sub(least).Scale(share))
+		u, err := s.Ultimate(law, b)
+		require.NoError(t, err)
+		require.LessOrEqual(t, u.Residual.Abs().Ratio(most.Sub(least)), 1e-10)
+		b.Axial = most.Add(most.Scale(1e-6))
+		if u.Equilibria == 1 && b.Displaced == mechanics.Ignore {
+			_, err = s.Ultimate(law, b)
+			require.ErrorAs(t, err, &none)
+		}
 	})
 }
