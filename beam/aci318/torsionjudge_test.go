@@ -681,5 +681,5 @@ func TestStirrupsGoOnEitherWay(t *testing.T) {
 	}
 	got := zones(100, even)
 	require.InEpsilon(t, leg(84*(288-31.625)/288), got[0], 1e-9, "d is that of the top bars")
-	require.InEpsilon(t, leg(84*(288-100+41.625)/288), got[1], 1e-9)
+	require.InEpsilon(t, leg(84*(288-100+41.625)/288), got[1], 1e-8)
 }
