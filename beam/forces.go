@@ -39,7 +39,7 @@ type Reaction struct {
 	Moment          units.Moment
 	MomentBy        string
 	// Torque is the greatest that the support must hold against twist, whichever
-	// way it turns.
+	// way it turns, as analysed: before any of it is shed to neighbours.
 	Torque   units.Moment
 	TorqueBy string
 }
