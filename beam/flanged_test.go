@@ -68,8 +68,9 @@ func TestBarsBesideTheWeb(t *testing.T) {
 	near([][2]float64{{11, 26 - 2.3125}, {17, 26 - 2.3125}, {37, 26 - 2.3125}}, at["T2"])
 	near([][2]float64{{6, 26 - 2.25}, {42, 26 - 2.25}}, at["T3"])
 
-	area := 3*0.60 + 3*0.31 + 2*0.20 // ASTM areas
-	d := 26 - (3*0.60*2.4375+3*0.31*2.3125+2*0.20*2.25)/area
+	// 24.3.4 spreads tension steel over a tenth of the clear span of 138 in, which
+	// is no wider than the web: what lies beside it does not count here.
+	area, d := 3*0.60, 26-2.4375
 	require.InDelta(t, area, r.Flexure[0].TensionSteel.In(units.SquareInch), 1e-9)
 	require.InDelta(t, d, r.Flexure[0].EffectiveDepth.In(units.Inch), 1e-9)
 }
