@@ -129,7 +129,6 @@ func newFibreModel(s Section, law Law, bending Bending) *fibreModel {
 	}
 	if bending.Sense == Hogging {
 		m.middle = m.height - m.middle
-		slices.Reverse(m.slabs)
 		for i, p := range m.slabs {
 			m.slabs[i] = fibreSlab{m.height - p.bottom, m.height - p.top, p.bottomWidth, p.topWidth}
 		}
@@ -262,9 +261,7 @@ func (m *fibreModel) borders() []float64 {
 		}
 	}
 	for _, p := range m.slabs {
-		if levels(p.bottom); p.top > 0 {
-			levels(p.top)
-		}
+		levels(p.bottom)
 	}
 	for _, b := range m.bars {
 		if b.depth <= 0 {

@@ -18,7 +18,7 @@ func fit(f func(s float64) float64, joints []float64) ([]piece, error) {
 	const samples = 512
 	var greatest float64
 	for i := range samples + 1 {
-		s := joints[0] + (joints[len(joints)-1]-joints[0])*float64(i)/samples
+		s := joints[len(joints)-1] * float64(i) / samples
 		v := f(s)
 		if !(v >= 0 && v <= mostStress) {
 			return nil, &InputError{Field: fmt.Sprintf("stress at %.6g of the ultimate strain", s),
@@ -34,7 +34,7 @@ func fit(f func(s float64) float64, joints []float64) ([]piece, error) {
 		from, to := joints[i], joints[i+1]
 		// The value just inside an end, so that a jump at a joint belongs to
 		// neither side.
-		inset := 1e-13 * (to - from)
+		inset := 1e-15 * to
 		left, right := f(from+inset), f(to-inset)
 		var err error
 		if pieces, err = fitBetween(pieces, f, from, to, left, right, fitTolerance*greatest); err != nil {
@@ -51,13 +51,9 @@ func fitBetween(pieces []piece, f func(float64) float64, from, to, left, right, 
 	p := cubicThrough(left, f(from+w/4), f(to-w/4), right, w)
 	worst := 0.0
 	for _, t := range [...]float64{0.03, 0.12, 0.4, 0.5, 0.6, 0.88, 0.97} {
-		e := math.Abs(p.at(t*w) - f(from+t*w))
-		if math.IsNaN(e) {
-			e = math.Inf(1)
-		}
-		worst = math.Max(worst, e)
+		worst = math.Max(worst, math.Abs(p.at(t*w)-f(from+t*w)))
 	}
-	if worst <= tolerance {
+	if worst <= tolerance { // which what is not a number is not
 		return append(pieces, piece{from: from, stress: p}), nil
 	}
 	if w < thinnest || len(pieces) > mostPieces {

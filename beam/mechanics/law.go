@@ -289,9 +289,6 @@ func (l Law) truncated(pieces []piece, strain float64) Law {
 		}
 		pieces = append(pieces, q)
 	}
-	if len(pieces) == 0 {
-		pieces = append(pieces, piece{from: 1})
-	}
 	return newLaw(strain, pieces...)
 }
 

@@ -82,6 +82,7 @@ func pinned(t testing.TB) []pin {
 		{"box", mechanics.Box(mm(900), mm(700), mm(120), mm(150), mm(260)), mixed, block, kn(2500)},
 		{"trapezoid", mechanics.Trapezoid(mm(300), mm(500), mm(700)), both, block, units.Force{}},
 		{"trapezoid under a parabola", mechanics.Trapezoid(mm(500), mm(250), mm(700)), mixed, parabola, kn(400)},
+		{"trapezoid that widens by its depth", mechanics.Trapezoid(mm(500), mm(1500), mm(1000)), both, block, kn(100)},
 		{"haunched tee", haunched, mixed, bilinear, units.Force{}},
 		{"polygon", polygon, mixed, late, units.Force{}},
 		{"polygon in pull", polygon, mixed, block, kn(-600)},

@@ -167,59 +167,76 @@ func (p *polynomial) appendRoots(roots []float64, b *polynomial, degree int, lo,
 	return p.appendRoots(roots, &lower, degree, lo, mid)
 }
 
-// refine returns the one root of p in [lo, hi], of a quadratic whose ends differ
-// in sign by the formula, of others by Newton's method kept inside a
-// shrinking bracket: a step that leaves the bracket, or gains too little, is
-// replaced by halving it.
+// refine returns the one root of p in [lo, hi], by the formula where p is a
+// quadratic whose ends differ in sign, otherwise by Newton's method.
 func (p *polynomial) refine(lo, hi float64, b *polynomial, degree int) float64 {
-	if degree == 2 && p[0]*p[2] <= 0 {
-		// The discriminant is a sum of positive terms, and so is the
-		// denominator or numerator chosen: nothing cancels.
-		q := -(p[1] + math.Copysign(math.Sqrt(p[1]*p[1]-4*p[0]*p[2]), p[1])) / 2
-		if x := p[0] / q; x >= lo && x <= hi {
-			return x
-		}
-		if x := q / p[2]; x >= lo && x <= hi {
+	if degree == 2 {
+		if x, ok := p.quadraticRoot(lo, hi); ok {
 			return x
 		}
 	}
-	rising := b[degree] > 0
-	for i := degree; i >= 0; i-- {
-		if b[i] != 0 {
-			rising = b[i] > 0
-			break
-		}
+	last := degree
+	for b[last] == 0 { // there are two that differ in sign
+		last--
 	}
-	x := lo + (hi-lo)/2
-	if b[0] != b[degree] {
-		// Not next to an end, which may be another root but for its last bits.
-		edge := (hi - lo) / 1024
-		if guess := lo - b[0]*(hi-lo)/(b[degree]-b[0]); guess > lo+edge && guess < hi-edge {
-			x = guess
-		}
+	x, _ := p.newton(lo, hi, firstGuess(b, degree, lo, hi), b[last] > 0)
+	return x
+}
+
+// quadraticRoot returns the root in [lo, hi] of a quadratic or a line whose roots
+// do not have the same sign: the discriminant is then a sum of positive terms, and
+// so is the denominator or numerator chosen, so that nothing cancels.
+func (p *polynomial) quadraticRoot(lo, hi float64) (x float64, ok bool) {
+	if p[0]*p[2] > 0 {
+		return 0, false
 	}
+	q := -(p[1] + math.Copysign(math.Sqrt(p[1]*p[1]-4*p[0]*p[2]), p[1])) / 2
+	if x := p[0] / q; x >= lo && x <= hi {
+		return x, true
+	}
+	x = q / p[2]
+	return x, x >= lo && x <= hi
+}
+
+// firstGuess returns where the chord between the ends passes through zero, unless
+// that is next to an end, which may be another root but for its last bits: then,
+// and where there is no such place, the middle.
+func firstGuess(b *polynomial, degree int, lo, hi float64) float64 {
+	edge := (hi - lo) / 1024
+	if x := lo - b[0]*(hi-lo)/(b[degree]-b[0]); x > lo+edge && x < hi-edge {
+		return x
+	}
+	return lo + (hi-lo)/2
+}
+
+// newton returns the root of p in [lo, hi], which p rises or falls through, and in
+// how many steps from x it was found. Newton's method is kept inside a shrinking
+// bracket: a step that leaves the bracket, or gains too little, is replaced by
+// halving it.
+func (p *polynomial) newton(lo, hi, x float64, rising bool) (root float64, steps int) {
 	before := hi - lo
-	for range 200 {
+	for steps < 200 {
 		f := p.at(x)
 		switch {
 		case f == 0:
-			return x
+			return x, steps
 		case (f > 0) == rising:
 			hi = x
 		default:
 			lo = x
 		}
+		steps++
 		step := -f / p.slope(x)
 		next := x + step
 		if !(next > lo && next < hi) || math.Abs(step) > before/2 {
 			next = lo + (hi-lo)/2
 			step = next - x
 		}
-		if next == x || math.Abs(step) <= 0x1p-52*x {
-			return next
+		if math.Abs(step) <= 0x1p-52*x {
+			return next, steps
 		}
 		before = math.Abs(step)
 		x = next
 	}
-	return x
+	return x, steps
 }

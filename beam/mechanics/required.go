@@ -70,7 +70,6 @@ func (s *Solver) RequiredArea(section Section, layer int, law Law, bending Bendi
 	s.layers = append(s.layers[:0], section.Layers...)
 	section.Layers = s.layers
 	least := units.SquareMetre.Of(leastArea)
-	section.Layers[layer].Area = least
 	gross, err := section.Gross()
 	if err != nil {
 		return units.Area{}, err

@@ -172,25 +172,23 @@ func (s *Solver) loadEdges(parts []Part, hogging bool) {
 	piece := len(s.law.pieces) - 1
 	var at, above, slopeAbove float64
 	for i := range parts {
-		p, end := &parts[i], 1.0
+		p := &parts[i]
 		width, below := p.widths()
-		switch {
-		case hogging:
+		end := p.Bottom.In(units.Metre) / s.depth
+		if hogging {
 			j := len(parts) - 1 - i
-			p = &parts[j]
-			below, width = p.widths()
+			below, width = parts[j].widths()
+			end = 1
 			if j > 0 {
 				end = 1 - parts[j-1].Bottom.In(units.Metre)/s.depth
 			}
-		case i+1 < len(parts):
-			end = p.Bottom.In(units.Metre) / s.depth
 		}
 		slope := 0.0
 		if below != width {
 			s.power = 2
 			slope = (below - width) / (end - at)
 		}
-		if i == 0 || width != above || slope != slopeAbove {
+		if width != above || slope != slopeAbove {
 			s.edges = append(s.edges, edge{at: at, weight: width - above, bend: slope - slopeAbove, width: width, slope: slope, piece: piece})
 		}
 		at, above, slopeAbove, piece = end, below, slope, -1
