@@ -163,6 +163,12 @@ func recordedConcretes() []recorded {
 				b.Demands = []beam.Demand{{Name: "A", Moment: units.KilonewtonMetre.Of(150), Shear: units.Kilonewton.Of(90)}}
 			}),
 			layout: layout([]beam.Row{bottom(4, "No. 29"), top(2, "No. 16")})},
+		{name: "metric, no stirrups", code: ACI31819M(),
+			brief: with(siBrief(), func(b *beam.Brief) {
+				b.Spans, b.Supports, b.Loads = nil, nil, nil
+				b.Demands = []beam.Demand{{Name: "A", Moment: units.KilonewtonMetre.Of(150), Shear: units.Kilonewton.Of(90)}}
+			}),
+			layout: layout([]beam.Row{bottom(4, "No. 29"), top(2, "No. 16")})},
 		{name: "grades mixed", code: ACI31819(),
 			brief: shears(func(b *beam.Brief) { b.Reinforcement.StirrupYield = psi(80000) }, [2]float64{190, 60}),
 			layout: layout([]beam.Row{

@@ -173,6 +173,8 @@ func recordedTorsion() []recorded {
 			layout: layout(rows, run(1, "#4", 2, 6, 6, 106), run(1, "#4", 2, 9, 118, 258))},
 		{name: "spread over a span", code: ACI31819(), brief: span(60, beam.EquilibriumTorque, beam.UniformTorque),
 			layout: layout(rows, run(1, "#4", 2, 6, 0, 84), run(1, "#4", 2, 10, 84, 180), run(1, "#4", 2, 6, 180, 264))},
+		{name: "spread over a span, the middle near a section that needs stirrups", code: ACI31819(), brief: span(60, beam.EquilibriumTorque, beam.UniformTorque),
+			layout: layout(rows, run(1, "#4", 2, 6, 0, 112), run(1, "#4", 2, 9, 112, 152), run(1, "#4", 2, 6, 152, 264))},
 		{name: "spread over a span, no stirrups in the middle", code: ACI31814(), brief: span(60, beam.EquilibriumTorque, beam.UniformTorque),
 			layout: layout(rows, run(1, "#4", 2, 6, 0, 84), run(1, "#4", 2, 6, 180, 264))},
 		{name: "metric span", code: ACI31819M(), brief: si, layout: layout(rowsSI, runSI(1, "No. 13", 2, 120, 150, 6850))},

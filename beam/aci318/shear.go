@@ -188,7 +188,6 @@ func (e *edition) newWebShear(s *shearSection) webShear {
 	if w.web > 0 {
 		w.ratio = w.as / w.web
 	}
-	w.size = 1
 	if r.rowsByStirrups {
 		w.cube = math.Cbrt(w.ratio)
 		w.size = min(1, math.Sqrt(2/(1+w.d/r.sizeDepth)))
