@@ -6,6 +6,7 @@ import (
 
 	"github.com/stretchr/testify/require"
 
+	"soffit.example/bars"
 	"soffit.example/beam"
 	"soffit.example/beam/statics"
 	"soffit.example/units"
@@ -307,4 +308,89 @@ func TestLoadsThatDecideTheCriticalSection(t *testing.T) {
 	for i, e := range shearEnds(tr, 1) {
 		require.InEpsilon(t, 300-2.375, e.depth(tr, 1).In(units.Inch), 1e-9, "end %d", i)
 	}
+}
+
+// What counts of a flanged face: d and dt are those of the bars within the
+// spread, the nearest of which may lie in the flange or in the web.
+func TestNearestBarThatCounts(t *testing.T) {
+	beyond := flangeRow(beam.Top, 2, "#8", 12)
+	for _, k := range []struct {
+		rows []beam.Row
+		want float64
+	}{
+		{[]beam.Row{top(4, "#8"), flangeRow(beam.Top, 2, "#4", 7), beyond}, 24 - 1.5 - 0.375 - 0.25},
+		{[]beam.Row{top(4, "#8"), second(top(2, "#8")), beyond}, 24 - 1.5 - 0.375 - 0.5},
+	} {
+		_, tr := check(t, ACI31819(), hoggingTee(20, 60), append([]beam.Row{bottom(2, "#5")}, k.rows...))
+		require.True(t, beyondSpread(tr, beam.Negative))
+		require.InEpsilon(t, k.want, tensionSteel(tr, beam.Negative).extreme.In(units.Inch), 1e-9)
+	}
+}
+
+// 25.2.1 between a bar of the web and one beside it, on either side.
+func TestGapBesideTheWeb(t *testing.T) {
+	for _, shape := range []beam.Shape{beam.Tee, beam.Ell} { // left of the web, and right of it
+		b := hoggingTee(20, 60)
+		b.Section.Shape = shape
+		r, _ := check(t, ACI31819(), b, []beam.Row{bottom(2, "#5"), top(4, "#8"), flangeRow(beam.Top, 1, "#8", 1.75)})
+		c := facesOf(r.Checks, "spacing.clear", beam.Top)[0]
+		require.InDelta(t, 0.75, valueIn(t, c.Capacity, "in"), 1e-9, "%s", shape)
+		require.Equal(t, beam.Fail, c.Outcome)
+	}
+}
+
+// Table 25.3.2 and 25.6.1.3 by size and use.
+func TestSizesThatMayBeUsed(t *testing.T) {
+	catalog, err := bars.Lookup("astm-inch")
+	require.NoError(t, err)
+	size := func(name string) bars.Size {
+		s, err := catalog.Size(name)
+		require.NoError(t, err)
+		return s
+	}
+	bundle := func(name string) bars.Size {
+		s, err := catalog.Bundle(name)
+		require.NoError(t, err)
+		return s
+	}
+	c := ACI31819()
+	require.True(t, c.Allows(bars.Main, size("#14")))
+	require.False(t, c.Allows(bars.Main, bundle("2x#14")))
+	require.True(t, c.Allows(bars.Main, bundle("4x#11")))
+	require.True(t, c.Allows(bars.Stirrup, size("#4")))
+	require.False(t, c.Allows(bars.Stirrup, bundle("2x#4")))
+
+	// Of bars in compression the smallest single one counts, a bundle's too, but
+	// none in a flange.
+	f := beam.FaceSteel{Smallest: size("#6"), Rows: []beam.RowSteel{{Size: size("#6")}, {Size: bundle("2x#5")}, {Size: size("#3"), Flange: true}}}
+	require.Equal(t, in(0.625), smallestBar(&f))
+}
+
+// Beams deeper than 36 in. (900 mm) need bars along their sides.
+func TestDepthThatNeedsSideBars(t *testing.T) {
+	for _, c := range Editions() {
+		b, limit, tie := usBrief(), in(36), "#3"
+		if c.e.system == units.SI {
+			b, limit, tie = siBrief(), mm(900), "No. 10"
+		}
+		b.Spans[0] = units.Metre.Of(12)
+		for scale, want := range map[float64]beam.Outcome{1: beam.NotApplicable, 1.005: beam.Fail} {
+			b.Section.Depth = limit.Scale(scale)
+			bar := map[string]string{"#3": "#8", "No. 10": "No. 25"}[tie]
+			tr := trialOf(t, problemOf(t, c, b), tie, []group{{4, bar}}, []group{{2, bar}})
+			require.Equal(t, want, only(t, c.e.judgeWhole(nil, tr), "side-face.spacing").Outcome, "%s", c.e.id)
+		}
+	}
+}
+
+func TestNotesOfNothing(t *testing.T) {
+	var w working
+	w.note("of no step")
+	require.Empty(t, w.steps)
+	w.given("a", "", "", asPlain(1))
+	w.note("kept")
+	w.note("")
+	require.Equal(t, "kept", w.steps[0].Note)
+	require.Equal(t, "mm3", si19.asFirst(1).unit)
+	require.Equal(t, "in3", us19.asFirst(1).unit)
 }
