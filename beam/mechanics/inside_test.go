@@ -565,10 +565,17 @@ func TestNewtonsSteps(t *testing.T) {
 		{"quintic", withRoots(-2, -1, -3, 3, 20, 30), 0, 8, 7, 3, 6},
 		{"level at the root", withRoots(1, 3, 3, 3), 0, 8, 4, 3, 24},
 		{"steps leave the bracket", polynomial{-1, 0, 0, 0, 0, 1}, 0, 64, 0.0625, 1, 14},
+		{"a step of more than half the bracket", polynomial{-7.5, 1}, 4, 8, 4.5, 7.5, 3},
+		{"a step of half the bracket", polynomial{-7.5, 1}, 4, 8, 5.5, 7.5, 1},
+		{"a step of nearly half the bracket", polynomial{-7.49, 1}, 4, 8, 5.5, 7.49, 1},
+		{"root at the upper end", polynomial{-8, 1}, 4, 8, 6.5, 8, 50},
+		{"root at the lower end", polynomial{-4, 1}, 4, 8, 5.5, 4, 50},
+		{"great root", withRoots(1, -1, 3000.1, 7000), 100, 5000, 1000, 3000.1, 24},
+		{"small root", withRoots(1, -1, 0.0031, 7000), 0, 1, 0.5, 0.0031, 7},
 		{"hit at once", withRoots(1, -1, 3, 20), 0, 8, 3, 3, 0},
 	} {
 		t.Run(test.name, func(t *testing.T) {
-			root, steps := test.p.newton(test.lo, test.hi, test.x, test.p.at(test.hi) > 0)
+			root, steps := test.p.newton(test.lo, test.hi, test.x, test.p.at(test.hi) >= 0)
 			require.InEpsilon(t, test.root, root, 1e-5)
 			require.Equal(t, test.steps, steps)
 		})
@@ -650,4 +657,47 @@ func TestPairsOfRoots(t *testing.T) {
 		}
 	}
 	require.Greater(t, touched, 100)
+}
+
+// An interval too narrow for two roots to be told apart, with coefficients that say
+// there may be: its middle is the root, if the polynomial is lost in rounding there.
+func TestRootsThatCannotBeToldApart(t *testing.T) {
+	bends := polynomial{1, -1, 1}
+	for _, test := range []struct {
+		name   string
+		p      polynomial
+		lo, hi float64
+		want   []float64
+	}{
+		{"zero itself", polynomial{}, 4, 4 * (1 + 0x1p-44), []float64{4 * (1 + 0x1p-45)}},
+		{"touches", withRoots(1<<20, 3, 3), 3 - 0x1p-44, 3 + 0x1p-44, []float64{3}},
+		{"nearly touches", polynomial{9*(1<<20) + 0x1p-24, -6 * (1 << 20), 1 << 20}, 3 - 0x1p-44, 3 + 0x1p-44, []float64{3}},
+		{"misses by little", polynomial{9 + 1e-9, -6, 1}, 3 - 0x1p-44, 3 + 0x1p-44, nil},
+		{"misses", polynomial{1}, 3 - 0x1p-44, 3 + 0x1p-44, nil},
+		{"misses far out", polynomial{1}, 1e6, 1e6 + 1e-7, nil},
+		{"misses over a billionth of a thousandth", polynomial{1}, 1e12 - 1, 1e12, nil},
+		{"not so narrow", polynomial{1}, 1, 1 + 0x1p-24, []float64{1 + 0x1p-25}},
+	} {
+		t.Run(test.name, func(t *testing.T) {
+			require.Equal(t, test.want, test.p.appendRoots(nil, &bends, 2, test.lo, test.hi))
+		})
+	}
+}
+
+// After two thousand pieces no more are halved.
+func TestMostPieces(t *testing.T) {
+	for _, straight := range []int{2000, 2001} {
+		kinks := make([]float64, straight)
+		for i := range kinks {
+			kinks[i] = 0.003 * float64(i+1) / float64(straight+1)
+		}
+		last := kinks[straight-1]
+		_, err := Curve(func(e float64) units.Stress {
+			if e > last {
+				return units.Pascal.Of(1e6 * (1 + 2e-7*math.Pow((e-last)/(0.003-last), 4))) // a cubic for each half
+			}
+			return units.Pascal.Of(1e6)
+		}, 0.003, kinks...)
+		require.Equal(t, straight > 2000, err != nil, "%v", err)
+	}
 }

@@ -178,8 +178,7 @@ func (s *Solver) loadEdges(parts []Part, hogging bool) {
 		if hogging {
 			j := len(parts) - 1 - i
 			below, width = parts[j].widths()
-			end = 1
-			if j > 0 {
+			if j > 0 { // the last ends at 1 either way
 				end = 1 - parts[j-1].Bottom.In(units.Metre)/s.depth
 			}
 		}
