@@ -197,3 +197,73 @@ func TestFacesAreReadied(t *testing.T) {
 	f = us14.newTorsionFaces(trial)
 	require.InEpsilon(t, 1.2e6, f.faces[0].most, 1e-12, "one bar is enough to measure by")
 }
+
+// A face, or a side, of which no part of the beam asks anything is not judged;
+// one without bars inside the stirrups fails whatever is asked (9.7.5.1).
+func TestFacesOfWhichNothingIsAsked(t *testing.T) {
+	f := ownFaces(t)
+	c := f.check(0)
+	require.Equal(t, beam.NotApplicable, c.Outcome)
+	require.Equal(t, noteNeglected, c.Reason)
+	f.faces[0].found, f.faces[0].web = true, 0
+	c = f.check(0)
+	require.Equal(t, beam.Fail, c.Outcome)
+	require.Equal(t, "no bars lie at this face inside the stirrups", c.Reason)
+
+	_, trial := twistedTrial(t, ACI31814(), func(b *beam.Brief, _ *beam.Layout) { b.Demands[0].Torque = units.KipFoot.Of(5) })
+	trial.Twisted = true
+	c = only(t, us14.appendTorsionSides(nil, trial), "torsion.longitudinal.side")
+	require.Equal(t, beam.NotApplicable, c.Outcome)
+	require.Equal(t, noteNeglected, c.Reason)
+	_, trial = twistedTrial(t, ACI31814(), func(_ *beam.Brief, l *beam.Layout) { l.Longitudinal[1] = top(1, "#9") })
+	require.Equal(t, "a longitudinal bar lies in each corner of the closed stirrups", judgeCorners(trial).Reason)
+}
+
+// One bar a side counts with its own grade too: two thirds of Al by y1/ph.
+func TestOneSideBarOfItsOwnGrade(t *testing.T) {
+	r := twisted(t, ACI31814(), func(_ *beam.Brief, l *beam.Layout) { l.Longitudinal[2].Count, l.Longitudinal[2].Yield = 1, psi(40000) })
+	require.InEpsilon(t, ownLong(40000)*24.5*2/3/74, valueIn(t, find1(t, r, "torsion.longitudinal.side").Demand, "in2"), 1e-9)
+}
+
+// Layers that come to both legs are as far apart as their bars; a single bar
+// between the legs is none of the bars along a side (9.7.5.1).
+func TestLayersAlongASide(t *testing.T) {
+	_, trial := twistedTrial(t, ACI31814(), nil)
+	layer := trial.Bottom.Fit.Layers[0]
+	layers := append(trial.Bottom.Fit.Layers[:0:0], layer)
+	for _, l := range []struct {
+		at    float64
+		count int
+	}{{9, 2}, {20, 1}, {22, 2}} {
+		layer.Centroid, layer.Count = in(l.at), l.count
+		layers = append(layers, layer)
+	}
+	trial.Bottom.Fit.Layers = layers
+	gap, found := widestAlongSide(trial)
+	require.True(t, found)
+	require.InEpsilon(t, 22-9, gap.In(units.Inch), 1e-9)
+}
+
+// A stretch of no length is its section, and a short one takes the greatest
+// moment along it.
+func TestShortStretches(t *testing.T) {
+	_, trial := twistedTrial(t, ACI31814(), twistedSpan(40, 9))
+	from, to := in(30), in(50)
+	for _, end := range []units.Length{from, to} {
+		f := us14.newTorsionFaces(trial)
+		f.stretch(0, 1, from, end)
+		require.True(t, f.side.found)
+		require.InEpsilon(t, trial.Forces.Action(0, 1, end, false).Moment.In(units.PoundInch), f.faces[0].worst.moment, 1e-9)
+	}
+}
+
+// Axial tension lowers φTth (22.7.4.1), so that a torque is no longer neglected
+// and asks for bars: 7 kip-ft beside 60 kip.
+func TestTensionMakesATorqueCount(t *testing.T) {
+	_, trial := twistedTrial(t, ACI31814(), func(b *beam.Brief, _ *beam.Layout) {
+		b.Demands[0].Axial, b.Demands[0].Torque = units.Kip.Of(-60), units.KipFoot.Of(7)
+	})
+	f := us14.newTorsionFaces(trial)
+	f.follow()
+	require.True(t, f.faces[0].found && f.faces[1].found && f.side.found)
+}

@@ -54,3 +54,28 @@ func TestNothingLeftForATorque(t *testing.T) {
 	s = twistedStrengths(t, ACI31819(), func(q *beam.SectionQuery) { q.Demand.Shear = units.Kip.Of(400) })
 	require.Zero(t, s.Torsion.Nominal, "the legs are taken by the shear")
 }
+
+// θ stands from 30 to 60 degrees (22.7.6.1.2).
+func TestAnglesOutsideTheirRange(t *testing.T) {
+	for angle, wrong := range map[float64]bool{0: false, 29.8: true, 30: false, 60: false, 60.3: true} {
+		fault, got := angleFault(angle)
+		require.Equal(t, wrong, got, "%g", angle)
+		if wrong {
+			require.Equal(t, "30 to 60 degrees (22.7.6.1.2)", fault.Allowed)
+		}
+	}
+}
+
+// What limits a strength is said beside it: √f'c (22.7.2.1), fyt (20.2.2.4) and a
+// cage without room.
+func TestNotesOfATorsionStrength(t *testing.T) {
+	for says, edit := range map[string]func(q *beam.SectionQuery){
+		"√f'c is capped":          func(q *beam.SectionQuery) { q.Concrete.Strength = psi(12000) },
+		"of their yield strength": func(q *beam.SectionQuery) { q.Stirrups.Yield = psi(80000) },
+		noteNoCage:                func(q *beam.SectionQuery) { q.Stirrups.Cover = in(8) },
+	} {
+		notes := twistedStrengths(t, ACI31819(), edit).Torsion.Notes
+		require.Len(t, notes, 1, says)
+		require.Contains(t, notes[0], says)
+	}
+}
