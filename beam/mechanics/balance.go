@@ -139,12 +139,10 @@ func (s *Solver) listPieces(kind eventKind, index int, perAt float64) {
 // reports the first to dst.
 func (s *Solver) solve(dst *Ultimate) {
 	s.roots = s.roots[:0]
-	degree, block := max(2, s.law.degree+1)+s.power-1, s.law.degree == 0
+	degree := max(2, s.law.degree+1) + s.power - 1
 	g := s.balance()
-	hi := math.Min(g.rootBound(), 1e15)
-	if len(s.events) > 0 {
-		hi = math.Max(hi, 2*s.events[0].k)
-	}
+	// There are events: the far face meets the start of the law.
+	hi := math.Max(math.Min(g.rootBound(), 1e15), 2*s.events[0].k)
 	before := math.NaN() // balance at the near end of the interval before
 	for i := 0; i <= len(s.events); i++ {
 		lo := 0.0
@@ -152,17 +150,8 @@ func (s *Solver) solve(dst *Ultimate) {
 			lo = s.events[i].k
 		}
 		if lo < hi {
-			// Under a block the force rises with the neutral-axis depth
-			// between any two jumps, so that ends alike enclose no root.
-			start, end := g[0]+hi*(g[1]+hi*g[2]), g[0]+lo*(g[1]+lo*g[2])
-			switch {
-			case lo == 0: // the terms below are rounding, see search
-				end = g[s.power]
-				start = end + hi*g[s.power+1]
-			case s.power > 1:
-				start, end = g.at(hi), g.at(lo)
-			}
-			if !block || !(start*end > 0) || start*before < 0 {
+			end, bare := s.bare(&g, lo, hi, before)
+			if !bare {
 				end = s.search(&g, degree, lo, hi, before)
 				if len(s.roots) > 0 && dst.NeutralAxis.IsZero() {
 					s.roots[0] = s.settle(dst, &g, lo == 0)
@@ -174,8 +163,34 @@ func (s *Solver) solve(dst *Ultimate) {
 			s.pass(&g, s.events[i])
 		}
 	}
-	// A root on the border of two intervals may have been found in both.
-	s.roots = slices.CompactFunc(s.roots, func(a, b float64) bool { return math.Abs(a-b) <= 1e-10*a })
+	s.roots = distinct(s.roots)
+}
+
+// distinct leaves out neighbours that are the same: a root on the border of two
+// intervals may have been found in both.
+func distinct(roots []float64) []float64 {
+	return slices.CompactFunc(roots, func(a, b float64) bool { return math.Abs(a-b) <= 1e-10*a })
+}
+
+// bare reports an interval that a look at the ends of the balance g shows to have
+// no root, nor one at hi, and returns the balance at lo. Under a block the force
+// rises with the neutral-axis depth between any two jumps, so that ends alike
+// enclose no root. before is as for search.
+func (s *Solver) bare(g *polynomial, lo, hi, before float64) (end float64, bare bool) {
+	if s.law.degree > 0 {
+		return 0, false
+	}
+	var start float64
+	switch {
+	case lo == 0: // the terms below are rounding, see search
+		end = g[s.power]
+		start = end + hi*g[s.power+1]
+	case s.power > 1:
+		start, end = g.at(hi), g.at(lo)
+	default:
+		start, end = g[0]+hi*(g[1]+hi*g[2]), g[0]+lo*(g[1]+lo*g[2])
+	}
+	return end, start*end > 0 && !(start*before < 0)
 }
 
 // settle reports the first root, of the balance g, and returns it. Where a law of
