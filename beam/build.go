@@ -100,6 +100,7 @@ func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
 	var flanges [2][]flangeRow
 	var relied [2]bool
 	largest := bars.Size{}
+	var sizes []bars.Size
 	if len(l.Longitudinal) > maxRows || len(l.Transverse) > maxRows {
 		f.add("/layout", fmt.Sprintf("at most %d rows and %d zones", maxRows, maxRows), "%d rows and %d zones given", len(l.Longitudinal), len(l.Transverse))
 		return nil, f.list
@@ -152,7 +153,7 @@ func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
 			if row, ok := t.flangeRow(&f, path, r, size); ok {
 				flanges[k] = append(flanges[k], row)
 				t.yields = append(t.yields, rowYield{r.Face, 0, size.Name, r.yield(p)})
-				largest = larger(largest, size)
+				largest, sizes = larger(largest, size), append(sizes, size)
 			}
 			continue
 		}
@@ -173,7 +174,7 @@ func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
 		}
 		faces[k][r.Layer-1] = append(faces[k][r.Layer-1], bars.Group{Size: size, Count: count})
 		relied[k] = relied[k] || r.InCompression
-		largest = larger(largest, size)
+		largest, sizes = larger(largest, size), append(sizes, size)
 	}
 	stirrup := t.setZones(&f, l)
 	for k, layers := range faces {
@@ -191,7 +192,10 @@ func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
 	}
 	t.oneYield(&f)
 	t.setBent(&f, l)
-	t.enclose(stirrup, largest)
+	if len(sizes) == 0 {
+		sizes = append(sizes, largest)
+	}
+	t.enclose(stirrup, sizes...)
 	for k, layers := range faces {
 		if len(layers) == 0 && len(flanges[k]) > 0 {
 			f.add("/layout/longitudinal", "bars in the web beside those in the flange", "the %s has bars in the flange and none in the web", Face(k+1))

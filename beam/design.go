@@ -246,7 +246,7 @@ func (s *search) closest() *found {
 			f.top = *set
 		}
 	}
-	s.t.enclose(f.stirrup, larger(f.bottom.largest(), f.top.largest()))
+	s.t.enclose(f.stirrup, f.bottom.largest(), f.top.largest())
 	s.setUniform(f.stirrup, 2, s.closestSteps(f.stirrup))
 	f.zones = slices.Clone(s.zones)
 	return f

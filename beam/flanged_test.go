@@ -505,3 +505,16 @@ func TestHopelessTorqueIsGivenUpSoon(t *testing.T) {
 	require.Less(t, len(r.Rejected), 2000)
 	require.NotEmpty(t, r.Cures)
 }
+
+// A bundle counts as a thicker bar than a single one that asks for more cover:
+// in weather No. 6 bars need 2 in (ACI 318-19 Table 20.5.1.3.1), bundles of No. 5
+// bars 1.5 in. Both lie in the same stirrups.
+func TestCoverOfSinglesBesideBundles(t *testing.T) {
+	b := plain()
+	b.Exposure = beam.Weather
+	l := rowsOf()
+	l.Transverse[0].To = units.Foot.Of(21.5)
+	l.Transverse[0].Bar = "#3"
+	l.Longitudinal[1] = beam.Row{Mark: "T1", Bar: "#5", Count: 4, Bundled: 2, Face: beam.Top, Layer: 1}
+	require.InDelta(t, 2-0.375, checked(t, b, l).Cover.In(units.Inch), 1e-9)
+}

@@ -9,12 +9,14 @@ import (
 
 // enclose sets the stirrup that the bars of a trial lie in, and with it the
 // cover: the brief's own, or the least by which the code accepts the stirrup
-// and the largest bar.
-func (t *Trial) enclose(stirrup, largest bars.Size) {
+// and the bars, of which a single one may ask for more than a wider bundle.
+func (t *Trial) enclose(stirrup bars.Size, sizes ...bars.Size) {
 	t.Stirrup = stirrup
 	t.Cover = t.Brief.Cover
 	if t.Cover.IsZero() {
-		t.Cover = t.Code.Cover(t.Problem, stirrup, largest)
+		for i := range sizes {
+			t.Cover = t.Cover.Max(t.Code.Cover(t.Problem, stirrup, sizes[i]))
+		}
 	}
 }
 

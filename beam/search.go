@@ -218,7 +218,7 @@ func (s *search) put(face Face, b *barSet, inCompression bool) bool {
 
 // layPair lays the sets of both faces inside a stirrup size, without zones yet.
 func (s *search) layPair(tie bars.Size, bottom, top *barSet, inCompression Face) bool {
-	s.t.enclose(tie, larger(bottom.largest(), top.largest()))
+	s.t.enclose(tie, bottom.largest(), top.largest())
 	s.t.Zones, s.t.ZoneBar = nil, nil
 	return s.put(Bottom, bottom, inCompression == Bottom) && s.put(Top, top, inCompression == Top)
 }

@@ -1,6 +1,8 @@
 package aci318
 
 import (
+	"math"
+
 	"soffit.example/beam"
 	"soffit.example/units"
 )
@@ -127,7 +129,7 @@ func (f *torsionFaces) follow() {
 		q := f.strength.torque(f.e, &a)
 		if !q.neglected {
 			m := f.e.momentIn(a.Moment)
-			f.part(&a, m, m, q.used, q.used)
+			f.part(&a, m, m, f.leastActing(&a, q.used), q.used)
 		}
 	}
 }
@@ -195,14 +197,22 @@ func (f *torsionFaces) stretch(i, span int, from, to units.Length) {
 // ends.
 func (f *torsionFaces) bounded(a *beam.Action, low, high float64, all, own torqueEnds) {
 	allLeast, allMost := all.span()
-	ownLeast, ownMost := own.span()
+	_, ownMost := own.span()
 	if f.strength.neglects(max(allMost, ownMost)) {
 		return
 	}
 	crack := f.strength.phi * f.strength.cracking
 	most := max(ownMost, min(allMost, crack))
-	least := max(ownLeast, min(allLeast, crack), min(most, f.strength.phi*f.strength.threshold))
+	// The least steel of 9.6.4.3 falls as the torque grows: it is taken for the
+	// torque that acts, even where a part of it is designed for alone.
+	least := max(min(allLeast, crack), min(most, f.strength.phi*f.strength.threshold))
 	f.part(a, low, high, least, most)
+}
+
+// leastActing is the torque by which the least steel of a demand goes.
+func (f *torsionFaces) leastActing(a *beam.Action, used float64) float64 {
+	acts := math.Abs(f.e.momentIn(a.Torque))
+	return min(used, max(acts, f.strength.phi*f.strength.threshold))
 }
 
 // part asks both faces, and the sides, for the steel of moments from low to

@@ -128,7 +128,9 @@ func (c *torsionCage) at(q sectionTorque, web *webSteel, s *sectionShear, legs, 
 	}
 	v.leg = c.legFor(q.used)
 	if web.fyt > 0 {
-		v.shear = max(0, s.needed-s.bent) / (web.fyt * b.d)
+		// Bent bars are not counted beside a torque, whose diagonals wind round
+		// the section.
+		v.shear = s.needed / (web.fyt * b.d)
 	}
 	v.outer = (v.shear+v.lift)/legs + v.leg
 	return v

@@ -169,12 +169,10 @@ func (z *webZone) transverseSteps(w *worstTorsion) []beam.Step {
 	q.cage.flowSteps(e, &out)
 	out.find("at", "area per length that the torque needs of one leg", "22.7.6.1(a)",
 		"Tu / (2 φ Ao fyt cotθ)", e.asSteel(v.leg))
-	bent := ""
+	out.find("Vs,req", "shear that stirrups must carry", e.stirrups.requiredClause, "max(Vu / φ - Vc, 0)", e.asForce(w.shear.needed))
 	if w.shear.bent > 0 {
-		out.given("Vb", "shear carried by bent bars", "", e.asForce(w.shear.bent))
-		bent = " - Vb"
+		out.note("bent bars are not counted beside a torque")
 	}
-	out.find("Vs,req", "shear that stirrups must carry", e.stirrups.requiredClause, "max(Vu / φ - Vc"+bent+", 0)", e.asForce(max(0, w.shear.needed-w.shear.bent)))
 	out.find("av", "area per length that the shear needs of all legs", e.stirrups.strengthClause, "Vs,req / (fyt d)", e.asSteel(v.shear))
 	lift := ""
 	if v.lift > 0 {

@@ -48,6 +48,7 @@ func Random(seed, n uint64) Sample {
 		s.Kind = Absurd
 	}
 	m.fill(s.Kind == NoCapacity)
+	m.keepSound()
 	s.Brief = m.b
 	switch s.Kind {
 	case Outside:
@@ -56,6 +57,22 @@ func Random(seed, n uint64) Sample {
 		m.spoil(&s.Brief)
 	}
 	return s
+}
+
+// keepSound takes back what does not fit a small section: a hollow that leaves
+// no wall, and a cover that leaves no room.
+func (m *maker) keepSound() {
+	section := m.b.Section
+	if _, faults := beam.GeometryOf(&section); len(faults) > 0 {
+		m.b.Section.Voids = nil
+		section = m.b.Section
+		if _, faults = beam.GeometryOf(&section); len(faults) > 0 {
+			return
+		}
+	}
+	if side := section.Width.Min(section.Depth); !m.b.Cover.Scale(2).Less(side) {
+		m.b.Cover = side.Scale(0.1)
+	}
 }
 
 // Small makes a sound brief whose preferences leave few arrangements, so that

@@ -247,7 +247,7 @@ func (j *judge) materials() {
 
 // lightness is λ: of 318-14 by the kind of aggregate or the splitting strength
 // (19.2.4.2, 19.2.4.3), of 318-19 by the density (Table 19.2.4.1(a)) or, of
-// blends, by the kind where that is more (Table 19.2.4.1(b)).
+// blends, by the kind (Table 19.2.4.1(b)).
 func (j *judge) lightness() float64 {
 	c := &j.b.Concrete
 	kind := 1.0
@@ -277,7 +277,7 @@ func (j *judge) lightness() float64 {
 		dense = math.Min(1, j.lambdaBy*wc)
 	}
 	if c.Kind == beam.FineBlend || c.Kind == beam.CoarseBlend {
-		return math.Max(dense, kind)
+		return kind
 	}
 	return dense
 }

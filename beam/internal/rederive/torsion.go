@@ -257,10 +257,15 @@ func (j *judge) together(at *twistedAt, z *zone) {
 		shear, twisting := v/bd, at.t*ph/(1.7*aoh*aoh)
 		asked := math.Hypot(shear, twisting)
 		if t.hollow {
-			if wall := math.Min(j.s.side, math.Min(j.s.above, j.s.low)); wall < aoh/ph {
-				twisting = at.t / (1.7 * aoh * wall)
+			// The walls above and below the hollow bear the torque alone: the sum
+			// is asked for where it is greatest (22.7.7.1.2).
+			flow := func(wall float64) float64 {
+				if wall < aoh/ph {
+					return at.t / (1.7 * aoh * wall)
+				}
+				return twisting
 			}
-			asked = shear + twisting
+			asked = math.Max(shear+flow(j.s.side), flow(math.Min(j.s.above, j.s.low)))
 		}
 		section = math.Min(section, asked/(phiTorsion*(vc/bd+j.v8*math.Sqrt(j.fc))))
 		avs := 0.0

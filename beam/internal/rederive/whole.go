@@ -96,7 +96,7 @@ func (j *judge) ribs() {
 		return
 	}
 	j.check("joist.width", j.rib, j.s.bw, "9.8.1.2")
-	j.check("joist.depth", j.h, 3.5*j.s.bw, "9.8.1.3")
+	j.check("joist.depth", j.h-j.length(j.b.Section.FlangeThickness), 3.5*j.s.bw, "9.8.1.3")
 	for _, clear := range [2]float64{j.length(j.b.Section.Slab.ClearLeft), j.length(j.b.Section.Slab.ClearRight)} {
 		if clear > 0 {
 			j.check("joist.spacing", clear, j.ribClear, "9.8.1.4")
