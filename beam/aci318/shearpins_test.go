@@ -304,6 +304,16 @@ func TestLoadsThatDecideTheCriticalSection(t *testing.T) {
 		require.InEpsilon(t, want, ends[0].depth(tr, 1).In(units.Inch), 1e-9)
 	}
 	tr := shearTrial(t, ACI31819(), nil)
+	for i, face := range [2]units.Length{in(6), in(258)} {
+		for out, want := range map[float64]bool{0: true, 0.01: false} {
+			at := face.Add(in(out * float64(2*i-1)))
+			if out == 0 {
+				at = shearEnds(tr, 1)[i].face
+			}
+			_, _, on := hungLength(tr.Problem, 1, at)
+			require.Equal(t, want, on, "%s", at)
+		}
+	}
 	tr.Brief.Section.Depth = in(300)
 	for i, e := range shearEnds(tr, 1) {
 		require.InEpsilon(t, 300-2.375, e.depth(tr, 1).In(units.Inch), 1e-9, "end %d", i)
