@@ -51,8 +51,8 @@ func TestTorquesOfAPart(t *testing.T) {
 		{"compatibility beyond cracking", torqueEnds{6, 5}, torqueEnds{}, 4, 4},
 		{"compatibility that passes zero", torqueEnds{6, -2}, torqueEnds{}, 1, 4},
 		{"equilibrium that passes zero, opposed", torqueEnds{2, 3}, torqueEnds{5, -6}, 2, 6},
-		{"equilibrium that is opposed", torqueEnds{2, 3}, torqueEnds{-5, -6}, 5, 6},
-		{"opposed until it is neglected", torqueEnds{0.5, 0.5}, torqueEnds{-5, -5}, 5, 5},
+		{"equilibrium that is opposed", torqueEnds{2, 3}, torqueEnds{-5, -6}, 2, 6},
+		{"opposed until it is neglected", torqueEnds{0.5, 0.5}, torqueEnds{-5, -5}, 1, 5},
 	} {
 		t.Run(tc.name, func(t *testing.T) {
 			f := ownFaces(t)

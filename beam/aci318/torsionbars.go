@@ -197,7 +197,7 @@ func (f *torsionFaces) stretch(i, span int, from, to units.Length) {
 // ends.
 func (f *torsionFaces) bounded(a *beam.Action, low, high float64, all, own torqueEnds) {
 	allLeast, allMost := all.span()
-	_, ownMost := own.span()
+	ownLeast, ownMost := own.span()
 	if f.strength.neglects(max(allMost, ownMost)) {
 		return
 	}
@@ -205,7 +205,8 @@ func (f *torsionFaces) bounded(a *beam.Action, low, high float64, all, own torqu
 	most := max(ownMost, min(allMost, crack))
 	// The least steel of 9.6.4.3 falls as the torque grows: it is taken for the
 	// torque that acts, even where a part of it is designed for alone.
-	least := max(min(allLeast, crack), min(most, f.strength.phi*f.strength.threshold))
+	designed := max(ownLeast, min(allLeast, crack))
+	least := max(min(allLeast, designed), min(most, f.strength.phi*f.strength.threshold))
 	f.part(a, low, high, least, most)
 }
 
