@@ -291,7 +291,7 @@ func (a *answer) sameStrength(id string, checked *beam.Result, report *rederive.
 			continue
 		}
 		other := report.Nominal[f.Sense-1]
-		if other == 0 {
+		if other == 0 || !countsAll(checked, f) {
 			continue
 		}
 		a.routes++
@@ -372,4 +372,13 @@ func notFinite(v reflect.Value, path string, depth int) string {
 		}
 	}
 	return ""
+}
+
+// countsAll reports whether a strength counts every bar of its tension face:
+// those of a flange beyond the width that tension steel is spread over do not.
+func countsAll(r *beam.Result, f *beam.FlexureStrength) bool {
+	flange := slices.ContainsFunc(r.Layout.Longitudinal, func(row beam.Row) bool {
+		return row.Flange && row.Face == f.Sense.TensionFace()
+	})
+	return !flange
 }

@@ -4,6 +4,7 @@ import (
 	"math"
 
 	"soffit.example/beam"
+	"soffit.example/units"
 )
 
 // twist is a section as 22.7 sees it, whatever its bars.
@@ -31,6 +32,9 @@ func (j *judge) twisting() *twist {
 	}
 	t.acp, t.pcp = j.bw*j.h, 2*(j.bw+j.h)
 	acp, pcp := s.enclosed, s.perimeter
+	if j.b.Section.Shape == beam.Polygon {
+		acp, pcp = j.withinOverhangs(acp, pcp)
+	}
 	if s.flange >= 0 {
 		acp, pcp = t.acp, t.pcp
 		for _, o := range s.over {
@@ -431,4 +435,27 @@ func (j *judge) requiredShare(k int, m, nu, rest float64) float64 {
 		}
 	}
 	return low
+}
+
+// withinOverhangs cuts a polygon's overhangs off where they count no further
+// (9.2.4.4): those thinner than half the depth are flanges, of which the lesser
+// of four thicknesses and the projection of the rest counts. The cutting itself
+// is elementary geometry, tested where it stands.
+func (j *judge) withinOverhangs(acp, pcp float64) (area, perimeter float64) {
+	section := j.b.Section
+	g, faults := beam.GeometryOf(&section)
+	if len(faults) > 0 {
+		return acp, pcp
+	}
+	h := section.Depth
+	var out [2]units.Length
+	for i, thick := range g.OverhangThickness {
+		out[i] = g.Overall
+		if thick.Less(h.Scale(0.5)) {
+			out[i] = thick.Scale(4).Min(h.Sub(thick))
+		}
+	}
+	a, p := section.Clipped(&g, out[0], out[1])
+	one := j.length(units.Metre.Of(1))
+	return a.In(units.SquareMetre) * one * one, p.In(units.Metre) * one
 }
