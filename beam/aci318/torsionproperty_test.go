@@ -76,7 +76,7 @@ func TestNoSectionIsWorseInTorsion(t *testing.T) {
 				a := trial.Forces.Action(i, 1, at, fromRight)
 				if q := f.strength.torque(e, &a); !q.neglected {
 					m := e.momentIn(a.Moment)
-					f.part(&a, m, m, q.used, q.used)
+					f.part(&a, m, m, f.leastActing(&a, q.used), q.used)
 				}
 				if !at.Less(from) && !to.Less(at) {
 					sections = append(sections, a)
@@ -119,9 +119,10 @@ func TestNoSectionIsWorseInTorsion(t *testing.T) {
 				t.Fatalf("%s: %v reported, %v found", id, reported[id], found)
 			}
 		}
-		// The bound of the bars is close to what they need.
+		// The bound of the bars is close to what they need, but where the torque
+		// of a part passes its threshold, which no section between may show.
 		for i, id := range torsionFaceIDs {
-			if worst := f.faces[i].worstRatio; reported[id] < 1e8 && reported[id] > worst+0.1 {
+			if worst := f.faces[i].worstRatio; reported[id] < 1e8 && reported[id] > worst+0.3 {
 				t.Fatalf("%s: %v reported, %v needed", id, reported[id], worst)
 			}
 		}
