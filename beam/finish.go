@@ -84,10 +84,8 @@ func (r *Result) strengths(p *prepared, t *Trial) error {
 			continue // a check says so; there is no strength to give
 		}
 		q := SectionQuery{Section: b.Section.bare(), Concrete: b.Concrete, Bending: sense, Readings: b.Readings}
-		for i, l := range t.Layers(sense, units.Stress{}) {
-			if share := t.spreadShare(sense, i); share > 0 {
-				q.Layers = append(q.Layers, SteelLayer{Area: l.Area.Scale(share), Depth: l.Depth, Yield: l.Steel.Yield})
-			}
+		for _, l := range t.WithinSpread(sense.TensionFace(), t.Layers(sense, units.Stress{})) {
+			q.Layers = append(q.Layers, SteelLayer{Area: l.Area, Depth: l.Depth, Yield: l.Steel.Yield})
 		}
 		found, err := p.Code.Strengths(q)
 		switch {
@@ -101,36 +99,6 @@ func (r *Result) strengths(p *prepared, t *Trial) error {
 		r.Flexure = append(r.Flexure, found.Flexure)
 	}
 	return nil
-}
-
-// spreadShare is how much of the i-th layer of a sense lies where the code
-// spreads the tension steel of a flange: all of it but for rows beside the web
-// that reach further out.
-func (t *Trial) spreadShare(sense Sense, i int) float64 {
-	f := t.Steel(sense.TensionFace())
-	if i >= len(f.Rows) || !f.Rows[i].Flange {
-		return 1
-	}
-	row := 0 // of the flange
-	for k := range i {
-		if f.Rows[k].Flange {
-			row++
-		}
-	}
-	width := t.Brief.Section.Width
-	beyond := t.Code.Spread(t.Problem, f.Face).Sub(width).Scale(0.5)
-	within, all := 0, 0
-	for k := range f.Flange {
-		b := &f.Flange[k]
-		if b.Row != row {
-			continue
-		}
-		all++
-		if out := b.X.Neg().Max(b.X.Sub(width)); out.AtMost(beyond) {
-			within++
-		}
-	}
-	return float64(within) / float64(all)
 }
 
 // inside reports whether the bars of a sense lie in the section at all.

@@ -93,16 +93,14 @@ func (t *Trial) appendFlangeGeometry(dst []Check) []Check {
 			continue
 		}
 		left, right := t.Brief.Section.Overhangs(face)
-		width := t.Brief.Section.Width
+		overs := [2]units.Length{left, right}
 		c := Check{ID: "fit.flange", Clause: clause, Face: face, Detailing: true}
 		beside := Check{ID: "fit.beside-web", Clause: clause, Face: face, Detailing: true}
 		var worstNeed, worstRoom, nearest, radius units.Length
 		for i := range f.Flange {
 			b := &f.Flange[i]
-			out, room := b.X.Neg(), left
-			if width.Scale(0.5).Less(b.X) {
-				out, room = b.X.Sub(width), right
-			}
+			side, out := t.Beside(b)
+			room := overs[side]
 			r := b.Size.Diameter.Scale(0.5)
 			need := out.Add(r).Add(t.Cover)
 			if i == 0 || worstNeed.Sub(worstRoom).Less(need.Sub(room)) {

@@ -65,6 +65,61 @@ type FlangeBar struct {
 	Row  int          // counted from the web outward, from zero
 }
 
+// Beside is on which side of the web a bar of a flange lies, 0 the left and 1
+// the right, and how far from it.
+func (t *Trial) Beside(b *FlangeBar) (side int, out units.Length) {
+	if width := t.Brief.Section.Width; !b.X.Less(width.Scale(0.5)) {
+		return 1, b.X.Sub(width)
+	}
+	return 0, b.X.Neg()
+}
+
+// WithinSpread takes off layers, as Layers gives them for tension at a face,
+// the bars that lie farther out in the flange than the code spreads tension
+// steel. It works in place.
+func (t *Trial) WithinSpread(face Face, layers []mechanics.Layer) []mechanics.Layer {
+	f := t.Steel(face)
+	if len(f.Flange) == 0 {
+		return layers
+	}
+	beyond := t.Code.Spread(t.Problem, face).Sub(t.Brief.Section.Width).Scale(0.5)
+	left, right := t.Brief.Section.Overhangs(face)
+	ends := [2]units.Length{beyond.Min(left), beyond.Min(right)}
+	kept, row := 0, 0 // row of the flange
+	for i := range layers {
+		l := layers[i]
+		if i < len(f.Rows) && f.Rows[i].Flange {
+			within, all := t.rowWithin(f, row, ends)
+			row++
+			if within == 0 {
+				continue
+			}
+			if within < all {
+				l.Area = l.Area.Scale(float64(within) / float64(all))
+			}
+		}
+		layers[kept] = l
+		kept++
+	}
+	return layers[:kept]
+}
+
+// rowWithin is how many bars of a flange row, counted from the web, lie within
+// two distances from the web, and how many there are.
+func (t *Trial) rowWithin(f *FaceSteel, row int, ends [2]units.Length) (within, all int) {
+	for i := range f.Flange {
+		b := &f.Flange[i]
+		if b.Row != row {
+			continue
+		}
+		all++
+		if side, out := t.Beside(b); out.AtMost(ends[side]) {
+			within++
+		}
+	}
+	return within, all
+}
+
 // SideSteel is distributed steel along both side faces: Each bars a side at
 // Spacing, the first one spacing from the Farthest of TensionFace.
 type SideSteel struct {

@@ -3,7 +3,6 @@ package aci318
 import (
 	"soffit.example/bars"
 	"soffit.example/beam"
-	"soffit.example/beam/mechanics"
 	"soffit.example/units"
 )
 
@@ -35,58 +34,8 @@ func flangeSides(t *beam.Trial, face beam.Face) (sides [2]flangeSide, any bool) 
 	return sides, any
 }
 
-// beside is how far a flange bar lies from the web, and on which side: 0 is the
-// left.
-func beside(t *beam.Trial, b *beam.FlangeBar) (side int, out units.Length) {
-	if middle := t.Brief.Section.Width.Scale(0.5); b.X.Less(middle) {
-		return 0, b.X.Neg()
-	}
-	return 1, b.X.Sub(t.Brief.Section.Width)
-}
-
 // counts reports whether a flange bar lies where 24.3.4 puts tension steel.
 func (s *flangeSide) counts(out units.Length) bool { return out.AtMost(s.to) }
-
-// spreadCounts is how many bars of a flange row, counted from the web, lie
-// within the spread, and how many there are.
-func spreadCounts(t *beam.Trial, f *beam.FaceSteel, sides *[2]flangeSide, row int) (within, all int) {
-	for i := range f.Flange {
-		b := &f.Flange[i]
-		if b.Row != row {
-			continue
-		}
-		all++
-		if side, out := beside(t, b); sides[side].counts(out) {
-			within++
-		}
-	}
-	return within, all
-}
-
-// withinSpread takes off the layers of a face in tension the bars that lie
-// farther out in the flange than 24.3.4 spreads the tension steel. The layers
-// begin with the rows of the face, in order.
-func withinSpread(t *beam.Trial, face beam.Face, layers []mechanics.Layer) []mechanics.Layer {
-	f := t.Steel(face)
-	sides, _ := flangeSides(t, face)
-	kept, row := 0, 0
-	for i := range layers {
-		l := layers[i]
-		if i < len(f.Rows) && f.Rows[i].Flange {
-			within, all := spreadCounts(t, f, &sides, row)
-			row++
-			if within == 0 {
-				continue
-			}
-			if within < all {
-				l.Area = l.Area.Scale(float64(within) / float64(all))
-			}
-		}
-		layers[kept] = l
-		kept++
-	}
-	return layers[:kept]
-}
 
 // tensionArea is the steel of the tension face that counts in bending.
 func tensionArea(t *beam.Trial, s beam.Sense) units.Area {
@@ -122,7 +71,7 @@ func tensionSteel(t *beam.Trial, s beam.Sense) faceSteel {
 		count(&f.Fit.Bars[i].Size, f.Fit.Bars[i].Y)
 	}
 	for i := range f.Flange {
-		if side, out := beside(t, &f.Flange[i]); sides[side].counts(out) {
+		if side, out := t.Beside(&f.Flange[i]); sides[side].counts(out) {
 			count(&f.Flange[i].Size, f.Flange[i].Y)
 		}
 	}
@@ -143,7 +92,7 @@ func beyondSpread(t *beam.Trial, s beam.Sense) bool {
 	}
 	sides, _ := flangeSides(t, face)
 	for i := range f.Flange {
-		if side, out := beside(t, &f.Flange[i]); !sides[side].counts(out) {
+		if side, out := t.Beside(&f.Flange[i]); !sides[side].counts(out) {
 			return true
 		}
 	}
@@ -235,7 +184,7 @@ func (e *edition) judgeFlange(dst []beam.Check, t *beam.Trial, s beam.Sense, a *
 	} else {
 		var has [2]bool
 		for i := range steel.Flange {
-			side, out := beside(t, &steel.Flange[i])
+			side, out := t.Beside(&steel.Flange[i])
 			has[side] = has[side] || sides[side].counts(out)
 		}
 		asked, found := 0, 0
@@ -280,7 +229,7 @@ func (e *edition) judgeOuter(dst []beam.Check, t *beam.Trial, s beam.Sense, a *b
 	steel := t.Steel(face)
 	found := false
 	for i := range steel.Flange {
-		if side, out := beside(t, &steel.Flange[i]); !sides[side].counts(out) {
+		if side, out := t.Beside(&steel.Flange[i]); !sides[side].counts(out) {
 			areas[side] = areas[side].Add(steel.Flange[i].Size.Area)
 			found = true
 		}

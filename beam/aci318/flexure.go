@@ -83,11 +83,7 @@ func (e *edition) classify(u *mechanics.Ultimate, strength, yield units.Stress, 
 // trialSection is the section of a trial bent in a sense, for the kernel: of the
 // bars beside the web only those over which 24.3.4 spreads the tension steel.
 func (e *edition) trialSection(t *beam.Trial, s beam.Sense) mechanics.Section {
-	layers := t.Layers(s, e.steelModulus())
-	if len(t.Steel(s.TensionFace()).Flange) > 0 {
-		layers = withinSpread(t, s.TensionFace(), layers)
-	}
-	return mechanics.Section{Parts: t.Geometry.Parts, Layers: layers}
+	return mechanics.Section{Parts: t.Geometry.Parts, Layers: t.WithinSpread(s.TensionFace(), t.Layers(s, e.steelModulus()))}
 }
 
 // trialFlexure is the strength of a trial in one sense. The equilibrium stays

@@ -113,7 +113,7 @@ func TestSideOfAFlangeBar(t *testing.T) {
 		side int
 		out  float64
 	}{{-3, 0, 3}, {5.99, 0, -5.99}, {6, 1, -6}, {6.01, 1, -5.99}, {15, 1, 3}} {
-		side, out := beside(trial, &beam.FlangeBar{X: in(tc.x)})
+		side, out := trial.Beside(&beam.FlangeBar{X: in(tc.x)})
 		require.Equal(t, tc.side, side, "%v", tc.x)
 		require.InDelta(t, tc.out, out.In(units.Inch), 1e-9)
 	}
