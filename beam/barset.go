@@ -49,14 +49,17 @@ func (b *barSet) add(layer int, size *bars.Size, count int) {
 	}
 	b.layers[layer][slot] = barGroup{size, count}
 	b.used = max(b.used, layer+1)
-	b.count += count
-	b.area = b.area.Add(size.Area.Scale(float64(count)))
-	b.mass += size.MassPerLength.In(units.KilogramPerMetre) * float64(count)
+	b.tally(size, count)
 }
 
 // beside puts bars into the flange beside the web.
 func (b *barSet) beside(size *bars.Size, count int, spacing units.Length) {
 	b.flange = flangeRow{size, count, spacing}
+	b.tally(size, count)
+}
+
+// tally adds bars to what the set comes to.
+func (b *barSet) tally(size *bars.Size, count int) {
 	b.count += count
 	b.area = b.area.Add(size.Area.Scale(float64(count)))
 	b.mass += size.MassPerLength.In(units.KilogramPerMetre) * float64(count)

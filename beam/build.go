@@ -22,10 +22,9 @@ func (t *Trial) stirrupLength(size bars.Size, z *Zone) units.Length {
 	return l.Total
 }
 
-// form is the zone's stirrups as package bars knows them; closed unless the
-// layout says otherwise.
+// form is the zone's stirrups as package bars knows them.
 func (z *Zone) form() bars.StirrupForm {
-	if z.Form == bars.OpenForm.String() {
+	if z.Open() {
 		return bars.OpenForm
 	}
 	return bars.ClosedForm
@@ -99,8 +98,7 @@ func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
 	var faces [2][]bars.Layer
 	var flanges [2][]flangeRow
 	var relied [2]bool
-	largest := bars.Size{}
-	var sizes []bars.Size
+	var sizes []bars.Size // of every row
 	if len(l.Longitudinal) > maxRows || len(l.Transverse) > maxRows {
 		f.add("/layout", fmt.Sprintf("at most %d rows and %d zones", maxRows, maxRows), "%d rows and %d zones given", len(l.Longitudinal), len(l.Transverse))
 		return nil, f.list
@@ -153,7 +151,7 @@ func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
 			if row, ok := t.flangeRow(&f, path, r, size); ok {
 				flanges[k] = append(flanges[k], row)
 				t.yields = append(t.yields, rowYield{r.Face, 0, size.Name, r.yield(p)})
-				largest, sizes = larger(largest, size), append(sizes, size)
+				sizes = append(sizes, size)
 			}
 			continue
 		}
@@ -174,14 +172,14 @@ func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
 		}
 		faces[k][r.Layer-1] = append(faces[k][r.Layer-1], bars.Group{Size: size, Count: count})
 		relied[k] = relied[k] || r.InCompression
-		largest, sizes = larger(largest, size), append(sizes, size)
+		sizes = append(sizes, size)
 	}
 	stirrup := t.setZones(&f, l)
 	for k, layers := range faces {
 		for i := range layers {
 			if len(layers[i]) == 0 {
 				f.add("/layout/longitudinal", "layers numbered from the face without a gap", "the %s has bars in layer %d and none in layer %d", Face(k+1), len(layers), i+1)
-				layers[i] = []bars.Group{{Size: largest, Count: 1}}
+				continue
 			}
 			// The order in which groups of a layer are listed is no fact.
 			slices.SortStableFunc(layers[i], func(a, b bars.Group) int { return -cmp.Compare(a.Size.Order, b.Size.Order) })
@@ -193,7 +191,7 @@ func trialOf(p *Problem, l *Layout) (*Trial, []Fault) {
 	t.oneYield(&f)
 	t.setBent(&f, l)
 	if len(sizes) == 0 {
-		sizes = append(sizes, largest)
+		sizes = make([]bars.Size, 1) // no bar asks for more than the stirrup
 	}
 	t.enclose(stirrup, sizes...)
 	for k, layers := range faces {

@@ -154,7 +154,7 @@ func (t *Trial) hollowLegs(i int) (c Check, hollow bool) {
 		return c, false
 	}
 	c = Check{ID: "stirrup.hollow", Clause: "geometry", Span: z.Span, At: z.From, Detailing: true}
-	c.Compare(units.Plain(float64(t.standingInHollows(t.ZoneBar[i].Diameter, z.Legs))), units.Plain(0))
+	c.Compare(units.Plain(float64(t.standingInHollows(t.ZoneBar[i], z.Legs))), units.Plain(0))
 	if c.Outcome == Fail {
 		c.Reason = "legs between the outer two stand in a hollow of the section or too near it"
 	}
@@ -162,14 +162,18 @@ func (t *Trial) hollowLegs(i int) (c Check, hollow bool) {
 }
 
 // standingInHollows counts the legs between the outer two that do.
-func (t *Trial) standingInHollows(diameter units.Length, legs int) (n int) {
+func (t *Trial) standingInHollows(stirrup bars.Size, legs int) (n int) {
 	if len(t.Geometry.Hollows) == 0 {
 		return 0
 	}
-	edge := t.Cover.Add(diameter.Scale(0.5))
-	between := t.Brief.Section.Width.Sub(edge.Scale(2)).Scale(1 / float64(legs-1))
-	for k := 1; k < legs-1; k++ {
-		x := edge.Add(between.Scale(float64(k)))
+	cage := t.cage()
+	cage.Stirrup = stirrup
+	all, _, err := cage.AppendLegs(nil, legs, nil)
+	if err != nil {
+		return 0 // too narrow for two legs, as other checks say
+	}
+	edge := t.Cover.Add(stirrup.Diameter.Scale(0.5))
+	for _, x := range all[1 : legs-1] {
 		for _, h := range t.Geometry.Hollows {
 			if h[0].Sub(edge).Less(x) && x.Less(h[1].Add(edge)) {
 				n++

@@ -53,6 +53,10 @@ type Zone struct {
 	Angle float64
 }
 
+// Open reports whether the stirrups are open; they are closed unless the layout
+// says otherwise.
+func (z *Zone) Open() bool { return z.Form == "open" }
+
 // BentBars are longitudinal bars bent up, or down, across the web to carry
 // shear there: Bends groups, one Spacing apart, of Count bars each. They count
 // for shear alone.

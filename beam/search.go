@@ -319,13 +319,6 @@ func (s *search) heaviestAccepted(face Face, tie bars.Size, sets []barSet) *barS
 	return nil
 }
 
-func larger(a, b bars.Size) bars.Size {
-	if a.Diameter.Less(b.Diameter) {
-		return b
-	}
-	return a
-}
-
 // shear completes a pair with stirrups and keeps what passes. Where bars of
 // one face ask for cover that moves the other's, the pair is judged again as
 // a whole first.

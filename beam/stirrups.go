@@ -42,7 +42,7 @@ func (s *search) eachStirrup(tie bars.Size, promising func(mass float64) bool, k
 	}
 	before := 0
 	for legs := 2; legs <= s.p.Brief.Preferences.MaxLegs; legs++ {
-		if s.t.standingInHollows(tie.Diameter, legs) > 0 {
+		if s.t.standingInHollows(tie, legs) > 0 {
 			continue
 		}
 		uniform, ok := s.uniform(tie, legs)

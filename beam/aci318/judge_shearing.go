@@ -248,7 +248,7 @@ func (s *shearSpan) gap(dst []beam.Check, breaks []units.Length, at, end units.L
 // weaker is the zone of two whose stirrups count for less between them: open
 // ones, or those of less area.
 func (s *shearSpan) weaker(a, b int) int {
-	if open := s.t.Zones[b].Form == "open"; open != (s.t.Zones[a].Form == "open") {
+	if open := s.t.Zones[b].Open(); open != s.t.Zones[a].Open() {
 		if open {
 			return b
 		}

@@ -138,7 +138,7 @@ func widestGap(t *beam.Trial) (widest units.Length) {
 func (e *edition) appendTieForm(dst []beam.Check, t *beam.Trial, f *beam.FaceSteel) []beam.Check {
 	open := 0
 	for k := range t.Zones {
-		if t.Zones[k].Form == "open" {
+		if t.Zones[k].Open() {
 			open++
 		}
 	}

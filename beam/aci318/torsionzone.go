@@ -58,7 +58,7 @@ func (z *webZone) readyTorsion(spacing units.Length) {
 		zone := &t.Zones[z.zone]
 		tie, q.legs, q.unfit = t.ZoneBar[z.zone].Diameter, float64(max(2, zone.Legs)), ""
 		switch {
-		case zone.Form == "open":
+		case zone.Open():
 			q.unfit = noteOpen
 		case zone.Angle != 0 && zone.Angle != 90:
 			q.unfit = noteTorsionInclined
@@ -127,23 +127,29 @@ func (z *webZone) appendTorsion(dst []beam.Check) []beam.Check {
 	return z.appendTorsionSpacing(dst)
 }
 
-// at gives a check its place and combination.
-func (w *worstTorsion) at(c *beam.Check, span int) {
-	c.Span, c.At, c.HasAt = span, w.action.At, span > 0
-	c.Combination = w.action.Combination
-}
-
 // refuse fails a check that has no values to compare.
 func refuse(c *beam.Check, reason string) {
 	c.Outcome, c.Utilization, c.Reason = beam.Fail, beam.NoCapacity, reason
 }
 
-func (z *webZone) appendSection(dst []beam.Check) []beam.Check {
-	e, w := z.e, &z.torsion.section
-	c := beam.Check{ID: "torsion.section", Clause: "22.7.7.1", Reason: w.note}
-	w.at(&c, z.span)
+// check begins the check of a section, which fails at once where the section
+// has no strength in torsion.
+func (w *worstTorsion) check(id, clause string, span int) (c beam.Check, sound bool) {
+	c = beam.Check{
+		ID: id, Clause: clause, Reason: w.note,
+		Span: span, At: w.action.At, HasAt: span > 0, Combination: w.action.Combination,
+	}
 	if w.values.broken != "" {
 		refuse(&c, w.values.broken)
+		return c, false
+	}
+	return c, true
+}
+
+func (z *webZone) appendSection(dst []beam.Check) []beam.Check {
+	e, w := z.e, &z.torsion.section
+	c, sound := w.check("torsion.section", "22.7.7.1", z.span)
+	if !sound {
 		return append(dst, c)
 	}
 	c.Compare(e.stressOf(w.values.stress).Amount(), e.stressOf(w.values.limit).Amount())
@@ -155,10 +161,8 @@ func (z *webZone) appendSection(dst []beam.Check) []beam.Check {
 
 func (z *webZone) appendTransverse(dst []beam.Check) []beam.Check {
 	e, w := z.e, &z.torsion.transverse
-	c := beam.Check{ID: "torsion.transverse", Clause: "9.5.4.3", Reason: w.note}
-	w.at(&c, z.span)
-	if w.values.broken != "" {
-		refuse(&c, w.values.broken)
+	c, sound := w.check("torsion.transverse", "9.5.4.3", z.span)
+	if !sound {
 		return append(dst, c)
 	}
 	c.Compare(e.steelOf(w.values.outer).Amount(), e.steelOf(z.torsion.leg).Amount())
