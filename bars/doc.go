@@ -29,10 +29,8 @@
 // area, but takes the room of its real bars: these touch the stirrup, and
 // clear distances are measured between them.
 //
-// A [Spread] lays further bars in a flange beside the web, in the same frame
-// of reference: x is negative left of the web. [Cage.AppendLegs] tells where
-// the legs of a stirrup stand, [Cage.Centreline] and [Cage.Enclosed] what a
-// closed one encloses.
+// [Cage.AppendLegs] tells where the legs of a stirrup stand, [Cage.Centreline]
+// and [Cage.Enclosed] what a closed one encloses.
 //
 // # Lengths
 //

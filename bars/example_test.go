@@ -161,30 +161,6 @@ func ExampleBundle() {
 	// centroid 2.789 in; clear 5.000 in, required 1.732 in
 }
 
-func ExampleSpread() {
-	catalog, err := bars.Lookup("astm-inch")
-	if err != nil {
-		log.Fatal(err)
-	}
-	five, err := catalog.Size("#5")
-	if err != nil {
-		log.Fatal(err)
-	}
-	in := units.Inch.Of
-	flange, err := bars.Spread{Size: five, From: in(3), To: in(9), Pitch: in(6), Left: 2, Right: 2, Y: in(2.3125)}.Append(nil)
-	if err != nil {
-		log.Fatal(err)
-	}
-	for _, b := range flange {
-		fmt.Printf("%s  x %.1f in\n", b.Size, b.X.In(units.Inch))
-	}
-	// Output:
-	// #5  x -9.0 in
-	// #5  x -3.0 in
-	// #5  x 15.0 in
-	// #5  x 21.0 in
-}
-
 func ExampleCage_AppendLegs() {
 	catalog, err := bars.Lookup("astm-inch")
 	if err != nil {
