@@ -1,24 +1,9 @@
 package main
 
 import (
-	"bytes"
-	"flag"
-	"os"
 	"testing"
 
-	"github.com/stretchr/testify/require"
+	"soffit.example/examples/internal/golden"
 )
 
-var update = flag.Bool("update", false, "rewrite the golden file")
-
-func TestOutput(t *testing.T) {
-	const golden = "../../testdata/examples/quickstart.txt"
-	var out bytes.Buffer
-	require.NoError(t, run(&out))
-	if *update {
-		require.NoError(t, os.WriteFile(golden, out.Bytes(), 0o644))
-	}
-	want, err := os.ReadFile(golden)
-	require.NoError(t, err)
-	require.Equal(t, string(want), out.String())
-}
+func TestOutput(t *testing.T) { golden.Check(t, "quickstart", run) }

@@ -1,9 +1,7 @@
 package main
 
 import (
-	"bytes"
 	"context"
-	"flag"
 	"fmt"
 	"log"
 	"os"
@@ -14,22 +12,11 @@ import (
 
 	"soffit.example/beam"
 	"soffit.example/beam/aci318"
+	"soffit.example/examples/internal/golden"
 	"soffit.example/units"
 )
 
-var update = flag.Bool("update", false, "rewrite the golden file")
-
-func TestOutput(t *testing.T) {
-	const golden = "../../testdata/examples/spandrel.txt"
-	var out bytes.Buffer
-	require.NoError(t, run(&out))
-	if *update {
-		require.NoError(t, os.WriteFile(golden, out.Bytes(), 0o644))
-	}
-	want, err := os.ReadFile(golden)
-	require.NoError(t, err)
-	require.Equal(t, string(want), out.String())
-}
+func TestOutput(t *testing.T) { golden.Check(t, "spandrel", run) }
 
 // The snippet of the README.
 func Example() {
