@@ -377,8 +377,19 @@ func notFinite(v reflect.Value, path string, depth int) string {
 // countsAll reports whether a strength counts every bar of its tension face:
 // those of a flange beyond the width that tension steel is spread over do not.
 func countsAll(r *beam.Result, f *beam.FlexureStrength) bool {
-	flange := slices.ContainsFunc(r.Layout.Longitudinal, func(row beam.Row) bool {
-		return row.Flange && row.Face == f.Sense.TensionFace()
-	})
-	return !flange
+	var all units.Area
+	flange := false
+	for _, row := range r.Layout.Longitudinal {
+		if row.Face != f.Sense.TensionFace() {
+			continue
+		}
+		size, err := r.Problem.Catalog.Size(row.Bar)
+		if err != nil {
+			return false
+		}
+		all = all.Add(size.Area.Scale(float64(row.Count)))
+		flange = flange || row.Flange
+	}
+	// Side bars that count would stand in for those that do not.
+	return !flange || !r.Problem.Brief.Readings.CountSideBars && all.AtMost(f.TensionSteel)
 }
